@@ -1,0 +1,57 @@
+package isowright.records;
+
+/** An immutable column of numbers, one for each row of a {@link Panel}. */
+public final class Column {
+
+  private final String name;
+  private final double[] values;
+
+  /** A column over a copy of these values. */
+  public static Column of(String name, double[] values) {
+    return new Column(name, values.clone());
+  }
+
+  /** A column that takes over an array which its maker does not keep. */
+  static Column takingOver(String name, double[] values) {
+    return new Column(name, values);
+  }
+
+  private Column(String name, double[] values) {
+    this.name = name;
+    this.values = values;
+  }
+
+  /** The column's heading in the file, or the name of what was computed. */
+  public String name() {
+    return name;
+  }
+
+  /** The number of rows. */
+  public int size() {
+    return values.length;
+  }
+
+  /** The value at a row. */
+  public double get(int row) {
+    return values[row];
+  }
+
+  /** Copies rows {@code from} to {@code to − 1} into an array from its beginning. */
+  public void copy(int from, int to, double[] into) {
+    System.arraycopy(values, from, into, 0, to - from);
+  }
+
+  /** A copy of all values. */
+  public double[] toArray() {
+    return values.clone();
+  }
+
+  /** The natural logs of this column (NaN where a value is not positive). */
+  public Column logs() {
+    double[] logs = new double[values.length];
+    for (int r = 0; r < logs.length; r++) {
+      logs[r] = values[r] > 0 ? Math.log(values[r]) : Double.NaN;
+    }
+    return new Column("ln " + name, logs);
+  }
+}

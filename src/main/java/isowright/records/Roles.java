@@ -1,0 +1,71 @@
+package isowright.records;
+
+import java.util.List;
+import java.util.Optional;
+
+/**
+ * What each column of a records file is: declared by the user, never guessed.
+ *
+ * @param plant the column naming the plant; absent: every row is its own plant
+ * @param period the column naming the period (integer or ISO 8601 date); absent: one cross-section
+ * @param output the column of output
+ * @param outputUnit the unit of output, free text
+ * @param inputs the inputs, in the order used everywhere; at least two
+ * @param controls what else moves output
+ * @param deflator the column by which money is divided, and the period whose money is used
+ * @param filedCost the column of filed cost
+ */
+public record Roles(
+    Optional<String> plant,
+    Optional<String> period,
+    String output,
+    Optional<String> outputUnit,
+    List<Input> inputs,
+    List<Control> controls,
+    Optional<Deflator> deflator,
+    Optional<String> filedCost) {
+
+  /** Copies the lists. */
+  public Roles {
+    inputs = List.copyOf(inputs);
+    controls = List.copyOf(controls);
+  }
+
+  /**
+   * An input.
+   *
+   * @param name the user's own name for it
+   * @param quantity the column of its quantity
+   * @param price the column of its price, money per unit of quantity
+   * @param spending the column of the money spent on it; where there is no price column, price =
+   *     spending / quantity
+   * @param unit the unit of quantity, free text
+   */
+  public record Input(
+      String name,
+      String quantity,
+      Optional<String> price,
+      Optional<String> spending,
+      Optional<String> unit) {}
+
+  /**
+   * A control.
+   *
+   * @param column its column
+   * @param log whether it enters in natural logs
+   */
+  public record Control(String column, boolean log) {}
+
+  /**
+   * A deflator.
+   *
+   * @param column its column
+   * @param base the period (as written in the file) whose money is used
+   */
+  public record Deflator(String column, String base) {}
+
+  /** The names of the inputs, in order. */
+  public List<String> inputNames() {
+    return inputs.stream().map(Input::name).toList();
+  }
+}

@@ -1,0 +1,46 @@
+package isowright.regression;
+
+import java.util.List;
+
+/**
+ * Rows of a regression: K regressors and a response, handed over block by block so that no
+ * estimator needs a copy of the data. A design may be computed on the fly (logs, products,
+ * deviations from group means, derivatives of a nonlinear model); it must give the same numbers
+ * each time and be safe to read from several threads.
+ */
+public interface Design {
+
+  /** The number of rows, N. */
+  int rows();
+
+  /** The names of the K regressors, in order. A constant, where there is one, is a regressor. */
+  List<String> columns();
+
+  /** The groups of rows (contiguous); one group a row where rows are independent. */
+  Groups groups();
+
+  /**
+   * Writes rows {@code from} (inclusive) to {@code to} (exclusive).
+   *
+   * @param from a group boundary
+   * @param to a group boundary
+   * @param into K + 1 columns, each at least {@code to − from} long: {@code into[k][row − from]} is
+   *     regressor k, {@code into[K][row − from]} the response; overwritten
+   */
+  void fill(int from, int to, double[][] into);
+
+  /**
+   * How many parameters were removed from the rows beforehand (group means, say); none by default.
+   */
+  default int absorbed() {
+    return 0;
+  }
+
+  /**
+   * The leverage that the removed parameters have at a row, on top of that of the regressors; zero
+   * by default.
+   */
+  default double absorbedLeverage(int row) {
+    return 0;
+  }
+}

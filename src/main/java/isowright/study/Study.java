@@ -1,0 +1,214 @@
+package isowright.study;
+
+import isowright.estimation.Specification;
+import isowright.records.Roles;
+import isowright.technology.Technology;
+import java.nio.file.Path;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+
+/**
+ * A study: everything that a study file asks, checked for its own sake (keys, types,
+ * contradictions) but not yet against the records.
+ *
+ * @param file the study file
+ * @param sha256 the SHA-256 of the study file, in hexadecimal
+ * @param title the title of the report
+ * @param records the records and the roles of their columns; absent where only given technologies
+ *     are asked
+ * @param money currency and base of money
+ * @param outputUnit the unit of output
+ * @param inputs the names of the inputs, in order (from {@code inputs} or from the given
+ *     technologies)
+ * @param inputUnits the unit of each input, empty where not stated
+ * @param technologies the forms to be fitted, by name, in order
+ * @param given technologies taken as known
+ * @param estimation how they are fitted
+ * @param questions what is tested
+ * @param leastCost the least-cost questions
+ * @param filing the filed costs to be reviewed
+ */
+public record Study(
+    Path file,
+    String sha256,
+    String title,
+    Optional<Records> records,
+    Money money,
+    Optional<String> outputUnit,
+    List<String> inputs,
+    List<Optional<String>> inputUnits,
+    List<String> technologies,
+    List<Given> given,
+    Estimation estimation,
+    Questions questions,
+    List<LeastCostQuestion> leastCost,
+    Optional<Filing> filing) {
+
+  /** Copies the lists. */
+  public Study {
+    inputs = List.copyOf(inputs);
+    inputUnits = List.copyOf(inputUnits);
+    technologies = List.copyOf(technologies);
+    given = List.copyOf(given);
+    leastCost = List.copyOf(leastCost);
+  }
+
+  /**
+   * The records file and what its columns are.
+   *
+   * @param file the CSV or XLSX file, resolved against the study file's folder
+   * @param sheet the sheet of a workbook; the first if absent
+   * @param numberFormat the declared number format of a CSV file; recognised if absent
+   * @param roles the roles of the columns
+   * @param firstPeriod rows before it are set aside
+   * @param lastPeriod rows after it are set aside
+   * @param withoutPlants rows of these plants are set aside
+   */
+  public record Records(
+      Path file,
+      Optional<String> sheet,
+      Optional<NumberFormat> numberFormat,
+      Roles roles,
+      Optional<String> firstPeriod,
+      Optional<String> lastPeriod,
+      List<String> withoutPlants) {
+    /** Copies the list. */
+    public Records {
+      withoutPlants = List.copyOf(withoutPlants);
+    }
+  }
+
+  /**
+   * A declared number format.
+   *
+   * @param decimal the decimal mark
+   * @param group the mark between groups of three digits; absent: none
+   */
+  public record NumberFormat(char decimal, Optional<Character> group) {}
+
+  /**
+   * Money.
+   *
+   * @param currency the ISO 4217 code
+   * @param base the period whose money is used, where a deflator is declared
+   */
+  public record Money(Optional<String> currency, Optional<String> base) {
+    /** How money is printed beside a figure: "EUR", "EUR of 2020", or "money". */
+    public String words() {
+      return currency.orElse("money") + base.map(b -> " of " + b).orElse("");
+    }
+  }
+
+  /**
+   * A technology taken as known.
+   *
+   * @param name its name in the study
+   * @param technology what it is
+   */
+  public record Given(String name, Technology technology) {}
+
+  /**
+   * How technologies are fitted; {@code standardErrors} absent means clustered where there is a
+   * plant column, else robust.
+   */
+  public record Estimation(
+      Specification.PlantEffects plantEffects,
+      Specification.Time time,
+      boolean scaled,
+      Optional<Specification.StandardErrors> standardErrors,
+      double confidence) {}
+
+  /**
+   * What is tested.
+   *
+   * @param returnsToScale the degree of homogeneity under the null
+   * @param substitution the elasticity of substitution under the null
+   */
+  public record Questions(double returnsToScale, double substitution) {}
+
+  /**
+   * A least-cost question.
+   *
+   * @param name its name
+   * @param technologies the technologies (form names or names of given ones) whose answers are
+   *     wanted; empty: all
+   * @param target the output to be reached
+   * @param prices by input; empty: mean prices of the last period
+   * @param productivity whose productivity
+   * @param period the period at which time effects are evaluated; the last if absent
+   * @param hold quantities of inputs that cannot change
+   * @param limits lowest and highest quantity by input
+   * @param curve the cost curve wanted; a default span if absent
+   */
+  public record LeastCostQuestion(
+      String name,
+      List<String> technologies,
+      double target,
+      Map<String, Double> prices,
+      Productivity productivity,
+      Optional<String> period,
+      Map<String, Double> hold,
+      Map<String, Limit> limits,
+      Optional<Curve> curve) {
+    /** Copies the collections. */
+    public LeastCostQuestion {
+      technologies = List.copyOf(technologies);
+      prices = Map.copyOf(prices);
+      hold = Map.copyOf(hold);
+      limits = Map.copyOf(limits);
+    }
+  }
+
+  /**
+   * Limits of one input.
+   *
+   * @param low the least
+   * @param high the most; may be {@code +∞}
+   */
+  public record Limit(double low, double high) {}
+
+  /**
+   * A span of targets.
+   *
+   * @param from the first
+   * @param to the last
+   * @param points how many
+   */
+  public record Curve(double from, double to, int points) {}
+
+  /**
+   * Whose productivity is meant.
+   *
+   * @param kind typical, best quarter, or a named plant
+   * @param plant the plant, where one is named
+   */
+  public record Productivity(Kind kind, Optional<String> plant) {
+    /** The kinds. */
+    public enum Kind {
+      /** The typical plant. */
+      TYPICAL,
+      /** The plant at the upper quartile of productivity. */
+      BEST_QUARTER,
+      /** A named plant. */
+      PLANT
+    }
+
+    /** The typical plant. */
+    public static final Productivity TYPICAL = new Productivity(Kind.TYPICAL, Optional.empty());
+  }
+
+  /**
+   * Filed costs to be reviewed.
+   *
+   * @param cost the column of filed cost; absent: the sum of price × quantity
+   * @param firstPeriod the first period; absent: the last of the records
+   * @param lastPeriod the last period
+   * @param against typical or best quarter
+   */
+  public record Filing(
+      Optional<String> cost,
+      Optional<String> firstPeriod,
+      Optional<String> lastPeriod,
+      Productivity against) {}
+}

@@ -1,0 +1,165 @@
+package isowright.technology;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+
+/**
+ * Cobb-Douglas: ln Q = constant + Σ_i β_i z_i, z_i = ln x_i − ln base_i.
+ *
+ * <p>Output elasticities are the constants β_i, the scale elasticity their sum, every elasticity of
+ * substitution 1. Parameters: {@code constant}, then one named after each input.
+ *
+ * <p>Source: Cobb, C. W. and Douglas, P. H. (1928), A Theory of Production, <i>American Economic
+ * Review</i> 18 (supplement), 139–165.
+ */
+public final class CobbDouglas implements Technology {
+
+  /** How the form presents itself to an estimator. */
+  public static final LinearForm FORM = new Description();
+
+  private final List<String> inputs;
+  private final double[] base;
+  private final double constant;
+  private final double[] coefficients;
+
+  /**
+   * With inputs in their own units (base of ones).
+   *
+   * @param coefficients β, shape n
+   */
+  public static CobbDouglas of(List<String> inputs, double constant, double... coefficients) {
+    double[] ones = new double[inputs.size()];
+    Arrays.fill(ones, 1);
+    return new CobbDouglas(inputs, ones, constant, coefficients);
+  }
+
+  /**
+   * With inputs divided by a base.
+   *
+   * @param base shape n, positive
+   * @param coefficients β, shape n
+   */
+  public CobbDouglas(List<String> inputs, double[] base, double constant, double[] coefficients) {
+    this.inputs = List.copyOf(inputs);
+    this.base = base.clone();
+    this.constant = constant;
+    this.coefficients = coefficients.clone();
+    if (base.length != inputs.size() || coefficients.length != inputs.size()) {
+      throw new IllegalArgumentException("inputs, base and coefficients differ in length");
+    }
+  }
+
+  /** The output elasticities β, shape n. */
+  public double[] coefficients() {
+    return coefficients.clone();
+  }
+
+  @Override
+  public String form() {
+    return FORM.name();
+  }
+
+  @Override
+  public List<String> inputs() {
+    return inputs;
+  }
+
+  @Override
+  public double[] base() {
+    return base.clone();
+  }
+
+  @Override
+  public List<String> parameterNames() {
+    List<String> names = new ArrayList<>(List.of("constant"));
+    names.addAll(inputs);
+    return List.copyOf(names);
+  }
+
+  @Override
+  public double[] parameters() {
+    double[] all = new double[1 + coefficients.length];
+    all[0] = constant;
+    System.arraycopy(coefficients, 0, all, 1, coefficients.length);
+    return all;
+  }
+
+  @Override
+  public CobbDouglas withParameters(double[] parameters) {
+    return new CobbDouglas(
+        inputs, base, parameters[0], Arrays.copyOfRange(parameters, 1, parameters.length));
+  }
+
+  @Override
+  public CobbDouglas shifted(double logShift) {
+    return new CobbDouglas(inputs, base, constant + logShift, coefficients);
+  }
+
+  @Override
+  public double logOutput(double[] logInputs) {
+    double sum = constant;
+    for (int i = 0; i < coefficients.length; i++) {
+      sum += coefficients[i] * (logInputs[i] - Math.log(base[i]));
+    }
+    return sum;
+  }
+
+  @Override
+  public void logGradient(double[] logInputs, double[] into) {
+    System.arraycopy(coefficients, 0, into, 0, coefficients.length);
+  }
+
+  @Override
+  public void logHessian(double[] logInputs, double[][] into) {
+    for (int i = 0; i < coefficients.length; i++) {
+      Arrays.fill(into[i], 0, coefficients.length, 0);
+    }
+  }
+
+  @Override
+  public void parameterGradient(double[] logInputs, double[] into) {
+    into[0] = 1;
+    for (int i = 0; i < coefficients.length; i++) {
+      into[i + 1] = logInputs[i] - Math.log(base[i]);
+    }
+  }
+
+  private static final class Description implements LinearForm {
+
+    @Override
+    public String name() {
+      return "cobb-douglas";
+    }
+
+    @Override
+    public List<String> coefficientNames(List<String> inputs) {
+      return List.copyOf(inputs);
+    }
+
+    @Override
+    public void regressors(double[][] z, int rows, double[][] into, int offset) {
+      for (int i = 0; i < z.length; i++) {
+        System.arraycopy(z[i], 0, into[offset + i], 0, rows);
+      }
+    }
+
+    @Override
+    public Technology technology(
+        List<String> inputs, double[] base, double constant, double[] coefficients) {
+      return new CobbDouglas(inputs, base, constant, coefficients);
+    }
+
+    @Override
+    public double[][] constantReturns(int inputs) {
+      double[] row = new double[inputs + 1];
+      Arrays.fill(row, 1);
+      return new double[][] {row};
+    }
+
+    @Override
+    public int[] secondOrder(int inputs) {
+      return new int[0];
+    }
+  }
+}

@@ -1,0 +1,34 @@
+package isowright.technology;
+
+import java.util.List;
+import java.util.stream.Stream;
+
+/**
+ * How a functional form presents itself to an estimator, which knows the two descriptions below and
+ * never a concrete form: either the form is linear in its parameters, or it has one curvature
+ * parameter that is profiled.
+ */
+public sealed interface Form permits LinearForm, ProfiledForm {
+
+  /** The form's name in study files. */
+  String name();
+
+  /** All forms, in the order in which they are offered. */
+  static List<Form> all() {
+    return List.of(CobbDouglas.FORM, Ces.FORM, Translog.FORM);
+  }
+
+  /** The names of all forms. */
+  static List<String> names() {
+    return all().stream().map(Form::name).toList();
+  }
+
+  /** The form of that name; the name must be one of {@link #names()}. */
+  static Form named(String name) {
+    return Stream.of(all())
+        .flatMap(List::stream)
+        .filter(form -> form.name().equals(name))
+        .findFirst()
+        .orElseThrow(() -> new IllegalArgumentException("no form is called " + name));
+  }
+}

@@ -1,0 +1,38 @@
+package isowright.technology;
+
+import java.util.List;
+
+/**
+ * A form linear in its parameters: ln Q = constant + Σ_k β_k r_k(z), with z the logged, divided
+ * inputs.
+ */
+public non-sealed interface LinearForm extends Form {
+
+  /** The names of the coefficients β for these inputs (without {@code constant}), shape k. */
+  List<String> coefficientNames(List<String> inputs);
+
+  /**
+   * The regressors r_k for many rows at once, column by column.
+   *
+   * @param z the logged inputs divided by the base, {@code z[i][row]}, n columns; not modified
+   * @param rows how many rows of each column to use
+   * @param into {@code into[offset + k][row]}, overwritten
+   * @param offset the first column to write
+   */
+  void regressors(double[][] z, int rows, double[][] into, int offset);
+
+  /** The technology with these coefficients (shape k) and constant. */
+  Technology technology(List<String> inputs, double[] base, double constant, double[] coefficients);
+
+  /**
+   * The linear restrictions under which this form has constant returns to scale: rows R and right
+   * sides r with R β = r, each row over the coefficients (shape k + 1, the last entry is r).
+   */
+  double[][] constantReturns(int inputs);
+
+  /**
+   * The coefficients that vanish when this form is Cobb-Douglas, by index; empty where it is
+   * Cobb-Douglas already.
+   */
+  int[] secondOrder(int inputs);
+}
