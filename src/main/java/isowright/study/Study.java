@@ -1,7 +1,9 @@
 package isowright.study;
 
 import isowright.estimation.Specification;
+import isowright.records.Keep;
 import isowright.records.Roles;
+import isowright.records.Source;
 import isowright.technology.Technology;
 import java.nio.file.Path;
 import java.util.List;
@@ -57,35 +59,11 @@ public record Study(
   /**
    * The records file and what its columns are.
    *
-   * @param file the CSV or XLSX file, resolved against the study file's folder
-   * @param sheet the sheet of a workbook; the first if absent
-   * @param numberFormat the declared number format of a CSV file; recognised if absent
+   * @param source the file, resolved against the study file's folder
    * @param roles the roles of the columns
-   * @param firstPeriod rows before it are set aside
-   * @param lastPeriod rows after it are set aside
-   * @param withoutPlants rows of these plants are set aside
+   * @param keep which rows are kept
    */
-  public record Records(
-      Path file,
-      Optional<String> sheet,
-      Optional<NumberFormat> numberFormat,
-      Roles roles,
-      Optional<String> firstPeriod,
-      Optional<String> lastPeriod,
-      List<String> withoutPlants) {
-    /** Copies the list. */
-    public Records {
-      withoutPlants = List.copyOf(withoutPlants);
-    }
-  }
-
-  /**
-   * A declared number format.
-   *
-   * @param decimal the decimal mark
-   * @param group the mark between groups of three digits; absent: none
-   */
-  public record NumberFormat(char decimal, Optional<Character> group) {}
+  public record Records(Source source, Roles roles, Keep keep) {}
 
   /**
    * Money.

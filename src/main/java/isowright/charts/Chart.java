@@ -1,0 +1,60 @@
+package isowright.charts;
+
+import java.util.List;
+import java.util.function.Supplier;
+
+/**
+ * A chart: a picture and everything that a reader who cannot see it needs.
+ *
+ * @param kind what kind of chart it is
+ * @param subject what it is about: a technology, or "question, technology"; empty for the whole
+ *     study
+ * @param name its file name without ending: lower-case letters, digits and hyphens, unique in the
+ *     study
+ * @param title the finding, in a sentence
+ * @param caption what to look at, in a sentence
+ * @param alternative the text alternative
+ * @param header the headings of the data table, units included
+ * @param rows the data table, ready to print
+ * @param svg draws the chart as SVG (with title, desc, role="img" and viewBox; scales to its
+ *     container)
+ * @param png draws the chart as PNG at twice its size
+ */
+public record Chart(
+    Kind kind,
+    String subject,
+    String name,
+    String title,
+    String caption,
+    String alternative,
+    List<String> header,
+    List<List<String>> rows,
+    Supplier<String> svg,
+    Supplier<byte[]> png) {
+
+  /** What kind of chart it is. */
+  public enum Kind {
+    /** The isoquant of a target with the isocost line and the plants' mixes. */
+    ISOQUANT,
+    /** The least-cost mix as the target grows. */
+    EXPANSION_PATH,
+    /** Average and marginal cost with bands. */
+    COST_CURVES,
+    /** Output elasticities with intervals across technologies. */
+    ELASTICITIES,
+    /** The sum of squares along a curvature parameter. */
+    PROFILE,
+    /** Residuals against fitted values. */
+    RESIDUALS,
+    /** Actual against predicted output. */
+    ACTUAL_PREDICTED,
+    /** Filed against least cost. */
+    FILING
+  }
+
+  /** Copies the tables. */
+  public Chart {
+    header = List.copyOf(header);
+    rows = rows.stream().map(List::copyOf).toList();
+  }
+}
