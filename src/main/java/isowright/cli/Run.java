@@ -1,0 +1,6 @@
+package isowright.cli;
+
+/** Being written. */
+public final class Run {
+  private Run() {}
+}

@@ -1,0 +1,6 @@
+package isowright.estimation;
+
+/** Being written. */
+public final class Fit {
+  private Fit() {}
+}

@@ -1,0 +1,6 @@
+package isowright.leastcost;
+
+/** Being written. */
+public final class Minimiser {
+  private Minimiser() {}
+}

@@ -1,0 +1,6 @@
+package isowright.records;
+
+/** Being written. */
+public final class PanelAudit {
+  private PanelAudit() {}
+}

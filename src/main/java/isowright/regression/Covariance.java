@@ -1,0 +1,6 @@
+package isowright.regression;
+
+/** Being written. */
+public final class Covariance {
+  private Covariance() {}
+}

@@ -1,0 +1,6 @@
+package isowright.report;
+
+/** Being written. */
+public final class HtmlReport {
+  private HtmlReport() {}
+}

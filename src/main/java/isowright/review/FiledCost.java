@@ -1,0 +1,6 @@
+package isowright.review;
+
+/** Being written. */
+public final class FiledCost {
+  private FiledCost() {}
+}

@@ -1,0 +1,6 @@
+package isowright.study;
+
+/** Being written. */
+public final class StudyFile {
+  private StudyFile() {}
+}

@@ -1,0 +1,6 @@
+package isowright.technology;
+
+/** Being written. */
+public final class Elasticities {
+  private Elasticities() {}
+}
