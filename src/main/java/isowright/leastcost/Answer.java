@@ -17,6 +17,11 @@ final class Answer {
   /** A share of cost that is zero in every printed figure; its conditions are lost to underflow. */
   private static final double VANISHING = 1e-290;
 
+  /**
+   * A limit that is worth less than this part of the price is worth nothing in any printed figure.
+   */
+  private static final double NOTHING = 1e-9;
+
   private final Technology technology;
   private final Question question;
   private final byte[] at;
@@ -170,9 +175,11 @@ final class Answer {
           default -> " is at its upper limit ";
         };
     String worth =
-        value >= 0
-            ? " (one more unit would save " + Wording.number(value) + ")"
-            : " (one unit less would save " + Wording.number(-value) + ")";
+        Math.abs(value) <= NOTHING * question.price(i)
+            ? ", as it would be without"
+            : value >= 0
+                ? " (one more unit would save " + Wording.number(value) + ")"
+                : " (one unit less would save " + Wording.number(-value) + ")";
     return name(i) + place + Wording.number(mix[i]) + worth;
   }
 

@@ -1,48 +1,38 @@
 package isowright.leastcost;
 
+import isowright.technology.Regularity;
 import isowright.technology.Technology;
 import java.util.Locale;
 
-/**
- * Is the technology regular at a mix: every marginal product positive, and isoquants convex to the
- * origin (f quasi-concave)? In logs, with output elasticities e and G the Hessian of ln f in ln x,
- * the second holds where diag(e) − G is positive definite on the plane e · dz = 0.
- */
+/** What is irregular at a mix, in words ({@link Regularity} decides). */
 final class Regular {
-
-  /**
-   * A pivot below this part of the largest diagonal entry is a straight isoquant to the precision
-   * of the sums it comes from.
-   */
-  static final double FLAT = 1e-12;
 
   private Regular() {}
 
-  /** What is irregular at ln x, in words; empty where nothing is. */
+  /** What is irregular at ln x; empty where nothing is. */
   static String complaint(Technology technology, double[] z) {
-    int n = z.length;
-    double[] e = new double[n];
-    technology.logGradient(z, e);
-    for (int i = 0; i < n; i++) {
-      if (!(e[i] > 0)) {
-        return String.format(
-            Locale.ROOT,
-            "more of %s would not add output there (output elasticity %.3g at %s)",
-            technology.inputs().get(i),
-            e[i],
-            Wording.mix(technology.inputs(), z));
+    Regularity.Checker checker = new Regularity.Checker(technology);
+    checker.check(z);
+    if (checker.regular()) {
+      return "";
+    }
+    double[] elasticities = new double[z.length];
+    technology.logGradient(z, elasticities);
+    for (int i = 0; i < z.length; i++) {
+      if (!checker.monotone(i)) {
+        return lack(technology, i, elasticities[i], z);
       }
     }
-    double[][] matrix = new double[n][n];
-    technology.logHessian(z, matrix);
-    for (int i = 0; i < n; i++) {
-      for (int j = 0; j < n; j++) {
-        matrix[i][j] = (i == j ? e[i] : 0) - matrix[i][j];
-      }
-    }
-    if (n > 1 && !DenseSystem.positiveOnPlane(matrix, e, FLAT)) {
-      return "isoquants are not convex to the origin at " + Wording.mix(technology.inputs(), z);
-    }
-    return "";
+    return "isoquants are not convex to the origin at " + Wording.mix(technology.inputs(), z);
+  }
+
+  /** That more of an input does not add output. */
+  static String lack(Technology technology, int i, double elasticity, double[] z) {
+    return String.format(
+        Locale.ROOT,
+        "more of %s ceases to add output (output elasticity %.3g at %s)",
+        technology.inputs().get(i),
+        elasticity,
+        Wording.mix(technology.inputs(), z));
   }
 }

@@ -1,9 +1,9 @@
 package isowright.leastcost;
 
+import isowright.technology.Regularity;
 import isowright.technology.Technology;
 import java.util.ArrayList;
 import java.util.List;
-import java.util.Locale;
 
 /**
  * The least-cost quantities of the free inputs of any technology, searched for.
@@ -76,7 +76,7 @@ final class SearchedMix implements FreeMix {
     for (int i = 0; i < n; i++) {
       if (!fixed[i] && !(elasticities[i] > 0)) {
         if (ended.isEmpty()) {
-          ended = lack(i, elasticities[i], start);
+          ended = Regular.lack(technology, i, elasticities[i], start);
         }
         return false;
       }
@@ -197,7 +197,7 @@ final class SearchedMix implements FreeMix {
       }
       r++;
     }
-    return DenseSystem.positiveOnPlane(part, normal, Regular.FLAT);
+    return DenseSystem.positiveOnPlane(part, normal, Regularity.TOLERANCE);
   }
 
   /** What ran out at the last point reached. */
@@ -213,21 +213,9 @@ final class SearchedMix implements FreeMix {
       }
     }
     if (elasticities[least] < RUN_OUT * sum) {
-      return lack(least, elasticities[least], reached);
+      return Regular.lack(technology, least, elasticities[least], reached);
     }
-    return "isoquants cease to be convex to the origin beyond " + mix(reached);
-  }
-
-  private String lack(int i, double elasticity, double[] at) {
-    return String.format(
-        Locale.ROOT,
-        "more of %s ceases to add output (output elasticity %.3g at %s)",
-        technology.inputs().get(i),
-        elasticity,
-        mix(at));
-  }
-
-  private String mix(double[] at) {
-    return Wording.mix(technology.inputs(), at);
+    return "isoquants cease to be convex to the origin beyond "
+        + Wording.mix(technology.inputs(), reached);
   }
 }

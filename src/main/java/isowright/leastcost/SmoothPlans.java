@@ -3,6 +3,7 @@ package isowright.leastcost;
 import isowright.leastcost.Plan.Status;
 import isowright.technology.ConditionalDemand;
 import isowright.technology.Technology;
+import java.util.Arrays;
 import java.util.Optional;
 import org.jspecify.annotations.Nullable;
 
@@ -76,7 +77,7 @@ final class SmoothPlans implements Plans {
       double least = technology.logOutput(asked.logLow);
       if (least > asked.logTarget + Feasibility.EXACT) {
         byte[] low = new byte[asked.n];
-        java.util.Arrays.fill(low, ActiveLimits.LOW);
+        Arrays.fill(low, ActiveLimits.LOW);
         Answer answer = new Answer(technology, asked.asked, asked.logTarget, asked.logLow, low);
         return Optional.of(answer.slack());
       }

@@ -135,7 +135,7 @@ public final class CobbDouglas implements Technology {
         return Optional.empty();
       }
     }
-    return Optional.of(new CobbDouglasDemand(base, constant, coefficients));
+    return Optional.of(new CobbDouglasDemand(scaling.logBase(), constant, coefficients));
   }
 
   private static final class Description implements LinearForm {

@@ -23,15 +23,14 @@ final class CobbDouglasDemand implements ConditionalDemand.Smooth {
    *
    * @param coefficients β, shape n, positive
    */
-  CobbDouglasDemand(double[] base, double constant, double[] coefficients) {
+  CobbDouglasDemand(double[] logBase, double constant, double[] coefficients) {
     int n = coefficients.length;
     this.coefficients = coefficients.clone();
     this.constant = constant;
     this.logCoefficients = new double[n];
-    this.logBase = new double[n];
+    this.logBase = logBase.clone();
     for (int i = 0; i < n; i++) {
       logCoefficients[i] = Math.log(coefficients[i]);
-      logBase[i] = Math.log(base[i]);
     }
   }
 
