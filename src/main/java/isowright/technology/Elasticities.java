@@ -130,7 +130,7 @@ public final class Elasticities {
     double cross = 2 * hessian[i][j];
     double first = output[i] / output[j] * hessian[j][j];
     double second = output[j] / output[i] * hessian[i][i];
-    double denominator = sum + cross - first - second;
+    double denominator = sum + cross - (first + second);
     double largest =
         Math.max(
             Math.max(Math.abs(sum), Math.abs(cross)), Math.max(Math.abs(first), Math.abs(second)));

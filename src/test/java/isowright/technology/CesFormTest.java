@@ -1,6 +1,7 @@
 package isowright.technology;
 
 import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.assertThatThrownBy;
 import static org.assertj.core.api.Assertions.within;
 
 import java.util.Arrays;
@@ -204,5 +205,8 @@ class CesFormTest {
   void allFormsAreOfferedByName() {
     assertThat(Form.names()).containsExactly("cobb-douglas", "ces", "translog");
     assertThat(Form.named("ces")).isSameAs(FORM);
+    assertThatThrownBy(() -> Form.named("cobb"))
+        .isInstanceOf(IllegalArgumentException.class)
+        .hasMessageContaining("cobb-douglas, ces, translog");
   }
 }
