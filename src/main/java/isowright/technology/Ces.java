@@ -41,6 +41,9 @@ import java.util.Optional;
  * Uzawa, H. (1962), Production Functions with Constant Elasticities of Substitution, <i>Review of
  * Economic Studies</i> 29, 291–299; on the base: Klump, R. and de La Grandville, O. (2000),
  * Economic Growth and the Elasticity of Substitution, <i>American Economic Review</i> 90, 282–291.
+ *
+ * <p>Tested in {@code CesTest}, {@code CesPrecisionTest} (against decimal arithmetic of 80 digits)
+ * and, on published values, {@code PublishedTechnologiesTest}.
  */
 public final class Ces implements Technology {
 

@@ -14,6 +14,8 @@ import java.util.List;
  *
  * <pre>  h = ν M(t),   ∂h/∂θ_i = ν (p_i − δ_i)/t = ν δ_i (e^{x_i} − 1 − w)/(E t),
  *  ∂h/∂ν = M(t),   ∂h/∂ρ = −ν M′(t) </pre>
+ *
+ * <p>Tested in {@code CesFormTest}.
  */
 final class CesForm implements ProfiledForm {
 

@@ -13,6 +13,8 @@ import java.util.Optional;
  *
  * <p>Source: Cobb, C. W. and Douglas, P. H. (1928), A Theory of Production, <i>American Economic
  * Review</i> 18 (supplement), 139–165.
+ *
+ * <p>Tested in {@code CobbDouglasTest}.
  */
 public final class CobbDouglas implements Technology {
 

@@ -44,6 +44,9 @@ import org.apache.commons.math3.linear.RealMatrix;
  * <i>Mathematical Analysis for Economists</i>, 503–509; Uzawa, H. (1962), <i>Review of Economic
  * Studies</i> 29, 291–299; Blackorby, C. and Russell, R. R. (1989), Will the Real Elasticity of
  * Substitution Please Stand Up?, <i>American Economic Review</i> 79, 882–888.
+ *
+ * <p>Tested in {@code ElasticityLawsTest}, {@code ElasticitiesTest} and {@code
+ * PublishedTechnologiesTest}.
  */
 public final class Elasticities {
 

@@ -27,6 +27,8 @@ package isowright.technology;
  *
  * <p>The two branches agree to rounding where they meet. Shares outside (0, 1) are accepted as long
  * as E stays positive, so that numerical derivatives at a bound can be taken.
+ *
+ * <p>Tested in {@code CesPrecisionTest}.
  */
 final class PowerMean {
 

@@ -25,6 +25,8 @@ package isowright.technology;
  * <p>Sources: Arrow, K. J. and Enthoven, A. C. (1961), Quasi-Concave Programming,
  * <i>Econometrica</i> 29, 779–800; Debreu, G. (1952), Definite and Semidefinite Quadratic Forms,
  * <i>Econometrica</i> 20, 295–300.
+ *
+ * <p>Tested in {@code RegularityTest} and {@code PublishedTechnologiesTest}.
  */
 public final class Regularity {
 

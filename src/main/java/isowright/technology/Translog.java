@@ -14,6 +14,8 @@ import java.util.List;
  *
  * <p>Source: Christensen, L. R., Jorgenson, D. W. and Lau, L. J. (1973), Transcendental Logarithmic
  * Production Frontiers, <i>Review of Economics and Statistics</i> 55, 28–45.
+ *
+ * <p>Tested in {@code TranslogTest} and {@code PublishedTechnologiesTest}.
  */
 public final class Translog implements Technology {
 

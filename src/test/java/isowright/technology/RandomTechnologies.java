@@ -1,5 +1,6 @@
 package isowright.technology;
 
+import java.util.Arrays;
 import java.util.List;
 import java.util.Random;
 import java.util.stream.IntStream;
@@ -62,6 +63,18 @@ final class RandomTechnologies {
       case 1 -> ces(random, n, Math.pow(10, -1 + 2.3 * random.nextDouble()) - 1);
       default -> translog(random, n);
     };
+  }
+
+  /** The same parameters with inputs divided by another base: inputs in other units. */
+  static Technology withBase(Technology technology, double[] base) {
+    double[] all = technology.parameters();
+    double[] rest = Arrays.copyOfRange(all, 1, all.length);
+    if (technology instanceof Ces ces) {
+      return Ces.of(ces.inputs(), base, all[0], ces.shares(), ces.rho(), ces.scale());
+    }
+    return technology instanceof CobbDouglas
+        ? new CobbDouglas(technology.inputs(), base, all[0], rest)
+        : new Translog(technology.inputs(), base, all[0], rest);
   }
 
   /** ln x around the technology's base, normal with this spread in logs. */
