@@ -6,9 +6,7 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import org.apache.commons.math3.exception.ConvergenceException;
-import org.apache.commons.math3.exception.MathIllegalStateException;
-import org.apache.commons.math3.exception.TooManyEvaluationsException;
-import org.apache.commons.math3.exception.TooManyIterationsException;
+import org.apache.commons.math3.exception.MaxCountExceededException;
 import org.apache.commons.math3.fitting.leastsquares.LeastSquaresProblem;
 import org.apache.commons.math3.fitting.leastsquares.LevenbergMarquardtOptimizer;
 import org.apache.commons.math3.linear.ArrayRealVector;
@@ -93,12 +91,10 @@ final class NonlinearSearch implements LeastSquaresProblem {
     try {
       METHOD.optimize(this);
       return false;
-    } catch (TooManyEvaluationsException | TooManyIterationsException e) {
+    } catch (MaxCountExceededException e) {
       return true;
     } catch (ConvergenceException e) {
       // Tolerances too tight for the problem: the best point met is judged by its own angle.
-      return false;
-    } catch (MathIllegalStateException e) {
       return false;
     }
   }
