@@ -14,7 +14,7 @@ import java.util.Locale;
  * the rows cannot tell apart are dropped and named in the fit.
  *
  * <p>Source: Å. Björck, <i>Numerical Methods for Least Squares Problems</i>, 1996, sections 2.4 and
- * 6.6 (corrected semi-normal equations). Tested with certified values in {@code NistLinearTest}.
+ * 6.6 (corrected semi-normal equations). Tested with certified values in {@code NistTest}.
  */
 public final class LeastSquares {
 

@@ -29,8 +29,14 @@ public record NonlinearFit(
 
   /** Why the search ended. */
   public enum Stop {
-    /** The residual is orthogonal to the Jacobian: a stationary point. */
+    /** The residual is orthogonal to a Jacobian of full rank: a stationary point. */
     CONVERGED,
+    /**
+     * The residual is orthogonal to the Jacobian, but the rows cannot tell some parameters apart
+     * there, or a parameter has lost its effect (it ran off to where the model is flat): the values
+     * of those parameters mean nothing. The linearisation names them.
+     */
+    UNIDENTIFIED,
     /** No step lowers the sum of squares any more, yet the residual is not orthogonal. */
     STALLED,
     /** The evaluations allowed were used up. */

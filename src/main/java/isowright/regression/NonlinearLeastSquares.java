@@ -10,17 +10,21 @@ import java.util.Arrays;
  * the rows only through J′J, J′r and ‖r‖; so at each θ the rows of [J r] are streamed through
  * {@link OrthogonalDecomposition}, and the search sees the (K + 1) × (K + 1) factor instead of the
  * N × K Jacobian. After the search a few Gauss-Newton steps sharpen the answer beyond what the sum
- * of squares can resolve, as long as each at least halves the angle.
+ * of squares can resolve.
  *
  * <p>Whether it has converged is decided afterwards and apart from the search, by the angle between
  * the residual and the space of the Jacobian columns (D. M. Bates and D. G. Watts 1981, "A relative
  * offset orthogonality convergence criterion for nonlinear least squares", Technometrics 23,
  * 179–183): a cosine c means that no parameter is further from the solution than about c √(N − K)
  * of its standard errors. Where the fit is exact the residual is rounding and has no direction;
- * then the remaining Gauss-Newton step must be negligible for every parameter instead. A Jacobian
- * that lost rank on the way is never called converged.
+ * then the remaining Gauss-Newton step must be negligible for every parameter instead. Where the
+ * Jacobian has no full rank at the end, the fit is called unidentified, not converged, unless what
+ * it lacks is what group effects took up from the start (a constant).
  *
- * <p>Tested with the certified nonlinear problems of NIST in {@code NistNonlinearTest}.
+ * <p>Parameters may be held at their start by {@link Settings#holding}: they have no Jacobian
+ * column in the search, and zero rows in the matrices of the fit.
+ *
+ * <p>Tested with the certified nonlinear problems of NIST in {@code NistTest}.
  */
 public final class NonlinearLeastSquares {
 

@@ -6,9 +6,7 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import org.apache.commons.math3.exception.ConvergenceException;
-import org.apache.commons.math3.exception.MathIllegalStateException;
-import org.apache.commons.math3.exception.TooManyEvaluationsException;
-import org.apache.commons.math3.exception.TooManyIterationsException;
+import org.apache.commons.math3.exception.MaxCountExceededException;
 import org.apache.commons.math3.fitting.leastsquares.LeastSquaresProblem;
 import org.apache.commons.math3.fitting.leastsquares.LevenbergMarquardtOptimizer;
 import org.apache.commons.math3.linear.ArrayRealVector;
@@ -27,8 +25,8 @@ final class NonlinearSearch implements LeastSquaresProblem {
   private static final LevenbergMarquardtOptimizer METHOD =
       new LevenbergMarquardtOptimizer(100, 1e-15, 1e-15, 1e-15, 1e-300);
 
-  /** Gauss-Newton steps after the search, at most. */
-  private static final int MOST_SHARPENINGS = 6;
+  /** Gauss-Newton steps after the search, at most; a tenth off each time is four digits in all. */
+  private static final int MOST_SHARPENINGS = 90;
 
   /** A cosine so small that sharpening further is rounding. */
   private static final double SHARP = 1e-13;
@@ -76,7 +74,7 @@ final class NonlinearSearch implements LeastSquaresProblem {
     if (!first.finite()) {
       return notFinite();
     }
-    int startRank = first.analysis().rank();
+    List<Collinearity> atStart = List.copyOf(first.analysis().collinearities());
     boolean limited = false;
     if (!free.isEmpty()) {
       limited = search();
@@ -85,7 +83,7 @@ final class NonlinearSearch implements LeastSquaresProblem {
       }
     }
     CompressedPoint end = best.orElse(first);
-    return finish(end, stop(end, startRank, limited));
+    return finish(end, stop(end, atStart, limited));
   }
 
   /** Runs the search; true where it used up its evaluations. */
@@ -93,51 +91,76 @@ final class NonlinearSearch implements LeastSquaresProblem {
     try {
       METHOD.optimize(this);
       return false;
-    } catch (TooManyEvaluationsException | TooManyIterationsException e) {
+    } catch (MaxCountExceededException e) {
       return true;
     } catch (ConvergenceException e) {
       // Tolerances too tight for the problem: the best point met is judged by its own angle.
       return false;
-    } catch (MathIllegalStateException e) {
-      return false;
     }
   }
 
-  /** Gauss-Newton steps from the best point, each kept only where it at least halves the angle. */
+  /**
+   * Gauss-Newton steps from the best point, judged by the angle, which still resolves what the sum
+   * of squares no longer can. Until the point counts as a solution a step is kept where it takes a
+   * tenth off the angle, whole or halved (large residuals make such steps overshoot); after that,
+   * only where it halves the angle.
+   */
   private void sharpen() {
-    for (int s = 0; s < MOST_SHARPENINGS && evaluations < settings.mostEvaluations(); s++) {
+    for (int s = 0; s < MOST_SHARPENINGS; s++) {
       CompressedPoint from = best.orElseThrow();
       if (from.cosine() <= SHARP) {
         return;
       }
-      double[] next = from.free().clone();
-      double[] step = from.analysis().coefficients();
-      for (int k = 0; k < next.length; k++) {
-        next[k] += step[k];
-      }
-      CompressedPoint there = read(next);
-      if (!there.finite()
-          || there.ssr() > from.ssr() * (1 + SSR_ROUNDING)
-          || there.analysis().rank() < from.analysis().rank()
-          || there.cosine() > 0.5 * from.cosine()) {
+      boolean solved = from.cosine() <= settings.orthogonality();
+      boolean better =
+          solved ? sharper(from, 1, 0.5) : sharper(from, 1, 0.9) || sharper(from, 0.5, 0.9);
+      if (!better) {
         best = Optional.of(from);
         lastFinite = true;
         return;
       }
-      best = Optional.of(there);
     }
   }
 
-  private Stop stop(CompressedPoint end, int startRank, boolean limited) {
-    RankAnalysis analysis = end.analysis();
-    boolean orthogonal = end.cosine() <= settings.orthogonality() || negligible(end);
-    if (orthogonal && analysis.rank() >= startRank) {
-      return Stop.CONVERGED;
+  /** Takes a share of the Gauss-Newton step; true where the cosine falls below this share of it. */
+  private boolean sharper(CompressedPoint from, double share, double most) {
+    if (evaluations >= settings.mostEvaluations()) {
+      return false;
+    }
+    double[] next = from.free().clone();
+    double[] step = from.analysis().coefficients();
+    for (int k = 0; k < next.length; k++) {
+      next[k] += share * step[k];
+    }
+    CompressedPoint there = read(next);
+    if (!there.finite()
+        || there.ssr() > from.ssr() * (1 + SSR_ROUNDING)
+        || there.analysis().rank() < from.analysis().rank()
+        || there.cosine() > most * from.cosine()) {
+      return false;
+    }
+    best = Optional.of(there);
+    return true;
+  }
+
+  private Stop stop(CompressedPoint end, List<Collinearity> atStart, boolean limited) {
+    if (end.cosine() <= settings.orthogonality() || negligible(end)) {
+      return identified(end, atStart) ? Stop.CONVERGED : Stop.UNIDENTIFIED;
     }
     if (limited) {
       return Stop.LIMIT;
     }
     return lastFinite ? Stop.STALLED : Stop.NOT_FINITE;
+  }
+
+  /**
+   * True where the rows tell all free parameters apart; one that the group effects take up from the
+   * start (a constant) does no harm.
+   */
+  private static boolean identified(CompressedPoint end, List<Collinearity> atStart) {
+    return end.analysis().collinearities().stream()
+        .allMatch(
+            c -> c.among().equals(List.of(Collinearity.GROUP_EFFECTS)) && atStart.contains(c));
   }
 
   /** True where the remaining step changes no parameter, or has no effect beyond rounding. */

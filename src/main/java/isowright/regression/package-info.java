@@ -7,7 +7,9 @@
  * matrices, each with how it was obtained.
  *
  * <p><b>Read first:</b> {@link isowright.regression.Design}, then {@link
- * isowright.regression.LeastSquares}, then {@link isowright.regression.Covariance}.
+ * isowright.regression.LeastSquares} and {@link isowright.regression.LinearFit}, {@link
+ * isowright.regression.Effects}, {@link isowright.regression.Covariance}, and {@link
+ * isowright.regression.NonlinearLeastSquares}.
  *
  * <p><b>Does not belong here:</b> any economics. No word such as labour, cost, output or plant
  * appears; rows come in groups, and that is all this package knows of them.
