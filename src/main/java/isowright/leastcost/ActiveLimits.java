@@ -32,8 +32,8 @@ final class ActiveLimits {
   /** A sign condition is met within the rounding of the logs it is computed from. */
   private static final double SIGN = 1e-11;
 
-  /** Patterns tried at most one by one: eleven inputs with two limits each. */
-  private static final int PATTERNS = 200_000;
+  /** Patterns tried at most one by one: six inputs with two limits each. */
+  private static final int PATTERNS = 729;
 
   private final Technology technology;
   private final LogQuestion question;
@@ -80,7 +80,7 @@ final class ActiveLimits {
     int together = 2 * n + 4;
     int rounds = together + 6 * n + 10;
     for (int round = 0; round < rounds; round++) {
-      FreeMix.Outcome outcome = solve();
+      FreeMix.Outcome outcome = solve(true);
       switch (outcome) {
         case FOUND -> {
           if (revise(round >= together) == 0) {
@@ -104,7 +104,7 @@ final class ActiveLimits {
   }
 
   /** Solves with the present pattern. */
-  private FreeMix.Outcome solve() {
+  private FreeMix.Outcome solve(boolean thorough) {
     int free = 0;
     for (int i = 0; i < n; i++) {
       fixed[i] = at[i] != FREE;
@@ -118,7 +118,7 @@ final class ActiveLimits {
     if (free == 0) {
       return corner();
     }
-    FreeMix.Outcome outcome = inner.solve(question, fixed, z);
+    FreeMix.Outcome outcome = inner.solve(question, fixed, z, thorough);
     if (outcome == FreeMix.Outcome.FOUND) {
       technology.logGradient(z, elasticities);
       logMultiplier = multiplier();
@@ -217,7 +217,7 @@ final class ActiveLimits {
                       : question.capped(i) ? new byte[] {FREE, HIGH} : new byte[] {FREE};
       patterns = Math.min(patterns * choices[i].length, PATTERNS + 1L);
     }
-    if (patterns > PATTERNS) {
+    if (patterns == 1 || patterns > PATTERNS) {
       return FreeMix.Outcome.NOT_FOUND;
     }
     for (long pattern = 0; pattern < patterns; pattern++) {
@@ -226,7 +226,7 @@ final class ActiveLimits {
         at[i] = choices[i][(int) (rest % choices[i].length)];
         rest /= choices[i].length;
       }
-      if (solve() == FreeMix.Outcome.FOUND && revise(true) == 0) {
+      if (solve(false) == FreeMix.Outcome.FOUND && revise(true) == 0) {
         return FreeMix.Outcome.FOUND;
       }
     }

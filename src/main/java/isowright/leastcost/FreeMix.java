@@ -23,8 +23,9 @@ interface FreeMix {
    *
    * @param fixed which inputs stay; at least one does not
    * @param z ln x: read where fixed; a start where free, overwritten where found
+   * @param thorough whether to go far for an answer, or to try only what usually succeeds
    */
-  Outcome solve(LogQuestion question, boolean[] fixed, double[] z);
+  Outcome solve(LogQuestion question, boolean[] fixed, double[] z, boolean thorough);
 
   /** In words, where the last search ended, for the plan of a question without an answer. */
   String ended();

@@ -37,6 +37,16 @@ final class LogQuestion {
     return false;
   }
 
+  /** Whether every input is held. */
+  boolean allHeld() {
+    for (int i = 0; i < n; i++) {
+      if (!asked.held(i)) {
+        return false;
+      }
+    }
+    return true;
+  }
+
   boolean capped(int i) {
     return logHigh[i] < Double.POSITIVE_INFINITY;
   }

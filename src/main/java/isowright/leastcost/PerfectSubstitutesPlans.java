@@ -145,7 +145,7 @@ final class PerfectSubstitutesPlans implements Plans {
       if (question.held(i)) {
         parts.add(inputs.get(i) + " is held at " + Wording.number(mix[i]));
       } else if (mix[i] == 0) {
-        parts.add(inputs.get(i) + " is not used: another input does the same for less");
+        parts.add(inputs.get(i) + " is not used: another input does the same for no more");
       } else if (mix[i] == question.low(i)) {
         parts.add(inputs.get(i) + " is at its lower limit " + Wording.number(mix[i]));
       } else if (mix[i] == question.high(i)) {

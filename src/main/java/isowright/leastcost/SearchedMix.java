@@ -46,13 +46,13 @@ final class SearchedMix implements FreeMix {
   }
 
   @Override
-  public Outcome solve(LogQuestion question, boolean[] fixed, double[] z) {
+  public Outcome solve(LogQuestion question, boolean[] fixed, double[] z, boolean thorough) {
     System.arraycopy(z, 0, conditions.z, 0, n);
     if (conditions.solve(question.logTarget, question.logPrice, fixed) && convex(fixed)) {
       System.arraycopy(conditions.z, 0, z, 0, n);
       return Outcome.FOUND;
     }
-    for (double[] start : starts()) {
+    for (double[] start : starts(thorough)) {
       for (int i = 0; i < n; i++) {
         start[i] = fixed[i] ? z[i] : start[i];
       }
@@ -111,7 +111,7 @@ final class SearchedMix implements FreeMix {
   }
 
   /** Points from which to follow a path: the base, then points with chosen elasticities. */
-  private List<double[]> starts() {
+  private List<double[]> starts(boolean thorough) {
     double[] base = technology.base();
     double[] logBase = new double[n];
     for (int i = 0; i < n; i++) {
@@ -120,7 +120,7 @@ final class SearchedMix implements FreeMix {
     List<double[]> starts = new ArrayList<>();
     starts.add(logBase.clone());
     double[] even = new double[n];
-    for (int dominant = -1; dominant < n; dominant++) {
+    for (int dominant = -1; thorough && dominant < n; dominant++) {
       for (int i = 0; i < n; i++) {
         even[i] = dominant < 0 ? 1.0 / n : (i == dominant ? 0.6 : 0.4 / (n - 1));
       }

@@ -66,7 +66,7 @@ final class SmoothPlans implements Plans {
 
   /** The plans that need no search: the target out of reach, or over-reached by the least taken. */
   private Optional<Plan> edge(LogQuestion asked) {
-    boolean known = demand != null;
+    boolean known = demand != null || asked.allHeld();
     if (known || (asked.allCapped() && Feasibility.monotone(technology, asked.logHigh))) {
       double largest = technology.logOutput(asked.logHigh);
       if (largest < asked.logTarget - Feasibility.EXACT) {
@@ -132,7 +132,8 @@ final class SmoothPlans implements Plans {
     double[] z = logBase.clone();
     if (near.isPresent() && near.get().answered()) {
       for (int i = 0; i < n; i++) {
-        z[i] = Math.log(near.get().mix(i));
+        double quantity = near.get().mix(i);
+        z[i] = quantity > 0 ? Math.log(quantity) : z[i];
       }
       return z;
     }

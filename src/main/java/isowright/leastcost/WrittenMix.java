@@ -6,7 +6,7 @@ import isowright.technology.ConditionalDemand;
 record WrittenMix(ConditionalDemand.Smooth demand) implements FreeMix {
 
   @Override
-  public Outcome solve(LogQuestion question, boolean[] fixed, double[] z) {
+  public Outcome solve(LogQuestion question, boolean[] fixed, double[] z, boolean thorough) {
     return switch (demand.logMix(question.logTarget, question.logPrice, fixed, z)) {
       case REACHED -> Outcome.FOUND;
       case TOO_LITTLE -> Outcome.TOO_LITTLE;
