@@ -19,6 +19,8 @@ import java.util.function.Supplier;
  * @param svg draws the chart as SVG (with title, desc, role="img" and viewBox; scales to its
  *     container)
  * @param png draws the chart as PNG at twice its size
+ * @param figure draws the chart as SVG without the visible title, for a page that prints the title
+ *     as the figure's heading
  */
 public record Chart(
     Kind kind,
@@ -30,7 +32,8 @@ public record Chart(
     List<String> header,
     List<List<String>> rows,
     Supplier<String> svg,
-    Supplier<byte[]> png) {
+    Supplier<byte[]> png,
+    Supplier<String> figure) {
 
   /** What kind of chart it is. */
   public enum Kind {
@@ -56,5 +59,20 @@ public record Chart(
   public Chart {
     header = List.copyOf(header);
     rows = rows.stream().map(List::copyOf).toList();
+  }
+
+  /** A chart whose picture is the same on a page as standing alone. */
+  public Chart(
+      Kind kind,
+      String subject,
+      String name,
+      String title,
+      String caption,
+      String alternative,
+      List<String> header,
+      List<List<String>> rows,
+      Supplier<String> svg,
+      Supplier<byte[]> png) {
+    this(kind, subject, name, title, caption, alternative, header, rows, svg, png, svg);
   }
 }

@@ -1,0 +1,42 @@
+package isowright.charts;
+
+import isowright.study.Findings;
+import isowright.study.FitFindings.Fitted;
+import isowright.study.PlanFindings.Planned;
+import java.util.ArrayList;
+import java.util.List;
+
+/**
+ * The charts of a study.
+ *
+ * <p>Nothing is drawn here: each chart draws itself when its picture is first asked for, so charts
+ * may be drawn in any order and on several threads. Tested in {@code ChartsTest}.
+ */
+public final class Charts {
+
+  private Charts() {}
+
+  /**
+   * The charts that findings give rise to, in the order of a report: elasticities, curvature,
+   * residuals and fit of each technology; isoquant, expansion path and cost curves of each answer;
+   * filed against least cost. What has no answer has no chart.
+   */
+  public static List<Chart> of(Findings findings) {
+    Setting setting = Setting.of(findings);
+    List<Chart> charts = new ArrayList<>(ElasticityCharts.of(findings, setting));
+    for (Fitted fit : findings.fits()) {
+      ProfileCharts.of(fit, setting).ifPresent(charts::add);
+    }
+    for (Fitted fit : findings.fits()) {
+      ResidualCharts.of(fit, setting).ifPresent(charts::add);
+      ActualPredictedCharts.of(fit, setting).ifPresent(charts::add);
+    }
+    for (Planned plan : findings.plans()) {
+      IsoquantCharts.of(plan, setting).ifPresent(charts::add);
+      ExpansionPathCharts.of(plan, setting).ifPresent(charts::add);
+      CostCurveCharts.of(plan, setting).ifPresent(charts::add);
+    }
+    charts.addAll(FilingCharts.of(findings.reviews(), setting));
+    return List.copyOf(charts);
+  }
+}

@@ -1,0 +1,138 @@
+package isowright.charts;
+
+import isowright.charts.Plot.Label;
+import isowright.charts.Plot.Side;
+import java.awt.geom.Rectangle2D;
+import java.util.ArrayList;
+import java.util.List;
+
+/**
+ * Where labels stand: of all places offered (points, sides, distances) the one that covers least.
+ * Covering another label or leaving the plot is worst, covering a line is bad, covering a dot less
+ * so; among equals the earlier point, side and the shorter distance win. Deterministic.
+ */
+final class Placement {
+
+  private static final double[] DISTANCES = {7, 14, 24, 38};
+  private static final double OUTSIDE = 1000;
+  private static final double ON_LABEL = 400;
+  private static final double ON_LINE = 12;
+  private static final double ON_DOT = 4;
+  private static final double STEP = 3;
+  private static final double ASCENT = 0.76;
+  private static final double HEIGHT = 1.0;
+
+  /** Where the mapping from units to pixels comes from. */
+  interface Screen {
+    /** The pixel column of an x. */
+    double x(double value);
+
+    /** The pixel row of a y. */
+    double y(double value);
+  }
+
+  /** A label in its place: the left end of its baseline. */
+  record Placed(Label label, double x, double baseline) {}
+
+  private final Rectangle2D plot;
+  private final List<double[]> onLines = new ArrayList<>();
+  private final List<double[]> onDots = new ArrayList<>();
+  private final List<Rectangle2D> taken = new ArrayList<>();
+
+  /** Within the plot's pixels. */
+  Placement(Rectangle2D plot) {
+    this.plot = plot;
+  }
+
+  /** A line that labels should not cover. */
+  void avoidLine(double[] xs, double[] ys) {
+    for (int i = 1; i < xs.length; i++) {
+      double length = Math.hypot(xs[i] - xs[i - 1], ys[i] - ys[i - 1]);
+      if (Double.isNaN(length)) {
+        continue;
+      }
+      int steps = Math.max(1, (int) Math.min(600, length / STEP));
+      for (int k = 0; k <= steps; k++) {
+        double t = (double) k / steps;
+        onLines.add(
+            new double[] {
+              xs[i - 1] + t * (xs[i] - xs[i - 1]), ys[i - 1] + t * (ys[i] - ys[i - 1])
+            });
+      }
+    }
+  }
+
+  /** A dot that labels should not cover. */
+  void avoidDot(double x, double y) {
+    onDots.add(new double[] {x, y});
+  }
+
+  /** Puts a label where it covers least. */
+  Placed place(Label label, Screen screen) {
+    double width = Letters.width(label.text(), Style.LETTERS, label.bold());
+    double least = Double.POSITIVE_INFINITY;
+    Rectangle2D best = new Rectangle2D.Double();
+    for (int p = 0; p < label.x().length; p++) {
+      double x = screen.x(label.x()[p]);
+      double y = screen.y(label.y()[p]);
+      for (int d = 0; d < DISTANCES.length; d++) {
+        for (int s = 0; s < label.sides().size(); s++) {
+          Rectangle2D box = box(x, y, width, label.sides().get(s), DISTANCES[d]);
+          double cost = cost(box) + 0.5 * p + 1.5 * s + 4 * d;
+          if (cost < least) {
+            least = cost;
+            best = box;
+          }
+        }
+      }
+    }
+    taken.add(best);
+    return new Placed(label, best.getX(), best.getY() + ASCENT * Style.LETTERS);
+  }
+
+  private static Rectangle2D box(double x, double y, double width, Side side, double distance) {
+    double height = HEIGHT * Style.LETTERS;
+    double diagonal = side.right() != 0 && side.down() != 0 ? 0.7 : 1;
+    double dx = diagonal * distance * side.right();
+    double dy = diagonal * distance * side.down();
+    double left = side.right() > 0 ? x : side.right() < 0 ? x - width : x - width / 2;
+    double top = side.down() > 0 ? y : side.down() < 0 ? y - height : y - height / 2;
+    return new Rectangle2D.Double(left + dx, top + dy, width, height);
+  }
+
+  private double cost(Rectangle2D box) {
+    double cost = 0;
+    if (!plot.contains(box)) {
+      Rectangle2D inside = plot.createIntersection(box);
+      double kept =
+          inside.isEmpty()
+              ? 0
+              : inside.getWidth() * inside.getHeight() / (box.getWidth() * box.getHeight());
+      cost += OUTSIDE * (1.5 - kept);
+    }
+    for (Rectangle2D other : taken) {
+      if (grown(other, 3).intersects(box)) {
+        cost += ON_LABEL;
+      }
+    }
+    return cost + ON_LINE * inside(onLines, grown(box, 2)) + ON_DOT * inside(onDots, grown(box, 3));
+  }
+
+  private static int inside(List<double[]> points, Rectangle2D box) {
+    int count = 0;
+    for (double[] p : points) {
+      if (p[0] >= box.getMinX()
+          && p[0] <= box.getMaxX()
+          && p[1] >= box.getMinY()
+          && p[1] <= box.getMaxY()) {
+        count++;
+      }
+    }
+    return count;
+  }
+
+  private static Rectangle2D grown(Rectangle2D box, double by) {
+    return new Rectangle2D.Double(
+        box.getX() - by, box.getY() - by, box.getWidth() + 2 * by, box.getHeight() + 2 * by);
+  }
+}
