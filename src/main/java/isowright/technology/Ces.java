@@ -80,6 +80,11 @@ public final class Ces implements Technology {
     }
 
     @Override
+    public LinearForm limit() {
+      return CobbDouglas.FORM;
+    }
+
+    @Override
     public double[] grid() {
       throw new IllegalStateException();
     }
