@@ -1,0 +1,271 @@
+package isowright.study;
+
+import isowright.estimation.Specification.PlantEffects;
+import isowright.estimation.Specification.StandardErrors;
+import isowright.estimation.Specification.Time;
+import isowright.study.Study.Estimation;
+import isowright.study.Study.Filing;
+import isowright.study.Study.Given;
+import isowright.study.Study.Productivity;
+import isowright.study.Study.Questions;
+import isowright.technology.Form;
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.function.Function;
+
+/**
+ * Reads a whole study from the root of its YAML: the top level and what is small enough to be read
+ * here; records, given technologies and least-cost questions have readers of their own.
+ */
+final class StudyBinder {
+
+  private static final double USUAL_CONFIDENCE = 0.95;
+
+  private static final List<String> KEYS =
+      List.of(
+          "title",
+          "records",
+          "output",
+          "inputs",
+          "money",
+          "controls",
+          "technologies",
+          "given",
+          "estimation",
+          "questions",
+          "least-cost",
+          "filing");
+  private static final List<String> LATER =
+      List.of("matrix", "expect", "decisions", "capital", "owner", "costs");
+
+  private static final List<String> ESTIMATION_KEYS =
+      List.of("plant-effects", "time", "scaling", "standard-errors", "confidence");
+  private static final List<String> ESTIMATION_LATER =
+      List.of(
+          "resampling",
+          "zeros",
+          "restrict",
+          "regularity",
+          "nests",
+          "instruments",
+          "proxy",
+          "frontier");
+  private static final List<String> PLANT_EFFECTS_LATER =
+      List.of("random", "between", "differences", "mundlak");
+  private static final List<String> TIME_LATER =
+      List.of("quadratic-trend", "biased-trend", "two-way");
+  private static final List<String> STANDARD_ERRORS_LATER =
+      List.of("clustered-two-way", "newey-west", "driscoll-kraay");
+
+  private final Path file;
+  private final String sha256;
+
+  StudyBinder(Path file, String sha256) {
+    this.file = file;
+    this.sha256 = sha256;
+  }
+
+  /** The study; whether it is free of mistakes is for the caller to see. */
+  Optional<Study> bind(YamlSection root) {
+    root.allow("a study file", KEYS, LATER);
+    Optional<String> title =
+        root.need("title", "the title of the report, such as `title: Glassworks, 2024`")
+            .flatMap(YamlValue::text);
+    Optional<String> filedCost = filedCostColumn(root);
+    Declared declared = new RecordsBinder(file, root).bind(filedCost);
+    needRecordsOrGiven(root, declared);
+    GivenBinder givenBinder = new GivenBinder(root, declared.inputs());
+    List<Given> given = givenBinder.bind();
+    if (declared.inputs().isEmpty()) {
+      declared = declared.withInputs(givenBinder.inputs());
+    }
+    List<String> fitted = technologies(root, declared);
+    List<String> names = new ArrayList<>(fitted);
+    names.addAll(givenBinder.names());
+    Estimation estimation = estimation(root.section("estimation"), declared);
+    Questions questions = questions(root.section("questions"));
+    var leastCost = new PlanBinder(declared, names).bind(root);
+    Optional<Filing> filing = filing(root, declared);
+    return Optional.of(
+        new Study(
+            file,
+            sha256,
+            title.orElse(""),
+            declared.records(),
+            declared.money(),
+            declared.outputUnit(),
+            declared.inputs(),
+            declared.units(),
+            fitted,
+            given,
+            estimation,
+            questions,
+            leastCost,
+            filing));
+  }
+
+  private static void needRecordsOrGiven(YamlSection root, Declared declared) {
+    if (!declared.present() && !root.has("given")) {
+      root.lacks(
+          "records",
+          "name the records file (`records: {file: plants.csv}`), or technologies taken as known"
+              + " (`given`)");
+    }
+  }
+
+  private static List<String> technologies(YamlSection root, Declared declared) {
+    Optional<YamlValue> value = root.get("technologies");
+    if (value.isEmpty()) {
+      if (declared.present() && !root.has("given")) {
+        root.lacks(
+            "technologies",
+            "the forms to be fitted, such as `technologies: ["
+                + String.join(", ", Form.names())
+                + "]`");
+      }
+      return List.of();
+    }
+    List<String> fitted = new ArrayList<>();
+    for (YamlValue item : value.get().list().orElse(List.of())) {
+      Optional<String> word = item.word(Form.names(), List.of());
+      if (word.isPresent() && fitted.contains(word.get())) {
+        item.refuse("`" + word.get() + "` stands twice in this list; once is enough");
+      } else {
+        word.ifPresent(fitted::add);
+      }
+    }
+    if (value.get().isList()
+        && value.get().list().orElse(List.of()).isEmpty()
+        && !root.has("given")) {
+      root.refuse("technologies", "the list is empty; allowed: " + String.join(", ", Form.names()));
+    }
+    if (!fitted.isEmpty() && !declared.present()) {
+      root.refuse(
+          "technologies",
+          "technologies are fitted to records, but there is no `records`; add it or take this out");
+    }
+    return fitted;
+  }
+
+  private static Estimation estimation(Optional<YamlSection> written, Declared declared) {
+    if (written.isEmpty()) {
+      return new Estimation(PlantEffects.NONE, Time.NONE, true, Optional.empty(), USUAL_CONFIDENCE);
+    }
+    YamlSection section = written.get();
+    section.allow("`estimation`", ESTIMATION_KEYS, ESTIMATION_LATER);
+    PlantEffects effects =
+        choice(
+                section,
+                "plant-effects",
+                PlantEffects.values(),
+                PlantEffects::word,
+                PLANT_EFFECTS_LATER)
+            .orElse(PlantEffects.NONE);
+    Time time = choice(section, "time", Time.values(), Time::word, TIME_LATER).orElse(Time.NONE);
+    Optional<StandardErrors> errors =
+        choice(
+            section,
+            "standard-errors",
+            StandardErrors.values(),
+            StandardErrors::word,
+            STANDARD_ERRORS_LATER);
+    boolean scaled =
+        section
+            .get("scaling")
+            .flatMap(value -> value.word(List.of("geometric-mean", "none"), List.of()))
+            .map(word -> word.equals("geometric-mean"))
+            .orElse(true);
+    if (effects == PlantEffects.WITHIN && !declared.plant()) {
+      section.refuse("plant-effects", "`within` needs plants, but `records.plant` names no column");
+    }
+    if (time != Time.NONE && !declared.period()) {
+      section.refuse(
+          "time", "`" + time.word() + "` needs periods, but `records.period` names no column");
+    }
+    if (errors.equals(Optional.of(StandardErrors.CLUSTERED)) && !declared.plant()) {
+      section.refuse(
+          "standard-errors", "`clustered` needs plants, but `records.plant` names no column");
+    }
+    return new Estimation(effects, time, scaled, errors, confidence(section));
+  }
+
+  private static double confidence(YamlSection section) {
+    Optional<YamlValue> value = section.get("confidence");
+    if (value.isEmpty()) {
+      return USUAL_CONFIDENCE;
+    }
+    OptionalDouble number = value.get().number();
+    if (number.isPresent() && !(number.getAsDouble() > 0 && number.getAsDouble() < 1)) {
+      double percent = number.getAsDouble();
+      String remedy = percent > 1 && percent < 100 ? "; was " + percent / 100 + " meant?" : "";
+      value.get().refuse("expects a number between 0 and 1, found " + value.get().found() + remedy);
+    }
+    return number.orElse(USUAL_CONFIDENCE);
+  }
+
+  private static <T> Optional<T> choice(
+      YamlSection section, String key, T[] values, Function<T, String> word, List<String> later) {
+    List<String> words = Arrays.stream(values).map(word).toList();
+    return section
+        .get(key)
+        .flatMap(value -> value.word(words, later))
+        .map(written -> values[words.indexOf(written)]);
+  }
+
+  private static Questions questions(Optional<YamlSection> written) {
+    written.ifPresent(
+        section ->
+            section.allow("`questions`", List.of("returns-to-scale", "substitution"), List.of()));
+    return new Questions(tested(written, "returns-to-scale"), tested(written, "substitution"));
+  }
+
+  private static double tested(Optional<YamlSection> questions, String key) {
+    return questions
+        .flatMap(section -> section.get(key))
+        .map(value -> value.positive().orElse(1))
+        .orElse(1.0);
+  }
+
+  /** The column of filed cost, which is one of the roles of the records' columns. */
+  private static Optional<String> filedCostColumn(YamlSection root) {
+    return root.get("filing")
+        .filter(YamlValue::isMapping)
+        .flatMap(YamlValue::section)
+        .flatMap(section -> section.text("cost"));
+  }
+
+  private static Optional<Filing> filing(YamlSection root, Declared declared) {
+    Optional<YamlSection> written = root.section("filing");
+    if (written.isEmpty()) {
+      return Optional.empty();
+    }
+    YamlSection section = written.get();
+    section.allow("`filing`", List.of("cost", "periods", "against"), List.of("allowance"));
+    if (!declared.present()) {
+      root.refuse("filing", "filed costs stand in records, but there is no `records`");
+    } else if (!declared.unpriced().isEmpty()) {
+      root.refuse(
+          "filing",
+          "filed costs are held against least cost at the prices paid, but there is neither price"
+              + " nor spending of "
+              + String.join(", ", declared.unpriced())
+              + "; name a column for each");
+    }
+    if (section.has("periods") && declared.present() && !declared.period()) {
+      section.refuse("periods", "periods are named, but `records.period` names no column");
+    }
+    Optional<List<String>> span = RecordsBinder.periods(section);
+    Productivity against =
+        section
+            .get("against")
+            .map(value -> ProductivityWords.read(value, false))
+            .orElse(Productivity.TYPICAL);
+    return Optional.of(
+        new Filing(
+            section.text("cost"), span.map(s -> s.get(0)), span.map(s -> s.get(1)), against));
+  }
+}
