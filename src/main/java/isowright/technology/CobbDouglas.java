@@ -18,8 +18,7 @@ public final class CobbDouglas implements Technology {
   /** How the form presents itself to an estimator. */
   public static final LinearForm FORM = new Description();
 
-  private final List<String> inputs;
-  private final double[] base;
+  private final InputScale scaling;
   private final double constant;
   private final double[] coefficients;
 
@@ -29,9 +28,7 @@ public final class CobbDouglas implements Technology {
    * @param coefficients β, shape n
    */
   public static CobbDouglas of(List<String> inputs, double constant, double... coefficients) {
-    double[] ones = new double[inputs.size()];
-    Arrays.fill(ones, 1);
-    return new CobbDouglas(inputs, ones, constant, coefficients);
+    return new CobbDouglas(InputScale.ownUnits(inputs), constant, coefficients);
   }
 
   /**
@@ -41,13 +38,14 @@ public final class CobbDouglas implements Technology {
    * @param coefficients β, shape n
    */
   public CobbDouglas(List<String> inputs, double[] base, double constant, double[] coefficients) {
-    this.inputs = List.copyOf(inputs);
-    this.base = base.clone();
+    this(new InputScale(inputs, base), constant, coefficients);
+  }
+
+  private CobbDouglas(InputScale scaling, double constant, double[] coefficients) {
+    scaling.require(coefficients, scaling.size(), "coefficients");
+    this.scaling = scaling;
     this.constant = constant;
     this.coefficients = coefficients.clone();
-    if (base.length != inputs.size() || coefficients.length != inputs.size()) {
-      throw new IllegalArgumentException("inputs, base and coefficients differ in length");
-    }
   }
 
   /** The output elasticities β, shape n. */
@@ -62,18 +60,18 @@ public final class CobbDouglas implements Technology {
 
   @Override
   public List<String> inputs() {
-    return inputs;
+    return scaling.names();
   }
 
   @Override
   public double[] base() {
-    return base.clone();
+    return scaling.base();
   }
 
   @Override
   public List<String> parameterNames() {
     List<String> names = new ArrayList<>(List.of("constant"));
-    names.addAll(inputs);
+    names.addAll(scaling.names());
     return List.copyOf(names);
   }
 
@@ -87,20 +85,22 @@ public final class CobbDouglas implements Technology {
 
   @Override
   public CobbDouglas withParameters(double[] parameters) {
+    scaling.require(parameters, 1 + coefficients.length, "parameters");
     return new CobbDouglas(
-        inputs, base, parameters[0], Arrays.copyOfRange(parameters, 1, parameters.length));
+        scaling, parameters[0], Arrays.copyOfRange(parameters, 1, parameters.length));
   }
 
   @Override
   public CobbDouglas shifted(double logShift) {
-    return new CobbDouglas(inputs, base, constant + logShift, coefficients);
+    return new CobbDouglas(scaling, constant + logShift, coefficients);
   }
 
   @Override
   public double logOutput(double[] logInputs) {
+    double[] logBase = scaling.logBase();
     double sum = constant;
     for (int i = 0; i < coefficients.length; i++) {
-      sum += coefficients[i] * (logInputs[i] - Math.log(base[i]));
+      sum += coefficients[i] * (logInputs[i] - logBase[i]);
     }
     return sum;
   }
@@ -119,9 +119,10 @@ public final class CobbDouglas implements Technology {
 
   @Override
   public void parameterGradient(double[] logInputs, double[] into) {
+    double[] logBase = scaling.logBase();
     into[0] = 1;
     for (int i = 0; i < coefficients.length; i++) {
-      into[i + 1] = logInputs[i] - Math.log(base[i]);
+      into[i + 1] = logInputs[i] - logBase[i];
     }
   }
 

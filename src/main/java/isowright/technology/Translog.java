@@ -20,9 +20,7 @@ public final class Translog implements Technology {
   /** How the form presents itself to an estimator. */
   public static final LinearForm FORM = new Description();
 
-  private final List<String> inputs;
-  private final double[] base;
-  private final double[] logBase;
+  private final InputScale scaling;
   private final double constant;
 
   /** β, then β_ij for i ≤ j. */
@@ -35,13 +33,13 @@ public final class Translog implements Technology {
    * @param coefficients β (n), then β_ij for i ≤ j row by row (n(n + 1)/2)
    */
   public Translog(List<String> inputs, double[] base, double constant, double[] coefficients) {
-    int n = inputs.size();
-    if (base.length != n || coefficients.length != n + n * (n + 1) / 2) {
-      throw new IllegalArgumentException("inputs, base and coefficients do not fit");
-    }
-    this.inputs = List.copyOf(inputs);
-    this.base = base.clone();
-    this.logBase = Arrays.stream(base).map(Math::log).toArray();
+    this(new InputScale(inputs, base), constant, coefficients);
+  }
+
+  private Translog(InputScale scaling, double constant, double[] coefficients) {
+    int n = scaling.size();
+    scaling.require(coefficients, n + n * (n + 1) / 2, "coefficients");
+    this.scaling = scaling;
     this.constant = constant;
     this.coefficients = coefficients.clone();
   }
@@ -60,18 +58,18 @@ public final class Translog implements Technology {
 
   @Override
   public List<String> inputs() {
-    return inputs;
+    return scaling.names();
   }
 
   @Override
   public double[] base() {
-    return base.clone();
+    return scaling.base();
   }
 
   @Override
   public List<String> parameterNames() {
     List<String> names = new ArrayList<>(List.of("constant"));
-    names.addAll(FORM.coefficientNames(inputs));
+    names.addAll(FORM.coefficientNames(scaling.names()));
     return List.copyOf(names);
   }
 
@@ -85,17 +83,19 @@ public final class Translog implements Technology {
 
   @Override
   public Translog withParameters(double[] parameters) {
+    scaling.require(parameters, 1 + coefficients.length, "parameters");
     return new Translog(
-        inputs, base, parameters[0], Arrays.copyOfRange(parameters, 1, parameters.length));
+        scaling, parameters[0], Arrays.copyOfRange(parameters, 1, parameters.length));
   }
 
   @Override
   public Translog shifted(double logShift) {
-    return new Translog(inputs, base, constant + logShift, coefficients);
+    return new Translog(scaling, constant + logShift, coefficients);
   }
 
   @Override
   public double logOutput(double[] logInputs) {
+    double[] logBase = scaling.logBase();
     int n = logBase.length;
     double sum = constant;
     int k = n;
@@ -112,6 +112,7 @@ public final class Translog implements Technology {
 
   @Override
   public void logGradient(double[] logInputs, double[] into) {
+    double[] logBase = scaling.logBase();
     int n = logBase.length;
     System.arraycopy(coefficients, 0, into, 0, n);
     int k = n;
@@ -128,7 +129,7 @@ public final class Translog implements Technology {
 
   @Override
   public void logHessian(double[] logInputs, double[][] into) {
-    int n = logBase.length;
+    int n = scaling.size();
     int k = n;
     for (int i = 0; i < n; i++) {
       for (int j = i; j < n; j++) {
@@ -141,6 +142,7 @@ public final class Translog implements Technology {
 
   @Override
   public void parameterGradient(double[] logInputs, double[] into) {
+    double[] logBase = scaling.logBase();
     int n = logBase.length;
     into[0] = 1;
     int k = n + 1;
