@@ -30,6 +30,23 @@ public interface Design {
   void fill(int from, int to, double[][] into);
 
   /**
+   * Writes the same rows as {@link #fill(int, int, double[][])} and says how large they were before
+   * anything was removed from them: what is left of a column can only be called zero against that.
+   *
+   * <p>A design that removes something from another one (group means, say), or that wraps such a
+   * design, overrides this; for all others nothing is removed and the default is right.
+   *
+   * @param squares K + 1 sums, one a column; the sum of squares of the column over these rows
+   *     before removal is added to it
+   */
+  default void fill(int from, int to, double[][] into, double[] squares) {
+    fill(from, to, into);
+    for (int k = 0; k < squares.length; k++) {
+      squares[k] += OrthogonalDecomposition.sumOfSquares(into[k], 0, to - from);
+    }
+  }
+
+  /**
    * How many parameters were removed from the rows beforehand (group means, say); none by default.
    */
   default int absorbed() {
