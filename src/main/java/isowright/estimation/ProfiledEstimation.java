@@ -78,7 +78,7 @@ final class ProfiledEstimation {
     if (best.isEmpty() || best.get().ssr() > least * (1 + SAME)) {
       return boundary(search, profile, limit);
     }
-    return solved(search, profile, best.get());
+    return solved(search, profile, best.get(), limit.totalSumOfSquares());
   }
 
   double ssrAt(double curvature) {
@@ -218,7 +218,10 @@ final class ProfiledEstimation {
   }
 
   private Fit solved(
-      ProfileSearch search, List<ProfileSearch.Held> profile, NonlinearFit best) {
+      ProfileSearch search,
+      List<ProfileSearch.Held> profile,
+      NonlinearFit best,
+      double totalSumOfSquares) {
     ProfiledModel model = search.free();
     double[] all = best.parameters();
     LinearFit linear = best.linearisation();
@@ -255,7 +258,7 @@ final class ProfiledEstimation {
             withCircumstances(technology, all),
             reported,
             covariance,
-            FitStatistics.of(linear),
+            FitStatistics.of(linear, totalSumOfSquares),
             design,
             linear,
             LeastSquares.residuals(design, linear),

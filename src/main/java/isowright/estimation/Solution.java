@@ -15,7 +15,7 @@ import java.util.List;
  * @param parameters the reported parameters, shape P
  * @param covariance their covariance, P × P
  * @param covarianceSource the estimator, its factor and degrees of freedom
- * @param statistics sums of squares and likelihood
+ * @param statistics how well the rows are described
  * @param design the regression at the estimate (linearised where the form is not linear)
  * @param linear its decomposition
  * @param residuals residuals in ln Q, by row of the panel

@@ -83,7 +83,7 @@ public final class Hypotheses {
     if (!(fit.specification().form() instanceof ProfiledForm form) || fit.profile().isEmpty()) {
       return Optional.empty();
     }
-    double free = numbers.statistics().ssr();
+    double free = numbers.linear().ssr();
     double held = Estimation.ssrAt(fit, form.curvature(substitution));
     double scaling = fit.profile().get().scaling();
     double ratio = numbers.residuals().length * Math.log(held / free) / scaling;
@@ -135,10 +135,10 @@ public final class Hypotheses {
     if (!pooled.state().usable()) {
       return Optional.empty();
     }
-    double free = numbers.statistics().ssr();
-    double held = pooled.numbers().statistics().ssr();
+    double free = numbers.linear().ssr();
+    double held = pooled.numbers().linear().ssr();
     double restrictions = fit.panel().plants().size() - 1;
-    double degrees = numbers.statistics().degreesOfFreedom();
+    double degrees = numbers.linear().residualDegreesOfFreedom();
     double f = (held - free) / restrictions / (free / degrees);
     return Optional.of(
         verdict(

@@ -30,7 +30,7 @@ final class ElasticityFindings {
   }
 
   Map<String, Figure> output() {
-    List<Figure> figures = figures(t -> Elasticities.output(t, mean));
+    List<Figure> figures = figures(t -> Elasticities.at(t, mean).output());
     Map<String, Figure> named = new LinkedHashMap<>();
     for (int i = 0; i < inputs.size(); i++) {
       named.put(inputs.get(i), figures.get(i));
@@ -39,7 +39,7 @@ final class ElasticityFindings {
   }
 
   Figure scale() {
-    return figures(t -> new double[] {Elasticities.scale(t, mean)}).get(0);
+    return figures(t -> new double[] {Elasticities.at(t, mean).scale()}).get(0);
   }
 
   /**
@@ -48,9 +48,9 @@ final class ElasticityFindings {
    */
   List<Pair> substitution() {
     int n = inputs.size();
-    List<Figure> hicks = figures(t -> flat(Elasticities.hicks(t, mean)));
-    List<Figure> allen = figures(t -> flat(Elasticities.allen(t, mean)));
-    List<Figure> morishima = figures(t -> flat(Elasticities.morishima(t, mean)));
+    List<Figure> hicks = figures(t -> hicks(Elasticities.at(t, mean)));
+    List<Figure> allen = figures(t -> flat(Elasticities.at(t, mean).allen()));
+    List<Figure> morishima = figures(t -> flat(Elasticities.at(t, mean).morishima()));
     List<Pair> pairs = new ArrayList<>();
     for (int i = 0; i < n; i++) {
       for (int j = i + 1; j < n; j++) {
@@ -75,7 +75,7 @@ final class ElasticityFindings {
   /** ε_ij: what the quantity of i does, in percent, when the price of j rises by one percent. */
   List<Pair> demand() {
     int n = inputs.size();
-    List<Figure> demand = figures(t -> flat(Elasticities.demand(t, mean)));
+    List<Figure> demand = figures(t -> flat(Elasticities.at(t, mean).demand()));
     List<Pair> pairs = new ArrayList<>();
     for (int i = 0; i < n; i++) {
       for (int j = 0; j < n; j++) {
@@ -104,6 +104,17 @@ final class ElasticityFindings {
     return delta.estimates(functions, DeltaMethod.Scale.LINEAR).stream()
         .map(FitStage::figure)
         .toList();
+  }
+
+  private double[] hicks(Elasticities at) {
+    int n = inputs.size();
+    double[] flat = new double[n * n];
+    for (int i = 0; i < n; i++) {
+      for (int j = i + 1; j < n; j++) {
+        flat[i * n + j] = at.hicks(i, j);
+      }
+    }
+    return flat;
   }
 
   static double[] flat(double[][] matrix) {

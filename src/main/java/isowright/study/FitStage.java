@@ -123,13 +123,13 @@ final class FitStage {
         numbers.covariance(),
         Optional.of(
             new FitFindings.Summary(
-                statistics.ssr(),
+                numbers.linear().ssr(),
                 statistics.rSquared(),
                 statistics.residualStandardError(),
                 statistics.logLikelihood(),
                 statistics.aic(),
                 statistics.bic(),
-                statistics.degreesOfFreedom())),
+                numbers.linear().residualDegreesOfFreedom())),
         elasticities.output(),
         Optional.of(elasticities.scale()),
         elasticities.substitution(),
@@ -269,14 +269,14 @@ final class FitStage {
                     panel.plants().get(panel.plantOf(row.row())),
                     panel.periods().get(panel.rowPeriods().get(row.row())),
                     row.leverage(),
-                    row.cook()))
+                    row.cooksDistance()))
         .toList();
   }
 
   private List<Said> remarks(Fit fit, FitFindings.Regular regular) {
     List<Said> remarks = new ArrayList<>();
     fit.reasons().forEach(reason -> remarks.add(Said.of("warning", fit.state().word(), reason)));
-    int clusters = fit.numbers().covarianceSource().clusters();
+    int clusters = fit.numbers().covarianceSource().clusters().orElse(0);
     boolean clustered =
         fit.specification().standardErrors() == Specification.StandardErrors.CLUSTERED;
     if (clustered && clusters < FEW_CLUSTERS) {

@@ -20,7 +20,8 @@ final class GivenStage {
     Technology technology = given.technology();
     List<String> inputs = technology.inputs();
     double[] at = Arrays.stream(technology.base()).map(Math::log).toArray();
-    double[] output = Elasticities.output(technology, at);
+    Elasticities elasticity = Elasticities.atBase(technology);
+    double[] output = elasticity.output();
     Map<String, Double> elasticities = new LinkedHashMap<>();
     for (int i = 0; i < inputs.size(); i++) {
       elasticities.put(inputs.get(i), output[i]);
@@ -29,12 +30,11 @@ final class GivenStage {
     for (int k = 0; k < technology.parameters().length; k++) {
       parameters.put(technology.parameterNames().get(k), technology.parameters()[k]);
     }
-    double[][] hicks = Elasticities.hicks(technology, at);
     List<Pair> pairs = new ArrayList<>();
     for (int i = 0; i < inputs.size(); i++) {
       for (int j = i + 1; j < inputs.size(); j++) {
         pairs.add(
-            new Pair(inputs.get(i), inputs.get(j), "hicks", Figure.exact(hicks[i][j])));
+            new Pair(inputs.get(i), inputs.get(j), "hicks", Figure.exact(elasticity.hicks(i, j))));
       }
     }
     List<Said> remarks = new ArrayList<>();
@@ -60,7 +60,7 @@ final class GivenStage {
         technology.form(),
         parameters,
         elasticities,
-        Elasticities.scale(technology, at),
+        elasticity.scale(),
         pairs,
         remarks);
   }

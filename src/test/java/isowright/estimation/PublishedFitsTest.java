@@ -70,7 +70,7 @@ class PublishedFitsTest {
             "capital", new double[] {.375710, .085346}),
         SIX_DECIMALS);
     assertThat(fit.numbers().covariance()[1][2]).isCloseTo(-.0096162, within(0.5e-7));
-    assertThat(fit.numbers().statistics().ssr()).isCloseTo(.8516337, within(0.5e-7));
+    assertThat(fit.numbers().linear().ssr()).isCloseTo(.8516337, within(0.5e-7));
     assertThat(fit.numbers().statistics().rSquared()).isCloseTo(.943463, SIX_DECIMALS);
     assertThat(fit.numbers().statistics().residualStandardError())
         .isCloseTo(.188374, SIX_DECIMALS);
@@ -98,7 +98,7 @@ class PublishedFitsTest {
             "capital*capital", new double[] {.085295, .292609},
             "labour*capital", new double[] {.312387, .438927}),
         SIX_DECIMALS);
-    assertThat(fit.numbers().statistics().ssr()).isCloseTo(.6799272, within(0.5e-7));
+    assertThat(fit.numbers().linear().ssr()).isCloseTo(.6799272, within(0.5e-7));
     assertThat(fit.numbers().statistics().logLikelihood()).isCloseTo(11.39035, within(0.5e-5));
   }
 
@@ -133,7 +133,7 @@ class PublishedFitsTest {
     Fit fit =
         fit(PanelFixtures.cesPoints(), "ces", NONE, Specification.Time.NONE, true, CLASSICAL);
     assertThat(fit.state()).isEqualTo(Fit.State.FLAT);
-    assertThat(fit.numbers().statistics().ssr()).isCloseTo(1.761076, SIX_DECIMALS);
+    assertThat(fit.numbers().linear().ssr()).isCloseTo(1.761076, SIX_DECIMALS);
     assertThat(value(fit, "rho")).isCloseTo(3.0109, FOUR_DECIMALS);
     assertThat(value(fit, "scale")).isCloseTo(1.0126, FOUR_DECIMALS);
     assertThat(error(fit, "rho")).as("R: 2.323").isCloseTo(2.323, within(0.5e-3));
@@ -152,7 +152,7 @@ class PublishedFitsTest {
     for (boolean scaled : new boolean[] {true, false}) {
       Fit fit =
           fit(PanelFixtures.cesPoints(), "ces", NONE, Specification.Time.NONE, scaled, CLASSICAL);
-      assertThat(fit.numbers().statistics().ssr()).isCloseTo(1.761076, SIX_DECIMALS);
+      assertThat(fit.numbers().linear().ssr()).isCloseTo(1.761076, SIX_DECIMALS);
       assertThat(value(fit, "rho")).isCloseTo(3.0109, FOUR_DECIMALS);
     }
     Fit unscaled =
@@ -207,7 +207,7 @@ class PublishedFitsTest {
             "emp", new double[] {.593935, .013747},
             "control:unemp", new double[] {-.006733, .001416}),
         SIX_DECIMALS);
-    assertThat(fit.numbers().statistics().ssr()).isCloseTo(6.294154, SIX_DECIMALS);
+    assertThat(fit.numbers().linear().ssr()).isCloseTo(6.294154, SIX_DECIMALS);
     Fit clustered = fit(panel, "cobb-douglas", NONE, Specification.Time.NONE, false, CLUSTERED);
     double factor = 48.0 / 47 * 815 / 811;
     assertThat(error(clustered, "pcap") / Math.sqrt(factor))
@@ -228,7 +228,7 @@ class PublishedFitsTest {
             "emp", new double[] {.768159, .030092},
             "control:unemp", new double[] {-.005298, .000989}),
         SIX_DECIMALS);
-    assertThat(fit.numbers().statistics().ssr()).isCloseTo(1.111189, SIX_DECIMALS);
+    assertThat(fit.numbers().linear().ssr()).isCloseTo(1.111189, SIX_DECIMALS);
     Fit clustered = fit(panel, "cobb-douglas", WITHIN, Specification.Time.NONE, false, CLUSTERED);
     double factor = 48.0 / 47 * 815 / 812;
     assertThat(error(clustered, "pcap")).isCloseTo(.0611, FOUR_DECIMALS);

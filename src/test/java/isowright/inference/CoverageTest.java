@@ -81,7 +81,7 @@ class CoverageTest {
     DeltaMethod delta = DeltaMethod.of(typical, .95);
     double[] at = fit.meanLogInputs();
     Estimate scale =
-        delta.estimate(t -> Elasticities.scale(t, at), DeltaMethod.Scale.LINEAR);
+        delta.estimate(t -> Elasticities.at(t, at).scale(), DeltaMethod.Scale.LINEAR);
     List<Estimate> plan =
         delta.estimates(
             t -> {
