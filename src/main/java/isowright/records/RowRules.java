@@ -1,0 +1,223 @@
+package isowright.records;
+
+import isowright.records.Remark.Severity;
+import isowright.records.Row.Fault;
+import isowright.records.Row.Found;
+import isowright.records.SetAsideTally.Reason;
+import isowright.records.Slot.Kind;
+import java.util.List;
+import org.jspecify.annotations.Nullable;
+
+/**
+ * Decides what becomes of each row: kept, set aside with a reason, or an error.
+ *
+ * <p>In this order: a row outside {@link Keep} is set aside and its other cells are not judged (so
+ * that rows known to be wrong can be left out by the study file); a cell that is not what its
+ * column must hold is an error, and so is an output that is not positive; a row with a blank where
+ * every row needs a value, or with a quantity of an input that is not positive, is set aside; in
+ * the rows that remain a price, a deflator, a filed cost or a logged control that is not positive
+ * is an error.
+ */
+final class RowRules {
+
+  private final Place place;
+  private final Slots slots;
+  private final KeptRows keep;
+  private final TextCodes plants = new TextCodes();
+  private final RowStore store;
+  private final DeflatorByPeriod deflator;
+  private final Complaints complaints;
+  private final SetAsideTally setAside = new SetAsideTally();
+  private final Reason[] blank;
+  private final Reason[] notPositive;
+  private int rows;
+
+  RowRules(Place place, Slots slots, KeptRows keep) {
+    this.place = place;
+    this.slots = slots;
+    this.keep = keep;
+    this.store = new RowStore(slots);
+    this.deflator = new DeflatorByPeriod();
+    this.complaints = new Complaints();
+    this.blank = new Reason[slots.size()];
+    this.notPositive = new Reason[slots.size()];
+    for (int s = 0; s < slots.size(); s++) {
+      blank[s] = Reason.blank(slots.get(s));
+      notPositive[s] = Reason.quantityNotPositive(slots.get(s));
+    }
+  }
+
+  /** A row whose number of cells is not that of the headings. */
+  void ragged(Row row, int cells, int columns) {
+    rows++;
+    complaints.add(
+        "rows of another length",
+        row.number(),
+        () ->
+            new Remark(
+                Severity.ERROR,
+                "ragged-row",
+                "%s: found %s where the headings are %d. Put a cell that holds the delimiter (such as a decimal comma) in double quotes, or add the missing delimiters."
+                    .formatted(place.row(row.number()), Shown.count(cells, "cell"), columns),
+                List.of(row.number())));
+  }
+
+  /** A row with every cell typed. */
+  void endRow(Row row) {
+    rows++;
+    boolean periodKnown = slots.period().isEmpty() || row.present(slots.period().getAsInt());
+    boolean plantKnown = slots.plant().isEmpty() || row.present(slots.plant().getAsInt());
+    if (periodKnown) {
+      noteDeflator(row);
+    }
+    if (leftOut(row, periodKnown, plantKnown)) {
+      return;
+    }
+    if (!faults(row)) {
+      Reason reason = missing(row);
+      if (reason != null) {
+        setAside.add(reason, row.number());
+        return;
+      }
+      outOfRange(row);
+    }
+    if (periodKnown && plantKnown) {
+      // A wrong row is stored too, so that duplicates are found in the same reading.
+      store.add(row);
+    }
+  }
+
+  private void noteDeflator(Row row) {
+    if (slots.deflator().isPresent()) {
+      double value = row.value(slots.deflator().getAsInt());
+      if (value > 0) {
+        deflator.add(slots.period().isPresent() ? row.period() : Periods.NONE, value);
+      }
+    }
+  }
+
+  private boolean leftOut(Row row, boolean periodKnown, boolean plantKnown) {
+    if (slots.period().isPresent() && periodKnown && !keep.period(row.period())) {
+      setAside.add(Reason.PERIOD_NOT_KEPT, row.number());
+      return true;
+    }
+    if (slots.plant().isPresent() && plantKnown && !keep.plant(plants.text(row.plant()))) {
+      setAside.add(Reason.PLANT_NOT_KEPT, row.number());
+      return true;
+    }
+    return false;
+  }
+
+  private boolean faults(Row row) {
+    boolean any = false;
+    if (row.anyFault()) {
+      for (int s = 0; s < slots.size(); s++) {
+        Fault fault = row.fault(s);
+        if (fault != null) {
+          complain(row, s, fault);
+          any = true;
+        }
+      }
+    }
+    int output = slots.output();
+    if (row.present(output) && !(row.value(output) > 0)) {
+      complainOfValue(row, output);
+      any = true;
+    }
+    return any;
+  }
+
+  /** Why the row cannot be used though nothing in it is wrong. */
+  private @Nullable Reason missing(Row row) {
+    for (int s = 0; s < slots.size(); s++) {
+      if (row.blank(s) && slots.get(s).kind().neededInEveryRow()) {
+        return blank[s];
+      }
+    }
+    for (int s = 0; s < slots.size(); s++) {
+      if (slots.get(s).kind() == Kind.QUANTITY && !(row.value(s) > 0)) {
+        return notPositive[s];
+      }
+    }
+    return null;
+  }
+
+  private void outOfRange(Row row) {
+    for (int s = 0; s < slots.size(); s++) {
+      if (row.present(s) && !inRange(row, s)) {
+        complainOfValue(row, s);
+      }
+    }
+  }
+
+  private boolean inRange(Row row, int slot) {
+    return switch (slots.get(slot).kind()) {
+      case PRICE, DEFLATOR, FILED_COST, LOGGED_CONTROL -> row.value(slot) > 0;
+      case SPENDING -> row.value(slot) > 0 || (row.value(slot) == 0 && !slots.givesPrice(slot));
+      case PLANT, PERIOD, OUTPUT, QUANTITY, CONTROL -> true;
+    };
+  }
+
+  private void complainOfValue(Row row, int slot) {
+    complain(
+        row,
+        slot,
+        () -> new Found(Shown.value(row.value(slot)), CellFault.notPositive(slots.get(slot))));
+  }
+
+  private void complain(Row row, int slot, Fault fault) {
+    Slot declared = slots.get(slot);
+    complaints.add(
+        declared.words(),
+        row.number(),
+        () -> {
+          Found found = fault.found();
+          return new Remark(
+              Severity.ERROR,
+              found.fault().code(),
+              "%s, %s: found \"%s\"; %s. %s"
+                  .formatted(
+                      place.row(row.number()),
+                      declared.words(),
+                      Shown.shortened(found.value()),
+                      found.fault().rule(),
+                      found.fault().remedy()),
+              List.of(row.number()));
+        });
+  }
+
+  /** The plants met so far; a plant is given its code as its cell is read. */
+  TextCodes plants() {
+    return plants;
+  }
+
+  /** Whether further faults are only counted, so that their text need not be kept. */
+  boolean full() {
+    return complaints.full();
+  }
+
+  /** The rows with any cell. */
+  int rows() {
+    return rows;
+  }
+
+  KeptRows kept() {
+    return keep;
+  }
+
+  RowStore store() {
+    return store;
+  }
+
+  DeflatorByPeriod deflator() {
+    return deflator;
+  }
+
+  Complaints complaints() {
+    return complaints;
+  }
+
+  SetAsideTally setAside() {
+    return setAside;
+  }
+}
