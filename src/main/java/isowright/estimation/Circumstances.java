@@ -7,11 +7,11 @@ import java.util.Arrays;
 import java.util.List;
 
 /**
- * What besides inputs moves output in a panel: controls, a trend, or a constant for each period. All
- * enter ln Q additively.
+ * What besides inputs moves output in a panel: controls, a trend, or a constant for each period.
+ * All enter ln Q additively.
  *
- * <p>The trend counts from the first period of the records: t = period − first period. Period effects
- * are measured against the first period.
+ * <p>The trend counts from the first period of the records: t = period − first period. Period
+ * effects are measured against the first period.
  */
 final class Circumstances {
 

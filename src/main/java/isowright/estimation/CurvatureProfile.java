@@ -4,11 +4,11 @@ import java.util.List;
 import java.util.Locale;
 
 /**
- * The profile of the sum of squares over a curvature parameter: for each value of it the least sum of
- * squares over all other parameters.
+ * The profile of the sum of squares over a curvature parameter: for each value of it the least sum
+ * of squares over all other parameters.
  *
- * <p>The interval of the elasticity of substitution holds the values with SSR ≤ SSR_min (1 + r
- * F(1, df)/df), the set that a likelihood-ratio test does not reject; r scales the test for a covariance
+ * <p>The interval of the elasticity of substitution holds the values with SSR ≤ SSR_min (1 + r F(1,
+ * df)/df), the set that a likelihood-ratio test does not reject; r scales the test for a covariance
  * other than the classical one (Kent 1982, <i>Biometrika</i> 69, 19–27).
  *
  * @param state where the optimum lies

@@ -37,8 +37,8 @@ public final class Estimation {
   }
 
   /**
-   * The least sum of squares of a profiled form with its curvature held at a value, all else as in the
-   * fit.
+   * The least sum of squares of a profiled form with its curvature held at a value, all else as in
+   * the fit.
    */
   public static double ssrAt(Fit fit, double curvature) {
     ProfiledForm form = (ProfiledForm) fit.specification().form();
@@ -61,8 +61,7 @@ public final class Estimation {
       double[] base,
       Fit.State state,
       List<String> reasons) {
-    return new Fit(
-        specification, panel, base, state, reasons, Optional.empty(), Optional.empty());
+    return new Fit(specification, panel, base, state, reasons, Optional.empty(), Optional.empty());
   }
 
   /** What stands in the way of a specification whatever the form. */

@@ -64,8 +64,8 @@ public record Fit(
   }
 
   /**
-   * The technology at a period for a productivity, controls at their means, with the covariance of its
-   * parameters. The constant takes up what period, controls and productivity add to ln Q.
+   * The technology at a period for a productivity, controls at their means, with the covariance of
+   * its parameters. The constant takes up what period, controls and productivity add to ln Q.
    *
    * @param period the index of the period in the panel
    */

@@ -4,8 +4,8 @@ import isowright.regression.Design;
 import isowright.regression.Groups;
 
 /**
- * Means over the groups of a design: of the response less what given coefficients explain, and, for any
- * weighting of the groups, of the regressors.
+ * Means over the groups of a design: of the response less what given coefficients explain, and, for
+ * any weighting of the groups, of the regressors.
  */
 final class GroupMeans {
 
@@ -76,7 +76,9 @@ final class GroupMeans {
     return sum;
   }
 
-  /** Σ_g weight_g² / rows of g: the variance of the weighted mean of independent unit-variance rows. */
+  /**
+   * Σ_g weight_g² / rows of g: the variance of the weighted mean of independent unit-variance rows.
+   */
   double unitVariance(double[] weights) {
     double sum = 0;
     for (int g = 0; g < means.length; g++) {

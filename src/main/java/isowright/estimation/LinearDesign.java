@@ -7,7 +7,9 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 
-/** The design of a form linear in its parameters: a constant (if any), the form, the circumstances. */
+/**
+ * The design of a form linear in its parameters: a constant (if any), the form, the circumstances.
+ */
 final class LinearDesign implements Design {
 
   private final PanelRows rows;

@@ -15,7 +15,9 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 
-/** Fits a form that is linear in its parameters: ordinary least squares, pooled or within plants. */
+/**
+ * Fits a form that is linear in its parameters: ordinary least squares, pooled or within plants.
+ */
 final class LinearEstimation {
 
   private final Panel panel;
@@ -24,8 +26,7 @@ final class LinearEstimation {
   private final LinearForm form;
   private final boolean within;
 
-  LinearEstimation(
-      Panel panel, Specification specification, double[] base, LinearForm form) {
+  LinearEstimation(Panel panel, Specification specification, double[] base, LinearForm form) {
     this.panel = panel;
     this.specification = specification;
     this.base = base;
@@ -36,8 +37,7 @@ final class LinearEstimation {
   Fit fit() {
     Circumstances circumstances = Circumstances.of(panel, specification.time());
     LinearDesign raw =
-        new LinearDesign(
-            PanelRows.of(panel, base), form, panel.inputs(), circumstances, !within);
+        new LinearDesign(PanelRows.of(panel, base), form, panel.inputs(), circumstances, !within);
     Design design = within ? Effects.within(raw) : raw;
     LinearFit fit = LeastSquares.fit(design);
     Optional<Fit> lacking = lacking(panel, specification, base, fit);
@@ -57,8 +57,7 @@ final class LinearEstimation {
               + (fit.absorbed() > 0 ? " (plant effects among them)" : "")
               + ": add records, or ask for a form with fewer parameters.";
       return Optional.of(
-          Estimation.without(
-              panel, specification, base, Fit.State.REFUSED, List.of(reason)));
+          Estimation.without(panel, specification, base, Fit.State.REFUSED, List.of(reason)));
     }
     if (!fit.fullRank()) {
       List<String> reasons = new ArrayList<>();
@@ -71,16 +70,13 @@ final class LinearEstimation {
                 + " records in which they move apart, or ask for a simpler form.");
       }
       return Optional.of(
-          Estimation.without(
-              panel, specification, base, Fit.State.RANK_DEFICIENT, reasons));
+          Estimation.without(panel, specification, base, Fit.State.RANK_DEFICIENT, reasons));
     }
     return Optional.empty();
   }
 
-  private Fit solved(
-      Circumstances circumstances, LinearDesign raw, Design design, LinearFit fit) {
-    Covariance covariance =
-        Covariance.estimate(design, fit, kind(specification.standardErrors()));
+  private Fit solved(Circumstances circumstances, LinearDesign raw, Design design, LinearFit fit) {
+    Covariance covariance = Covariance.estimate(design, fit, kind(specification.standardErrors()));
     int slopes = fit.columns().size() - (within ? 0 : 1);
     GroupMeans means = GroupMeans.of(raw, fit.coefficients());
     double[][] slopeCovariance = slopeBlock(covariance.matrix(), slopes);

@@ -5,8 +5,8 @@ import isowright.records.Panel;
 import isowright.regression.Groups;
 
 /**
- * The rows of a panel as an estimator sees them: logged inputs divided by a base, logged output, and
- * the plants as groups. Nothing is copied but the block at hand.
+ * The rows of a panel as an estimator sees them: logged inputs divided by a base, logged output,
+ * and the plants as groups. Nothing is copied but the block at hand.
  */
 final class PanelRows {
 

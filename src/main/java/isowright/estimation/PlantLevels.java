@@ -7,16 +7,17 @@ import java.util.stream.IntStream;
 /**
  * Plants' productivity and the constant that belongs to any of them.
  *
- * <p>The level of plant i is the mean over its rows of ln Q less what slopes, inputs and circumstances
- * explain: c_i = ȳ_i − h̄_i(θ). For weights ω over plants the constant is c_ω = Σ ω_i c_i, with
+ * <p>The level of plant i is the mean over its rows of ln Q less what slopes, inputs and
+ * circumstances explain: c_i = ȳ_i − h̄_i(θ). For weights ω over plants the constant is c_ω = Σ ω_i
+ * c_i, with
  *
  * <pre>
  *   cov(c_ω, θ) = −m_ω′ V,   var(c_ω) = m_ω′ V m_ω + s² Σ ω_i² / T_i,
  * </pre>
  *
  * m_ω the weighted means of the regressors (∂h/∂θ), V the covariance of the slopes, s² the residual
- * variance, T_i the rows of plant i. The levels are those of the plants in the records over the periods
- * recorded, not of a wider population of plants.
+ * variance, T_i the rows of plant i. The levels are those of the plants in the records over the
+ * periods recorded, not of a wider population of plants.
  */
 public final class PlantLevels {
 
@@ -46,7 +47,10 @@ public final class PlantLevels {
     this.toReported = toReported;
   }
 
-  /** The constant of the typical plant on the scale of the levels: 0 where the design has a constant. */
+  /**
+   * The constant of the typical plant on the scale of the levels: 0 where the design has a
+   * constant.
+   */
   double typical() {
     return means.weighted(means.byRows());
   }

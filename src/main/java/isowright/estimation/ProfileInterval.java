@@ -7,8 +7,8 @@ import java.util.List;
 import org.apache.commons.statistics.distribution.FDistribution;
 
 /**
- * The interval of the elasticity of substitution from the profile of the sum of squares: where SSR ≤
- * SSR_min (1 + r F(1, df)/df).
+ * The interval of the elasticity of substitution from the profile of the sum of squares: where SSR
+ * ≤ SSR_min (1 + r F(1, df)/df).
  */
 final class ProfileInterval {
 
@@ -98,10 +98,7 @@ final class ProfileInterval {
 
   /** Walks outward to the first grid point above the threshold and closes in on the crossing. */
   private double end(
-      ProfileSearch search,
-      ProfileSearch.Held top,
-      List<ProfileSearch.Held> outward,
-      double open) {
+      ProfileSearch search, ProfileSearch.Held top, List<ProfileSearch.Held> outward, double open) {
     ProfileSearch.Held inside = top;
     for (ProfileSearch.Held held : outward) {
       if (held.ssr() > threshold) {
@@ -113,8 +110,8 @@ final class ProfileInterval {
   }
 
   /**
-   * The crossing between a point inside and one outside, by false position in √(SSR − SSR_min), which is
-   * nearly straight along the curvature, with bisection as the safeguard.
+   * The crossing between a point inside and one outside, by false position in √(SSR − SSR_min),
+   * which is nearly straight along the curvature, with bisection as the safeguard.
    */
   private double crossing(
       ProfileSearch search, ProfileSearch.Held inside, ProfileSearch.Held outside) {

@@ -12,9 +12,9 @@ import java.util.OptionalDouble;
 /**
  * Walks a profiled form's sum of squares along its curvature on one set of rows.
  *
- * <p>A start near ρ = 0 can stop at the Cobb-Douglas value and look converged, so the curvature is held
- * at each point of a grid in turn, the rest is fitted there (from the neighbour's answer and from the
- * linear limit), and the curvature is freed from every point so found.
+ * <p>A start near ρ = 0 can stop at the Cobb-Douglas value and look converged, so the curvature is
+ * held at each point of a grid in turn, the rest is fitted there (from the neighbour's answer and
+ * from the linear limit), and the curvature is freed from every point so found.
  */
 final class ProfileSearch {
 
@@ -69,7 +69,9 @@ final class ProfileSearch {
     return second.ssr() < first.ssr() ? second : first;
   }
 
-  /** The profile over the form's grid, ascending, walked outward from the point nearest the limit. */
+  /**
+   * The profile over the form's grid, ascending, walked outward from the point nearest the limit.
+   */
   List<Held> walk() {
     double[] grid = form.grid();
     int middle = 0;
@@ -78,20 +80,26 @@ final class ProfileSearch {
         middle = g;
       }
     }
-    List<Held> profile = new ArrayList<>();
-    Held held = hold(grid[middle]);
-    profile.add(held);
-    for (int g = middle + 1; g < grid.length; g++) {
-      held = holdFromBoth(grid[g], held.parameters());
-      profile.add(held);
-    }
-    held = profile.get(0);
-    for (int g = middle - 1; g >= 0; g--) {
-      held = holdFromBoth(grid[g], held.parameters());
-      profile.add(held);
-    }
+    Held centre = hold(grid[middle]);
+    int first = middle;
+    List<List<Held>> wings =
+        List.of(-1, 1).parallelStream().map(step -> wing(grid, first, step, centre)).toList();
+    List<Held> profile = new ArrayList<>(wings.get(0));
+    profile.add(centre);
+    profile.addAll(wings.get(1));
     profile.sort(Comparator.comparingDouble(Held::curvature));
     return profile;
+  }
+
+  /** The points of the grid on one side, each started from its inner neighbour. */
+  private List<Held> wing(double[] grid, int middle, int step, Held centre) {
+    List<Held> wing = new ArrayList<>();
+    Held held = centre;
+    for (int g = middle + step; g >= 0 && g < grid.length; g += step) {
+      held = holdFromBoth(grid[g], held.parameters());
+      wing.add(held);
+    }
+    return wing;
   }
 
   /** Frees the curvature, starting from a profile point. */
@@ -101,8 +109,7 @@ final class ProfileSearch {
     double[] start = new double[held.parameters().length + 1];
     System.arraycopy(held.parameters(), 0, start, 0, place);
     start[place] = held.curvature();
-    System.arraycopy(
-        held.parameters(), place, start, place + 1, held.parameters().length - place);
+    System.arraycopy(held.parameters(), place, start, place + 1, held.parameters().length - place);
     return NonlinearLeastSquares.fit(model, start);
   }
 

@@ -12,13 +12,14 @@ import isowright.technology.ProfiledForm;
 import isowright.technology.Technology;
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
 
 /**
- * Fits a form with one curvature parameter: its sum of squares is walked along a grid of the curvature,
- * the curvature is freed from the points found, and the best admissible optimum is kept, if there is
- * one.
+ * Fits a form with one curvature parameter: its sum of squares is walked along a grid of the
+ * curvature, the curvature is freed from the points found, and the best admissible optimum is kept,
+ * if there is one.
  */
 final class ProfiledEstimation {
 
@@ -38,8 +39,7 @@ final class ProfiledEstimation {
   private final boolean within;
   private final Circumstances circumstances;
 
-  ProfiledEstimation(
-      Panel panel, Specification specification, double[] base, ProfiledForm form) {
+  ProfiledEstimation(Panel panel, Specification specification, double[] base, ProfiledForm form) {
     this.panel = panel;
     this.specification = specification;
     this.base = base;
@@ -71,8 +71,7 @@ final class ProfiledEstimation {
     ProfileSearch search = search(panel, start);
     ProfileSearch walker = large ? search(ThinnedPanel.of(panel, WALK_ROWS), start) : search;
     List<ProfileSearch.Held> walked = walker.walk();
-    List<ProfileSearch.Held> profile =
-        large ? repeatOnAllRows(search, walked) : walked;
+    List<ProfileSearch.Held> profile = large ? repeatOnAllRows(search, walked) : walked;
     Optional<NonlinearFit> best = freed(search, large ? minima(walked) : walked);
     double least = profile.stream().mapToDouble(ProfileSearch.Held::ssr).min().orElseThrow();
     if (best.isEmpty() || best.get().ssr() > least * (1 + SAME)) {
@@ -104,8 +103,7 @@ final class ProfiledEstimation {
       start[0] = b[0];
     }
     System.arraycopy(inner, 0, start, offset, inner.length);
-    System.arraycopy(
-        b, offset + formColumns, start, offset + inner.length, circumstances.count());
+    System.arraycopy(b, offset + formColumns, start, offset + inner.length, circumstances.count());
     return start;
   }
 
@@ -114,7 +112,9 @@ final class ProfiledEstimation {
         rows, base, form, Circumstances.of(rows, specification.time()), within, start);
   }
 
-  /** The walked profile, made again on all rows at a few points: both ends, the minima, and between. */
+  /**
+   * The walked profile, made again on all rows at a few points: both ends, the minima, and between.
+   */
   private static List<ProfileSearch.Held> repeatOnAllRows(
       ProfileSearch search, List<ProfileSearch.Held> walked) {
     List<ProfileSearch.Held> repeated = new ArrayList<>();
@@ -148,24 +148,20 @@ final class ProfiledEstimation {
     ProfiledModel model = search.free();
     double[] region = form.region();
     double[] grid = form.grid();
-    NonlinearFit best = null;
-    for (ProfileSearch.Held start : starts) {
-      NonlinearFit candidate = search.release(start);
-      double curvature = model.curvature(candidate.parameters());
-      boolean admissible =
-          candidate.converged()
-              && curvature > region[0]
-              && curvature <= grid[grid.length - 1]
-              && form.admissible(model.inner(candidate.parameters()));
-      if (admissible && (best == null || candidate.ssr() < best.ssr())) {
-        best = candidate;
-      }
-    }
-    return Optional.ofNullable(best);
+    return starts.parallelStream()
+        .map(search::release)
+        .filter(
+            candidate -> {
+              double curvature = model.curvature(candidate.parameters());
+              return candidate.converged()
+                  && curvature > region[0]
+                  && curvature <= grid[grid.length - 1]
+                  && form.admissible(model.inner(candidate.parameters()));
+            })
+        .min(Comparator.comparingDouble(NonlinearFit::ssr));
   }
 
-  private Fit boundary(
-      ProfileSearch search, List<ProfileSearch.Held> profile, LinearFit limit) {
+  private Fit boundary(ProfileSearch search, List<ProfileSearch.Held> profile, LinearFit limit) {
     ProfileSearch.Held lowest = profile.get(0);
     for (ProfileSearch.Held held : profile) {
       if (held.ssr() < lowest.ssr()) {
@@ -185,8 +181,7 @@ final class ProfiledEstimation {
             limit.residualDegreesOfFreedom() - 1,
             specification.confidence(),
             1);
-    CurvatureProfile described =
-        interval.profile(profile, lowest, CurvatureProfile.State.BOUNDARY);
+    CurvatureProfile described = interval.profile(profile, lowest, CurvatureProfile.State.BOUNDARY);
     if (!low && !high) {
       return new Fit(
           specification,
@@ -249,8 +244,7 @@ final class ProfiledEstimation {
         within
             ? levels.covariance(levels.weights(new Productivity.Typical()))
             : Matrices.sandwich(toReported, covariance.matrix());
-    Technology technology =
-        form.technology(panel.inputs(), base, constant, inner, curvature);
+    Technology technology = form.technology(panel.inputs(), base, constant, inner, curvature);
     Solution solution =
         new Solution(
             technology,
@@ -264,8 +258,7 @@ final class ProfiledEstimation {
             LeastSquares.residuals(design, linear),
             levels);
     int place = model.innerOffset() + inner.length;
-    double classical =
-        linear.residualVariance() * linear.inverseCrossProduct()[place][place];
+    double classical = linear.residualVariance() * linear.inverseCrossProduct()[place][place];
     double scaling = covariance.matrix()[place][place] / classical;
     ProfileSearch.Held top =
         new ProfileSearch.Held(curvature, search.withoutCurvature(all), best.ssr());
@@ -281,9 +274,7 @@ final class ProfiledEstimation {
     boolean flat = interval.openBelow() || interval.openAbove();
     CurvatureProfile described =
         interval.profile(
-            profile,
-            top,
-            flat ? CurvatureProfile.State.FLAT : CurvatureProfile.State.INTERIOR);
+            profile, top, flat ? CurvatureProfile.State.FLAT : CurvatureProfile.State.INTERIOR);
     return new Fit(
         specification,
         panel,

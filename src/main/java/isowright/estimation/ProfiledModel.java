@@ -119,8 +119,7 @@ final class ProfiledModel implements NonlinearModel {
       }
       derivatives[inner] = free ? into[offset + inner] : new double[size];
       double[] value = new double[size];
-      form.evaluate(
-          rows.logInputs(from, to), size, inner(all), curvature(all), value, derivatives);
+      form.evaluate(rows.logInputs(from, to), size, inner(all), curvature(all), value, derivatives);
       int rest = offset + inner + (free ? 1 : 0);
       circumstances.fill(from, to, into, rest);
       double[] residual = into[parameters.size()];

@@ -9,19 +9,20 @@ import java.util.function.ToDoubleFunction;
 import org.apache.commons.statistics.distribution.TDistribution;
 
 /**
- * How sure is a number computed from an estimated technology? For g(θ̂) with covariance V of θ̂: se² = ∇g′
- * V ∇g; the interval is g ± t se, or g exp(± t se/g) for a positive quantity, t the quantile of Student's
- * law at the fit's degrees of freedom.
+ * How sure is a number computed from an estimated technology? For g(θ̂) with covariance V of θ̂:
+ * se² = ∇g′ V ∇g; the interval is g ± t se, or g exp(± t se/g) for a positive quantity, t the
+ * quantile of Student's law at the fit's degrees of freedom.
  *
- * <p>The gradient is a fourth-order central difference in each parameter, with a step of a hundredth of
- * its standard error: small against the spread that matters, large against rounding.
+ * <p>The gradient is a fourth-order central difference in each parameter, with a step of a
+ * hundredth of its standard error: small against the spread that matters, large against rounding.
  *
- * <p>Assumption: g is nearly linear over a few standard errors. Where the function cannot be evaluated
- * beside the estimate (an irregular technology, say), the standard error is NaN and the interval with it.
+ * <p>Assumption: g is nearly linear over a few standard errors. Where the function cannot be
+ * evaluated beside the estimate (an irregular technology, say), the standard error is NaN and the
+ * interval with it.
  *
- * <p>Source: Oehlert, G. W. (1992), A note on the delta method, <i>American Statistician</i> 46, 27–29;
- * intervals on the log scale: common practice for positive quantities. Tested in {@code DeltaMethodTest}
- * and, for coverage, in {@code CoverageTest}.
+ * <p>Source: Oehlert, G. W. (1992), A note on the delta method, <i>American Statistician</i> 46,
+ * 27–29; intervals on the log scale: common practice for positive quantities. Tested in {@code
+ * DeltaMethodTest} and, for coverage, in {@code CoverageTest}.
  */
 public final class DeltaMethod {
 
@@ -45,8 +46,7 @@ public final class DeltaMethod {
     this.estimated = estimated;
     this.level = level;
     this.quantile =
-        TDistribution.of(estimated.degreesOfFreedom())
-            .inverseSurvivalProbability((1 - level) / 2);
+        TDistribution.of(estimated.degreesOfFreedom()).inverseSurvivalProbability((1 - level) / 2);
     double[][] v = estimated.covariance();
     this.steps = new double[v.length];
     for (int k = 0; k < steps.length; k++) {
@@ -116,8 +116,7 @@ public final class DeltaMethod {
       double[] back = functions.apply(moved(centre, k, -1));
       double[] farBack = functions.apply(moved(centre, k, -2));
       for (int f = 0; f < count; f++) {
-        gradients[f][k] =
-            (8 * (near[f] - back[f]) - (far[f] - farBack[f])) / (12 * steps[k]);
+        gradients[f][k] = (8 * (near[f] - back[f]) - (far[f] - farBack[f])) / (12 * steps[k]);
       }
     }
     return gradients;

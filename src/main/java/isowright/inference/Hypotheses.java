@@ -13,11 +13,13 @@ import java.util.Locale;
 import java.util.Optional;
 
 /**
- * The tests that belong to a fit: constant returns, unit elasticity of substitution, Cobb-Douglas within a
- * richer form, plant effects. Each states its null in words, its statistic and law, p, and a verdict.
+ * The tests that belong to a fit: constant returns, unit elasticity of substitution, Cobb-Douglas
+ * within a richer form, plant effects. Each states its null in words, its statistic and law, p, and
+ * a verdict.
  *
- * <p>Checked against Greene (2003), example 6.2 (F(3, 21) = 1.7678; constant returns F(1, 24) = .1158) and
- * Baltagi's table of the US states (plant effects F(47, 764) = 75.82) in {@code HypothesesTest}.
+ * <p>Checked against Greene (2003), example 6.2 (F(3, 21) = 1.7678; constant returns F(1, 24) =
+ * .1158) and Baltagi's table of the US states (plant effects F(47, 764) = 75.82) in {@code
+ * HypothesesTest}.
  */
 public final class Hypotheses {
 
@@ -117,7 +119,9 @@ public final class Hypotheses {
             new Law.F(places.length, degrees())));
   }
 
-  /** F from the sums of squares with and without plant effects; assumes independent, equal errors. */
+  /**
+   * F from the sums of squares with and without plant effects; assumes independent, equal errors.
+   */
   private Optional<Verdict> plantEffects() {
     Specification with = fit.specification();
     if (with.plantEffects() != PlantEffects.WITHIN) {
@@ -142,10 +146,7 @@ public final class Hypotheses {
     double f = (held - free) / restrictions / (free / degrees);
     return Optional.of(
         verdict(
-            "plant-effects",
-            "all plants share one constant",
-            f,
-            new Law.F(restrictions, degrees)));
+            "plant-effects", "all plants share one constant", f, new Law.F(restrictions, degrees)));
   }
 
   private double degrees() {
@@ -163,8 +164,7 @@ public final class Hypotheses {
     if (Double.isNaN(p)) {
       return "The test " + claim + " could not be made: the covariance is singular.";
     }
-    String chance =
-        p < 0.001 ? "p < 0.001" : String.format(Locale.ROOT, "p = %.3f", p);
+    String chance = p < 0.001 ? "p < 0.001" : String.format(Locale.ROOT, "p = %.3f", p);
     return p < Verdict.LEVEL
         ? "The records speak against the claim " + claim + " (" + chance + ")."
         : "The records do not speak against the claim "

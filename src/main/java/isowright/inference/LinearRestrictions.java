@@ -9,8 +9,8 @@ import org.apache.commons.math3.linear.SingularValueDecomposition;
  *
  * <pre>  F = (R b − r)′ (R V R′)^-1 (R b − r) / q, </pre>
  *
- * with q and the degrees of freedom of V. With the classical covariance it equals the F test from the sums
- * of squares with and without the restrictions.
+ * with q and the degrees of freedom of V. With the classical covariance it equals the F test from
+ * the sums of squares with and without the restrictions.
  *
  * <p>Source: Greene, W. H. (2003), <i>Econometric Analysis</i>, 5th ed., section 6.3, eq. 6-6.
  */
@@ -30,9 +30,7 @@ final class LinearRestrictions {
     }
     RealMatrix restriction = new Array2DRowRealMatrix(r, false);
     RealMatrix middle =
-        restriction
-            .multiply(new Array2DRowRealMatrix(v, false))
-            .multiply(restriction.transpose());
+        restriction.multiply(new Array2DRowRealMatrix(v, false)).multiply(restriction.transpose());
     SingularValueDecomposition decomposition = new SingularValueDecomposition(middle);
     if (decomposition.getRank() < q) {
       return Double.NaN;

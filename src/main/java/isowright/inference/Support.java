@@ -12,11 +12,11 @@ import org.apache.commons.math3.linear.SingularValueDecomposition;
 /**
  * Where the records lie, so that a mix outside them is called a guess.
  *
- * <p>A mix is inside when each input lies between its least and greatest record and, in logs, its distance
- * from the mean of the records, d² = (z − z̄)′ S^-1 (z − z̄) with S the covariance of the logs, is no larger
- * than that of the farthest record: the leverage of a record in a regression on logs is a linear function
- * of d². The ranges catch a single input gone too far, the distance an unseen combination of usual
- * amounts.
+ * <p>A mix is inside when each input lies between its least and greatest record and, in logs, its
+ * distance from the mean of the records, d² = (z − z̄)′ S^-1 (z − z̄) with S the covariance of the
+ * logs, is no larger than that of the farthest record: the leverage of a record in a regression on
+ * logs is a linear function of d². The ranges catch a single input gone too far, the distance an
+ * unseen combination of usual amounts.
  *
  * <p>Source: leverage and its reading as hidden extrapolation: Cook, R. D. and Weisberg, S. (1982),
  * <i>Residuals and Influence in Regression</i>, section 2.2. Tested in {@code SupportTest}.
@@ -67,8 +67,7 @@ public final class Support {
     for (int r = 0; r < rows; r++) {
       for (int i = 0; i < n; i++) {
         for (int j = 0; j <= i; j++) {
-          spread[i][j] +=
-              (logs.get(i).get(r) - mean[i]) * (logs.get(j).get(r) - mean[j]) / rows;
+          spread[i][j] += (logs.get(i).get(r) - mean[i]) * (logs.get(j).get(r) - mean[j]) / rows;
           spread[j][i] = spread[i][j];
         }
       }

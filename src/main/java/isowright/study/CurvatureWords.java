@@ -10,8 +10,7 @@ final class CurvatureWords {
   private CurvatureWords() {}
 
   static String of(Fit fit, CurvatureProfile profile) {
-    String level =
-        String.format(Locale.ROOT, "%.4g %%", 100 * fit.specification().confidence());
+    String level = String.format(Locale.ROOT, "%.4g %%", 100 * fit.specification().confidence());
     return switch (profile.state()) {
       case INTERIOR ->
           String.format(
@@ -27,8 +26,7 @@ final class CurvatureWords {
   }
 
   private static String flat(CurvatureProfile profile, String level) {
-    String statement =
-        set(profile);
+    String statement = set(profile);
     return "The sum of squares is flat along the elasticity of substitution: at "
         + level
         + " the records say no more than that it is "
@@ -37,7 +35,11 @@ final class CurvatureWords {
   }
 
   private static String open(CurvatureProfile profile, String level) {
-    return " At " + level + ", judged from the lowest point of the region, it is " + set(profile) + ".";
+    return " At "
+        + level
+        + ", judged from the lowest point of the region, it is "
+        + set(profile)
+        + ".";
   }
 
   private static String set(CurvatureProfile profile) {

@@ -43,8 +43,9 @@ final class ElasticityFindings {
   }
 
   /**
-   * Hicks once for a pair, Allen once for a pair, Morishima in both directions. Where one curvature rules
-   * them all, the interval is that of its profile: the delta interval misleads in a flat valley.
+   * Hicks once for a pair, Allen once for a pair, Morishima in both directions. Where one curvature
+   * rules them all, the interval is that of its profile: the delta interval misleads in a flat
+   * valley.
    */
   List<Pair> substitution() {
     int n = inputs.size();

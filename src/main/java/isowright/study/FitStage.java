@@ -70,9 +70,7 @@ final class FitStage {
         .estimation()
         .standardErrors()
         .orElse(
-            plants
-                ? Specification.StandardErrors.CLUSTERED
-                : Specification.StandardErrors.ROBUST);
+            plants ? Specification.StandardErrors.CLUSTERED : Specification.StandardErrors.ROBUST);
   }
 
   /** What a fit found. */
@@ -116,7 +114,7 @@ final class FitStage {
         fit.specification().form().name(),
         how(
             fit,
-            numbers.covarianceSource().words(),
+            plantsForGroups(numbers.covarianceSource().words()),
             numbers.covarianceSource().degreesOfFreedom()),
         fit.state().word(),
         parameters(fit, delta),
@@ -145,6 +143,11 @@ final class FitStage {
         points(numbers),
         influential(numbers),
         remarks(fit, regular));
+  }
+
+  /** The regression knows groups of rows; here they are plants. */
+  private static String plantsForGroups(String words) {
+    return words.replace("by group", "by plant").replace("group effects", "plant effects");
   }
 
   private FitFindings.How how(Fit fit, String covarianceWords, double degreesOfFreedom) {
@@ -183,8 +186,7 @@ final class FitStage {
               ? curvatureFigure(fit, value, error)
               : figure(delta.estimate(value, error, DeltaMethod.Scale.LINEAR));
       parameters.add(
-          new Parameter(
-              name, figure, zeroMeansNothing ? Double.NaN : law.p(value / error)));
+          new Parameter(name, figure, zeroMeansNothing ? Double.NaN : law.p(value / error)));
     }
     return parameters;
   }

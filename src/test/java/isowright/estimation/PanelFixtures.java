@@ -1,17 +1,16 @@
 package isowright.estimation;
 
 import isowright.records.Column;
+import isowright.records.Keep;
 import isowright.records.Panel;
+import isowright.records.RecordsReader;
+import isowright.records.RecordsRefused;
 import isowright.records.Roles;
-import java.io.IOException;
-import java.io.UncheckedIOException;
-import java.nio.file.Files;
+import isowright.records.Source;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.Arrays;
-import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Map;
 import java.util.Optional;
 import java.util.TreeSet;
 
@@ -22,81 +21,77 @@ public final class PanelFixtures {
 
   private PanelFixtures() {}
 
-  /** Columns of a published file by heading, as text. */
-  public static Map<String, List<String>> table(String file) {
-    try {
-      List<String> lines = Files.readAllLines(PUBLISHED.resolve(file));
-      String[] header = lines.get(0).split(",");
-      Map<String, List<String>> columns = new LinkedHashMap<>();
-      for (String name : header) {
-        columns.put(name, new ArrayList<>());
-      }
-      for (String line : lines.subList(1, lines.size())) {
-        String[] cells = line.split(",");
-        for (int c = 0; c < header.length; c++) {
-          columns.get(header[c]).add(cells[c]);
-        }
-      }
-      return columns;
-    } catch (IOException e) {
-      throw new UncheckedIOException(e);
-    }
-  }
-
-  /** A numeric column. */
-  public static double[] numbers(Map<String, List<String>> table, String column) {
-    return table.get(column).stream().mapToDouble(Double::parseDouble).toArray();
-  }
-
   /** 27 US states, primary metals, 1957 (Greene 2003, table F6.1): a cross-section. */
   public static Panel primaryMetals() {
-    Map<String, List<String>> table = table("primary-metals-27-states.csv");
-    return crossSection(
-        numbers(table, "output"),
-        List.of("labour", "capital"),
-        numbers(table, "labor"),
-        numbers(table, "capital"));
+    return published(
+        "primary-metals-27-states.csv",
+        "",
+        "",
+        "output",
+        List.of(input("labour", "labor"), input("capital", "capital")),
+        List.of());
   }
 
   /** 30 points of a CES (Judge et al. 1988, pp. 514–515): a cross-section. */
   public static Panel cesPoints() {
-    Map<String, List<String>> table = table("ces-30-points.csv");
-    return crossSection(
-        numbers(table, "output"),
-        List.of("labour", "capital"),
-        numbers(table, "labour"),
-        numbers(table, "capital"));
-  }
-
-  /** US manufacturing 1899–1922 (Cobb and Douglas 1928): one plant, many periods. */
-  public static Panel manufacturing1899() {
-    Map<String, List<String>> table = table("us-manufacturing-1899-1922.csv");
-    int rows = table.get("year").size();
-    int[] years = table.get("year").stream().mapToInt(Integer::parseInt).toArray();
-    return panel(
-        new int[rows],
-        years,
-        numbers(table, "output"),
-        List.of("labour", "capital"),
-        List.of(numbers(table, "labour"), numbers(table, "capital")),
-        List.of(),
+    return published(
+        "ces-30-points.csv",
+        "",
+        "",
+        "output",
+        List.of(input("labour", "labour"), input("capital", "capital")),
         List.of());
   }
 
-  /** 48 US states 1970–86 (Munnell 1990; Baltagi, table of chapter 2), sorted by state and year. */
+  /** US manufacturing 1899–1922 (Cobb and Douglas 1928): many periods of one series. */
+  public static Panel manufacturing1899() {
+    return published(
+        "us-manufacturing-1899-1922.csv",
+        "",
+        "year",
+        "output",
+        List.of(input("labour", "labour"), input("capital", "capital")),
+        List.of());
+  }
+
+  /** 48 US states 1970–86 (Munnell 1990; Baltagi, table of chapter 2). */
   public static Panel usStates() {
-    Map<String, List<String>> table = table("us-states-public-capital.csv");
-    List<String> states = table.get("state").stream().distinct().toList();
-    int[] plants = table.get("state").stream().mapToInt(states::indexOf).toArray();
-    int[] years = table.get("year").stream().mapToInt(Integer::parseInt).toArray();
-    return panel(
-        plants,
-        years,
-        numbers(table, "gsp"),
-        List.of("pcap", "pc", "emp"),
-        List.of(numbers(table, "pcap"), numbers(table, "pc"), numbers(table, "emp")),
-        List.of("unemp"),
-        List.of(numbers(table, "unemp")));
+    return published(
+        "us-states-public-capital.csv",
+        "state",
+        "year",
+        "gsp",
+        List.of(input("pcap", "pcap"), input("pc", "pc"), input("emp", "emp")),
+        List.of(new Roles.Control("unemp", false)));
+  }
+
+  private static Roles.Input input(String name, String column) {
+    return new Roles.Input(name, column, Optional.empty(), Optional.empty(), Optional.empty());
+  }
+
+  private static Panel published(
+      String file,
+      String plant,
+      String period,
+      String output,
+      List<Roles.Input> inputs,
+      List<Roles.Control> controls) {
+    Source source = new Source(PUBLISHED.resolve(file), Optional.empty(), Optional.empty());
+    Roles roles =
+        new Roles(
+            Optional.of(plant).filter(name -> !name.isEmpty()),
+            Optional.of(period).filter(name -> !name.isEmpty()),
+            output,
+            Optional.empty(),
+            inputs,
+            controls,
+            Optional.empty(),
+            Optional.empty());
+    try {
+      return RecordsReader.read(source, roles, Keep.ALL).panel();
+    } catch (RecordsRefused refused) {
+      throw new IllegalStateException(refused);
+    }
   }
 
   /** A cross-section: every row its own plant. */
@@ -104,13 +99,7 @@ public final class PanelFixtures {
     int[] plants = new int[output.length];
     Arrays.setAll(plants, r -> r);
     return panel(
-        plants,
-        new int[output.length],
-        output,
-        inputs,
-        List.of(quantities),
-        List.of(),
-        List.of());
+        plants, new int[output.length], output, inputs, List.of(quantities), List.of(), List.of());
   }
 
   /** A panel from arrays; rows must come sorted by plant. */
@@ -133,8 +122,7 @@ public final class PanelFixtures {
     }
     List<Integer> periods =
         new ArrayList<>(new TreeSet<>(Arrays.stream(periodOfRow).boxed().toList()));
-    int[] periodIndex =
-        Arrays.stream(periodOfRow).map(p -> periods.indexOf(p)).toArray();
+    int[] periodIndex = Arrays.stream(periodOfRow).map(p -> periods.indexOf(p)).toArray();
     int[] fileRows = new int[rows];
     Arrays.setAll(fileRows, r -> r + 2);
     List<Column> columns = new ArrayList<>();

@@ -13,7 +13,9 @@ import java.util.Map;
 import org.assertj.core.data.Offset;
 import org.junit.jupiter.api.Test;
 
-/** Fits held against published tables; each test names its table and why it is as near as it asks. */
+/**
+ * Fits held against published tables; each test names its table and why it is as near as it asks.
+ */
 class PublishedFitsTest {
 
   /** Sources print six decimals, so half a unit of the sixth. */
@@ -42,8 +44,7 @@ class PublishedFitsTest {
     return Math.sqrt(fit.numbers().covariance()[k][k]);
   }
 
-  private static void agree(
-      Fit fit, Map<String, double[]> published, Offset<Double> tolerance) {
+  private static void agree(Fit fit, Map<String, double[]> published, Offset<Double> tolerance) {
     published.forEach(
         (name, numbers) -> {
           assertThat(value(fit, name)).as(name).isCloseTo(numbers[0], tolerance);
@@ -72,8 +73,7 @@ class PublishedFitsTest {
     assertThat(fit.numbers().covariance()[1][2]).isCloseTo(-.0096162, within(0.5e-7));
     assertThat(fit.numbers().linear().ssr()).isCloseTo(.8516337, within(0.5e-7));
     assertThat(fit.numbers().statistics().rSquared()).isCloseTo(.943463, SIX_DECIMALS);
-    assertThat(fit.numbers().statistics().residualStandardError())
-        .isCloseTo(.188374, SIX_DECIMALS);
+    assertThat(fit.numbers().statistics().residualStandardError()).isCloseTo(.188374, SIX_DECIMALS);
     assertThat(fit.numbers().statistics().logLikelihood()).isCloseTo(8.350541, SIX_DECIMALS);
   }
 
@@ -104,14 +104,13 @@ class PublishedFitsTest {
 
   /**
    * Primary metals, CES with variable scale in logs: the sum of squares still falls at ρ = −0.99
-   * (.805475) and is .805289 at ρ = −1; the free minimum, at ρ = −1.416, lies outside the economic region
-   * (computed with R 4.2 nls; six decimals).
+   * (.805475) and is .805289 at ρ = −1; the free minimum, at ρ = −1.416, lies outside the economic
+   * region (computed with R 4.2 nls; six decimals).
    */
   @Test
   void primaryMetalsCesHasNoOptimum() {
     Fit fit =
-        fit(
-            PanelFixtures.primaryMetals(), "ces", NONE, Specification.Time.NONE, true, CLASSICAL);
+        fit(PanelFixtures.primaryMetals(), "ces", NONE, Specification.Time.NONE, true, CLASSICAL);
     assertThat(fit.state()).isEqualTo(Fit.State.BOUNDARY);
     assertThat(fit.solution()).isEmpty();
     assertThat(fit.reasons()).hasSize(1);
@@ -124,14 +123,13 @@ class PublishedFitsTest {
   }
 
   /**
-   * Judge, Hill, Griffiths, Lütkepohl and Lee (1988), pp. 514–515: SSR 1.761076, and with R 4.2 nls b3 =
-   * −3.0109, so ρ = 3.011, σ = .2493, scale 1.0126. The false optimum near SSR 5.02 is the Cobb-Douglas
-   * value.
+   * Judge, Hill, Griffiths, Lütkepohl and Lee (1988), pp. 514–515: SSR 1.761076, and with R 4.2 nls
+   * b3 = −3.0109, so ρ = 3.011, σ = .2493, scale 1.0126. The false optimum near SSR 5.02 is the
+   * Cobb-Douglas value.
    */
   @Test
   void cesPoints() {
-    Fit fit =
-        fit(PanelFixtures.cesPoints(), "ces", NONE, Specification.Time.NONE, true, CLASSICAL);
+    Fit fit = fit(PanelFixtures.cesPoints(), "ces", NONE, Specification.Time.NONE, true, CLASSICAL);
     assertThat(fit.state()).isEqualTo(Fit.State.FLAT);
     assertThat(fit.numbers().linear().ssr()).isCloseTo(1.761076, SIX_DECIMALS);
     assertThat(value(fit, "rho")).isCloseTo(3.0109, FOUR_DECIMALS);
@@ -146,7 +144,10 @@ class PublishedFitsTest {
         .allMatch(point -> Math.abs(point.curvature()) < 0.1);
   }
 
-  /** The same optimum from every point of the profile, unscaled too: the units of inputs do not matter. */
+  /**
+   * The same optimum from every point of the profile, unscaled too: the units of inputs do not
+   * matter.
+   */
   @Test
   void cesPointsFromEveryStart() {
     for (boolean scaled : new boolean[] {true, false}) {
@@ -193,7 +194,10 @@ class PublishedFitsTest {
     assertThat(error(trend, "capital")).isCloseTo(.341, within(0.5e-3));
   }
 
-  /** Baltagi, Econometric Analysis of Panel Data, table of chapter 2 (values to six decimals with R). */
+  /**
+   * Baltagi, Econometric Analysis of Panel Data, table of chapter 2 (values to six decimals with
+   * R).
+   */
   @Test
   void usStatesPooled() {
     Panel panel = PanelFixtures.usStates();

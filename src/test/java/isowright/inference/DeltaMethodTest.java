@@ -19,7 +19,9 @@ class DeltaMethodTest {
       new EstimatedTechnology(
           CobbDouglas.of(List.of("labour", "machines"), .5, .6, .3), COVARIANCE, 20);
 
-  /** For a linear function the delta method is exact: se² = a′Va, here .0025 + .0036 − 2 × .0005. */
+  /**
+   * For a linear function the delta method is exact: se² = a′Va, here .0025 + .0036 − 2 × .0005.
+   */
   @Test
   void sumOfCoefficients() {
     Estimate estimate =
@@ -39,8 +41,7 @@ class DeltaMethodTest {
   void exponentialOnTheLogScale() {
     Estimate estimate =
         DeltaMethod.of(ESTIMATED, .95)
-            .estimate(
-                t -> Math.exp(t.parameters()[0] + t.parameters()[1]), DeltaMethod.Scale.LOG);
+            .estimate(t -> Math.exp(t.parameters()[0] + t.parameters()[1]), DeltaMethod.Scale.LOG);
     double g = Math.exp(1.1);
     double se = g * Math.sqrt(.04 + .0025 + 2 * .001);
     // The step is .01 se of a parameter, so the difference is off by about step^4/30 < 1e-11 of g.

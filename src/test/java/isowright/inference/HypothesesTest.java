@@ -71,25 +71,20 @@ class HypothesesTest {
     assertThat(verdict.sentence()).contains("speak against", "p < 0.001");
   }
 
-  /**
-   * Cobb and Douglas (1928): constant returns F .1956, p .663 (R 4.2, printed digits).
-   */
+  /** Cobb and Douglas (1928): constant returns F .1956, p .663 (R 4.2, printed digits). */
   @Test
   void constantReturnsIn1928() {
     Verdict verdict =
         verdict(
-            fit(
-                PanelFixtures.manufacturing1899(),
-                "cobb-douglas",
-                Specification.PlantEffects.NONE),
+            fit(PanelFixtures.manufacturing1899(), "cobb-douglas", Specification.PlantEffects.NONE),
             "constant-returns");
     assertThat(verdict.statistic()).isCloseTo(.1956, within(0.5e-4));
     assertThat(verdict.p()).isCloseTo(.663, within(0.5e-3));
   }
 
   /**
-   * CES 30 points: likelihood ratio of Cobb-Douglas, N ln(5.005275/1.761076) = 31.34 from the sums of
-   * squares that R gives (six decimals each, so the ratio is good to 1e-5).
+   * CES 30 points: likelihood ratio of Cobb-Douglas, N ln(5.005275/1.761076) = 31.34 from the sums
+   * of squares that R gives (six decimals each, so the ratio is good to 1e-5).
    */
   @Test
   void unitSubstitutionInCesPoints() {
@@ -97,8 +92,7 @@ class HypothesesTest {
         verdict(
             fit(PanelFixtures.cesPoints(), "ces", Specification.PlantEffects.NONE),
             "unit-substitution");
-    assertThat(verdict.statistic())
-        .isCloseTo(30 * Math.log(5.005275 / 1.761076), within(1e-4));
+    assertThat(verdict.statistic()).isCloseTo(30 * Math.log(5.005275 / 1.761076), within(1e-4));
     assertThat(verdict.law().degreesOfFreedom()).containsExactly(1.0);
     assertThat(verdict.rejects()).isTrue();
   }

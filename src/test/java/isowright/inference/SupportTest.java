@@ -44,9 +44,6 @@ class SupportTest {
   @Test
   void anUnseenCombinationIsOutside() {
     double[] mix = {Math.exp(4.5), Math.exp(5.5)};
-    assertThat(Support.of(along()).reasons(mix))
-        .singleElement()
-        .asString()
-        .contains("combination");
+    assertThat(Support.of(along()).reasons(mix)).singleElement().asString().contains("combination");
   }
 }
