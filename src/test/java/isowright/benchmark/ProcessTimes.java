@@ -6,7 +6,6 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
-import java.util.Optional;
 
 /** How long whole runs of the program take, from the start of the process to its end. */
 final class ProcessTimes {
@@ -33,20 +32,14 @@ final class ProcessTimes {
     String command = String.join(" ", arguments);
     double[] seconds = new double[RUNS];
     for (int r = 0; r < RUNS; r++) {
-      Optional<Double> time = once(arguments);
-      if (time.isEmpty()) {
-        steps.remark(command + ": ended with an error, see target/benchmark/process.txt");
-        return;
-      }
-      seconds[r] = time.get();
+      seconds[r] = once(arguments);
     }
     Arrays.sort(seconds);
     steps.line(command, seconds[RUNS / 2], "s");
   }
 
-  /** Seconds of one run; absent if it did not end with exit code 0. */
-  private static Optional<Double> once(List<String> arguments)
-      throws IOException, InterruptedException {
+  /** Seconds of one run. */
+  private static double once(List<String> arguments) throws IOException, InterruptedException {
     Path output = Path.of("target", "benchmark", "process.txt");
     Files.createDirectories(output.toAbsolutePath().getParent());
     List<String> command = new ArrayList<>();
@@ -58,6 +51,10 @@ final class ProcessTimes {
     long start = System.nanoTime();
     int exit = builder.start().waitFor();
     double seconds = (System.nanoTime() - start) * 1e-9;
-    return exit == 0 ? Optional.of(seconds) : Optional.empty();
+    if (exit != 0) {
+      throw new IllegalStateException(
+          command + " ended with exit code " + exit + ", see " + output);
+    }
+    return seconds;
   }
 }

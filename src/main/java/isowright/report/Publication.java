@@ -1,0 +1,241 @@
+package isowright.report;
+
+import java.io.IOException;
+import java.nio.file.AtomicMoveNotSupportedException;
+import java.nio.file.Files;
+import java.nio.file.LinkOption;
+import java.nio.file.Path;
+import java.nio.file.StandardCopyOption;
+import java.util.Comparator;
+import java.util.List;
+import java.util.Map;
+import java.util.Objects;
+import java.util.Optional;
+import java.util.Set;
+import java.util.TreeSet;
+import java.util.UUID;
+import java.util.regex.Pattern;
+import java.util.stream.Stream;
+
+/**
+ * Puts a report into its folder, whole or not at all.
+ *
+ * <p>Everything is written into a folder of another name beside the target first; then the two
+ * change names. A run that fails at any point before leaves an earlier report exactly as it was,
+ * and no half-written files. Files that someone laid beside an earlier report (notes, say) stay.
+ *
+ * <p>A folder is replaced only if it is empty or holds an earlier report, which is told by its
+ * {@code findings.json}: no other folder is ever emptied. Names of files lie inside the folder by
+ * their form, see {@link #write}.
+ *
+ * <p>Tested in {@code PublicationTest}.
+ */
+public final class Publication {
+
+  /** The file by which a folder is known to hold a report. */
+  public static final String MARK = "findings.json";
+
+  private static final Pattern NAME = Pattern.compile("([a-z0-9][a-z0-9-]*/)?[a-z0-9][a-z0-9.-]*");
+
+  private final Path folder;
+
+  private Publication(Path folder) {
+    this.folder = folder;
+  }
+
+  /** A report cannot be put where it was asked to go; the message says why and what to do. */
+  public static final class Refused extends Exception {
+    private static final long serialVersionUID = 1L;
+
+    private Refused(String message) {
+      super(message);
+    }
+  }
+
+  /**
+   * A publication into a folder, which need not exist. Nothing is written yet; what can be known to
+   * fail is refused here, before a long run.
+   *
+   * @param folder the folder of the report
+   */
+  public static Publication into(Path folder) throws Refused {
+    Path target = folder.toAbsolutePath().normalize();
+    if (target.getFileName() == null || target.getParent() == null) {
+      throw new Refused(folder + " cannot be the folder of a report; name one inside it.");
+    }
+    try {
+      if (Files.exists(target)) {
+        target = target.toRealPath();
+        replaceable(folder, target);
+      }
+      Path above = existing(target.getParent());
+      if (!Files.isDirectory(above)) {
+        throw new Refused(
+            above + " is a file, so " + folder + " cannot be a folder; choose another folder.");
+      }
+      if (!Files.isWritable(above)) {
+        throw new Refused(above + " cannot be written to; choose another folder for the report.");
+      }
+    } catch (IOException unreadable) {
+      throw new Refused(folder + " cannot be used (" + unreadable + "); choose another folder.");
+    }
+    return new Publication(target);
+  }
+
+  private static void replaceable(Path asked, Path target) throws IOException, Refused {
+    if (!Files.isDirectory(target)) {
+      throw new Refused(asked + " is a file; name a folder for the report.");
+    }
+    if (target.equals(Path.of("").toRealPath())) {
+      throw new Refused(
+          asked + " is the folder you work in, and a report replaces its folder; name another.");
+    }
+    if (!Files.exists(target.resolve(MARK)) && !isEmpty(target)) {
+      throw new Refused(
+          asked
+              + " holds other files and no earlier report (no "
+              + MARK
+              + "), so it is left alone; name a new or an empty folder.");
+    }
+  }
+
+  /** The folder of the report. */
+  public Path folder() {
+    return folder;
+  }
+
+  /**
+   * Puts the files in place and takes an earlier report away.
+   *
+   * @param files contents by name: lower-case letters, digits, points and hyphens, at most one
+   *     folder deep, such as {@code charts/profile-ces.svg}
+   * @throws Refused when the file system does not let it be done; everything is as it was then
+   */
+  public void write(Map<String, byte[]> files) throws Refused {
+    for (String name : files.keySet()) {
+      if (!NAME.matcher(name).matches() || name.contains("..")) {
+        throw new IllegalArgumentException("not a name of a file of a report: " + name);
+      }
+    }
+    Path parent = Objects.requireNonNull(folder.getParent());
+    Path fresh = beside("new");
+    Optional<Path> firstMade = firstMissing(parent);
+    try {
+      Files.createDirectories(parent);
+      Files.createDirectory(fresh);
+      for (Map.Entry<String, byte[]> file : files.entrySet()) {
+        Path path = fresh.resolve(file.getKey());
+        Files.createDirectories(Objects.requireNonNull(path.getParent()));
+        Files.write(path, file.getValue());
+      }
+      exchange(fresh, files.keySet());
+    } catch (IOException failed) {
+      removeQuietly(fresh);
+      firstMade.ifPresent(topmost -> removeEmpty(parent, topmost));
+      throw new Refused(
+          "the report could not be written into "
+              + folder
+              + " ("
+              + failed
+              + "); choose another folder.");
+    }
+  }
+
+  private void exchange(Path fresh, Set<String> names) throws IOException {
+    if (!Files.exists(folder, LinkOption.NOFOLLOW_LINKS)) {
+      move(fresh, folder);
+      return;
+    }
+    Path old = beside("old");
+    move(folder, old);
+    try {
+      move(fresh, folder);
+    } catch (IOException failed) {
+      move(old, folder);
+      throw failed;
+    }
+    keepForeign(old, names);
+    removeQuietly(old);
+  }
+
+  /** Moves what is not part of a report out of the earlier folder into the new one. */
+  private void keepForeign(Path old, Set<String> names) throws IOException {
+    Set<String> own = new TreeSet<>();
+    names.forEach(name -> own.add(name.split("/", 2)[0]));
+    List<Path> entries;
+    try (Stream<Path> all = Files.list(old)) {
+      entries = all.toList();
+    }
+    for (Path entry : entries) {
+      String name = String.valueOf(entry.getFileName());
+      if (!own.contains(name)) {
+        move(entry, folder.resolve(name));
+      }
+    }
+  }
+
+  private Path beside(String what) {
+    String name = "." + folder.getFileName() + "." + what + "-" + UUID.randomUUID();
+    return folder.resolveSibling(name);
+  }
+
+  private static void move(Path from, Path to) throws IOException {
+    try {
+      Files.move(from, to, StandardCopyOption.ATOMIC_MOVE);
+    } catch (AtomicMoveNotSupportedException elsewhere) {
+      Files.move(from, to);
+    }
+  }
+
+  private static boolean isEmpty(Path directory) throws IOException {
+    try (Stream<Path> entries = Files.list(directory)) {
+      return entries.findAny().isEmpty();
+    }
+  }
+
+  /** The nearest folder, this one or above it, that exists. */
+  private static Path existing(Path path) {
+    Path at = path;
+    while (!Files.exists(at) && at.getParent() != null) {
+      at = at.getParent();
+    }
+    return at;
+  }
+
+  /** The topmost of the folders that have to be made, if any has. */
+  private static Optional<Path> firstMissing(Path path) {
+    Optional<Path> first = Optional.empty();
+    for (Path at = path; at != null && !Files.exists(at); at = at.getParent()) {
+      first = Optional.of(at);
+    }
+    return first;
+  }
+
+  /** Takes away folders made for a report that was not written, as far as they are empty. */
+  private static void removeEmpty(Path from, Path topmost) {
+    try {
+      for (Path at = from; at != null && at.startsWith(topmost); at = at.getParent()) {
+        if (Files.exists(at) && !isEmpty(at)) {
+          return;
+        }
+        Files.deleteIfExists(at);
+      }
+    } catch (IOException left) {
+      return; // an empty folder that cannot be taken away does no harm
+    }
+  }
+
+  /** Removes a folder of our own making; what cannot be removed is left, out of the way. */
+  private static void removeQuietly(Path directory) {
+    if (!Files.exists(directory, LinkOption.NOFOLLOW_LINKS)) {
+      return;
+    }
+    try (Stream<Path> all = Files.walk(directory)) {
+      for (Path path : all.sorted(Comparator.reverseOrder()).toList()) {
+        Files.deleteIfExists(path);
+      }
+    } catch (IOException left) {
+      return;
+    }
+  }
+}

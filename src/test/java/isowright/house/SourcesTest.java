@@ -1,0 +1,82 @@
+package isowright.house;
+
+import static org.assertj.core.api.Assertions.assertThat;
+
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.List;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
+import java.util.stream.Stream;
+import org.junit.jupiter.api.Test;
+
+/** What can be seen in the sources only: comments, lengths, words. */
+class SourcesTest {
+
+  private static final Path MAIN = Path.of("src/main/java/isowright");
+  private static final Path TESTS = Path.of("src/test/java/isowright");
+
+  /** A public type at the top of its file, with the comment before it, annotations between. */
+  private static final Pattern PUBLIC_TYPE =
+      Pattern.compile(
+          "(?s)(?:/\\*\\*(?<comment>(?:(?!\\*/).)*)\\*/\\s*)?"
+              + "(?<annotations>(?:@\\w+(?:\\((?:[^()\"]|\"(?:[^\"\\\\]|\\\\.)*\"|\\([^()]*\\))*\\))?\\s*)*)"
+              + "public (?:abstract |final |sealed |non-sealed )*(?:class|interface|record|enum) (?<name>\\w+)");
+
+  /** Fewer words than this cannot say what question a type answers. */
+  private static final int LEAST_WORDS = 6;
+
+  private static final int MOST_LINES = 400;
+
+  private static List<Path> sources(Path root) throws IOException {
+    try (Stream<Path> all = Files.walk(root)) {
+      return all.filter(path -> path.toString().endsWith(".java")).sorted().toList();
+    }
+  }
+
+  @Test
+  void everyPublicTypeHasACommentOfSubstance() throws IOException {
+    int seen = 0;
+    for (Path source : sources(MAIN)) {
+      Matcher type = PUBLIC_TYPE.matcher(Files.readString(source));
+      String file = String.valueOf(source.getFileName());
+      if (!type.find() || !file.equals(type.group("name") + ".java")) {
+        continue;
+      }
+      seen++;
+      String comment = type.group("comment") == null ? "" : type.group("comment");
+      String prose = comment.replaceAll("(?m)^\\s*\\*", " ").replaceAll("(?s)@param.*", " ");
+      long words = Pattern.compile("\\p{L}[\\p{L}’'-]+").matcher(prose).results().count();
+      assertThat(words).as("words in the comment of " + source).isGreaterThanOrEqualTo(LEAST_WORDS);
+    }
+    assertThat(seen).as("public types seen").isGreaterThan(40);
+  }
+
+  @Test
+  void noFileIsLong() throws IOException {
+    for (Path root : List.of(MAIN, TESTS)) {
+      for (Path source : sources(root)) {
+        assertThat(Files.readAllLines(source))
+            .as("lines of " + source)
+            .hasSizeLessThanOrEqualTo(MOST_LINES);
+      }
+    }
+  }
+
+  /**
+   * Least squares is statistics: economics would tie it to one use and to one vocabulary. (What a
+   * call or a digit costs is plain English, so that word is not looked for.)
+   */
+  @Test
+  void leastSquaresKnowsNoEconomics() throws IOException {
+    Pattern economics =
+        Pattern.compile("(?i)\\b(labour|capital|wages?|outputs?|plants?|prices?|firms?)\\b");
+    for (Path source : sources(MAIN.resolve("regression"))) {
+      if (source.endsWith("package-info.java")) {
+        continue; // the sign names the words that do not belong here
+      }
+      assertThat(Files.readString(source)).as(source.toString()).doesNotContainPattern(economics);
+    }
+  }
+}
