@@ -1,9 +1,10 @@
 package isowright.study;
 
 import isowright.estimation.Fit;
+import isowright.records.Column;
 import isowright.records.Panel;
 import isowright.technology.Regularity;
-import isowright.technology.Technology;
+import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -15,37 +16,23 @@ final class RegularityFindings {
 
   static FitFindings.Regular of(Fit fit) {
     Panel panel = fit.panel();
-    Technology technology = fit.numbers().technology();
-    int n = panel.inputs().size();
-    double[] z = new double[n];
-    int monotone = 0;
-    int quasiConcave = 0;
-    int both = 0;
-    int[] nonMonotone = new int[n];
-    for (int r = 0; r < panel.rows(); r++) {
-      for (int i = 0; i < n; i++) {
-        z[i] = panel.logQuantities().get(i).get(r);
-      }
-      Regularity here = Regularity.at(technology, z);
-      monotone += here.monotone() ? 1 : 0;
-      quasiConcave += here.quasiConcave() ? 1 : 0;
-      both += here.regular() ? 1 : 0;
-      for (int i = 0; i < n; i++) {
-        nonMonotone[i] += here.monotone(i) ? 0 : 1;
-      }
-    }
+    double[][] logs =
+        panel.logQuantities().stream().map(Column::toArray).toArray(double[][]::new);
+    Regularity.Count count =
+        Regularity.count(fit.numbers().technology(), logs, panel.rows());
     Map<String, Integer> named = new LinkedHashMap<>();
-    for (int i = 0; i < n; i++) {
-      if (nonMonotone[i] > 0) {
-        named.put(panel.inputs().get(i), nonMonotone[i]);
+    for (int i = 0; i < logs.length; i++) {
+      if (count.nonMonotoneBy()[i] > 0) {
+        named.put(panel.inputs().get(i), count.nonMonotoneBy()[i]);
       }
     }
-    return new FitFindings.Regular(panel.rows(), monotone, quasiConcave, both, named);
+    return new FitFindings.Regular(
+        count.rows(), count.monotone(), count.quasiConcave(), count.both(), named);
   }
 
   /** What irregular rows mean. */
   static String words(FitFindings.Regular regular) {
-    List<String> parts = new java.util.ArrayList<>();
+    List<String> parts = new ArrayList<>();
     regular
         .nonMonotoneBy()
         .forEach(
