@@ -2,7 +2,9 @@ package isowright.records;
 
 import isowright.records.Remark.Severity;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Collections;
+import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
@@ -57,16 +59,20 @@ final class Conclusion {
   }
 
   private static void mixedPeriods(Place place, Slots slots, RowRules rules) {
-    Map<Integer, Integer> firstRow = new LinkedHashMap<>();
+    int[] firstRow = {-1, -1, -1};
     for (int r = 0; r < rules.store().rows() && slots.period().isPresent(); r++) {
-      firstRow.putIfAbsent(Periods.kind(rules.store().period(r)), r);
+      int kind = Periods.kind(rules.store().period(r));
+      if (firstRow[kind] < 0) {
+        firstRow[kind] = r;
+      }
     }
-    if (firstRow.size() < 2) {
+    int[] rows = Arrays.stream(firstRow).filter(r -> r >= 0).sorted().toArray();
+    if (rows.length < 2) {
       return;
     }
     String examples =
-        firstRow.values().stream()
-            .map(
+        Arrays.stream(rows)
+            .mapToObj(
                 r ->
                     "\"%s\" in row %d"
                         .formatted(Periods.text(rules.store().period(r)), rules.store().fileRow(r)))
@@ -83,7 +89,7 @@ final class Conclusion {
                     "mixed-periods",
                     "%s, %s: found periods of different kinds: %s. Write every period in the same way."
                         .formatted(place.words(), slot.words(), examples),
-                    firstRow.values().stream().map(rules.store()::fileRow).toList()));
+                    Arrays.stream(rows).map(rules.store()::fileRow).boxed().toList()));
   }
 
   private static void duplicates(Place place, PanelAssembly assembly, RowRules rules) {
@@ -148,10 +154,10 @@ final class Conclusion {
   /** Plants whose names differ only in case or separators: probably one plant written two ways. */
   private static void alikePlants(
       Place place, Roles roles, List<String> plants, List<Remark> remarks) {
-    Map<String, String> seen = new LinkedHashMap<>();
+    Map<String, String> seen = new HashMap<>(2 * plants.size());
     List<String> pairs = new ArrayList<>();
     for (String plant : plants) {
-      String folded = plant.toLowerCase(Locale.ROOT).replaceAll("[\\s_]+", "-");
+      String folded = plant.toLowerCase(Locale.ROOT).replace('_', '-').replace(' ', '-');
       String before = seen.putIfAbsent(folded, plant);
       if (before != null) {
         pairs.add("\"" + Shown.shortened(before) + "\" and \"" + Shown.shortened(plant) + "\"");

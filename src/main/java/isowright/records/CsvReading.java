@@ -30,10 +30,10 @@ final class CsvReading {
       Refusals.ifContradictory(place, format);
     }
     NumberFormat first = format;
-    TypedRows typed = records.read(() -> new TypedRows(place, slots, kept, first, !declared));
+    TypedRows typed = records.read(() -> TypedRows.ofCsv(place, slots, kept, first, !declared));
     if (typed.doubtful()) {
       NumberFormat recognised = survey(records, place, slots);
-      typed = records.read(() -> new TypedRows(place, slots, kept, recognised, false));
+      typed = records.read(() -> TypedRows.ofCsv(place, slots, kept, recognised, false));
       format = recognised;
       remarkOnGroups(place, recognised, remarks);
     } else if (typed.ambiguous()) {

@@ -2,6 +2,7 @@ package isowright.records;
 
 import isowright.records.Remark.Severity;
 import java.io.IOException;
+import java.io.InputStream;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.security.MessageDigest;
@@ -91,6 +92,38 @@ final class Refusals {
     }
   }
 
+  /** A file called .xlsx that is something else. */
+  static void ifNotWorkbook(Path file, Place place) throws RecordsRefused, IOException {
+    byte[] first;
+    try (InputStream in = Files.newInputStream(file)) {
+      first = in.readNBytes(8);
+    }
+    if (first.length == 0) {
+      throw of(
+          "empty-file", "%s is empty (0 bytes). Save the records again.".formatted(place.file()));
+    }
+    if (TextEncoding.startsWith(first, 0xD0, 0xCF, 0x11, 0xE0)) {
+      throw of(
+          "protected-or-old-workbook",
+          "%s is either protected by a password or in the old .xls format under a new ending. Remove the password, or save it as .xlsx (Excel workbook) in the spreadsheet program."
+              .formatted(place.file()));
+    }
+    if (!TextEncoding.startsWith(first, 'P', 'K')) {
+      throw of(
+          "not-a-workbook",
+          "%s is not a workbook. If it is text, give it the ending .csv; otherwise save it as .xlsx in the spreadsheet program."
+              .formatted(place.file()));
+    }
+  }
+
+  static RecordsRefused damagedWorkbook(Place place, Exception e) {
+    String said = e.getMessage() == null ? e.getClass().getSimpleName() : e.getMessage();
+    return of(
+        "damaged-workbook",
+        "%s cannot be read as a workbook (%s). Open it in a spreadsheet program and save it again as .xlsx, or save the sheet as .csv."
+            .formatted(place.file(), Shown.shortened(said.strip())));
+  }
+
   static void ifNothingIn(Place place, String beginning, boolean whole) throws RecordsRefused {
     if (whole && beginning.isBlank()) {
       throw nothingIn(place);
@@ -160,6 +193,15 @@ final class Refusals {
   }
 
   static RecordsRefused cannotRead(Place place, IOException e) {
+    if (String.valueOf(e.getMessage()).contains("Zip bomb")) {
+      return of(
+          "unreasonable-archive",
+          "%s unpacks to far more than a workbook does and was not read further. Save the sheet as .csv."
+              .formatted(place.file()));
+    }
+    if (e instanceof java.util.zip.ZipException) {
+      return damagedWorkbook(place, e);
+    }
     return of(
         "not-readable",
         "%s cannot be read: %s. Check that the file is whole and that no other program holds it."

@@ -6,6 +6,8 @@ import isowright.records.Row.Found;
 import isowright.records.SetAsideTally.Reason;
 import isowright.records.Slot.Kind;
 import java.util.List;
+import java.util.function.Predicate;
+import java.util.stream.IntStream;
 import org.jspecify.annotations.Nullable;
 
 /**
@@ -20,6 +22,9 @@ import org.jspecify.annotations.Nullable;
  */
 final class RowRules {
 
+  /** No such column is declared. */
+  private static final int NONE = -1;
+
   private final Place place;
   private final Slots slots;
   private final KeptRows keep;
@@ -28,6 +33,14 @@ final class RowRules {
   private final DeflatorByPeriod deflator;
   private final Complaints complaints;
   private final SetAsideTally setAside = new SetAsideTally();
+  private final Kind[] kinds;
+  private final int[] needed;
+  private final int[] quantities;
+  private final int[] positive;
+  private final boolean[] givesPrice;
+  private final int period;
+  private final int plant;
+  private final int deflated;
   private final Reason[] blank;
   private final Reason[] notPositive;
   private int rows;
@@ -39,12 +52,25 @@ final class RowRules {
     this.store = new RowStore(slots);
     this.deflator = new DeflatorByPeriod();
     this.complaints = new Complaints();
+    this.kinds = slots.kinds();
+    this.needed = where(Kind::neededInEveryRow);
+    this.quantities = where(k -> k == Kind.QUANTITY);
+    this.positive = where(k -> k.numeric() && k != Kind.CONTROL && k != Kind.QUANTITY);
+    this.givesPrice = new boolean[kinds.length];
+    this.period = slots.period().orElse(NONE);
+    this.plant = slots.plant().orElse(NONE);
+    this.deflated = slots.deflator().orElse(NONE);
     this.blank = new Reason[slots.size()];
     this.notPositive = new Reason[slots.size()];
     for (int s = 0; s < slots.size(); s++) {
+      givesPrice[s] = slots.givesPrice(s);
       blank[s] = Reason.blank(slots.get(s));
       notPositive[s] = Reason.quantityNotPositive(slots.get(s));
     }
+  }
+
+  private int[] where(Predicate<Kind> condition) {
+    return IntStream.range(0, kinds.length).filter(s -> condition.test(kinds[s])).toArray();
   }
 
   /** A row whose number of cells is not that of the headings. */
@@ -65,8 +91,8 @@ final class RowRules {
   /** A row with every cell typed. */
   void endRow(Row row) {
     rows++;
-    boolean periodKnown = slots.period().isEmpty() || row.present(slots.period().getAsInt());
-    boolean plantKnown = slots.plant().isEmpty() || row.present(slots.plant().getAsInt());
+    boolean periodKnown = period == NONE || row.present(period);
+    boolean plantKnown = plant == NONE || row.present(plant);
     if (periodKnown) {
       noteDeflator(row);
     }
@@ -88,20 +114,17 @@ final class RowRules {
   }
 
   private void noteDeflator(Row row) {
-    if (slots.deflator().isPresent()) {
-      double value = row.value(slots.deflator().getAsInt());
-      if (value > 0) {
-        deflator.add(slots.period().isPresent() ? row.period() : Periods.NONE, value);
-      }
+    if (deflated != NONE && row.value(deflated) > 0) {
+      deflator.add(row.period(), row.value(deflated));
     }
   }
 
   private boolean leftOut(Row row, boolean periodKnown, boolean plantKnown) {
-    if (slots.period().isPresent() && periodKnown && !keep.period(row.period())) {
+    if (period != NONE && periodKnown && !keep.period(row.period())) {
       setAside.add(Reason.PERIOD_NOT_KEPT, row.number());
       return true;
     }
-    if (slots.plant().isPresent() && plantKnown && !keep.plant(plants.text(row.plant()))) {
+    if (plant != NONE && plantKnown && !keep.plant(plants.text(row.plant()))) {
       setAside.add(Reason.PLANT_NOT_KEPT, row.number());
       return true;
     }
@@ -129,13 +152,13 @@ final class RowRules {
 
   /** Why the row cannot be used though nothing in it is wrong. */
   private @Nullable Reason missing(Row row) {
-    for (int s = 0; s < slots.size(); s++) {
-      if (row.blank(s) && slots.get(s).kind().neededInEveryRow()) {
+    for (int s : needed) {
+      if (row.blank(s)) {
         return blank[s];
       }
     }
-    for (int s = 0; s < slots.size(); s++) {
-      if (slots.get(s).kind() == Kind.QUANTITY && !(row.value(s) > 0)) {
+    for (int s : quantities) {
+      if (!(row.value(s) > 0)) {
         return notPositive[s];
       }
     }
@@ -143,19 +166,15 @@ final class RowRules {
   }
 
   private void outOfRange(Row row) {
-    for (int s = 0; s < slots.size(); s++) {
-      if (row.present(s) && !inRange(row, s)) {
+    for (int s : positive) {
+      if (row.present(s) && !inRange(row.value(s), s)) {
         complainOfValue(row, s);
       }
     }
   }
 
-  private boolean inRange(Row row, int slot) {
-    return switch (slots.get(slot).kind()) {
-      case PRICE, DEFLATOR, FILED_COST, LOGGED_CONTROL -> row.value(slot) > 0;
-      case SPENDING -> row.value(slot) > 0 || (row.value(slot) == 0 && !slots.givesPrice(slot));
-      case PLANT, PERIOD, OUTPUT, QUANTITY, CONTROL -> true;
-    };
+  private boolean inRange(double value, int slot) {
+    return value > 0 || (value == 0 && kinds[slot] == Kind.SPENDING && !givesPrice[slot]);
   }
 
   private void complainOfValue(Row row, int slot) {

@@ -1,5 +1,6 @@
 package isowright.records;
 
+import java.util.stream.IntStream;
 import tech.tablesaw.api.DoubleColumn;
 import tech.tablesaw.api.IntColumn;
 import tech.tablesaw.api.LongColumn;
@@ -14,7 +15,9 @@ import tech.tablesaw.api.LongColumn;
  */
 final class RowStore {
 
-  private final Slots slots;
+  private final boolean hasPlant;
+  private final boolean hasPeriod;
+  private final int[] numeric;
   private final DoubleColumn[] numbers;
   private final IntColumn plants = IntColumn.create("plant");
   private final LongColumn periods = LongColumn.create("period");
@@ -23,7 +26,10 @@ final class RowStore {
   private final int[] firstBlankRows;
 
   RowStore(Slots slots) {
-    this.slots = slots;
+    hasPlant = slots.plant().isPresent();
+    hasPeriod = slots.period().isPresent();
+    Slot.Kind[] kinds = slots.kinds();
+    numeric = IntStream.range(0, kinds.length).filter(s -> kinds[s].numeric()).toArray();
     numbers = new DoubleColumn[slots.size()];
     for (int s = 0; s < numbers.length; s++) {
       numbers[s] = DoubleColumn.create(slots.get(s).heading());
@@ -34,18 +40,16 @@ final class RowStore {
 
   void add(Row row) {
     fileRows.append(row.number());
-    if (slots.plant().isPresent()) {
+    if (hasPlant) {
       plants.append(row.plant());
     }
-    if (slots.period().isPresent()) {
+    if (hasPeriod) {
       periods.append(row.period());
     }
-    for (int s = 0; s < numbers.length; s++) {
-      if (slots.get(s).kind().numeric()) {
-        numbers[s].append(row.value(s));
-        if (row.blank(s) && blanks[s]++ == 0) {
-          firstBlankRows[s] = row.number();
-        }
+    for (int s : numeric) {
+      numbers[s].append(row.value(s));
+      if (row.blank(s) && blanks[s]++ == 0) {
+        firstBlankRows[s] = row.number();
       }
     }
   }
@@ -60,12 +64,12 @@ final class RowStore {
 
   /** The plant's code; without a plant column every row is its own plant. */
   int plant(int row) {
-    return slots.plant().isPresent() ? plants.getInt(row) : row;
+    return hasPlant ? plants.getInt(row) : row;
   }
 
   /** The period's key; without a period column all rows are in one period. */
   long period(int row) {
-    return slots.period().isPresent() ? periods.getLong(row) : Periods.INTEGER;
+    return hasPeriod ? periods.getLong(row) : Periods.INTEGER;
   }
 
   int fileRow(int row) {

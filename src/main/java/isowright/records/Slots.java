@@ -75,6 +75,11 @@ final class Slots {
     return all.get(slot);
   }
 
+  /** The kind of each slot, in an array of its own for the loops over cells. */
+  Kind[] kinds() {
+    return all.stream().map(Slot::kind).toArray(Kind[]::new);
+  }
+
   /** The distinct headings that are declared. */
   Set<String> headings() {
     Set<String> headings = new LinkedHashSet<>();

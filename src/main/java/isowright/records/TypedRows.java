@@ -1,9 +1,11 @@
 package isowright.records;
 
 import isowright.records.Row.Found;
+import isowright.records.Slot.Kind;
 import java.time.LocalDateTime;
 import java.time.LocalTime;
 import java.util.List;
+import java.util.Optional;
 
 /**
  * Takes in the cells of a file and gives them their types: numbers in the declared or recognised
@@ -13,6 +15,7 @@ import java.util.List;
 final class TypedRows implements Intake {
 
   private final Slots slots;
+  private final Kind[] kinds;
   private final NumberFormat format;
   private final NumberSyntax syntax;
   private final RowRules rules;
@@ -20,8 +23,8 @@ final class TypedRows implements Intake {
   private final Row row;
   private final Place place;
 
-  /** Whether the format is only supposed, so that a number in another one stops the reading. */
   private final boolean supposed;
+  private final boolean workbook;
 
   private int[][] slotsOfColumn = {};
   private int columns;
@@ -31,15 +34,39 @@ final class TypedRows implements Intake {
   private boolean pointSeen;
   private boolean pointCertain;
 
-  TypedRows(Place place, Slots slots, KeptRows kept, NumberFormat format, boolean supposed) {
+  private TypedRows(
+      Place place,
+      Slots slots,
+      KeptRows kept,
+      NumberFormat format,
+      boolean supposed,
+      boolean workbook) {
     this.place = place;
     this.slots = slots;
+    this.kinds = slots.kinds();
     this.format = format;
     this.syntax = new NumberSyntax(format);
     this.supposed = supposed;
+    this.workbook = workbook;
     this.rules = new RowRules(place, slots, kept);
     this.plants = rules.plants();
     this.row = new Row(slots.size());
+  }
+
+  /**
+   * For a CSV file.
+   *
+   * @param supposed whether the format is only supposed, so that a number in another one stops the
+   *     reading
+   */
+  static TypedRows ofCsv(
+      Place place, Slots slots, KeptRows kept, NumberFormat format, boolean supposed) {
+    return new TypedRows(place, slots, kept, format, supposed, false);
+  }
+
+  /** For a workbook, where a number is never text. */
+  static TypedRows ofWorkbook(Place place, Slots slots, KeptRows kept) {
+    return new TypedRows(place, slots, kept, new NumberFormat('.', Optional.empty()), false, true);
   }
 
   @Override
@@ -64,11 +91,11 @@ final class TypedRows implements Intake {
     }
     anyCell = true;
     if (column >= columns) {
-      cellTooMany = true;
+      cellTooMany = !workbook;
       return;
     }
     for (int slot : slotsOfColumn[column]) {
-      switch (slots.get(slot).kind()) {
+      switch (kinds[slot]) {
         case PLANT -> row.putPlant(slot, plants.codeOf(characters, start, end - start));
         case PERIOD -> period(slot, characters, start, end - start);
         default -> number(slot, characters, start, end - start);
@@ -100,13 +127,31 @@ final class TypedRows implements Intake {
 
   private void number(int slot, char[] characters, int from, int length) {
     double value = syntax.parse(characters, from, length);
-    if (Double.isFinite(value)) {
+    if (workbook) {
+      textForNumber(slot, value, new String(characters, from, length));
+    } else if (Double.isFinite(value)) {
       row.put(slot, value);
       if (supposed && !pointCertain) {
         weigh(NumberEvidence.shape(characters, from, length));
       }
-      return;
+    } else {
+      faultyNumber(slot, value, characters, from, length);
     }
+  }
+
+  private void textForNumber(int slot, double value, String text) {
+    Slot declared = slots.get(slot);
+    row.fault(
+        slot,
+        () ->
+            new Found(
+                text,
+                Double.isNaN(value)
+                    ? CellFault.notNumber(text, declared, format)
+                    : CellFault.numberStoredAsText()));
+  }
+
+  private void faultyNumber(int slot, double value, char[] characters, int from, int length) {
     if (supposed
         && Double.isNaN(value)
         && NumberEvidence.shape(characters, from, length) != NumberEvidence.Shape.NO_NUMBER) {
@@ -143,7 +188,7 @@ final class TypedRows implements Intake {
       return;
     }
     for (int slot : slotsOfColumn[column]) {
-      switch (slots.get(slot).kind()) {
+      switch (kinds[slot]) {
         case PLANT -> row.putPlant(slot, plants.codeOf(asSeen.text().strip()));
         case PERIOD -> {
           // A whole number below 2^53 is shown without decimals, whatever the cell's format.
@@ -172,7 +217,7 @@ final class TypedRows implements Intake {
     boolean day = date.toLocalTime().equals(LocalTime.MIDNIGHT);
     String shown = day ? date.toLocalDate().toString() : date.toString();
     for (int slot : slotsOfColumn[column]) {
-      switch (slots.get(slot).kind()) {
+      switch (kinds[slot]) {
         case PLANT -> row.putPlant(slot, plants.codeOf(shown));
         case PERIOD -> period(slot, shown.toCharArray(), 0, shown.length());
         default -> row.fault(slot, () -> new Found(shown, CellFault.dateForNumber()));

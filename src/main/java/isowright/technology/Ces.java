@@ -3,6 +3,7 @@ package isowright.technology;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 
 /**
  * Constant elasticity of substitution, n inputs:
@@ -245,6 +246,12 @@ public final class Ces implements Technology {
     }
     into[n + 1] = -scale * PowerMean.orderSlope(logInputs, logBase, shares, -rho);
     into[n + 2] = PowerMean.log(logInputs, logBase, shares, -rho);
+  }
+
+  /** The closed form, the linear or the Leontief one where ρ is; empty outside the region. */
+  @Override
+  public Optional<ConditionalDemand> conditionalDemand() {
+    return CesDemand.of(scaling.logBase(), constant, shares, rho, scale);
   }
 
   private static double sum(double[] values) {

@@ -3,6 +3,7 @@ package isowright.technology;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Optional;
 
 /**
  * Cobb-Douglas: ln Q = constant + Σ_i β_i z_i, z_i = ln x_i − ln base_i.
@@ -124,6 +125,17 @@ public final class CobbDouglas implements Technology {
     for (int i = 0; i < coefficients.length; i++) {
       into[i + 1] = logInputs[i] - logBase[i];
     }
+  }
+
+  /** The closed form, where every output elasticity is positive. */
+  @Override
+  public Optional<ConditionalDemand> conditionalDemand() {
+    for (double coefficient : coefficients) {
+      if (!(coefficient > 0)) {
+        return Optional.empty();
+      }
+    }
+    return Optional.of(new CobbDouglasDemand(scaling.logBase(), constant, coefficients));
   }
 
   private static final class Description implements LinearForm {

@@ -122,20 +122,19 @@ public final class Elasticities {
 
   /** Hicks' direct elasticity of substitution between i and j, i ≠ j; symmetric. */
   public double hicks(int i, int j) {
-    double a = output[i];
-    double b = output[j];
-    double numerator = a * b * (a + b);
-    double cross = 2 * a * b * hessian[i][j];
-    double first = a * a * hessian[j][j];
-    double second = b * b * hessian[i][i];
-    double denominator = numerator + cross - first - second;
+    if (i == j) {
+      return Double.NaN;
+    }
+    // Divided through by e_i e_j, so that the smallest elasticities do not underflow.
+    double sum = output[i] + output[j];
+    double cross = 2 * hessian[i][j];
+    double first = output[i] / output[j] * hessian[j][j];
+    double second = output[j] / output[i] * hessian[i][i];
+    double denominator = sum + cross - (first + second);
     double largest =
         Math.max(
-            Math.max(Math.abs(numerator), Math.abs(cross)),
-            Math.max(Math.abs(first), Math.abs(second)));
-    return i == j || !(Math.abs(denominator) > SINGULAR * largest)
-        ? Double.NaN
-        : numerator / denominator;
+            Math.max(Math.abs(sum), Math.abs(cross)), Math.max(Math.abs(first), Math.abs(second)));
+    return Math.abs(denominator) > SINGULAR * largest ? sum / denominator : Double.NaN;
   }
 
   /** The Allen-Uzawa elasticity A_ij; symmetric, own ones (i = j) included. */

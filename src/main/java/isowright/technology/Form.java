@@ -1,7 +1,6 @@
 package isowright.technology;
 
 import java.util.List;
-import java.util.stream.Stream;
 
 /**
  * How a functional form presents itself to an estimator, which knows the two descriptions below and
@@ -25,10 +24,12 @@ public sealed interface Form permits LinearForm, ProfiledForm {
 
   /** The form of that name; the name must be one of {@link #names()}. */
   static Form named(String name) {
-    return Stream.of(all())
-        .flatMap(List::stream)
+    return all().stream()
         .filter(form -> form.name().equals(name))
         .findFirst()
-        .orElseThrow(() -> new IllegalArgumentException("no form is called " + name));
+        .orElseThrow(
+            () ->
+                new IllegalArgumentException(
+                    "no form is called " + name + "; there are " + String.join(", ", names())));
   }
 }

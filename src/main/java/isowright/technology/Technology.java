@@ -1,6 +1,7 @@
 package isowright.technology;
 
 import java.util.List;
+import java.util.Optional;
 
 /**
  * A production technology: what output Q a mix of inputs x = (x_1, …, x_n) yields.
@@ -70,6 +71,14 @@ public sealed interface Technology permits CobbDouglas, Ces, Translog {
    * @param into shape p, overwritten
    */
   void parameterGradient(double[] logInputs, double[] into);
+
+  /**
+   * The least-cost mix as far as this form, at these parameters, can write it down; empty where it
+   * has to be searched for, or where the parameters lie outside the economic region.
+   */
+  default Optional<ConditionalDemand> conditionalDemand() {
+    return Optional.empty();
+  }
 
   /** The number of inputs, n. */
   default int dimension() {

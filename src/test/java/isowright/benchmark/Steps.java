@@ -1,38 +1,55 @@
 package isowright.benchmark;
 
+import com.sun.management.OperatingSystemMXBean;
 import java.io.PrintStream;
+import java.lang.management.ManagementFactory;
 import java.util.Locale;
 import java.util.concurrent.Callable;
 
-/** Times steps and prints a line for each as it ends. */
+/**
+ * Times steps and prints a line for each as it ends: elapsed seconds and, since a machine is seldom
+ * idle, the processor seconds of all threads.
+ */
 final class Steps {
 
+  private final OperatingSystemMXBean system =
+      ManagementFactory.getPlatformMXBean(OperatingSystemMXBean.class);
   private final PrintStream out;
   private double total;
+  private double totalProcessor;
 
   Steps(PrintStream out) {
     this.out = out;
   }
 
-  /** A heading; the total starts anew. */
+  /** A heading; the totals start anew. */
   void heading(String text) {
     total = 0;
+    totalProcessor = 0;
     out.printf(Locale.ROOT, "%n%s%n", text);
   }
 
-  /** Runs a step once, prints its time, hands back its result. */
+  /** Runs a step once, prints its times, hands back its result. */
   <T> T time(String name, Callable<T> step) throws Exception {
+    long startProcessor = system.getProcessCpuTime();
     long start = System.nanoTime();
     T result = step.call();
     double seconds = (System.nanoTime() - start) * 1e-9;
+    double processor = (system.getProcessCpuTime() - startProcessor) * 1e-9;
     total += seconds;
-    line(name, seconds, "s");
+    totalProcessor += processor;
+    seconds(name, seconds, processor);
     return result;
   }
 
-  /** Prints the sum of the steps since the last heading. */
+  /** Prints the sums of the steps since the last heading. */
   void total() {
-    line("total", total, "s");
+    seconds("total", total, totalProcessor);
+  }
+
+  private void seconds(String name, double elapsed, double processor) {
+    out.printf(
+        Locale.ROOT, "  %-58s %10.3f s elapsed %10.3f s processor%n", name, elapsed, processor);
   }
 
   /** Prints a sentence. */
@@ -42,6 +59,6 @@ final class Steps {
 
   /** Prints a figure. */
   void line(String name, double value, String unit) {
-    out.printf(Locale.ROOT, "  %-58s %,14.3f %s%n", name, value, unit);
+    out.printf(Locale.ROOT, "  %-58s %,10.3f %s%n", name, value, unit);
   }
 }

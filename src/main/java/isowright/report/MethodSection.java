@@ -1,0 +1,247 @@
+package isowright.report;
+
+import isowright.report.Document.Block;
+import isowright.report.Document.Display;
+import isowright.report.Document.Paragraph;
+import isowright.report.Document.Points;
+import isowright.report.Document.Section;
+import isowright.study.FitFindings.Fitted;
+import isowright.study.FitFindings.Pair;
+import java.util.ArrayList;
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Set;
+
+/**
+ * Method and references: the formulas behind the figures of this report, and where they come from.
+ */
+final class MethodSection {
+
+  static final String ID = "method";
+
+  private final Material material;
+  private final Set<Source> cited = new LinkedHashSet<>();
+
+  private MethodSection(Material material) {
+    this.material = material;
+  }
+
+  static Section of(Material material) {
+    MethodSection method = new MethodSection(material);
+    List<Block> blocks = new ArrayList<>();
+    blocks.add(method.notation());
+    blocks.add(method.forms());
+    blocks.add(method.derived());
+    if (!material.findings().fits().isEmpty()) {
+      blocks.add(method.estimation());
+    }
+    if (!material.findings().plans().isEmpty()) {
+      blocks.add(method.leastCost());
+    }
+    blocks.add(method.references());
+    return new Section(ID, "Method and references", blocks);
+  }
+
+  private Paragraph notation() {
+    return new Paragraph(
+        Text.formula("Q")
+            .then(" is output, ")
+            .thenFormula("x_i")
+            .then(" the quantity of input ")
+            .thenFormula("i")
+            .then(", ")
+            .thenFormula("w_i")
+            .then(" its price, ")
+            .thenFormula("C")
+            .then(" cost, ")
+            .thenFormula("f")
+            .then(" the technology, ")
+            .thenFormula("z_i = ln(x_i/x̄_i)")
+            .then(" the log of an input divided by what it is scaled by, ")
+            .thenFormula("t")
+            .then(" the period. All logs are natural."));
+  }
+
+  private Section forms() {
+    Set<String> names = new LinkedHashSet<>();
+    material.findings().fits().forEach(fit -> names.add(fit.technology()));
+    material.findings().given().forEach(given -> names.add(given.technology()));
+    List<Block> blocks = new ArrayList<>();
+    for (String name : names) {
+      form(name, blocks);
+    }
+    return new Section(ID + "-forms", "Forms", blocks);
+  }
+
+  private void form(String name, List<Block> blocks) {
+    switch (name) {
+      case "cobb-douglas" -> {
+        blocks.add(Paragraph.of("Cobb-Douglas " + cite(Source.COBB_DOUGLAS) + ":"));
+        blocks.add(Display.of("ln Q = ln A + Σ_i β_i z_i + τ t"));
+      }
+      case "ces" -> {
+        blocks.add(
+            Paragraph.of(
+                "Constant elasticity of substitution "
+                    + cite(Source.ARROW, Source.UZAWA)
+                    + ", written at a base point, since shares have no meaning without one "
+                    + cite(Source.KLUMP)
+                    + ":"));
+        blocks.add(
+            Display.of("ln Q = ln A − {ν}/{ρ} ln Σ_i δ_i e^{−ρ z_i} + τ t, σ = {1}/{1 + ρ}"));
+      }
+      case "translog" -> {
+        blocks.add(
+            Paragraph.of(
+                "Translog "
+                    + cite(Source.CHRISTENSEN)
+                    + "; the factor ½ makes second-order coefficients second derivatives:"));
+        blocks.add(
+            Display.of(
+                "ln Q = ln A + Σ_i β_i z_i + {1}/{2} Σ_i Σ_j β_{ij} z_i z_j + τ t, β_{ij} = β_{ji}"));
+      }
+      default -> blocks.add(Paragraph.of("The form " + name + "."));
+    }
+  }
+
+  private Section derived() {
+    List<Block> blocks = new ArrayList<>();
+    blocks.add(Paragraph.of("Output elasticities and the scale elasticity, which is their sum:"));
+    blocks.add(Display.of("e_i = {∂ ln f}/{∂ ln x_i}, e = Σ_i e_i"));
+    Set<String> measures = measures();
+    if (measures.contains("hicks")) {
+      blocks.add(Paragraph.of("Direct elasticity of substitution " + cite(Source.HICKS) + ":"));
+      blocks.add(
+          Display.of(
+              "σ_{ij} = {f_i f_j (x_i f_i + x_j f_j)}/{x_i x_j (2 f_i f_j f_{ij} − f_i^2 f_{jj} −"
+                  + " f_j^2 f_{ii})}"));
+    }
+    if (measures.contains("allen")) {
+      blocks.add(
+          new Paragraph(
+              Text.of("Allen-Uzawa elasticity, with ")
+                  .thenFormula("F")
+                  .then(" the Hessian bordered by the gradient " + cite(Source.ALLEN) + ":")));
+      blocks.add(Display.of("A_{ij} = {Σ_k x_k f_k}/{x_i x_j} {F_{ij}}/{|F|}"));
+    }
+    if (measures.contains("morishima")) {
+      blocks.add(
+          Paragraph.of(
+              "Morishima elasticity; the price of the second input moves and the ratio answers "
+                  + cite(Source.BLACKORBY)
+                  + ":"));
+      blocks.add(Display.of("M_{ij} = {f_j}/{x_i} {F_{ij}}/{|F|} − {f_j}/{x_j} {F_{jj}}/{|F|}"));
+    }
+    blocks.add(
+        new Paragraph(
+            Text.of("A technology is regular at a mix where every ")
+                .thenFormula("f_i > 0")
+                .then(
+                    " and its Hessian is negative definite on the plane of equal output; both are"
+                        + " examined at every row.")));
+    return new Section(ID + "-derived", "What follows from a technology", blocks);
+  }
+
+  private Set<String> measures() {
+    Set<String> measures = new LinkedHashSet<>();
+    for (Fitted fit : material.findings().fits()) {
+      fit.substitution().stream().map(Pair::measure).forEach(measures::add);
+    }
+    material
+        .findings()
+        .given()
+        .forEach(given -> given.substitution().stream().map(Pair::measure).forEach(measures::add));
+    return measures;
+  }
+
+  private Section estimation() {
+    List<Text> points = new ArrayList<>();
+    points.add(
+        Text.of(
+            "Forms linear in their parameters by least squares through an orthogonal decomposition, with"
+                + " collinear columns found and named."));
+    if (any("ces")) {
+      points.add(
+          Text.of(
+              "CES along a grid of curvature, nonlinear least squares at every point, so that a flat or"
+                  + " inadmissible optimum is seen; the interval of the elasticity of substitution"
+                  + " comes from the profile of the sum of squares."));
+    }
+    if (with("clustered")) {
+      points.add(
+          Text.of(
+              "Covariance clustered by plant, factor G/(G − 1) · (N − 1)/(N − K), with t quantiles on"
+                  + " G − 1 degrees of freedom "
+                  + cite(Source.LIANG, Source.CAMERON)
+                  + "."));
+    }
+    if (with("robust") || with("hc3")) {
+      points.add(Text.of("Covariance robust to unequal variances " + cite(Source.MACKINNON) + "."));
+    }
+    points.add(
+        Text.of(
+            "Standard errors of derived figures by first-order propagation of the parameter covariance;"
+                + " intervals of positive figures on the log scale, so that they stay positive. Figures"
+                + " are rounded by their standard error "
+                + cite(Source.GUM)
+                + "."));
+    if (material.findings().fits().stream().anyMatch(fit -> fit.smearing().isPresent())) {
+      points.add(
+          Text.of(
+              "Predictions of output from logs by the smearing factor " + cite(Source.DUAN) + "."));
+    }
+    if (material.findings().fits().stream().anyMatch(fit -> !fit.influence().isEmpty())) {
+      points.add(Text.of("Influence by leverage and Cook’s distance " + cite(Source.COOK) + "."));
+    }
+    points.add(
+        Text.of("On inputs chosen knowing productivity, see " + cite(Source.MARSCHAK) + "."));
+    return new Section(ID + "-estimation", "Estimation", List.of(new Points(false, points)));
+  }
+
+  private boolean any(String technology) {
+    return material.findings().fits().stream().anyMatch(f -> f.technology().equals(technology));
+  }
+
+  private boolean with(String standardErrors) {
+    return material.findings().fits().stream()
+        .anyMatch(fit -> fit.how().standardErrors().equals(standardErrors));
+  }
+
+  private Section leastCost() {
+    List<Block> blocks = new ArrayList<>();
+    blocks.add(
+        Paragraph.of(
+            "The least-cost mix and its first-order conditions; the multiplier is marginal cost "
+                + cite(Source.SHEPHARD)
+                + ":"));
+    blocks.add(Display.of("C(w, Q) = min_x Σ_i w_i x_i, f(x) = Q"));
+    blocks.add(Display.of("w_i = λ f_i, λ = {∂ C}/{∂ Q}"));
+    if (!material.findings().reviews().isEmpty()) {
+      blocks.add(
+          Paragraph.of(
+              "The technical part of a gap draws the recorded mix back onto the isoquant in proportion;"
+                  + " the mix part is what remains "
+                  + cite(Source.FARRELL, Source.KOPP)
+                  + "."));
+    }
+    return new Section(ID + "-least-cost", "Least cost", blocks);
+  }
+
+  private Section references() {
+    List<Text> entries = new ArrayList<>();
+    cited.stream()
+        .sorted((a, b) -> a.authors().compareTo(b.authors()))
+        .forEach(source -> entries.add(source.entry()));
+    return new Section(ID + "-references", "References", List.of(new Points(false, entries)));
+  }
+
+  /** "(Arrow et al. 1961; Uzawa 1962)"; what is cited is listed. */
+  private String cite(Source... sources) {
+    List<String> names = new ArrayList<>();
+    for (Source source : sources) {
+      cited.add(source);
+      names.add(source.cited());
+    }
+    return "(" + String.join("; ", names) + ")";
+  }
+}

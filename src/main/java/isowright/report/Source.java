@@ -1,0 +1,121 @@
+package isowright.report;
+
+/** The publications that the method section cites. */
+enum Source {
+  ALLEN(
+      "Allen 1938",
+      "Allen, R. G. D. (1938)",
+      "Mathematical Analysis for Economists",
+      "London: Macmillan"),
+  ARROW(
+      "Arrow et al. 1961",
+      "Arrow, K. J., Chenery, H. B., Minhas, B. S. and Solow, R. M. (1961)",
+      "Capital-Labor Substitution and Economic Efficiency",
+      "Review of Economics and Statistics 43, 225–250"),
+  BLACKORBY(
+      "Blackorby and Russell 1989",
+      "Blackorby, C. and Russell, R. R. (1989)",
+      "Will the Real Elasticity of Substitution Please Stand Up?",
+      "American Economic Review 79, 882–888"),
+  CAMERON(
+      "Cameron and Miller 2015",
+      "Cameron, A. C. and Miller, D. L. (2015)",
+      "A Practitioner’s Guide to Cluster-Robust Inference",
+      "Journal of Human Resources 50, 317–372"),
+  CHRISTENSEN(
+      "Christensen, Jorgenson and Lau 1973",
+      "Christensen, L. R., Jorgenson, D. W. and Lau, L. J. (1973)",
+      "Transcendental Logarithmic Production Frontiers",
+      "Review of Economics and Statistics 55, 28–45"),
+  COBB_DOUGLAS(
+      "Cobb and Douglas 1928",
+      "Cobb, C. W. and Douglas, P. H. (1928)",
+      "A Theory of Production",
+      "American Economic Review 18, Supplement, 139–165"),
+  COOK(
+      "Cook 1977",
+      "Cook, R. D. (1977)",
+      "Detection of Influential Observation in Linear Regression",
+      "Technometrics 19, 15–18"),
+  DUAN(
+      "Duan 1983",
+      "Duan, N. (1983)",
+      "Smearing Estimate: A Nonparametric Retransformation Method",
+      "Journal of the American Statistical Association 78, 605–610"),
+  FARRELL(
+      "Farrell 1957",
+      "Farrell, M. J. (1957)",
+      "The Measurement of Productive Efficiency",
+      "Journal of the Royal Statistical Society, Series A 120, 253–290"),
+  GUM(
+      "JCGM 2008",
+      "JCGM (2008)",
+      "Evaluation of Measurement Data: Guide to the Expression of Uncertainty in Measurement",
+      "JCGM 100:2008"),
+  HICKS("Hicks 1932", "Hicks, J. R. (1932)", "The Theory of Wages", "London: Macmillan"),
+  KLUMP(
+      "Klump and de La Grandville 2000",
+      "Klump, R. and de La Grandville, O. (2000)",
+      "Economic Growth and the Elasticity of Substitution: Two Theorems and Some Suggestions",
+      "American Economic Review 90, 282–291"),
+  KOPP(
+      "Kopp and Diewert 1982",
+      "Kopp, R. J. and Diewert, W. E. (1982)",
+      "The Decomposition of Frontier Cost Function Deviations into Measures of Technical and"
+          + " Allocative Efficiency",
+      "Journal of Econometrics 19, 319–331"),
+  LIANG(
+      "Liang and Zeger 1986",
+      "Liang, K.-Y. and Zeger, S. L. (1986)",
+      "Longitudinal Data Analysis Using Generalized Linear Models",
+      "Biometrika 73, 13–22"),
+  MACKINNON(
+      "MacKinnon and White 1985",
+      "MacKinnon, J. G. and White, H. (1985)",
+      "Some Heteroskedasticity-Consistent Covariance Matrix Estimators with Improved Finite Sample"
+          + " Properties",
+      "Journal of Econometrics 29, 305–325"),
+  MARSCHAK(
+      "Marschak and Andrews 1944",
+      "Marschak, J. and Andrews, W. H. (1944)",
+      "Random Simultaneous Equations and the Theory of Production",
+      "Econometrica 12, 143–205"),
+  SHEPHARD(
+      "Shephard 1953",
+      "Shephard, R. W. (1953)",
+      "Cost and Production Functions",
+      "Princeton: Princeton University Press"),
+  UZAWA(
+      "Uzawa 1962",
+      "Uzawa, H. (1962)",
+      "Production Functions with Constant Elasticities of Substitution",
+      "Review of Economic Studies 29, 291–299");
+
+  private final String cited;
+  private final String authors;
+  private final String title;
+  private final String place;
+
+  Source(String cited, String authors, String title, String place) {
+    this.cited = cited;
+    this.authors = authors;
+    this.title = title;
+    this.place = place;
+  }
+
+  /** How it is cited in a sentence. */
+  String cited() {
+    return cited;
+  }
+
+  /** Authors and year. */
+  String authors() {
+    return authors;
+  }
+
+  /** The entry in the list of references. */
+  Text entry() {
+    String end = title.endsWith("?") ? " " : ". ";
+    return Text.of(authors + ", ").thenEmphasis(title).then(end + place + ".");
+  }
+}

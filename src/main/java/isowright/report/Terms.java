@@ -1,0 +1,166 @@
+package isowright.report;
+
+/**
+ * What are the short words of the findings called in a report? Names of technologies, parameters,
+ * states and settings, in words a reader knows.
+ */
+final class Terms {
+
+  private Terms() {}
+
+  /** A technology's name; names given by the user stand as they are. */
+  static String technology(String name) {
+    return switch (name) {
+      case "cobb-douglas" -> "Cobb-Douglas";
+      case "ces" -> "CES";
+      case "translog" -> "Translog";
+      default -> name;
+    };
+  }
+
+  /** A parameter's name in words. */
+  static String parameter(String name) {
+    int colon = name.indexOf(':');
+    if (colon > 0) {
+      String rest = name.substring(colon + 1);
+      return switch (name.substring(0, colon)) {
+        case "share" -> "Share δ of " + rest;
+        case "control" -> "Control: " + rest;
+        case "period" -> "Period " + rest;
+        default -> name;
+      };
+    }
+    return switch (name) {
+      case "constant" -> "Constant, ln A";
+      case "trend" -> "Trend per period, τ";
+      case "rho" -> "Curvature ρ";
+      case "scale" -> "Scale ν";
+      default -> product(name);
+    };
+  }
+
+  private static String product(String name) {
+    int star = name.indexOf('*');
+    if (star < 0) {
+      return name;
+    }
+    String first = name.substring(0, star);
+    String second = name.substring(star + 1);
+    return first.equals(second) ? first + " squared" : first + " × " + second;
+  }
+
+  /** The state of a fit as a short label. */
+  static String state(String state) {
+    return switch (state) {
+      case "estimated" -> "estimated";
+      case "boundary" -> "at the boundary";
+      case "flat" -> "flat";
+      case "not-converged" -> "not converged";
+      case "rank-deficient" -> "rank-deficient";
+      default -> state;
+    };
+  }
+
+  /** What the state of a fit means. */
+  static String stateMeaning(String state) {
+    return switch (state) {
+      case "estimated" -> "An optimum was found and identified.";
+      case "boundary" ->
+          "The sum of squares still falls at the edge of the admissible range: the records have no"
+              + " admissible optimum under this form, and no figure is printed for it.";
+      case "flat" ->
+          "The sum of squares hardly changes over a wide range of curvature: read the interval, not"
+              + " the point.";
+      case "not-converged" ->
+          "The search did not end at an optimum, and no figure is printed for it.";
+      case "rank-deficient" ->
+          "Columns are collinear, so that the parameters are not identified, and no figure is printed"
+              + " for it.";
+      default -> "";
+    };
+  }
+
+  /** The status of a plan as a short label. */
+  static String status(String status) {
+    return switch (status) {
+      case "solved" -> "solved";
+      case "corner" -> "at a corner";
+      case "irregular" -> "no plan: irregular technology";
+      case "outside-records" -> "outside the records";
+      case "infeasible" -> "no plan: out of reach";
+      default -> status;
+    };
+  }
+
+  /** What the status of a plan means. */
+  static String statusMeaning(String status) {
+    return switch (status) {
+      case "solved" -> "Every first-order condition is met, inside the ranges of the records.";
+      case "corner" ->
+          "The least-cost mix lies at a corner: an input is not used, or a limit binds, so that the"
+              + " first-order condition of that input does not hold as an equation.";
+      case "irregular" ->
+          "The technology is not regular where the answer would lie, so that no mix is given.";
+      case "outside-records" ->
+          "The mix or the target lies outside the ranges of the records: the figures rest on the form"
+              + " of the technology and not on anything seen.";
+      case "infeasible" -> "No mix within the limits reaches the target.";
+      default -> "";
+    };
+  }
+
+  /** Whether a status needs a warning beside the result. */
+  static boolean cautionary(String status) {
+    return !status.equals("solved");
+  }
+
+  /** What was done about lasting differences between plants. */
+  static String plantEffects(String word) {
+    return switch (word) {
+      case "none" -> "one constant for all plants";
+      case "within" -> "a constant for each plant, removed by taking deviations from plant means";
+      default -> word;
+    };
+  }
+
+  /** What was done about time. */
+  static String time(String word) {
+    return switch (word) {
+      case "none" -> "no change over time";
+      case "trend" -> "a linear trend over the periods";
+      case "period-effects" -> "a constant for each period but the first";
+      default -> word;
+    };
+  }
+
+  /** How uncertainty was obtained. */
+  static String method(String word) {
+    return switch (word) {
+      case "delta" -> "first-order propagation of the parameter covariance";
+      case "profile" -> "the profile of the sum of squares";
+      case "resampling" -> "resampling of whole plants";
+      default -> word;
+    };
+  }
+
+  /** The name of an elasticity of substitution, by measure. */
+  static String measure(String measure) {
+    return switch (measure) {
+      case "hicks" -> "direct (Hicks)";
+      case "allen" -> "Allen-Uzawa";
+      case "morishima" -> "Morishima";
+      default -> measure;
+    };
+  }
+
+  /** A test's name in words. */
+  static String test(String name) {
+    return switch (name) {
+      case "constant-returns" -> "Constant returns to scale";
+      case "unit-substitution" -> "Unit elasticity of substitution";
+      case "cobb-douglas-in-translog" -> "Cobb-Douglas within translog";
+      case "plant-effects" -> "Plant effects";
+      default -> Phrases.sentence(name.replace('-', ' '));
+    };
+  }
+}
