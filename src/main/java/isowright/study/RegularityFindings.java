@@ -16,10 +16,8 @@ final class RegularityFindings {
 
   static FitFindings.Regular of(Fit fit) {
     Panel panel = fit.panel();
-    double[][] logs =
-        panel.logQuantities().stream().map(Column::toArray).toArray(double[][]::new);
-    Regularity.Count count =
-        Regularity.count(fit.numbers().technology(), logs, panel.rows());
+    double[][] logs = panel.logQuantities().stream().map(Column::toArray).toArray(double[][]::new);
+    Regularity.Count count = Regularity.count(fit.numbers().technology(), logs, panel.rows());
     Map<String, Integer> named = new LinkedHashMap<>();
     for (int i = 0; i < logs.length; i++) {
       if (count.nonMonotoneBy()[i] > 0) {
