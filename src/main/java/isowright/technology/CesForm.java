@@ -40,6 +40,11 @@ final class CesForm implements ProfiledForm {
     return List.copyOf(names);
   }
 
+  @Override
+  public LinearForm limit() {
+    return CobbDouglas.FORM;
+  }
+
   /**
    * The Cobb-Douglas limit: shares in proportion to the coefficients, scale their sum. Coefficients
    * that are not positive count as a small positive part of the others, since no share can be.

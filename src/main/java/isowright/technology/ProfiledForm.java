@@ -14,8 +14,11 @@ public non-sealed interface ProfiledForm extends Form {
   /** The names of the m inner parameters for these inputs, without {@code constant} and ρ. */
   List<String> innerNames(List<String> inputs);
 
-  /** A start for the inner parameters from Cobb-Douglas coefficients (shape n). */
-  double[] start(double[] cobbDouglasCoefficients);
+  /** The linear form to which this one tends as ρ → 0; its coefficients are the start. */
+  LinearForm limit();
+
+  /** A start for the inner parameters from the coefficients of {@link #limit()} (shape n). */
+  double[] start(double[] limitCoefficients);
 
   /**
    * The grid over which ρ is profiled, ascending, spread evenly in the elasticity of substitution.

@@ -1,0 +1,44 @@
+package isowright.estimation;
+
+/** Products of small dense matrices. */
+final class Matrices {
+
+  private Matrices() {}
+
+  /** L V L′. */
+  static double[][] sandwich(double[][] l, double[][] v) {
+    int p = l.length;
+    int k = v.length;
+    double[][] left = new double[p][k];
+    for (int i = 0; i < p; i++) {
+      for (int a = 0; a < k; a++) {
+        double weight = l[i][a];
+        if (weight != 0) {
+          for (int b = 0; b < k; b++) {
+            left[i][b] += weight * v[a][b];
+          }
+        }
+      }
+    }
+    double[][] product = new double[p][p];
+    for (int i = 0; i < p; i++) {
+      for (int j = 0; j <= i; j++) {
+        double sum = 0;
+        for (int b = 0; b < k; b++) {
+          sum += left[i][b] * l[j][b];
+        }
+        product[i][j] = sum;
+        product[j][i] = sum;
+      }
+    }
+    return product;
+  }
+
+  static double[][] identity(int n) {
+    double[][] identity = new double[n][n];
+    for (int i = 0; i < n; i++) {
+      identity[i][i] = 1;
+    }
+    return identity;
+  }
+}

@@ -1,0 +1,66 @@
+package isowright.estimation;
+
+import isowright.records.Column;
+import isowright.records.Panel;
+import isowright.regression.Groups;
+
+/**
+ * The rows of a panel as an estimator sees them: logged inputs divided by a base, logged output,
+ * and the plants as groups. Nothing is copied but the block at hand.
+ */
+final class PanelRows {
+
+  private final Panel panel;
+  private final double[] logBase;
+  private final Groups groups;
+
+  private PanelRows(Panel panel, double[] logBase, Groups groups) {
+    this.panel = panel;
+    this.logBase = logBase;
+    this.groups = groups;
+  }
+
+  static PanelRows of(Panel panel, double[] base) {
+    double[] logBase = new double[base.length];
+    for (int i = 0; i < base.length; i++) {
+      logBase[i] = Math.log(base[i]);
+    }
+    Groups groups =
+        panel.repeats()
+            ? Groups.startingAt(panel.rows(), panel.plantStarts().toArray())
+            : Groups.ofSingleRows(panel.rows());
+    return new PanelRows(panel, logBase, groups);
+  }
+
+  int count() {
+    return panel.rows();
+  }
+
+  int inputs() {
+    return logBase.length;
+  }
+
+  Groups groups() {
+    return groups;
+  }
+
+  /** A block's logged inputs divided by the base; {@code z[i][row − from]}, freshly made. */
+  double[][] logInputs(int from, int to) {
+    double[][] z = new double[logBase.length][to - from];
+    for (int i = 0; i < logBase.length; i++) {
+      Column logs = panel.logQuantities().get(i);
+      double[] column = z[i];
+      logs.copy(from, to, column);
+      double shift = logBase[i];
+      for (int r = 0; r < column.length; r++) {
+        column[r] -= shift;
+      }
+    }
+    return z;
+  }
+
+  /** Copies a block of logged output. */
+  void logOutput(int from, int to, double[] into) {
+    panel.logOutput().copy(from, to, into);
+  }
+}

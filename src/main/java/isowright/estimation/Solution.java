@@ -1,0 +1,49 @@
+package isowright.estimation;
+
+import isowright.regression.Covariance;
+import isowright.regression.Design;
+import isowright.regression.FitStatistics;
+import isowright.regression.LinearFit;
+import isowright.technology.Technology;
+import java.util.List;
+
+/**
+ * The numbers of a fit.
+ *
+ * @param technology the typical plant in the first period, with controls at zero
+ * @param names the names of the reported parameters: the technology's, then controls and time
+ * @param parameters the reported parameters, shape P
+ * @param covariance their covariance, P × P
+ * @param covarianceSource the estimator, its factor and degrees of freedom
+ * @param statistics how well the rows are described
+ * @param design the regression at the estimate (linearised where the form is not linear)
+ * @param linear its decomposition
+ * @param residuals residuals in ln Q, by row of the panel
+ * @param levels what is needed to move to another plant's productivity
+ */
+public record Solution(
+    Technology technology,
+    List<String> names,
+    double[] parameters,
+    double[][] covariance,
+    Covariance covarianceSource,
+    FitStatistics statistics,
+    Design design,
+    LinearFit linear,
+    double[] residuals,
+    PlantLevels levels) {
+
+  /** The mean of exp(residual), by which exp(predicted ln Q) is multiplied (Duan 1983). */
+  public double smearing() {
+    double sum = 0;
+    for (double residual : residuals) {
+      sum += Math.exp(residual);
+    }
+    return sum / residuals.length;
+  }
+
+  /** The index of a reported parameter; −1 if there is none of that name. */
+  public int index(String name) {
+    return names.indexOf(name);
+  }
+}

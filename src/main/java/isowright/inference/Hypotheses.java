@@ -1,0 +1,182 @@
+package isowright.inference;
+
+import isowright.estimation.Estimation;
+import isowright.estimation.Fit;
+import isowright.estimation.Solution;
+import isowright.estimation.Specification;
+import isowright.estimation.Specification.PlantEffects;
+import isowright.technology.LinearForm;
+import isowright.technology.ProfiledForm;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Locale;
+import java.util.Optional;
+
+/**
+ * The tests that belong to a fit: constant returns, unit elasticity of substitution, Cobb-Douglas
+ * within a richer form, plant effects. Each states its null in words, its statistic and law, p, and
+ * a verdict.
+ *
+ * <p>Checked against Greene (2003), example 6.2 (F(3, 21) = 1.7678; constant returns F(1, 24) =
+ * .1158) and Baltagi's table of the US states (plant effects F(47, 764) = 75.82) in {@code
+ * HypothesesTest}.
+ */
+public final class Hypotheses {
+
+  private final Fit fit;
+  private final Solution numbers;
+  private final double returnsToScale;
+  private final double substitution;
+
+  private Hypotheses(Fit fit, double returnsToScale, double substitution) {
+    this.fit = fit;
+    this.numbers = fit.numbers();
+    this.returnsToScale = returnsToScale;
+    this.substitution = substitution;
+  }
+
+  /**
+   * The tests of a usable fit.
+   *
+   * @param returnsToScale the degree of homogeneity under the null
+   * @param substitution the elasticity of substitution under the null
+   */
+  public static List<Verdict> of(Fit fit, double returnsToScale, double substitution) {
+    Hypotheses hypotheses = new Hypotheses(fit, returnsToScale, substitution);
+    List<Verdict> verdicts = new ArrayList<>();
+    verdicts.add(hypotheses.constantReturns());
+    hypotheses.substitution().ifPresent(verdicts::add);
+    hypotheses.cobbDouglas().ifPresent(verdicts::add);
+    hypotheses.plantEffects().ifPresent(verdicts::add);
+    return List.copyOf(verdicts);
+  }
+
+  private Verdict constantReturns() {
+    int n = fit.panel().inputs().size();
+    String subject =
+        returnsToScale == 1
+            ? "returns to scale are constant at every mix"
+            : "the degree of homogeneity is " + plain(returnsToScale) + " at every mix";
+    double[][] rows = restrictions(n);
+    double[] right = new double[rows.length];
+    right[0] = returnsToScale;
+    double f =
+        LinearRestrictions.statistic(rows, right, numbers.parameters(), numbers.covariance());
+    return verdict("constant-returns", subject, f, new Law.F(rows.length, degrees()));
+  }
+
+  /** The restrictions of constant returns over the reported parameters. */
+  private double[][] restrictions(int n) {
+    int all = numbers.parameters().length;
+    if (fit.specification().form() instanceof LinearForm linear) {
+      double[][] own = linear.constantReturns(n);
+      double[][] rows = new double[own.length][all];
+      for (int i = 0; i < own.length; i++) {
+        System.arraycopy(own[i], 0, rows[i], 1, own[i].length - 1);
+      }
+      return rows;
+    }
+    double[][] row = new double[1][all];
+    row[0][numbers.index("scale")] = 1;
+    return row;
+  }
+
+  private Optional<Verdict> substitution() {
+    if (!(fit.specification().form() instanceof ProfiledForm form) || fit.profile().isEmpty()) {
+      return Optional.empty();
+    }
+    double free = numbers.linear().ssr();
+    double held = Estimation.ssrAt(fit, form.curvature(substitution));
+    double scaling = fit.profile().get().scaling();
+    double ratio = numbers.residuals().length * Math.log(held / free) / scaling;
+    String null0 =
+        "the elasticity of substitution is "
+            + plain(substitution)
+            + (substitution == 1 ? " (Cobb-Douglas)" : "");
+    return Optional.of(
+        verdict("unit-substitution", null0, Math.max(ratio, 0), new Law.ChiSquared(1)));
+  }
+
+  private Optional<Verdict> cobbDouglas() {
+    int n = fit.panel().inputs().size();
+    if (!(fit.specification().form() instanceof LinearForm linear)
+        || linear.secondOrder(n).length == 0) {
+      return Optional.empty();
+    }
+    int[] places = linear.secondOrder(n);
+    double[][] rows = new double[places.length][numbers.parameters().length];
+    for (int i = 0; i < places.length; i++) {
+      rows[i][1 + places[i]] = 1;
+    }
+    double f =
+        LinearRestrictions.statistic(
+            rows, new double[places.length], numbers.parameters(), numbers.covariance());
+    return Optional.of(
+        verdict(
+            "cobb-douglas-in-translog",
+            "all second-order terms are zero, so that Cobb-Douglas is enough",
+            f,
+            new Law.F(places.length, degrees())));
+  }
+
+  /**
+   * F from the sums of squares with and without plant effects; assumes independent, equal errors.
+   */
+  private Optional<Verdict> plantEffects() {
+    Specification with = fit.specification();
+    if (with.plantEffects() != PlantEffects.WITHIN) {
+      return Optional.empty();
+    }
+    Specification without =
+        new Specification(
+            with.form(),
+            PlantEffects.NONE,
+            with.time(),
+            with.scaled(),
+            Specification.StandardErrors.CLASSICAL,
+            with.confidence());
+    Fit pooled = Estimation.fit(fit.panel(), without);
+    if (!pooled.state().usable()) {
+      return Optional.empty();
+    }
+    double free = numbers.linear().ssr();
+    double held = pooled.numbers().linear().ssr();
+    double restrictions = fit.panel().plants().size() - 1;
+    double degrees = numbers.linear().residualDegreesOfFreedom();
+    double f = (held - free) / restrictions / (free / degrees);
+    return Optional.of(
+        verdict(
+            "plant-effects", "all plants share one constant", f, new Law.F(restrictions, degrees)));
+  }
+
+  private double degrees() {
+    return numbers.covarianceSource().degreesOfFreedom();
+  }
+
+  private static Verdict verdict(String name, String null0, double statistic, Law law) {
+    double p = law.p(statistic);
+    return new Verdict(name, null0, statistic, law, p, sentence(null0, p));
+  }
+
+  /** A verdict in words that cannot contradict its p-value. */
+  static String sentence(String null0, double p) {
+    String claim = "that " + null0;
+    if (Double.isNaN(p)) {
+      return "The test " + claim + " could not be made: the covariance is singular.";
+    }
+    String chance = p < 0.001 ? "p < 0.001" : String.format(Locale.ROOT, "p = %.3f", p);
+    return p < Verdict.LEVEL
+        ? "The records speak against the claim " + claim + " (" + chance + ")."
+        : "The records do not speak against the claim "
+            + claim
+            + " ("
+            + chance
+            + "); that is not proof of it.";
+  }
+
+  private static String plain(double value) {
+    return value == Math.rint(value)
+        ? String.format(Locale.ROOT, "%.0f", value)
+        : Double.toString(value);
+  }
+}

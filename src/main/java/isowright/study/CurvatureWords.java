@@ -1,0 +1,63 @@
+package isowright.study;
+
+import isowright.estimation.CurvatureProfile;
+import isowright.estimation.Fit;
+import java.util.Locale;
+
+/** What a profile over the elasticity of substitution says, in a sentence. */
+final class CurvatureWords {
+
+  private CurvatureWords() {}
+
+  static String of(Fit fit, CurvatureProfile profile) {
+    String level = String.format(Locale.ROOT, "%.4g %%", 100 * fit.specification().confidence());
+    return switch (profile.state()) {
+      case INTERIOR ->
+          String.format(
+              Locale.ROOT,
+              "The sum of squares has its minimum inside the economic region; the %s interval of the"
+                  + " elasticity of substitution is %.3g to %.3g.",
+              level,
+              profile.substitutionLow(),
+              profile.substitutionHigh());
+      case FLAT -> flat(profile, level);
+      case BOUNDARY -> String.join(" ", fit.reasons()) + open(profile, level);
+    };
+  }
+
+  private static String flat(CurvatureProfile profile, String level) {
+    String statement = set(profile);
+    return "The sum of squares is flat along the elasticity of substitution: at "
+        + level
+        + " the records say no more than that it is "
+        + statement
+        + ". Read the interval, not the point.";
+  }
+
+  private static String open(CurvatureProfile profile, String level) {
+    return " At "
+        + level
+        + ", judged from the lowest point of the region, it is "
+        + set(profile)
+        + ".";
+  }
+
+  private static String set(CurvatureProfile profile) {
+    boolean below = profile.substitutionLow() > 0;
+    boolean above = !Double.isInfinite(profile.substitutionHigh());
+    if (below && above) {
+      return String.format(
+          Locale.ROOT,
+          "between %.3g and %.3g",
+          profile.substitutionLow(),
+          profile.substitutionHigh());
+    }
+    if (above) {
+      return String.format(Locale.ROOT, "below %.3g", profile.substitutionHigh());
+    }
+    if (below) {
+      return String.format(Locale.ROOT, "above %.3g", profile.substitutionLow());
+    }
+    return "anything at all";
+  }
+}

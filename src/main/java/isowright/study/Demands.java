@@ -1,0 +1,119 @@
+package isowright.study;
+
+import isowright.records.Column;
+import isowright.records.Nearest;
+import isowright.records.Panel;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+
+/** Checks what a study asks of its records: plants, periods and prices that they do not hold. */
+final class Demands {
+
+  private final Study study;
+  private final Optional<Panel> panel;
+  private final List<Mistake> mistakes = new ArrayList<>();
+
+  private Demands(Study study, Optional<Panel> panel) {
+    this.study = study;
+    this.panel = panel;
+  }
+
+  static void check(Study study, Optional<Panel> panel) throws StudyRefused {
+    Demands demands = new Demands(study, panel);
+    for (int q = 0; q < study.leastCost().size(); q++) {
+      demands.leastCost("least-cost[" + (q + 1) + "]", study.leastCost().get(q));
+    }
+    study.filing().ifPresent(demands::filing);
+    if (!demands.mistakes.isEmpty()) {
+      throw new StudyRefused(study.file(), demands.mistakes);
+    }
+  }
+
+  /** The mean price of an input in the last period in which any is recorded. */
+  static double meanPrice(Panel panel, int input) {
+    Column prices = panel.prices().get(input).orElseThrow();
+    for (int period = panel.periods().size() - 1; period >= 0; period--) {
+      double sum = 0;
+      int count = 0;
+      for (int r = 0; r < panel.rows(); r++) {
+        if (panel.rowPeriods().get(r) == period && Double.isFinite(prices.get(r))) {
+          sum += prices.get(r);
+          count++;
+        }
+      }
+      if (count > 0) {
+        return sum / count;
+      }
+    }
+    return Double.NaN;
+  }
+
+  private void leastCost(String key, Study.LeastCostQuestion asked) {
+    for (int i = 0; i < study.inputs().size(); i++) {
+      String input = study.inputs().get(i);
+      if (!asked.prices().containsKey(input) && !priced(i)) {
+        mistake(
+            key + ".prices",
+            "no price of "
+                + input
+                + " is stated and the records hold none; state one, or name a price or spending"
+                + " column under inputs");
+      }
+    }
+    asked.period().ifPresent(period -> period(key + ".period", period));
+    asked
+        .productivity()
+        .plant()
+        .ifPresent(
+            plant -> {
+              if (panel.isPresent() && !panel.get().plants().contains(plant)) {
+                mistake(
+                    key + ".productivity",
+                    "the records have no plant " + plant + nearest(plant, panel.get().plants()));
+              }
+            });
+  }
+
+  private boolean priced(int input) {
+    return panel
+        .map(p -> p.prices().get(input).isPresent() && Double.isFinite(meanPrice(p, input)))
+        .orElse(false);
+  }
+
+  private void filing(Study.Filing filing) {
+    filing.firstPeriod().ifPresent(period -> period("filing.periods", period));
+    filing.lastPeriod().ifPresent(period -> period("filing.periods", period));
+    for (int i = 0; i < study.inputs().size(); i++) {
+      if (!priced(i)) {
+        mistake(
+            "filing",
+            "filed costs cannot be reviewed without prices of "
+                + study.inputs().get(i)
+                + "; name a price or spending column under inputs");
+      }
+    }
+  }
+
+  private void period(String key, String period) {
+    if (panel.isPresent() && !panel.get().periods().contains(period)) {
+      List<String> periods = panel.get().periods();
+      mistake(
+          key,
+          "the records used have no period "
+              + period
+              + "; they run from "
+              + periods.get(0)
+              + " to "
+              + periods.get(periods.size() - 1));
+    }
+  }
+
+  private static String nearest(String found, List<String> allowed) {
+    return Nearest.word(found, allowed).map(word -> "; did you mean " + word + "?").orElse("");
+  }
+
+  private void mistake(String key, String message) {
+    mistakes.add(new Mistake(0, 0, key, message));
+  }
+}

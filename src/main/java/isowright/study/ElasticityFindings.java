@@ -1,0 +1,129 @@
+package isowright.study;
+
+import isowright.estimation.CurvatureProfile;
+import isowright.estimation.Fit;
+import isowright.inference.DeltaMethod;
+import isowright.inference.Estimate;
+import isowright.study.FitFindings.Pair;
+import isowright.technology.Elasticities;
+import isowright.technology.Technology;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.function.Function;
+
+/** Elasticities of a fit at the geometric mean of the sample, each with its uncertainty. */
+final class ElasticityFindings {
+
+  private final DeltaMethod delta;
+  private final List<String> inputs;
+  private final double[] mean;
+  private final Optional<CurvatureProfile> profile;
+
+  ElasticityFindings(Fit fit, DeltaMethod delta) {
+    this.delta = delta;
+    this.inputs = fit.panel().inputs();
+    this.mean = fit.meanLogInputs();
+    this.profile = fit.profile();
+  }
+
+  Map<String, Figure> output() {
+    List<Figure> figures = figures(t -> Elasticities.at(t, mean).output());
+    Map<String, Figure> named = new LinkedHashMap<>();
+    for (int i = 0; i < inputs.size(); i++) {
+      named.put(inputs.get(i), figures.get(i));
+    }
+    return named;
+  }
+
+  Figure scale() {
+    return figures(t -> new double[] {Elasticities.at(t, mean).scale()}).get(0);
+  }
+
+  /**
+   * Hicks once for a pair, Allen once for a pair, Morishima in both directions. Where one curvature
+   * rules them all, the interval is that of its profile: the delta interval misleads in a flat
+   * valley.
+   */
+  List<Pair> substitution() {
+    int n = inputs.size();
+    List<Figure> hicks = figures(t -> hicks(Elasticities.at(t, mean)));
+    List<Figure> allen = figures(t -> flat(Elasticities.at(t, mean).allen()));
+    List<Figure> morishima = figures(t -> flat(Elasticities.at(t, mean).morishima()));
+    List<Pair> pairs = new ArrayList<>();
+    for (int i = 0; i < n; i++) {
+      for (int j = i + 1; j < n; j++) {
+        pairs.add(pair(i, j, "hicks", hicks.get(i * n + j)));
+      }
+    }
+    for (int i = 0; i < n; i++) {
+      for (int j = i + 1; j < n; j++) {
+        pairs.add(pair(i, j, "allen", allen.get(i * n + j)));
+      }
+    }
+    for (int i = 0; i < n; i++) {
+      for (int j = 0; j < n; j++) {
+        if (i != j) {
+          pairs.add(pair(i, j, "morishima", morishima.get(i * n + j)));
+        }
+      }
+    }
+    return pairs;
+  }
+
+  /** ε_ij: what the quantity of i does, in percent, when the price of j rises by one percent. */
+  List<Pair> demand() {
+    int n = inputs.size();
+    List<Figure> demand = figures(t -> flat(Elasticities.at(t, mean).demand()));
+    List<Pair> pairs = new ArrayList<>();
+    for (int i = 0; i < n; i++) {
+      for (int j = 0; j < n; j++) {
+        pairs.add(new Pair(inputs.get(i), inputs.get(j), "demand", demand.get(i * n + j)));
+      }
+    }
+    return pairs;
+  }
+
+  private Pair pair(int i, int j, String measure, Figure figure) {
+    Figure shown =
+        profile
+            .map(
+                p ->
+                    Figure.estimated(
+                        figure.value(),
+                        figure.uncertainty().map(Figure.Uncertainty::standardError).orElse(0.0),
+                        p.substitutionLow(),
+                        p.substitutionHigh(),
+                        Estimate.Method.PROFILE.word()))
+            .orElse(figure);
+    return new Pair(inputs.get(i), inputs.get(j), measure, shown);
+  }
+
+  private List<Figure> figures(Function<Technology, double[]> functions) {
+    return delta.estimates(functions, DeltaMethod.Scale.LINEAR).stream()
+        .map(FitStage::figure)
+        .toList();
+  }
+
+  private double[] hicks(Elasticities at) {
+    int n = inputs.size();
+    double[] flat = new double[n * n];
+    for (int i = 0; i < n; i++) {
+      for (int j = i + 1; j < n; j++) {
+        flat[i * n + j] = at.hicks(i, j);
+      }
+    }
+    return flat;
+  }
+
+  static double[] flat(double[][] matrix) {
+    int n = matrix.length;
+    double[] flat = new double[n * n];
+    for (int i = 0; i < n; i++) {
+      System.arraycopy(matrix[i], 0, flat, i * n, n);
+    }
+    return flat;
+  }
+}

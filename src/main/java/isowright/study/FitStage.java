@@ -1,0 +1,320 @@
+package isowright.study;
+
+import isowright.estimation.CurvatureProfile;
+import isowright.estimation.EstimatedTechnology;
+import isowright.estimation.Estimation;
+import isowright.estimation.Fit;
+import isowright.estimation.Solution;
+import isowright.estimation.Specification;
+import isowright.inference.DeltaMethod;
+import isowright.inference.Estimate;
+import isowright.inference.Hypotheses;
+import isowright.inference.Law;
+import isowright.inference.Verdict;
+import isowright.records.Panel;
+import isowright.regression.FitStatistics;
+import isowright.regression.Influence;
+import isowright.study.Findings.Said;
+import isowright.study.FitFindings.Fitted;
+import isowright.study.FitFindings.Parameter;
+import isowright.study.FitFindings.Point;
+import isowright.technology.Form;
+import isowright.technology.ProfiledForm;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+
+/** Fits the forms of a study and turns each fit into findings. */
+final class FitStage {
+
+  /** Points kept of a fit for its charts; more cannot be told apart on a page. */
+  private static final int POINTS = 2000;
+
+  /** Rows named as the most influential of a fit. */
+  private static final int INFLUENTIAL = 5;
+
+  /** Below this many clusters, intervals are known to be too narrow (Cameron and Miller 2015). */
+  private static final int FEW_CLUSTERS = 30;
+
+  private final Panel panel;
+  private final Study study;
+
+  FitStage(Panel panel, Study study) {
+    this.panel = panel;
+    this.study = study;
+  }
+
+  /** Fits every form asked, in order. */
+  List<Fit> fit() {
+    return study.technologies().parallelStream()
+        .map(name -> Estimation.fit(panel, specification(name)))
+        .toList();
+  }
+
+  Specification specification(String technology) {
+    Study.Estimation how = study.estimation();
+    return new Specification(
+        Form.named(technology),
+        how.plantEffects(),
+        how.time(),
+        how.scaled(),
+        standardErrors(study),
+        how.confidence());
+  }
+
+  static Specification.StandardErrors standardErrors(Study study) {
+    boolean plants = study.records().flatMap(r -> r.roles().plant()).isPresent();
+    return study
+        .estimation()
+        .standardErrors()
+        .orElse(
+            plants ? Specification.StandardErrors.CLUSTERED : Specification.StandardErrors.ROBUST);
+  }
+
+  /** What a fit found. */
+  Fitted findings(Fit fit) {
+    return fit.state().usable() ? usable(fit) : unusable(fit);
+  }
+
+  private Fitted unusable(Fit fit) {
+    String severity = fit.state() == Fit.State.BOUNDARY ? "warning" : "error";
+    List<Said> remarks =
+        fit.reasons().stream().map(r -> Said.of(severity, fit.state().word(), r)).toList();
+    return new Fitted(
+        fit.specification().form().name(),
+        how(fit, "none: nothing was estimated", Double.NaN),
+        fit.state().word(),
+        List.of(),
+        new double[0][],
+        Optional.empty(),
+        Map.of(),
+        Optional.empty(),
+        List.of(),
+        List.of(),
+        Optional.empty(),
+        fit.profile().map(profile -> curvature(fit, profile)),
+        List.of(),
+        Map.of(),
+        Optional.empty(),
+        List.of(),
+        List.of(),
+        remarks);
+  }
+
+  private Fitted usable(Fit fit) {
+    Solution numbers = fit.numbers();
+    EstimatedTechnology typical = fit.typical();
+    DeltaMethod delta = DeltaMethod.of(typical, fit.specification().confidence());
+    ElasticityFindings elasticities = new ElasticityFindings(fit, delta);
+    FitStatistics statistics = numbers.statistics();
+    FitFindings.Regular regular = RegularityFindings.of(fit);
+    return new Fitted(
+        fit.specification().form().name(),
+        how(
+            fit,
+            plantsForGroups(numbers.covarianceSource().words()),
+            numbers.covarianceSource().degreesOfFreedom()),
+        fit.state().word(),
+        parameters(fit, delta),
+        numbers.covariance(),
+        Optional.of(
+            new FitFindings.Summary(
+                numbers.linear().ssr(),
+                statistics.rSquared(),
+                statistics.residualStandardError(),
+                statistics.logLikelihood(),
+                statistics.aic(),
+                statistics.bic(),
+                numbers.linear().residualDegreesOfFreedom())),
+        elasticities.output(),
+        Optional.of(elasticities.scale()),
+        elasticities.substitution(),
+        elasticities.demand(),
+        Optional.of(regular),
+        fit.profile().map(profile -> curvature(fit, profile)),
+        Hypotheses.of(fit, study.questions().returnsToScale(), study.questions().substitution())
+            .stream()
+            .map(FitStage::tested)
+            .toList(),
+        plantLevels(fit),
+        Optional.of(numbers.smearing()),
+        points(numbers),
+        influential(numbers),
+        remarks(fit, regular));
+  }
+
+  /** The regression knows groups of rows; here they are plants. */
+  private static String plantsForGroups(String words) {
+    return words.replace("by group", "by plant").replace("group effects", "plant effects");
+  }
+
+  private FitFindings.How how(Fit fit, String covarianceWords, double degreesOfFreedom) {
+    Specification how = fit.specification();
+    Map<String, Double> scaling = new LinkedHashMap<>();
+    if (how.scaled()) {
+      for (int i = 0; i < fit.base().length; i++) {
+        scaling.put(panel.inputs().get(i), fit.base()[i]);
+      }
+    }
+    return new FitFindings.How(
+        how.plantEffects().word(),
+        how.time().word(),
+        how.standardErrors().word(),
+        covarianceWords,
+        degreesOfFreedom,
+        scaling,
+        panel.rows(),
+        panel.plants().size());
+  }
+
+  private List<Parameter> parameters(Fit fit, DeltaMethod delta) {
+    Solution numbers = fit.numbers();
+    Law law = new Law.Student(numbers.covarianceSource().degreesOfFreedom());
+    List<Parameter> parameters = new ArrayList<>();
+    for (int k = 0; k < numbers.names().size(); k++) {
+      String name = numbers.names().get(k);
+      double value = numbers.parameters()[k];
+      double error = Math.sqrt(Math.max(0, numbers.covariance()[k][k]));
+      boolean curvature = fit.profile().isPresent() && name.equals("rho");
+      boolean zeroMeansNothing =
+          fit.profile().isPresent()
+              && (curvature || name.equals("scale") || name.startsWith("share:"));
+      Figure figure =
+          curvature
+              ? curvatureFigure(fit, value, error)
+              : figure(delta.estimate(value, error, DeltaMethod.Scale.LINEAR));
+      parameters.add(
+          new Parameter(name, figure, zeroMeansNothing ? Double.NaN : law.p(value / error)));
+    }
+    return parameters;
+  }
+
+  /** The interval of ρ is that of σ from the profile, carried over. */
+  private static Figure curvatureFigure(Fit fit, double value, double error) {
+    CurvatureProfile profile = fit.profile().orElseThrow();
+    ProfiledForm form = (ProfiledForm) fit.specification().form();
+    double low = form.curvature(profile.substitutionHigh());
+    double high = form.curvature(profile.substitutionLow());
+    return Figure.estimated(value, error, low, high, Estimate.Method.PROFILE.word());
+  }
+
+  static Figure figure(Estimate estimate) {
+    return Figure.estimated(
+        estimate.value(),
+        estimate.standardError(),
+        estimate.low(),
+        estimate.high(),
+        estimate.method().word());
+  }
+
+  private static FitFindings.Curvature curvature(Fit fit, CurvatureProfile profile) {
+    return new FitFindings.Curvature(
+        profile.state().word(),
+        CurvatureWords.of(fit, profile),
+        profile.points().stream()
+            .map(p -> new FitFindings.ProfilePoint(p.curvature(), p.substitution(), p.ssr()))
+            .toList(),
+        profile.substitutionLow(),
+        profile.substitutionHigh(),
+        profile.threshold());
+  }
+
+  private static FitFindings.Tested tested(Verdict verdict) {
+    return new FitFindings.Tested(
+        verdict.name(),
+        verdict.nullHypothesis(),
+        verdict.statistic(),
+        verdict.law().name(),
+        verdict.law().degreesOfFreedom(),
+        verdict.p(),
+        verdict.sentence());
+  }
+
+  private Map<String, Double> plantLevels(Fit fit) {
+    if (fit.specification().plantEffects() != Specification.PlantEffects.WITHIN) {
+      return Map.of();
+    }
+    double[] levels = fit.numbers().levels().relative();
+    Map<String, Double> named = new LinkedHashMap<>();
+    for (int p = 0; p < levels.length; p++) {
+      named.put(panel.plants().get(p), levels[p]);
+    }
+    return named;
+  }
+
+  private List<Point> points(Solution numbers) {
+    int step = Math.max(1, (panel.rows() + POINTS - 1) / POINTS);
+    List<Point> points = new ArrayList<>();
+    for (int r = 0; r < panel.rows(); r += step) {
+      double actual = panel.logOutput().get(r);
+      double residual = numbers.residuals()[r];
+      points.add(
+          new Point(
+              panel.fileRows().get(r),
+              panel.plants().get(panel.plantOf(r)),
+              panel.periods().get(panel.rowPeriods().get(r)),
+              actual,
+              actual - residual,
+              residual));
+    }
+    return points;
+  }
+
+  private List<FitFindings.Influential> influential(Solution numbers) {
+    return Influence.most(numbers.design(), numbers.linear(), INFLUENTIAL).stream()
+        .map(
+            row ->
+                new FitFindings.Influential(
+                    panel.fileRows().get(row.row()),
+                    panel.plants().get(panel.plantOf(row.row())),
+                    panel.periods().get(panel.rowPeriods().get(row.row())),
+                    row.leverage(),
+                    row.cooksDistance()))
+        .toList();
+  }
+
+  private List<Said> remarks(Fit fit, FitFindings.Regular regular) {
+    List<Said> remarks = new ArrayList<>();
+    fit.reasons().forEach(reason -> remarks.add(Said.of("warning", fit.state().word(), reason)));
+    int clusters = fit.numbers().covarianceSource().clusters().orElse(0);
+    boolean clustered =
+        fit.specification().standardErrors() == Specification.StandardErrors.CLUSTERED;
+    if (clustered && clusters < FEW_CLUSTERS) {
+      remarks.add(
+          Said.of(
+              "warning",
+              "few-clusters",
+              "Standard errors are clustered over only "
+                  + clusters
+                  + " plants; below about "
+                  + FEW_CLUSTERS
+                  + " such intervals tend to be too narrow. They use Student's law with "
+                  + (clusters - 1)
+                  + " degrees of freedom, which helps but does not cure it."));
+    }
+    if (regular.both() < regular.rows()) {
+      remarks.add(Said.of("warning", "irregular-rows", RegularityFindings.words(regular)));
+    }
+    if (fit.state() == Fit.State.FLAT) {
+      fit.profile()
+          .ifPresent(
+              profile ->
+                  remarks.add(
+                      Said.of("warning", "flat-curvature", CurvatureWords.of(fit, profile))));
+    }
+    if (panel.rows() > POINTS) {
+      remarks.add(
+          Said.of(
+              "note",
+              "points-thinned",
+              "Charts and findings show every "
+                  + ((panel.rows() + POINTS - 1) / POINTS)
+                  + "th row; the fit uses all "
+                  + panel.rows()
+                  + "."));
+    }
+    return remarks;
+  }
+}

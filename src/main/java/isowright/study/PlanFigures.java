@@ -1,0 +1,173 @@
+package isowright.study;
+
+import isowright.inference.DeltaMethod;
+import isowright.inference.Estimate;
+import isowright.leastcost.Minimiser;
+import isowright.leastcost.Plan;
+import isowright.leastcost.Question;
+import isowright.study.Findings.Said;
+import isowright.study.PlanFindings.CurvePoint;
+import isowright.technology.Technology;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.function.Function;
+import java.util.function.Predicate;
+
+/**
+ * The figures of a plan with their uncertainty: money and quantities on the log scale (they are
+ * positive), shares on their own. Without a delta method (a technology taken as known) all figures
+ * are exact.
+ */
+final class PlanFigures {
+
+  /** A plan's figures. */
+  record Answer(
+      Map<String, Figure> mix,
+      Optional<Figure> cost,
+      Optional<Figure> marginalCost,
+      Optional<Figure> averageCost,
+      Map<String, Figure> shares,
+      List<Said> remarks) {
+
+    static final Answer NONE =
+        new Answer(
+            Map.of(), Optional.empty(), Optional.empty(), Optional.empty(), Map.of(), List.of());
+  }
+
+  private final List<String> inputs;
+  private final Optional<DeltaMethod> delta;
+
+  PlanFigures(List<String> inputs, Optional<DeltaMethod> delta) {
+    this.inputs = inputs;
+    this.delta = delta;
+  }
+
+  Answer answer(Technology technology, Question question, Plan plan) {
+    if (!plan.answered()) {
+      return Answer.NONE;
+    }
+    int n = inputs.size();
+    List<Figure> positive = figures(technology, t -> money(t, question), DeltaMethod.Scale.LOG);
+    List<Figure> shares =
+        figures(
+            technology,
+            t -> {
+              Plan p = Minimiser.of(t).plan(question);
+              return p.answered() ? p.shares() : missing(n);
+            },
+            DeltaMethod.Scale.LINEAR);
+    List<Said> remarks = new ArrayList<>();
+    boolean unsure =
+        positive.stream()
+            .anyMatch(f -> f.uncertainty().map(u -> Double.isNaN(u.standardError())).orElse(false));
+    if (unsure) {
+      remarks.add(
+          Said.of(
+              "warning",
+              "no-interval",
+              "Beside the estimate, within a small part of a standard error, the question has no"
+                  + " regular answer, so some figures have no interval."));
+    }
+    if (Double.isInfinite(plan.marginalCost())) {
+      remarks.add(
+          Said.of(
+              "note",
+              "no-marginal-cost",
+              "No input is free to grow, so marginal cost is beyond measure."));
+    }
+    return new Answer(
+        named(positive.subList(3, 3 + n)),
+        Optional.of(positive.get(0)),
+        finite(positive.get(1)),
+        Optional.of(positive.get(2)),
+        named(shares),
+        remarks);
+  }
+
+  List<CurvePoint> curve(
+      Technology technology, Question question, double[] targets, Predicate<double[]> inside) {
+    int width = 3 + inputs.size();
+    List<Figure> all =
+        figures(
+            technology,
+            t -> {
+              double[] row = new double[targets.length * width];
+              for (int k = 0; k < targets.length; k++) {
+                System.arraycopy(money(t, question.at(targets[k])), 0, row, k * width, width);
+              }
+              return row;
+            },
+            DeltaMethod.Scale.LOG);
+    List<CurvePoint> points = new ArrayList<>();
+    for (int k = 0; k < targets.length; k++) {
+      List<Figure> figures = all.subList(k * width, (k + 1) * width);
+      if (Double.isNaN(figures.get(0).value()) || Double.isInfinite(figures.get(1).value())) {
+        continue;
+      }
+      Map<String, Double> mix = new LinkedHashMap<>();
+      double[] values = new double[inputs.size()];
+      for (int i = 0; i < values.length; i++) {
+        values[i] = figures.get(3 + i).value();
+        mix.put(inputs.get(i), values[i]);
+      }
+      points.add(
+          new CurvePoint(
+              targets[k],
+              figures.get(0),
+              figures.get(1),
+              figures.get(2),
+              mix,
+              inside.test(values)));
+    }
+    return points;
+  }
+
+  /** Cost, marginal cost, average cost, mix; NaN where there is no answer. */
+  private double[] money(Technology technology, Question question) {
+    int n = inputs.size();
+    Plan plan = Minimiser.of(technology).plan(question);
+    if (!plan.answered()) {
+      return missing(3 + n);
+    }
+    double[] row = new double[3 + n];
+    row[0] = plan.cost();
+    row[1] = plan.marginalCost();
+    row[2] = plan.cost() / question.target();
+    System.arraycopy(plan.mix(), 0, row, 3, n);
+    return row;
+  }
+
+  private List<Figure> figures(
+      Technology technology, Function<Technology, double[]> functions, DeltaMethod.Scale scale) {
+    if (delta.isEmpty()) {
+      List<Figure> exact = new ArrayList<>();
+      for (double value : functions.apply(technology)) {
+        exact.add(Figure.exact(value));
+      }
+      return exact;
+    }
+    List<Estimate> estimates = delta.get().estimates(functions, scale);
+    return estimates.stream().map(FitStage::figure).toList();
+  }
+
+  private static Optional<Figure> finite(Figure figure) {
+    return Double.isFinite(figure.value()) ? Optional.of(figure) : Optional.empty();
+  }
+
+  private Map<String, Figure> named(List<Figure> figures) {
+    Map<String, Figure> named = new LinkedHashMap<>();
+    for (int i = 0; i < figures.size(); i++) {
+      named.put(inputs.get(i), figures.get(i));
+    }
+    return named;
+  }
+
+  private static double[] missing(int count) {
+    double[] missing = new double[count];
+    java.util.Arrays.fill(missing, Double.NaN);
+    return missing;
+  }
+}

@@ -1,0 +1,85 @@
+package isowright.study;
+
+import isowright.records.Source;
+import java.io.IOException;
+import java.io.InputStream;
+import java.io.UncheckedIOException;
+import java.util.LinkedHashMap;
+import java.util.Map;
+import java.util.Properties;
+
+/** What a run was made with: version, hashes, and every setting in force, defaults included. */
+final class Settings {
+
+  private Settings() {}
+
+  static Findings.Run run(Study study) {
+    return new Findings.Run(
+        version(),
+        study.title(),
+        String.valueOf(study.file().getFileName()),
+        study.sha256(),
+        settings(study));
+  }
+
+  static Findings.Units units(Study study) {
+    Map<String, String> units = new LinkedHashMap<>();
+    for (int i = 0; i < study.inputs().size(); i++) {
+      units.put(study.inputs().get(i), study.inputUnits().get(i).orElse(""));
+    }
+    return new Findings.Units(study.outputUnit().orElse(""), units, study.money().words());
+  }
+
+  /** The program's version, from the build. */
+  static String version() {
+    try (InputStream in = Settings.class.getResourceAsStream("/isowright/version.properties")) {
+      Properties properties = new Properties();
+      if (in != null) {
+        properties.load(in);
+      }
+      return properties.getProperty("version", "unknown");
+    } catch (IOException e) {
+      throw new UncheckedIOException(e);
+    }
+  }
+
+  private static Map<String, String> settings(Study study) {
+    Map<String, String> settings = new LinkedHashMap<>();
+    study
+        .records()
+        .ifPresent(
+            records -> {
+              Source source = records.source();
+              settings.put("records.file", String.valueOf(source.file().getFileName()));
+              source.sheet().ifPresent(sheet -> settings.put("records.sheet", sheet));
+              records
+                  .keep()
+                  .firstPeriod()
+                  .ifPresent(
+                      first ->
+                          settings.put(
+                              "records.keep.periods",
+                              first + " to " + records.keep().lastPeriod().orElse("")));
+              if (!records.keep().withoutPlants().isEmpty()) {
+                settings.put(
+                    "records.keep.without-plants",
+                    String.join(", ", records.keep().withoutPlants()));
+              }
+            });
+    settings.put("inputs", String.join(", ", study.inputs()));
+    if (!study.technologies().isEmpty()) {
+      Study.Estimation how = study.estimation();
+      settings.put("technologies", String.join(", ", study.technologies()));
+      settings.put("estimation.plant-effects", how.plantEffects().word());
+      settings.put("estimation.time", how.time().word());
+      settings.put("estimation.scaling", how.scaled() ? "geometric-mean" : "none");
+      settings.put("estimation.standard-errors", FitStage.standardErrors(study).word());
+      settings.put(
+          "questions.returns-to-scale", Double.toString(study.questions().returnsToScale()));
+      settings.put("questions.substitution", Double.toString(study.questions().substitution()));
+    }
+    settings.put("estimation.confidence", Double.toString(study.estimation().confidence()));
+    settings.put("money", study.money().words());
+    return settings;
+  }
+}

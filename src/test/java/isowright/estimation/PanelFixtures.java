@@ -1,0 +1,168 @@
+package isowright.estimation;
+
+import isowright.records.Column;
+import isowright.records.Keep;
+import isowright.records.Panel;
+import isowright.records.RecordsReader;
+import isowright.records.RecordsRefused;
+import isowright.records.Roles;
+import isowright.records.Source;
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import java.util.Optional;
+import java.util.TreeSet;
+
+/** Panels for tests, from arrays and from the published files. */
+public final class PanelFixtures {
+
+  private static final Path PUBLISHED = Path.of("src/test/resources/published");
+
+  private PanelFixtures() {}
+
+  /** 27 US states, primary metals, 1957 (Greene 2003, table F6.1): a cross-section. */
+  public static Panel primaryMetals() {
+    return published(
+        "primary-metals-27-states.csv",
+        "",
+        "",
+        "output",
+        List.of(input("labour", "labor"), input("capital", "capital")),
+        List.of());
+  }
+
+  /** 30 points of a CES (Judge et al. 1988, pp. 514–515): a cross-section. */
+  public static Panel cesPoints() {
+    return published(
+        "ces-30-points.csv",
+        "",
+        "",
+        "output",
+        List.of(input("labour", "labour"), input("capital", "capital")),
+        List.of());
+  }
+
+  /** US manufacturing 1899–1922 (Cobb and Douglas 1928): many periods of one series. */
+  public static Panel manufacturing1899() {
+    return published(
+        "us-manufacturing-1899-1922.csv",
+        "",
+        "year",
+        "output",
+        List.of(input("labour", "labour"), input("capital", "capital")),
+        List.of());
+  }
+
+  /** 48 US states 1970–86 (Munnell 1990; Baltagi, table of chapter 2). */
+  public static Panel usStates() {
+    return published(
+        "us-states-public-capital.csv",
+        "state",
+        "year",
+        "gsp",
+        List.of(input("pcap", "pcap"), input("pc", "pc"), input("emp", "emp")),
+        List.of(new Roles.Control("unemp", false)));
+  }
+
+  private static Roles.Input input(String name, String column) {
+    return new Roles.Input(name, column, Optional.empty(), Optional.empty(), Optional.empty());
+  }
+
+  private static Panel published(
+      String file,
+      String plant,
+      String period,
+      String output,
+      List<Roles.Input> inputs,
+      List<Roles.Control> controls) {
+    Source source = new Source(PUBLISHED.resolve(file), Optional.empty(), Optional.empty());
+    Roles roles =
+        new Roles(
+            Optional.of(plant).filter(name -> !name.isEmpty()),
+            Optional.of(period).filter(name -> !name.isEmpty()),
+            output,
+            Optional.empty(),
+            inputs,
+            controls,
+            Optional.empty(),
+            Optional.empty());
+    try {
+      return RecordsReader.read(source, roles, Keep.ALL).panel();
+    } catch (RecordsRefused refused) {
+      throw new IllegalStateException(refused);
+    }
+  }
+
+  /** A cross-section: every row its own plant. */
+  public static Panel crossSection(double[] output, List<String> inputs, double[]... quantities) {
+    int[] plants = new int[output.length];
+    Arrays.setAll(plants, r -> r);
+    return panel(
+        plants, new int[output.length], output, inputs, List.of(quantities), List.of(), List.of());
+  }
+
+  /** A panel from arrays; rows must come sorted by plant. */
+  public static Panel panel(
+      int[] plantOfRow,
+      int[] periodOfRow,
+      double[] output,
+      List<String> inputs,
+      List<double[]> quantities,
+      List<String> controlNames,
+      List<double[]> controls) {
+    int rows = output.length;
+    List<String> plants = new ArrayList<>();
+    List<Integer> starts = new ArrayList<>();
+    for (int r = 0; r < rows; r++) {
+      if (r == 0 || plantOfRow[r] != plantOfRow[r - 1]) {
+        plants.add("P" + plantOfRow[r]);
+        starts.add(r);
+      }
+    }
+    List<Integer> periods =
+        new ArrayList<>(new TreeSet<>(Arrays.stream(periodOfRow).boxed().toList()));
+    int[] periodIndex = Arrays.stream(periodOfRow).map(p -> periods.indexOf(p)).toArray();
+    int[] fileRows = new int[rows];
+    Arrays.setAll(fileRows, r -> r + 2);
+    List<Column> columns = new ArrayList<>();
+    List<Roles.Input> roles = new ArrayList<>();
+    for (int i = 0; i < inputs.size(); i++) {
+      columns.add(Column.of(inputs.get(i), quantities.get(i)));
+      roles.add(
+          new Roles.Input(
+              inputs.get(i), inputs.get(i), Optional.empty(), Optional.empty(), Optional.empty()));
+    }
+    List<Column> controlColumns = new ArrayList<>();
+    List<Roles.Control> controlRoles = new ArrayList<>();
+    for (int c = 0; c < controls.size(); c++) {
+      controlColumns.add(Column.of(controlNames.get(c), controls.get(c)));
+      controlRoles.add(new Roles.Control(controlNames.get(c), false));
+    }
+    Column outputColumn = Column.of("output", output);
+    return new Panel(
+        new Roles(
+            Optional.of("plant"),
+            Optional.of("period"),
+            "output",
+            Optional.empty(),
+            roles,
+            controlRoles,
+            Optional.empty(),
+            Optional.empty()),
+        plants,
+        Panel.Rows.of(starts.stream().mapToInt(Integer::intValue).toArray()),
+        periods.stream().map(String::valueOf).toList(),
+        periods.stream().map(Integer::doubleValue).toList(),
+        Panel.Rows.of(periodIndex),
+        Panel.Rows.of(fileRows),
+        outputColumn,
+        outputColumn.logs(),
+        columns,
+        columns.stream().map(Column::logs).toList(),
+        inputs.stream().map(i -> Optional.<Column>empty()).toList(),
+        inputs.stream().map(i -> Optional.<Column>empty()).toList(),
+        controlColumns,
+        Optional.empty());
+  }
+}
