@@ -2,6 +2,8 @@ package isowright.study;
 
 import isowright.inference.DeltaMethod;
 import isowright.inference.Estimate;
+import isowright.leastcost.CostCurve;
+import isowright.leastcost.LeastCost;
 import isowright.leastcost.Minimiser;
 import isowright.leastcost.Plan;
 import isowright.leastcost.Question;
@@ -9,6 +11,7 @@ import isowright.study.Findings.Said;
 import isowright.study.PlanFindings.CurvePoint;
 import isowright.technology.Technology;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -50,12 +53,13 @@ final class PlanFigures {
       return Answer.NONE;
     }
     int n = inputs.size();
-    List<Figure> positive = figures(technology, t -> money(t, question), DeltaMethod.Scale.LOG);
+    List<Figure> positive =
+        figures(technology, t -> money(Minimiser.of(t), question, plan), DeltaMethod.Scale.LOG);
     List<Figure> shares =
         figures(
             technology,
             t -> {
-              Plan p = Minimiser.of(t).plan(question);
+              Plan p = Minimiser.of(t).plan(question, plan);
               return p.answered() ? p.shares() : missing(n);
             },
             DeltaMethod.Scale.LINEAR);
@@ -87,48 +91,56 @@ final class PlanFigures {
         remarks);
   }
 
+  /** The cost curve over those targets that have an answer. */
   List<CurvePoint> curve(
       Technology technology, Question question, double[] targets, Predicate<double[]> inside) {
+    CostCurve whole = CostCurve.at(Minimiser.of(technology), question, targets);
+    List<Plan> plans = new ArrayList<>();
+    List<Double> answered = new ArrayList<>();
+    for (int k = 0; k < targets.length; k++) {
+      Plan plan = whole.plans().get(k);
+      if (plan.answered() && Double.isFinite(plan.marginalCost())) {
+        plans.add(plan);
+        answered.add(targets[k]);
+      }
+    }
     int width = 3 + inputs.size();
     List<Figure> all =
         figures(
             technology,
             t -> {
-              double[] row = new double[targets.length * width];
-              for (int k = 0; k < targets.length; k++) {
-                System.arraycopy(money(t, question.at(targets[k])), 0, row, k * width, width);
+              LeastCost leastCost = Minimiser.of(t);
+              double[] rows = new double[plans.size() * width];
+              for (int k = 0; k < plans.size(); k++) {
+                double[] row = money(leastCost, question.at(answered.get(k)), plans.get(k));
+                System.arraycopy(row, 0, rows, k * width, width);
               }
-              return row;
+              return rows;
             },
             DeltaMethod.Scale.LOG);
     List<CurvePoint> points = new ArrayList<>();
-    for (int k = 0; k < targets.length; k++) {
+    for (int k = 0; k < plans.size(); k++) {
       List<Figure> figures = all.subList(k * width, (k + 1) * width);
-      if (Double.isNaN(figures.get(0).value()) || Double.isInfinite(figures.get(1).value())) {
-        continue;
-      }
       Map<String, Double> mix = new LinkedHashMap<>();
-      double[] values = new double[inputs.size()];
-      for (int i = 0; i < values.length; i++) {
-        values[i] = figures.get(3 + i).value();
-        mix.put(inputs.get(i), values[i]);
+      for (int i = 0; i < inputs.size(); i++) {
+        mix.put(inputs.get(i), plans.get(k).mix(i));
       }
       points.add(
           new CurvePoint(
-              targets[k],
+              answered.get(k),
               figures.get(0),
               figures.get(1),
               figures.get(2),
               mix,
-              inside.test(values)));
+              inside.test(plans.get(k).mix())));
     }
     return points;
   }
 
   /** Cost, marginal cost, average cost, mix; NaN where there is no answer. */
-  private double[] money(Technology technology, Question question) {
+  private double[] money(LeastCost leastCost, Question question, Plan near) {
     int n = inputs.size();
-    Plan plan = Minimiser.of(technology).plan(question);
+    Plan plan = leastCost.plan(question, near);
     if (!plan.answered()) {
       return missing(3 + n);
     }
@@ -167,7 +179,7 @@ final class PlanFigures {
 
   private static double[] missing(int count) {
     double[] missing = new double[count];
-    java.util.Arrays.fill(missing, Double.NaN);
+    Arrays.fill(missing, Double.NaN);
     return missing;
   }
 }
