@@ -26,7 +26,7 @@ final class Demands {
     }
     study.filing().ifPresent(demands::filing);
     if (!demands.mistakes.isEmpty()) {
-      throw new StudyRefused(study.file(), demands.mistakes);
+      throw new StudyRefused(study.file(), KeyPlaces.of(study.file()).located(demands.mistakes));
     }
   }
 
