@@ -63,10 +63,10 @@ final class Answer {
     return new Plan(status, NONE, Double.NaN, Double.NaN, NONE, NONE, Double.NaN, reason);
   }
 
-  /** Whether every input is within its limits. */
+  /** Whether every input is strictly within its limits. */
   boolean within() {
     for (int i = 0; i < mix.length; i++) {
-      if (!(mix[i] >= question.low(i) && mix[i] <= question.high(i))) {
+      if (!(mix[i] > question.low(i) && mix[i] < question.high(i))) {
         return false;
       }
     }

@@ -14,6 +14,12 @@ import java.util.List;
  */
 public final class Isoquant {
 
+  /**
+   * Where the elasticity of the second input is a smaller part than this, output is flat in it to
+   * rounding (1e-16/1e-12 leaves four digits of the quantity), as at an asymptote.
+   */
+  private static final double FLAT = 1e-12;
+
   private Isoquant() {}
 
   /**
@@ -52,7 +58,7 @@ public final class Isoquant {
       }
       here[second] += tau;
       technology.logGradient(here, e);
-      if (e[second] > 0 && e[first] >= 0) {
+      if (e[second] > FLAT * (e[first] + e[second]) && e[first] >= 0) {
         pairs.add(new double[] {quantity, Math.exp(here[second])});
       }
     }

@@ -22,8 +22,12 @@ final class SearchedMix implements FreeMix {
   /** The shortest part of the path that is tried before it is given up. */
   private static final double SHORTEST = 1.0 / 2048;
 
-  /** Below this share of the scale elasticity, an elasticity at the end of a path has run out. */
-  private static final double RUN_OUT = 0.02;
+  /**
+   * Prices being finite, a path ends where isoquants cease to be convex, or where all free inputs
+   * together cease to add output: their elasticities have then fallen to about this part of what
+   * they were at its start (the square root of the shortest step).
+   */
+  private static final double RUN_OUT = 0.1;
 
   /** The weight of a ridge that lets nearly singular curvature be inverted for a start. */
   private static final double RIDGE = 1e-8;
@@ -82,8 +86,10 @@ final class SearchedMix implements FreeMix {
       }
     }
     double[] from = new double[n];
+    double scale = 0;
     for (int i = 0; i < n; i++) {
       from[i] = fixed[i] ? 0 : Math.log(elasticities[i]) - start[i];
+      scale += fixed[i] ? 0 : elasticities[i];
     }
     double output = technology.logOutput(start);
     System.arraycopy(start, 0, reached, 0, n);
@@ -103,7 +109,7 @@ final class SearchedMix implements FreeMix {
       } else if (stride > SHORTEST) {
         stride /= 2;
       } else {
-        ended = lacking(fixed);
+        ended = lacking(fixed, scale);
         return false;
       }
     }
@@ -200,19 +206,21 @@ final class SearchedMix implements FreeMix {
     return DenseSystem.positiveOnPlane(part, normal, Regularity.TOLERANCE);
   }
 
-  /** What ran out at the last point reached. */
-  private String lacking(boolean[] fixed) {
+  /** What ran out at the last point reached: the free inputs' output, or convexity. */
+  private String lacking(boolean[] fixed, double startingScale) {
     double[] elasticities = new double[n];
     technology.logGradient(reached, elasticities);
-    double sum = 0;
+    double scale = 0;
+    int free = 0;
     int least = -1;
     for (int i = 0; i < n; i++) {
-      sum += Math.abs(elasticities[i]);
-      if (!fixed[i] && (least < 0 || elasticities[i] < elasticities[least])) {
-        least = i;
+      if (!fixed[i]) {
+        scale += elasticities[i];
+        free++;
+        least = least < 0 || elasticities[i] < elasticities[least] ? i : least;
       }
     }
-    if (elasticities[least] < RUN_OUT * sum) {
+    if (free == 1 || scale < RUN_OUT * startingScale) {
       return Regular.lack(technology, least, elasticities[least], reached);
     }
     return "isoquants cease to be convex to the origin beyond "

@@ -8,7 +8,9 @@
  * that never hides a corner, an irregular technology or an infeasible question.
  *
  * <p><b>Read first:</b> {@link isowright.leastcost.Question}, {@link isowright.leastcost.Plan},
- * {@link isowright.leastcost.Minimiser}.
+ * {@link isowright.leastcost.LeastCost} (who can say what a target costs), {@link
+ * isowright.leastcost.Minimiser} (how a technology does), then {@link
+ * isowright.leastcost.CostCurve} and {@link isowright.leastcost.Isoquant}.
  *
  * <p><b>Does not belong here:</b> data, estimates, intervals. This package depends on {@code
  * technology} alone.

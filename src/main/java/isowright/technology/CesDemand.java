@@ -11,7 +11,7 @@ import java.util.Optional;
  *
  * ln c being the log of the least cost of one unit of e^T and M the log of the weighted power mean
  * ({@link PowerMean}), which is exact through σ = 1 (Cobb-Douglas) and far out. Prices enter
- * relative to the first, so that nothing of the size of the logs themselves cancels.
+ * relative to the cheapest, whose quantity therefore keeps its digits however large σ is.
  *
  * <p>Where some inputs are fixed at y_j, the others form a constant-elasticity technology of their
  * own, with shares d_i = δ_i/D, D = Σ_free δ_i, and the target
@@ -134,13 +134,15 @@ final class CesDemand implements ConditionalDemand.Smooth {
       double[] logMix) {
     double sigma = 1 / (1 + rho);
     double[] v = new double[weights.length];
-    double first = 0;
+    double cheapest = Double.POSITIVE_INFINITY;
     for (int i = 0, k = 0; i < shares.length; i++) {
       if (!fixed[i]) {
-        double each = logPrices[i] + logBase[i] - logShares[i];
-        first = k == 0 ? each : first;
-        v[k++] = each - first;
+        v[k] = logPrices[i] + logBase[i] - logShares[i];
+        cheapest = Math.min(cheapest, v[k++]);
       }
+    }
+    for (int k = 0; k < v.length; k++) {
+      v[k] -= cheapest;
     }
     double logUnitCost = PowerMean.log(v, zero, weights, rho * sigma);
     for (int i = 0, k = 0; i < shares.length; i++) {

@@ -45,10 +45,10 @@ class CostLawsTest {
   @Test
   void plantedMixesAreFound() {
     RandomTechnologies random = new RandomTechnologies(1);
-    for (int k = 0; k < 6000; k++) {
+    for (int k = 0; k < 3000; k++) {
       Planted planted = random.any(k);
       Plan plan = planted.plan();
-      assertThat(plan.status()).as(planted + plan.reason()).isEqualTo(Status.SOLVED);
+      assertThat(plan.status()).as("%d: %s %s", k, planted, plan).isEqualTo(Status.SOLVED);
       for (int i = 0; i < planted.mix().length; i++) {
         double x = planted.mix()[i];
         assertThat(plan.mix(i)).as("%d: %s", k, planted).isCloseTo(x, within(MET * x));
@@ -63,7 +63,7 @@ class CostLawsTest {
   @Test
   void sharesAreDerivativesOfCostInPrices() {
     RandomTechnologies random = new RandomTechnologies(2);
-    for (int k = 0; k < 1500; k++) {
+    for (int k = 0; k < 1000; k++) {
       Planted planted = random.any(k);
       Minimiser minimiser = Minimiser.of(planted.technology());
       Question question = planted.question();
@@ -79,7 +79,7 @@ class CostLawsTest {
   @Test
   void marginalCostIsTheDerivativeOfCostInOutputAndCostRises() {
     RandomTechnologies random = new RandomTechnologies(3);
-    for (int k = 0; k < 1500; k++) {
+    for (int k = 0; k < 1000; k++) {
       Planted planted = random.any(k);
       Minimiser minimiser = Minimiser.of(planted.technology());
       Question question = planted.question();
@@ -95,7 +95,7 @@ class CostLawsTest {
   @Test
   void costIsHomogeneousOfDegreeOneInPrices() {
     RandomTechnologies random = new RandomTechnologies(4);
-    for (int k = 0; k < 1500; k++) {
+    for (int k = 0; k < 1000; k++) {
       Planted planted = random.any(k);
       Minimiser minimiser = Minimiser.of(planted.technology());
       double factor = Math.exp(random.between(-10, 10));
@@ -146,7 +146,7 @@ class CostLawsTest {
   void shortRunCostsNoLessAndTouchesTheLongRun() {
     RandomTechnologies random = new RandomTechnologies(6);
     int compared = 0;
-    for (int k = 0; k < 3000; k++) {
+    for (int k = 0; k < 1000; k++) {
       Planted planted = random.any(k);
       Minimiser minimiser = Minimiser.of(planted.technology());
       Question question = planted.question();
@@ -166,7 +166,7 @@ class CostLawsTest {
         assertThat(away.optimality()).isLessThan(1e-10);
       }
     }
-    assertThat(compared).isGreaterThan(2000);
+    assertThat(compared).isGreaterThan(700);
   }
 
   /** Le Chatelier: what is held makes demand less elastic and marginal cost steeper. */
@@ -268,7 +268,7 @@ class CostLawsTest {
   @Test
   void searchFindsWhatIsWrittenDown() {
     RandomTechnologies random = new RandomTechnologies(11);
-    for (int k = 0; k < 1500; k++) {
+    for (int k = 0; k < 1000; k++) {
       Planted planted = random.any(k % 2 == 0 ? 0 : 1);
       Question question = planted.question();
       int i = random.below(question.dimension());
