@@ -65,7 +65,8 @@ final class SheetCells extends DefaultHandler {
   }
 
   @Override
-  public void startElement(String uri, String name, String qualified, Attributes attributes) {
+  public void startElement(String uri, String name, String qualified, Attributes attributes)
+      throws SAXException {
     switch (name) {
       case "row" -> beginRow(attributes.getValue("r"));
       case "c" -> beginCell(attributes);
@@ -86,8 +87,8 @@ final class SheetCells extends DefaultHandler {
     }
   }
 
-  private void beginRow(String number) {
-    row = number == null ? row + 1 : Integer.parseInt(number);
+  private void beginRow(String number) throws SAXException {
+    row = number == null ? row + 1 : whole(number);
     column = -1;
     inHeadings = !foundHeadings;
     if (inHeadings) {
@@ -97,13 +98,13 @@ final class SheetCells extends DefaultHandler {
     }
   }
 
-  private void beginCell(Attributes attributes) {
+  private void beginCell(Attributes attributes) throws SAXException {
     String reference = attributes.getValue("r");
     column = reference == null ? column + 1 : column(reference);
     String declared = attributes.getValue("t");
     type = declared == null ? "n" : declared;
     String styled = attributes.getValue("s");
-    style = styled == null ? -1 : Integer.parseInt(styled);
+    style = styled == null ? -1 : whole(styled);
     formula = false;
     anyValue = false;
     value.setLength(0);
@@ -144,7 +145,7 @@ final class SheetCells extends DefaultHandler {
     }
   }
 
-  private void endCell() {
+  private void endCell() throws SAXException {
     if (!anyValue) {
       if (formula) {
         odd(Oddity.FORMULA_WITHOUT_VALUE, "=" + formulaText);
@@ -152,12 +153,28 @@ final class SheetCells extends DefaultHandler {
       return;
     }
     switch (type) {
-      case "s" -> text(strings.getItemAt(Integer.parseInt(value.toString())).getString());
+      case "s" -> text(shared(value.toString()));
       case "str", "inlineStr" -> text(value.toString());
       case "b" -> odd(Oddity.TRUTH_VALUE, value.toString().equals("1") ? "TRUE" : "FALSE");
       case "e" -> odd(Oddity.ERROR_VALUE, value.toString());
       case "d" -> text(value.toString());
       default -> number();
+    }
+  }
+
+  private String shared(String index) throws SAXException {
+    int at = whole(index);
+    if (at < 0 || at >= strings.getUniqueCount()) {
+      throw new SAXException("row " + row + " refers to text " + at + ", which is not there");
+    }
+    return strings.getItemAt(at).getString();
+  }
+
+  private int whole(String digits) throws SAXException {
+    try {
+      return Integer.parseInt(digits.strip());
+    } catch (NumberFormatException e) {
+      throw new SAXException("near row " + row + " stands \"" + digits + "\" for a number", e);
     }
   }
 

@@ -47,7 +47,8 @@ final class Shown {
       return String.format(Locale.ROOT, "%.5e", value);
     }
     int whole = size < 1 ? 0 : (int) Math.floor(Math.log10(size)) + 1;
-    String pattern = "0." + "#".repeat(Math.max(size < 1 ? 8 : 6 - whole, 0));
+    int decimals = size < 1 ? 8 : Math.max(6 - whole, 0);
+    String pattern = decimals == 0 ? "0" : "0." + "#".repeat(decimals);
     return new DecimalFormat(pattern, DecimalFormatSymbols.getInstance(Locale.ROOT)).format(value);
   }
 

@@ -19,6 +19,9 @@ import org.apache.poi.openxml4j.exceptions.OpenXML4JException;
 import org.apache.poi.openxml4j.exceptions.OpenXML4JRuntimeException;
 import org.apache.poi.openxml4j.opc.OPCPackage;
 import org.apache.poi.openxml4j.opc.PackageAccess;
+import org.apache.poi.openxml4j.opc.PackagePart;
+import org.apache.poi.openxml4j.opc.PackageRelationship;
+import org.apache.poi.openxml4j.opc.PackageRelationshipTypes;
 import org.apache.poi.util.XMLHelper;
 import org.apache.poi.xssf.eventusermodel.ReadOnlySharedStringsTable;
 import org.apache.poi.xssf.eventusermodel.XSSFReader;
@@ -63,6 +66,7 @@ final class XlsxRecords implements AutoCloseable {
     }
     boolean opened = false;
     try {
+      ifNoWorkbookInside();
       reader = new XSSFReader(archive);
       outline = outline();
       sheet = chosen();
@@ -74,6 +78,21 @@ final class XlsxRecords implements AutoCloseable {
         archive.revert();
       }
     }
+  }
+
+  /** An archive of parts may be a text document, or a workbook cut short. */
+  private void ifNoWorkbookInside() throws RecordsRefused {
+    for (PackageRelationship main :
+        archive.getRelationshipsByType(PackageRelationshipTypes.CORE_DOCUMENT)) {
+      PackagePart part = archive.getPart(main);
+      if (part != null && part.getContentType().matches(".*(spreadsheetml|ms-excel).*")) {
+        return;
+      }
+    }
+    throw Refusals.of(
+        "damaged-workbook",
+        "%s has no workbook in it that can be read: it is another document, or damaged. Open it in a spreadsheet program and save it as .xlsx (Excel workbook)."
+            .formatted(place.file()));
   }
 
   private String hash() throws IOException {
