@@ -8,6 +8,7 @@ import java.util.stream.Collectors;
 import picocli.CommandLine;
 import picocli.CommandLine.MissingParameterException;
 import picocli.CommandLine.Model.ArgSpec;
+import picocli.CommandLine.Model.OptionSpec;
 import picocli.CommandLine.OverwrittenOptionException;
 import picocli.CommandLine.ParameterException;
 import picocli.CommandLine.UnmatchedArgumentException;
@@ -35,17 +36,25 @@ final class ArgumentMistakes {
       return "`"
           + command.getCommandName()
           + "` lacks "
-          + missing.getMissing().stream().map(ArgSpec::paramLabel).collect(Collectors.joining(", "))
+          + missing.getMissing().stream()
+              .map(ArgumentMistakes::lacking)
+              .collect(Collectors.joining(", "))
           + ".";
     }
     if (mistake instanceof OverwrittenOptionException twice) {
-      return "an option is given twice: "
-          + twice.getOverwritten().paramLabel()
-          + " of `"
-          + command.getCommandName()
-          + "`.";
+      String option =
+          twice.getOverwritten() instanceof OptionSpec named
+              ? named.longestName()
+              : twice.getOverwritten().paramLabel();
+      return "`" + option + "` of " + name(command) + " is given twice; once is enough.";
     }
     return String.valueOf(mistake.getMessage());
+  }
+
+  private static String lacking(ArgSpec argument) {
+    return argument instanceof OptionSpec option
+        ? option.paramLabel() + " after `" + option.longestName() + "`"
+        : argument.paramLabel();
   }
 
   private static String unmatched(List<String> arguments, CommandLine command) {

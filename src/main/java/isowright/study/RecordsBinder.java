@@ -25,6 +25,9 @@ final class RecordsBinder {
   private static final Pattern INTEGER = Pattern.compile("-?[0-9]{1,9}");
   private static final Pattern DATE = Pattern.compile("[0-9]{4}-[0-9]{2}-[0-9]{2}");
 
+  /** Endings of delimited text. */
+  private static final List<String> TEXT_ENDINGS = List.of(".csv", ".tsv", ".txt");
+
   private final Path studyFile;
   private final YamlSection root;
   private final boolean present;
@@ -93,8 +96,14 @@ final class RecordsBinder {
     }
     String lower = name.get().toLowerCase(Locale.ROOT);
     boolean workbook = lower.endsWith(".xlsx");
-    if (!workbook && !lower.endsWith(".csv")) {
-      value.get().refuse("`" + YamlValue.quote(name.get()) + "` ends neither in .csv nor in .xlsx");
+    if (!workbook && TEXT_ENDINGS.stream().noneMatch(lower::endsWith)) {
+      value
+          .get()
+          .refuse(
+              "`"
+                  + YamlValue.quote(name.get())
+                  + "` ends neither in .csv (or .tsv, .txt) nor in .xlsx; export the records as one"
+                  + " of these");
       return Optional.empty();
     }
     if (!workbook && section.has("sheet")) {

@@ -16,7 +16,7 @@ import org.snakeyaml.engine.v2.nodes.Node;
  */
 final class YamlNodes {
 
-  /** Deeper nesting than any study needs; a deeper file is damaged or hostile. */
+  /** More repetitions by reference than any study needs; beyond, a short text means a huge one. */
   private static final int MOST_ALIASES = 50;
 
   private YamlNodes() {}
@@ -41,6 +41,10 @@ final class YamlNodes {
           Optional.empty(),
           "",
           "this is not a YAML 1.2 file: " + firstLine(String.valueOf(unreadable.getMessage())));
+      return Optional.empty();
+    } catch (StackOverflowError deep) {
+      // The parser descends once a level; only a file made to be deep gets it here.
+      mistakes.add(0, 0, "keys and lists are nested too deeply for a study file");
       return Optional.empty();
     }
     if (documents.isEmpty()) {

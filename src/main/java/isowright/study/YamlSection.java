@@ -53,7 +53,8 @@ final class YamlSection {
   }
 
   private String under(String key) {
-    return path.isEmpty() ? key : path + "." + key;
+    String shown = YamlValue.quote(key);
+    return path.isEmpty() ? shown : path + "." + shown;
   }
 
   /** The key path of this mapping. */

@@ -30,6 +30,7 @@ final class YamlValue {
       Pattern.compile("[-+]?(\\.[0-9]+|[0-9]+(\\.[0-9]*)?)([eE][-+]?[0-9]+)?");
   private static final Pattern INFINITE = Pattern.compile("[-+]?\\.(inf|Inf|INF)");
   private static final Pattern NOTHING = Pattern.compile("~|null|Null|NULL|");
+  private static final Pattern CONTROL = Pattern.compile("\\p{Cntrl}");
   private static final Pattern MARKED_NUMBER = Pattern.compile("[-+]?[0-9][0-9.,_' ]*");
 
   /** Longest piece of a value repeated in a message. */
@@ -62,12 +63,15 @@ final class YamlValue {
     return node instanceof ScalarNode ? node.getStartMark() : place.getStartMark();
   }
 
-  /** Any scalar that is not blank, as it is written. */
+  /** Any scalar that is not blank, as it is written: one line without control characters. */
   Optional<String> text() {
-    if (node instanceof ScalarNode scalar && !isNothing()) {
-      if (!scalar.getValue().isBlank()) {
-        return Optional.of(scalar.getValue().strip());
+    if (node instanceof ScalarNode scalar && !isNothing() && !scalar.getValue().isBlank()) {
+      String written = scalar.getValue().strip();
+      if (CONTROL.matcher(written).find()) {
+        refuse("expects one line of text without control characters, found " + found());
+        return Optional.empty();
       }
+      return Optional.of(written);
     }
     refuse("expects text, found " + found());
     return Optional.empty();
@@ -280,7 +284,7 @@ final class YamlValue {
 
   /** A piece of the file fit for one line of a message. */
   static String quote(String written) {
-    String line = written.replaceAll("\\p{Cntrl}+", " ");
+    String line = written.replaceAll("[\\p{Cntrl}]+", " ");
     return line.length() <= LONGEST_QUOTE ? line : line.substring(0, LONGEST_QUOTE) + "…";
   }
 

@@ -165,6 +165,20 @@ class StudyMistakesTest {
     assertThat(study.inputUnits()).hasSize(2).allMatch(unit -> unit.equals(Optional.of("h")));
   }
 
+  /** Texts made to exhaust a reader end in a mistake as well. */
+  @Test
+  void textsMadeToExhaust() {
+    assertThat(StudyTexts.mistakes(folder, "a: " + "[".repeat(300_000)))
+        .singleElement()
+        .satisfies(mistake -> assertThat(mistake.message()).contains("nested too deeply"));
+    StringBuilder laughs = new StringBuilder("a0: &a0 [x]\n");
+    for (int i = 1; i < 60; i++) {
+      String before = "*a" + (i - 1);
+      laughs.append("a" + i + ": &a" + i + " [" + before + ", " + before + "]\n");
+    }
+    assertThat(StudyTexts.mistakes(folder, laughs.toString())).isNotEmpty();
+  }
+
   /** Aliases that refer to themselves end in mistakes, not in a search without end. */
   @Test
   void aMappingInsideItselfIsRefused() {
