@@ -17,12 +17,12 @@ import java.util.stream.IntStream;
 final class Blocks {
 
   /**
-   * Rows a block aims at: enough to hide the cost of a call, few enough that twenty columns stay in
+   * Rows a block aims at: enough to hide the time of a call, few enough that twenty columns stay in
    * the second-level cache (2,048 × 20 × 8 bytes = 320 kB).
    */
   static final int ROWS = 2048;
 
-  /** Enough segments that several cores finish together, few enough that merging costs nothing. */
+  /** Enough segments that several cores finish together, few enough that merging takes no time. */
   private static final int MOST_SEGMENTS = 32;
 
   private final int[] bounds;

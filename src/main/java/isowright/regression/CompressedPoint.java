@@ -65,6 +65,15 @@ final class CompressedPoint implements LeastSquaresProblem.Evaluation {
     return ssr == 0 ? 0 : Math.min(1, Math.sqrt(analysis().explained() / ssr));
   }
 
+  /**
+   * The fit of the linearisation with its step left out, so that its residuals are those of the
+   * nonlinear model.
+   */
+  LinearFit atRest(Design design) {
+    return LeastSquares.fit(
+        design, analysis(), rule, new double[free.length], ssr, reading.responseSumOfSquares());
+  }
+
   @Override
   public RealMatrix getJacobian() {
     double[][] rows = new double[free.length + 1][free.length];

@@ -79,7 +79,7 @@ public final class Effects {
 
     /**
      * Subtracts the first value, then the mean: a column that is constant in the group becomes
-     * exactly zero, and a large level costs no digits.
+     * exactly zero, and a large level loses no digits.
      */
     private static void center(double[] values, int from, int to) {
       double level = values[from];

@@ -48,20 +48,8 @@ public final class LeastSquares {
     return fit(design, analysis, rule, coefficients, ssr, first.responseSumOfSquares());
   }
 
-  /**
-   * The linearisation of a nonlinear fit at its end: coefficients 0, so that its residuals are
-   * those of the nonlinear fit.
-   */
-  static LinearFit atRest(Design design, RankRule rule) {
-    Blocks blocks = Blocks.of(design.groups());
-    Reading first = Reading.of(design, blocks);
-    RankAnalysis analysis = first.analysis(design.columns(), rule);
-    double[] none = new double[design.columns().size()];
-    double ssr = SecondReading.of(design, blocks, none).sumOfSquares();
-    return fit(design, analysis, rule, none, ssr, first.responseSumOfSquares());
-  }
-
-  private static LinearFit fit(
+  /** The record of a fit with these coefficients. */
+  static LinearFit fit(
       Design design,
       RankAnalysis analysis,
       RankRule rule,

@@ -45,14 +45,6 @@ final class Matrices {
     return product;
   }
 
-  static void scale(double[][] matrix, double by) {
-    for (double[] row : matrix) {
-      for (int j = 0; j < row.length; j++) {
-        row[j] *= by;
-      }
-    }
-  }
-
   static double dot(double[] a, double[] b) {
     double sum = 0;
     for (int i = 0; i < a.length; i++) {

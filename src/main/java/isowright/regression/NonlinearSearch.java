@@ -102,16 +102,19 @@ final class NonlinearSearch implements LeastSquaresProblem {
   /**
    * Gauss-Newton steps from the best point, judged by the angle, which still resolves what the sum
    * of squares no longer can. Until the point counts as a solution a step is kept where it takes a
-   * tenth off the angle, whole or halved (large residuals make such steps overshoot); after that,
-   * only where it halves the angle.
+   * tenth off the angle, whole or halved (large residuals make such steps overshoot); after that
+   * two more are tried, each kept where it halves the angle. A step that lowers the sum of squares
+   * beyond its rounding is always kept.
    */
   private void sharpen() {
-    for (int s = 0; s < MOST_SHARPENINGS; s++) {
+    int afterwards = 0;
+    for (int s = 0; s < MOST_SHARPENINGS && afterwards < 2; s++) {
       CompressedPoint from = best.orElseThrow();
       if (from.cosine() <= SHARP) {
         return;
       }
       boolean solved = from.cosine() <= settings.orthogonality();
+      afterwards += solved ? 1 : 0;
       boolean better =
           solved ? sharper(from, 1, 0.5) : sharper(from, 1, 0.9) || sharper(from, 0.5, 0.9);
       if (!better) {
@@ -122,7 +125,9 @@ final class NonlinearSearch implements LeastSquaresProblem {
     }
   }
 
-  /** Takes a share of the Gauss-Newton step; true where the cosine falls below this share of it. */
+  /**
+   * Takes a share of the Gauss-Newton step; true where it is kept, with the angle to be reached.
+   */
   private boolean sharper(CompressedPoint from, double share, double most) {
     if (evaluations >= settings.mostEvaluations()) {
       return false;
@@ -135,8 +140,11 @@ final class NonlinearSearch implements LeastSquaresProblem {
     CompressedPoint there = read(next);
     if (!there.finite()
         || there.ssr() > from.ssr() * (1 + SSR_ROUNDING)
-        || there.analysis().rank() < from.analysis().rank()
-        || there.cosine() > most * from.cosine()) {
+        || there.analysis().rank() < from.analysis().rank()) {
+      return false;
+    }
+    boolean lower = there.ssr() < from.ssr() * (1 - SSR_ROUNDING);
+    if (!lower && there.cosine() > most * from.cosine()) {
       return false;
     }
     best = Optional.of(there);
@@ -183,7 +191,7 @@ final class NonlinearSearch implements LeastSquaresProblem {
 
   private NonlinearFit finish(CompressedPoint end, Stop stop) {
     double[] parameters = NonlinearLeastSquares.spread(end.free(), held, start);
-    LinearFit narrow = LeastSquares.atRest(design(parameters), settings.rankRule());
+    LinearFit narrow = end.atRest(design(parameters));
     double[] step =
         NonlinearLeastSquares.spread(end.analysis().coefficients(), held, new double[held.length]);
     return new NonlinearFit(

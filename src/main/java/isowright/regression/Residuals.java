@@ -2,7 +2,7 @@ package isowright.regression;
 
 /**
  * Residuals y − Xβ of a block in twice the working precision, and exact-product sums over them:
- * what lets one step of refinement recover the digits that an ill-conditioned design costs.
+ * what lets one step of refinement recover the digits that an ill-conditioned design loses.
  *
  * <p>A product x·b is split into its rounded value and its exact error by a fused multiply-add, a
  * sum by the two-sum of Knuth. Source: T. Ogita, S. M. Rump and S. Oishi, "Accurate sum and dot

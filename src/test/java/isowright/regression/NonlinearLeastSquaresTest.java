@@ -197,7 +197,8 @@ class NonlinearLeastSquaresTest {
         NonlinearLeastSquares.fit(model, set.starts()[0], Settings.STANDARD.withMostEvaluations(8));
     assertThat(fit.stop()).isEqualTo(Stop.LIMIT);
     assertThat(fit.evaluations()).isLessThanOrEqualTo(8);
-    LinearFit atStart = LeastSquares.atRest(model.linearisedAt(set.starts()[0]), RankRule.STANDARD);
+    NonlinearFit atStart =
+        NonlinearLeastSquares.fit(model, set.starts()[0], Settings.STANDARD.holding(true, true));
     assertThat(fit.ssr()).isLessThan(atStart.ssr());
   }
 
