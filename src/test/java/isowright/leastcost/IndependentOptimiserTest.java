@@ -59,7 +59,7 @@ class IndependentOptimiserTest {
       if (limits) {
         int i = random.below(n - 1);
         double x = planted.mix()[i];
-        question = question.limiting(i, x * random.between(.4, 1.1), x * random.between(1.15, 2));
+        question = question.limiting(i, x * random.between(.7, 1.3), x * random.between(1.35, 2));
       }
       Plan plan = Minimiser.of(planted.technology()).plan(question);
       if (!plan.answered()) {
