@@ -13,6 +13,7 @@ import isowright.study.Progress;
 import isowright.study.StudyFile;
 import java.nio.file.Path;
 import java.util.List;
+import java.util.Optional;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.TestInstance;
@@ -43,7 +44,7 @@ class DemoFindingsTest {
     assertThat(plan.status()).isEqualTo("solved");
     double cost = 0;
     for (int i = 0; i < truth.length; i++) {
-      assertCovers(plan.mix().get(INPUTS.get(i)), truth[i], INPUTS.get(i));
+      assertCovers(mix(plan, INPUTS.get(i)), truth[i], INPUTS.get(i));
       cost += PRICES[i] * truth[i];
     }
     assertCovers(plan.cost().orElseThrow(), cost, "cost");
@@ -54,8 +55,8 @@ class DemoFindingsTest {
     Planned plan = plan("Plan 2025, machines as installed", "ces");
     assertThat(plan.status()).isEqualTo("corner");
     double[] truth = {92_000, 42_000, 0};
-    assertThat(plan.mix().get("labour").value()).isEqualTo(truth[0]);
-    assertThat(plan.mix().get("machines").value()).isEqualTo(truth[1]);
+    assertThat(mix(plan, "labour").value()).isEqualTo(truth[0]);
+    assertThat(mix(plan, "machines").value()).isEqualTo(truth[1]);
     // More energy makes up for what machines and labour cannot: output rises in energy, so halving
     // the bracket sixty times finds the only amount that reaches the target.
     double low = 1e5;
@@ -69,7 +70,7 @@ class DemoFindingsTest {
         high = truth[2];
       }
     }
-    assertCovers(plan.mix().get("energy"), truth[2], "energy");
+    assertCovers(mix(plan, "energy"), truth[2], "energy");
     assertThat(plan.cost().orElseThrow().value())
         .isGreaterThan(plan("Plan 2025, long run", "ces").cost().orElseThrow().value());
   }
@@ -123,6 +124,10 @@ class DemoFindingsTest {
         .filter(p -> p.question().equals(question) && p.technology().equals(technology))
         .findFirst()
         .orElseThrow();
+  }
+
+  private static Figure mix(Planned plan, String input) {
+    return Optional.ofNullable(plan.mix().get(input)).orElseThrow();
   }
 
   private static void assertCovers(Figure figure, double truth, String name) {
