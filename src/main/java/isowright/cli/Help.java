@@ -12,7 +12,7 @@ import picocli.CommandLine.Spec;
 /** {@code help [COMMAND]}: what can be asked, with examples. */
 @Command(
     name = "help",
-    header = "show help, on one command or on all",
+    header = {"show help, on one command or on all", ""},
     synopsisHeading = "Use it so:%n",
     customSynopsis = "  isowright help [COMMAND]",
     parameterListHeading = "%nWhat to give%n",

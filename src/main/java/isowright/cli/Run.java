@@ -1,6 +1,67 @@
 package isowright.cli;
 
-/** Being written. */
-public final class Run {
-  private Run() {}
+import java.nio.file.Path;
+import java.util.Objects;
+import java.util.Optional;
+import java.util.concurrent.Callable;
+import org.jspecify.annotations.Nullable;
+import picocli.CommandLine.Command;
+import picocli.CommandLine.Option;
+import picocli.CommandLine.Parameters;
+import picocli.CommandLine.ParentCommand;
+
+/** {@code run}: carries out a study. The work is done in {@link RunCommand}. */
+@Command(
+    name = "run",
+    sortOptions = false,
+    header = {"carry out a study: fit, test, plan, review, and write the report", ""},
+    description = {
+      "",
+      "Writes report.html, findings.json, technology.json and charts/ into a folder, and",
+      "prints the answer in brief. The folder is replaced as a whole when everything has",
+      "been computed: a run that fails leaves an earlier report as it was."
+    },
+    synopsisHeading = "Use it so:%n",
+    customSynopsis = "  isowright run STUDY [--into DIR] [--quiet]",
+    parameterListHeading = "%nWhat to give%n",
+    optionListHeading = "%nOptions%n",
+    footer = {
+      "",
+      "Examples",
+      "  isowright run study.yaml                        the report goes to reports/study",
+      "  isowright run study.yaml --into filing-2024",
+      "  isowright run study.yaml --quiet > answer.txt"
+    })
+final class Run implements Callable<Integer> {
+
+  @ParentCommand private @Nullable Main main;
+
+  @Parameters(paramLabel = "STUDY", description = "the study file")
+  private @Nullable Path study;
+
+  @Option(
+      names = "--into",
+      paramLabel = "DIR",
+      description = "the folder of the report; reports/ and the name of the study if left out")
+  private @Nullable Path into;
+
+  @Option(names = "--quiet", description = "show no progress")
+  private boolean quiet;
+
+  @Option(
+      names = {"-h", "--help"},
+      usageHelp = true,
+      description = "show this and end")
+  @SuppressWarnings("unused") // the parser acts on it
+  private boolean help;
+
+  @Override
+  public Integer call() throws Exception {
+    return RunCommand.run(
+            Objects.requireNonNull(study),
+            Optional.ofNullable(into),
+            quiet,
+            Objects.requireNonNull(main))
+        .number();
+  }
 }
