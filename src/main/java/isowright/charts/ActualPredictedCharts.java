@@ -93,8 +93,13 @@ final class ActualPredictedCharts {
     Axis x = Axis.fitting("fitted " + Words.output(setting.units()), least, most);
     Axis y = Axis.fitting("actual " + Words.output(setting.units()), least, most);
     Plot plot = new Plot(x, y, ActualPredictedCharts.SQUARE, ActualPredictedCharts.SQUARE);
-    equality(plot);
-    plot.dots("rows", fitted, actual, Dot.NEAR);
+    equality(plot, "equal");
+    List<Point> others = drawn.stream().filter(p -> !influential.contains(p)).toList();
+    plot.dots(
+        "rows",
+        others.stream().mapToDouble(p -> Math.exp(p.fitted())).toArray(),
+        others.stream().mapToDouble(p -> Math.exp(p.actual())).toArray(),
+        Dot.NEAR);
     for (Point p : influential) {
       double[] at = {Math.exp(p.fitted())};
       double[] value = {Math.exp(p.actual())};
@@ -113,7 +118,7 @@ final class ActualPredictedCharts {
   }
 
   /** The line on which both axes, which have the same ends, are equal. */
-  static void equality(Plot plot) {
+  static void equality(Plot plot, String words) {
     double[] ends = {plot.x().low(), plot.x().high()};
     plot.line("equality", ends, ends, Pen.MAIN_EDGE);
     double[] places = new double[4];
@@ -124,6 +129,6 @@ final class ActualPredictedCharts {
               ? ends[0] * Math.pow(ends[1] / ends[0], share)
               : ends[0] + share * (ends[1] - ends[0]);
     }
-    plot.labelAlong("equal", places, places, Style.DEEP, Side.WEST, Side.SOUTH_EAST);
+    plot.labelAlong(words, places, places, Style.DEEP, Side.WEST, Side.SOUTH_EAST);
   }
 }

@@ -151,7 +151,15 @@ final class CostCurveCharts {
       double[] y = {average[at]};
       plot.dots("least average cost", x, y, Dot.STEP);
       plot.label(
-          "least average cost", x[0], y[0], Style.DEEP, Side.SOUTH, Side.NORTH, Side.SOUTH_EAST);
+          "least average cost",
+          x[0],
+          y[0],
+          Style.DEEP,
+          Side.SOUTH,
+          Side.NORTH,
+          Side.SOUTH_WEST,
+          Side.SOUTH_EAST,
+          Side.NORTH_WEST);
     }
     curveLabel(plot, "average cost", average, Style.DEEP);
     curveLabel(plot, "marginal cost", marginal, Style.WARM);
@@ -223,6 +231,7 @@ final class CostCurveCharts {
 
   /** Shades the stretches whose mixes lie outside the records. */
   private void outside(Plot plot) {
+    boolean any = false;
     for (int i = 0; i < curve.size(); i++) {
       if (curve.get(i).inside()) {
         continue;
@@ -234,6 +243,10 @@ final class CostCurveCharts {
       double left = from == 0 ? plot.x().low() : (targets[from - 1] + targets[from]) / 2;
       double right = i + 1 == curve.size() ? plot.x().high() : (targets[i] + targets[i + 1]) / 2;
       plot.region("outside the records", left, right);
+      any = true;
+    }
+    if (any) {
+      plot.keyOfShade("outside the records");
     }
   }
 }

@@ -149,9 +149,7 @@ final class ElasticityCharts {
   /** "0.42", or "0.42 to 0.437". */
   private static String span(List<Item> items) {
     double[] values = items.stream().mapToDouble(i -> i.figure().value()).toArray();
-    String least = Numbers.brief(Curves.least(values));
-    String most = Numbers.brief(Curves.most(values));
-    return least.equals(most) ? least : least + " to " + most;
+    return Numbers.span(Curves.least(values), Curves.most(values));
   }
 
   /** Where the intervals lie against one; nothing for figures without intervals. */

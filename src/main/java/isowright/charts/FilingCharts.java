@@ -174,7 +174,7 @@ final class FilingCharts {
             Axis.fitting("filed cost" + money, least, most),
             ActualPredictedCharts.SQUARE,
             ActualPredictedCharts.SQUARE);
-    ActualPredictedCharts.equality(plot);
+    ActualPredictedCharts.equality(plot, "filed = least");
     if (uncertain()) {
       plot.intervals(
           "interval of least cost",

@@ -64,6 +64,10 @@ final class Library {
     styler.setPlotMargin(0);
     styler.setPlotContentSize(1);
     styler.setPlotTicksMarksVisible(false);
+    // The grid would be painted over these lines where a tick lies at the end of an axis.
+    styler.setAxisTicksLineVisible(false);
+    styler.setXAxisLogarithmicDecadeOnly(false);
+    styler.setYAxisLogarithmicDecadeOnly(false);
     styler.setPlotGridLinesColor(Style.GRID);
     styler.setPlotGridLinesStroke(new BasicStroke(1f));
     styler.setAxisTickMarksColor(Style.AXIS);

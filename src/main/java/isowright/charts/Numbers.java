@@ -17,22 +17,44 @@ final class Numbers {
 
   /** For sentences and labels: three significant digits, so 41,297.3 becomes 41,300. */
   static String brief(double value) {
-    return typographic(rounded(value, 3, false));
+    return typographic(rounded(value, 3));
   }
 
-  /** For sentences, with three significant digits all shown: 0.5 becomes 0.500. */
-  static String briefPadded(double value) {
-    return typographic(rounded(value, 3, true));
+  /** Two numbers with as many decimals as the greater needs for three digits: 0.420 to 0.437. */
+  static String span(double least, double most) {
+    int decimals = decimalsFor(Math.max(Math.abs(least), Math.abs(most)));
+    String from = decimals(least, decimals);
+    String to = decimals(most, decimals);
+    return from.equals(to) ? from : from + " to " + to;
+  }
+
+  /** An estimate with its interval, decimals alike: 0.420 (0.292 to 0.548). */
+  static String interval(double value, double low, double high) {
+    if (!(high > low) || Double.isInfinite(low) || Double.isInfinite(high)) {
+      return brief(value);
+    }
+    int decimals = decimalsFor(high - low);
+    return decimals(value, decimals)
+        + " ("
+        + decimals(low, decimals)
+        + " to "
+        + decimals(high, decimals)
+        + ")";
+  }
+
+  /** The decimals that show three significant digits of a size. */
+  private static int decimalsFor(double size) {
+    return size > 0 ? Math.max(0, Math.min(9, 2 - (int) Math.floor(Math.log10(size)))) : 0;
   }
 
   /** For numbers stated by the reader, such as a target: up to eight significant digits. */
   static String stated(double value) {
-    return typographic(rounded(value, 8, false));
+    return typographic(rounded(value, 8));
   }
 
   /** For tables: six significant digits and an ASCII minus sign, ready to be copied. */
   static String tabular(double value) {
-    return Double.isNaN(value) ? "" : rounded(value, 6, false);
+    return Double.isNaN(value) ? "" : rounded(value, 6);
   }
 
   /** For tables, of a number that may be absent. */
@@ -63,7 +85,7 @@ final class Numbers {
     return Math.max(0, Math.min(9, exact.scale()));
   }
 
-  private static String rounded(double value, int digits, boolean padded) {
+  private static String rounded(double value, int digits) {
     if (Double.isNaN(value)) {
       return "not known";
     }
@@ -77,9 +99,9 @@ final class Numbers {
     if (size >= 1e15 || size < 1e-6) {
       return String.format(Locale.ROOT, "%." + (digits - 1) + "e", value);
     }
-    BigDecimal short_ = new BigDecimal(value).round(new MathContext(digits, RoundingMode.HALF_UP));
-    int decimals = padded ? Math.max(0, short_.scale()) : short_.stripTrailingZeros().scale();
-    return grouped(short_.doubleValue(), Math.max(0, decimals));
+    BigDecimal shortened =
+        new BigDecimal(value).round(new MathContext(digits, RoundingMode.HALF_UP));
+    return grouped(shortened.doubleValue(), Math.max(0, shortened.stripTrailingZeros().scale()));
   }
 
   private static String grouped(double value, int decimals) {

@@ -8,9 +8,11 @@ import isowright.charts.Plot.Layer;
 import isowright.charts.Plot.Line;
 import isowright.charts.Plot.Row;
 import isowright.charts.Style.Pen;
+import java.awt.BasicStroke;
 import java.awt.Color;
 import java.awt.geom.AffineTransform;
 import java.awt.geom.Line2D;
+import java.awt.geom.Path2D;
 import java.awt.geom.Rectangle2D;
 import java.util.Optional;
 import org.knowm.xchart.XYChart;
@@ -23,6 +25,9 @@ final class Painter implements Placement.Screen {
 
   private static final int ROW_OF_LETTERS = 24;
   private static final int EDGE = 12;
+
+  /** Room below the library's part; its own margin comes on top. */
+  private static final int BELOW = 16;
 
   private final Plot plot;
   private final Recording recording = new Recording();
@@ -47,6 +52,7 @@ final class Painter implements Placement.Screen {
     Library.label(chart, ticks, plot.rows().isEmpty());
     chart.paint(canvas, (int) area.getWidth(), (int) area.getHeight());
     ticks.write(recording);
+    axisLines();
     axisTitles();
     key();
     rows();
@@ -69,10 +75,7 @@ final class Painter implements Placement.Screen {
       right = Math.max(right, Letters.width(row.value(), Style.LETTERS, false) + 4);
     }
     return new Rectangle2D.Double(
-        Math.rint(left),
-        top,
-        Math.rint(plot.width() - left - right),
-        plot.height() - top - ROW_OF_LETTERS);
+        Math.rint(left), top, Math.rint(plot.width() - left - right), plot.height() - top - BELOW);
   }
 
   private static boolean hasTitle(Plot plot) {
@@ -97,9 +100,20 @@ final class Painter implements Placement.Screen {
     return area.getY() + low + plot.y().share(value) * (high - low);
   }
 
+  private void axisLines() {
+    double left = x(plot.x().low());
+    double bottom = y(plot.y().low());
+    Path2D.Double corner = new Path2D.Double();
+    corner.moveTo(left, plot.rows().isEmpty() ? y(plot.y().high()) : bottom);
+    corner.lineTo(left, bottom);
+    corner.lineTo(x(plot.x().high()), bottom);
+    recording.outline(
+        corner, new AffineTransform(), Style.AXIS, new BasicStroke(1.2f), Optional.empty());
+  }
+
   private void axisTitles() {
     if (hasTitle(plot)) {
-      quiet(plot.y().title(), EDGE, area.getY() - 4, Anchor.START);
+      quiet(plot.y().title(), EDGE, area.getY() + 3, Anchor.START);
     }
     double middle = (x(plot.x().low()) + x(plot.x().high())) / 2;
     quiet(plot.x().title(), middle, plot.height() - 8.0, Anchor.MIDDLE);
@@ -124,6 +138,13 @@ final class Painter implements Placement.Screen {
             pen.stroke(),
             Optional.empty());
         x += 37;
+      } else {
+        recording.filling(
+            new Rectangle2D.Double(x, middle - 6, 18, 12),
+            new AffineTransform(),
+            new Ink(Style.SHADE, "key"),
+            Optional.empty());
+        x += 25;
       }
       quiet(key.text(), x, y, Anchor.START);
       x += Letters.width(key.text(), Style.LETTERS, false) + 22;

@@ -13,7 +13,7 @@ import java.util.List;
  */
 final class Placement {
 
-  private static final double[] DISTANCES = {7, 14, 24, 38};
+  private static final double[] DISTANCES = {7, 12, 18, 26};
   private static final double OUTSIDE = 1000;
   private static final double ON_LABEL = 400;
   private static final double ON_LINE = 12;
@@ -78,7 +78,7 @@ final class Placement {
       for (int d = 0; d < DISTANCES.length; d++) {
         for (int s = 0; s < label.sides().size(); s++) {
           Rectangle2D box = box(x, y, width, label.sides().get(s), DISTANCES[d]);
-          double cost = cost(box) + 0.5 * p + 1.5 * s + 4 * d;
+          double cost = cost(box) + 0.5 * p + 1.5 * s + 6 * d;
           if (cost < least) {
             least = cost;
             best = box;
@@ -115,7 +115,7 @@ final class Placement {
         cost += ON_LABEL;
       }
     }
-    return cost + ON_LINE * inside(onLines, grown(box, 2)) + ON_DOT * inside(onDots, grown(box, 3));
+    return cost + ON_LINE * inside(onLines, grown(box, 2)) + ON_DOT * inside(onDots, grown(box, 4));
   }
 
   private static int inside(List<double[]> points, Rectangle2D box) {

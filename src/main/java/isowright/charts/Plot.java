@@ -76,7 +76,7 @@ final class Plot {
     }
   }
 
-  /** An entry of the key above the plot. */
+  /** An entry of the key above the plot; without dot and pen it explains a shaded region. */
   record Key(Optional<Dot> dot, Optional<Pen> pen, String text) {}
 
   /**
@@ -190,6 +190,12 @@ final class Plot {
   /** Adds an entry to the key. */
   Plot key(Pen pen, String text) {
     keys.add(new Key(Optional.empty(), Optional.of(pen), text));
+    return this;
+  }
+
+  /** Explains the shaded regions in the key. */
+  Plot keyOfShade(String text) {
+    keys.add(new Key(Optional.empty(), Optional.empty(), text));
     return this;
   }
 

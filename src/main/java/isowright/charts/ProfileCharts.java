@@ -210,6 +210,7 @@ final class ProfileCharts {
     double high = curvature.substitutionHigh();
     if (low <= high && high >= plot.x().low() && low <= plot.x().high()) {
       plot.region("interval", low, high);
+      plot.keyOfShade("not ruled out at the " + setting.level() + " level");
     }
   }
 }

@@ -40,7 +40,7 @@ final class Style {
   static final Color SLATE = new Color(0x7a8794);
 
   /** Shade of a region. */
-  static final Color SHADE = new Color(0xeef1f4);
+  static final Color SHADE = new Color(0xe9edf1);
 
   /** How opaque a band is. */
   static final int BAND_ALPHA = 38;

@@ -78,12 +78,10 @@ final class Words {
 
   /** "0.62 (0.33 to 1.18)", or "0.62" for an exact number. */
   static String interval(Figure figure) {
-    return Numbers.brief(figure.value())
-        + figure
-            .uncertainty()
-            .filter(u -> Double.isFinite(u.low()) && Double.isFinite(u.high()))
-            .map(u -> " (" + Numbers.brief(u.low()) + " to " + Numbers.brief(u.high()) + ")")
-            .orElse("");
+    return figure
+        .uncertainty()
+        .map(u -> Numbers.interval(figure.value(), u.low(), u.high()))
+        .orElse(Numbers.brief(figure.value()));
   }
 
   /** File names made of lower-case letters, digits and hyphens, none twice. */

@@ -58,7 +58,7 @@ final class GlassworksPlans {
                   logFigure(
                       quantity * prices().getOrDefault(input, Double.NaN) / cost(target), 0.04));
             });
-    double averageCost = cost(target) / target;
+    double averageCost = technology.equals("translog") ? bowlAt(target) : cost(target) / target;
     return new Planned(
         question,
         technology,
@@ -69,8 +69,13 @@ final class GlassworksPlans {
         status.equals("corner") ? Map.of("machines", "held at 14,000 h") : Map.of(),
         status,
         mix,
-        Optional.of(logFigure(cost(target), 0.021)),
-        Optional.of(logFigure(averageCost / SCALE, 0.034)),
+        Optional.of(logFigure(averageCost * target, 0.021)),
+        Optional.of(
+            logFigure(
+                technology.equals("translog")
+                    ? averageCost * (1 + 0.24 * Math.log(target / 47000))
+                    : averageCost / SCALE,
+                0.034)),
         Optional.of(logFigure(averageCost, 0.021)),
         shares,
         3.1e-13,
@@ -162,14 +167,17 @@ final class GlassworksPlans {
   /** Average cost is least at 47,000 t: ln AC = ln AC* + 0.12 ln²(Q/47,000). */
   private static List<CurvePoint> bowl() {
     List<CurvePoint> curve = new ArrayList<>();
-    double least = cost(47000) / 47000;
     for (int i = 0; i <= 60; i++) {
       double target = 20000 + 1000 * i;
-      double away = Math.log(target / 47000);
-      double average = least * Math.exp(0.12 * away * away);
-      curve.add(point(target, average, average * (1 + 0.24 * away)));
+      double average = bowlAt(target);
+      curve.add(point(target, average, average * (1 + 0.24 * Math.log(target / 47000))));
     }
     return curve;
+  }
+
+  private static double bowlAt(double target) {
+    double away = Math.log(target / 47000);
+    return cost(47000) / 47000 * Math.exp(0.12 * away * away);
   }
 
   private static CurvePoint point(double target, double average, double marginal) {
