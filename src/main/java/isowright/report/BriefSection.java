@@ -12,6 +12,7 @@ import isowright.study.PlanFindings.Reviewed;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 
 /**
@@ -28,10 +29,13 @@ final class BriefSection {
   static Section of(Material material) {
     List<Block> blocks = new ArrayList<>();
     blocks.add(Paragraph.of(rests(material.findings())));
+    Map<String, Double> before = Map.of();
     for (String question : material.questions()) {
       List<Planned> plans = material.plans(question);
-      blocks.add(Paragraph.of(asked(material, question, plans.get(0))));
+      Planned first = plans.get(0);
+      blocks.add(asked(material, first, first.prices().equals(before)));
       blocks.add(new Answers(plans.stream().map(plan -> answer(material, plan)).toList()));
+      before = first.prices();
     }
     gap(material, blocks);
     blocks.add(
@@ -73,30 +77,35 @@ final class BriefSection {
                 + " interval.");
   }
 
-  private static String asked(Material material, String question, Planned plan) {
+  private static Paragraph asked(Material material, Planned plan, boolean samePrices) {
     List<String> prices = new ArrayList<>();
     plan.prices()
         .forEach(
             (input, price) ->
                 prices.add(
                     input + " " + Numbers.unit(Numbers.amount(price), material.moneyPer(input))));
-    return question
-        + ": what mix of "
-        + Phrases.list(material.inputs())
-        + " makes "
-        + Numbers.unit(Numbers.amount(plan.target()), material.outputUnit())
-        + " at least cost? Prices: "
-        + Phrases.list(prices)
-        + ". Productivity: "
-        + plan.productivity()
-        + ".";
+    return new Paragraph(
+        Text.strong(plan.question() + ". ")
+            .then(
+                "What mix of "
+                    + Phrases.list(material.inputs())
+                    + " makes "
+                    + Numbers.unit(Numbers.amount(plan.target()), material.outputUnit())
+                    + " at least cost"
+                    + (samePrices ? " at the same prices" : "")
+                    + "? "
+                    + (samePrices ? "" : "Prices: " + Phrases.list(prices) + ". ")
+                    + "Productivity: "
+                    + plan.productivity()
+                    + "."));
   }
 
   private static Answer answer(Material material, Planned plan) {
     String technology = "Least cost by " + Terms.technology(plan.technology());
-    String remark = Phrases.sentence(Terms.status(plan.status()));
+    String status = Phrases.sentence(Terms.status(plan.status()));
     if (plan.cost().isEmpty() || !plan.answered()) {
-      return new Answer(technology, "No plan", "", remark.replace("No plan: ", ""));
+      String why = Phrases.sentence(Terms.status(plan.status()).replace("no plan: ", ""));
+      return new Answer(technology, "No plan", "", "", "", why);
     }
     List<String> mix = new ArrayList<>();
     plan.mix()
@@ -106,11 +115,11 @@ final class BriefSection {
     String sure = Phrases.sure(plan.cost().get(), material.confidence());
     return new Answer(
         technology,
-        Numbers.unit(Numbers.value(plan.cost().get()), material.money()),
-        sure.isEmpty() ? "taken as known: no interval" : sure,
-        Phrases.sentence(Phrases.list(mix))
-            + ". "
-            + (Terms.cautionary(plan.status()) ? remark + "." : ""));
+        Numbers.value(plan.cost().get()),
+        material.money(),
+        sure.isEmpty() ? "Taken as known: no interval" : sure,
+        Phrases.sentence(Phrases.list(mix)),
+        Terms.cautionary(plan.status()) ? status : "");
   }
 
   private static void gap(Material material, List<Block> blocks) {

@@ -78,8 +78,8 @@ final class DescriptionSection {
     cells.add(Cell.of(Numbers.count(column.count())));
     cells.add(Cell.of(Numbers.besideSpread(column.mean(), column.standardDeviation())));
     cells.add(Cell.of(Numbers.significant(column.standardDeviation(), SPREAD_DIGITS)));
-    cells.add(Cell.of(Numbers.amount(column.least())));
-    cells.add(Cell.of(Numbers.amount(column.most())));
+    cells.add(Cell.of(Numbers.whole(column.least())));
+    cells.add(Cell.of(Numbers.whole(column.most())));
     if (repeated) {
       cells.add(column.withinShare().map(w -> Cell.of(Numbers.percent(w))).orElse(Cell.none()));
       cells.add(column.withinShare().map(w -> Cell.of(Numbers.percent(1 - w))).orElse(Cell.none()));

@@ -174,10 +174,13 @@ public record Document(String title, String about, List<Entry> facts, List<Secti
    *
    * @param question what was asked
    * @param answer the figure, or the words that stand in its place
-   * @param sure its interval or how sure it is
-   * @param remark what must be known with it; may be empty
+   * @param unit the unit of the figure; may be empty
+   * @param sure its interval or how sure it is; may be empty
+   * @param detail what belongs to it; may be empty
+   * @param caution what must be known before it is used; may be empty
    */
-  public record Answer(String question, String answer, String sure, String remark) {}
+  public record Answer(
+      String question, String answer, String unit, String sure, String detail, String caution) {}
 
   /** The answers in brief, each with how sure it is. */
   public record Answers(List<Answer> answers) implements Block {

@@ -109,16 +109,23 @@ final class HtmlBlocks implements Document.Reader, Text.Reader {
     for (Answer answer : answers.answers()) {
       out.open("li");
       out.element("span", answer.question(), "class", "asked").text(" ");
-      out.element("strong", answer.answer(), "class", "figure").text(" ");
-      if (!answer.sure().isEmpty()) {
-        out.element("span", answer.sure(), "class", "sure").text(" ");
+      out.open("strong", "class", "figure").text(answer.answer());
+      if (!answer.unit().isEmpty()) {
+        out.text(" ").element("span", answer.unit(), "class", "unit");
       }
-      if (!answer.remark().isEmpty()) {
-        out.element("span", answer.remark(), "class", "remark");
-      }
+      out.close("strong");
+      line("sure", answer.sure());
+      line("detail", answer.detail());
+      line("caution", answer.caution());
       out.close("li").line();
     }
     out.close("ul").line();
+  }
+
+  private void line(String kind, String words) {
+    if (!words.isEmpty()) {
+      out.text(" ").element("span", words, "class", kind);
+    }
   }
 
   @Override

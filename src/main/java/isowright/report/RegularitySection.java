@@ -84,6 +84,6 @@ final class RegularitySection {
       words = words.then(" The marginal product is not positive for " + Phrases.list(where) + ".");
     }
     boolean regularEverywhere = regular.rows() > 0 && regular.both() == regular.rows();
-    blocks.add(new Notice(regularEverywhere ? Weight.NOTE : Weight.WARNING, words));
+    blocks.add(regularEverywhere ? new Paragraph(words) : new Notice(Weight.WARNING, words));
   }
 }

@@ -146,7 +146,7 @@ final class Terms {
   /** The name of an elasticity of substitution, by measure. */
   static String measure(String measure) {
     return switch (measure) {
-      case "hicks" -> "direct (Hicks)";
+      case "hicks" -> "Direct (Hicks)";
       case "allen" -> "Allen-Uzawa";
       case "morishima" -> "Morishima";
       default -> measure;
