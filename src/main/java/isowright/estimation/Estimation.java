@@ -46,6 +46,21 @@ public final class Estimation {
         .ssrAt(curvature);
   }
 
+  /**
+   * The least sum of squares of a specification on a panel, with nothing else worked out; NaN where
+   * the records cannot carry it.
+   */
+  public static double leastSsr(Panel panel, Specification specification) {
+    if (specification.form() instanceof ProfiledForm form) {
+      return obstacles(panel, specification).isEmpty()
+          ? new ProfiledEstimation(panel, specification, base(panel, specification), form)
+              .leastSsr()
+          : Double.NaN;
+    }
+    Fit fit = fit(panel, specification);
+    return fit.state().usable() ? fit.numbers().linear().ssr() : Double.NaN;
+  }
+
   static double[] base(Panel panel, Specification specification) {
     if (specification.scaled()) {
       return panel.geometricMeans();

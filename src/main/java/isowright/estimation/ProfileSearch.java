@@ -13,13 +13,13 @@ import java.util.OptionalDouble;
  * Walks a profiled form's sum of squares along its curvature on one set of rows.
  *
  * <p>A start near ρ = 0 can stop at the Cobb-Douglas value and look converged, so the curvature is
- * held at each point of a grid in turn, the rest is fitted there (from the neighbour's answer and
- * from the linear limit), and the curvature is freed from every point so found.
+ * held at each point of a grid in turn, the rest is fitted there (from the neighbour's answer, and
+ * from the linear limit where that fails), and the curvature is freed from every point so found.
  */
 final class ProfileSearch {
 
   /** A profile point: everything but the curvature, fitted at a held curvature. */
-  record Held(double curvature, double[] parameters, double ssr) {}
+  record Held(double curvature, double[] parameters, double ssr, boolean converged) {}
 
   private final PanelRows rows;
   private final ProfiledForm form;
@@ -54,7 +54,7 @@ final class ProfileSearch {
   /** Fits all but the curvature from a start. */
   Held hold(double curvature, double[] start) {
     NonlinearFit fit = NonlinearLeastSquares.fit(model(OptionalDouble.of(curvature)), start);
-    return new Held(curvature, fit.parameters(), fit.ssr());
+    return new Held(curvature, fit.parameters(), fit.ssr(), fit.converged());
   }
 
   /** Fits all but the curvature from the linear limit. */
@@ -62,9 +62,14 @@ final class ProfileSearch {
     return hold(curvature, limitStart);
   }
 
-  /** The better of two starts: a neighbour's answer and the linear limit. */
-  Held holdFromBoth(double curvature, double[] neighbour) {
+  /**
+   * From a neighbour's answer; where that does not converge, the better of it and the linear limit.
+   */
+  Held holdFromNeighbour(double curvature, double[] neighbour) {
     Held first = hold(curvature, neighbour);
+    if (first.converged()) {
+      return first;
+    }
     Held second = hold(curvature, limitStart);
     return second.ssr() < first.ssr() ? second : first;
   }
@@ -96,7 +101,7 @@ final class ProfileSearch {
     List<Held> wing = new ArrayList<>();
     Held held = centre;
     for (int g = middle + step; g >= 0 && g < grid.length; g += step) {
-      held = holdFromBoth(grid[g], held.parameters());
+      held = holdFromNeighbour(grid[g], held.parameters());
       wing.add(held);
     }
     return wing;

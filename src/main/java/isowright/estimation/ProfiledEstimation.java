@@ -86,6 +86,22 @@ final class ProfiledEstimation {
     return search.hold(curvature).ssr();
   }
 
+  /** The least sum of squares in the economic region, with nothing else worked out. */
+  double leastSsr() {
+    ProfileSearch search = search(panel, start(limitFit()));
+    boolean large = panel.rows() > 2 * WALK_ROWS;
+    ProfileSearch walker =
+        large ? search(ThinnedPanel.of(panel, WALK_ROWS), start(limitFit())) : search;
+    List<ProfileSearch.Held> minima = minima(walker.walk());
+    double held =
+        minima.stream()
+            .mapToDouble(m -> search.hold(m.curvature(), m.parameters()).ssr())
+            .min()
+            .orElseThrow();
+    double free = freed(search, minima).map(NonlinearFit::ssr).orElse(Double.POSITIVE_INFINITY);
+    return Math.min(held, free);
+  }
+
   private LinearFit limitFit() {
     LinearDesign raw =
         new LinearDesign(
@@ -261,7 +277,7 @@ final class ProfiledEstimation {
     double classical = linear.residualVariance() * linear.inverseCrossProduct()[place][place];
     double scaling = covariance.matrix()[place][place] / classical;
     ProfileSearch.Held top =
-        new ProfileSearch.Held(curvature, search.withoutCurvature(all), best.ssr());
+        new ProfileSearch.Held(curvature, search.withoutCurvature(all), best.ssr(), true);
     ProfileInterval interval =
         ProfileInterval.around(
             search,

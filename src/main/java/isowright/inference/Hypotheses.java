@@ -135,12 +135,11 @@ public final class Hypotheses {
             with.scaled(),
             Specification.StandardErrors.CLASSICAL,
             with.confidence());
-    Fit pooled = Estimation.fit(fit.panel(), without);
-    if (!pooled.state().usable()) {
+    double held = Estimation.leastSsr(fit.panel(), without);
+    if (Double.isNaN(held)) {
       return Optional.empty();
     }
     double free = numbers.linear().ssr();
-    double held = pooled.numbers().linear().ssr();
     double restrictions = fit.panel().plants().size() - 1;
     double degrees = numbers.linear().residualDegreesOfFreedom();
     double f = (held - free) / restrictions / (free / degrees);
