@@ -17,7 +17,7 @@ final class ProfileInterval {
    * SSR_min: then the end is off by about half of that part of the interval's half-width, which no
    * printed digit shows.
    */
-  private static final double PRECISION = 1e-4;
+  private static final double PRECISION = 1e-3;
 
   private static final int STEPS = 60;
 
@@ -123,7 +123,7 @@ final class ProfileInterval {
       double part = (Math.sqrt(threshold - least) - nearRoot) / (farRoot - nearRoot);
       double share = step % 4 == 3 ? 0.5 : Math.min(Math.max(part, 0.01), 0.99);
       double curvature = in.curvature() + share * (out.curvature() - in.curvature());
-      ProfileSearch.Held middle = search.hold(curvature, in.parameters());
+      ProfileSearch.Held middle = search.hold(curvature, between(in, out, share));
       added.add(middle);
       if (Math.abs(middle.ssr() - threshold) <= PRECISION * (threshold - least)) {
         return form.substitution(middle.curvature());
@@ -135,5 +135,14 @@ final class ProfileInterval {
       }
     }
     return form.substitution(in.curvature());
+  }
+
+  /** The other parameters hardly bend along the profile, so their start is on the straight line. */
+  private static double[] between(ProfileSearch.Held in, ProfileSearch.Held out, double share) {
+    double[] start = in.parameters().clone();
+    for (int k = 0; k < start.length; k++) {
+      start[k] += share * (out.parameters()[k] - start[k]);
+    }
+    return start;
   }
 }

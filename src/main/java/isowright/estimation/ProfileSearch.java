@@ -18,6 +18,13 @@ import java.util.OptionalDouble;
  */
 final class ProfileSearch {
 
+  /**
+   * Evaluations at a held curvature on many rows: its start is the answer on a part of the rows or
+   * at a neighbouring curvature, from where steps close in quadratically, so that the second step
+   * leaves nothing that a profile shows.
+   */
+  private static final int EVALUATIONS = 3;
+
   /** A profile point: everything but the curvature, fitted at a held curvature. */
   record Held(double curvature, double[] parameters, double ssr, boolean converged) {}
 
@@ -27,9 +34,11 @@ final class ProfileSearch {
   private final Circumstances circumstances;
   private final boolean within;
   private final double[] limitStart;
+  private final NonlinearLeastSquares.Settings settings;
 
   /**
    * @param limitStart constant (if any), inner parameters and circumstances to start from
+   * @param large whether the rows are many, and starts near
    */
   ProfileSearch(
       Panel panel,
@@ -37,13 +46,18 @@ final class ProfileSearch {
       ProfiledForm form,
       Circumstances circumstances,
       boolean within,
-      double[] limitStart) {
+      double[] limitStart,
+      boolean large) {
     this.rows = PanelRows.of(panel, base);
     this.form = form;
     this.inputs = panel.inputs();
     this.circumstances = circumstances;
     this.within = within;
     this.limitStart = limitStart.clone();
+    this.settings =
+        large
+            ? NonlinearLeastSquares.Settings.STANDARD.withMostEvaluations(EVALUATIONS)
+            : NonlinearLeastSquares.Settings.STANDARD;
   }
 
   /** The model with the curvature free. */
@@ -53,7 +67,8 @@ final class ProfileSearch {
 
   /** Fits all but the curvature from a start. */
   Held hold(double curvature, double[] start) {
-    NonlinearFit fit = NonlinearLeastSquares.fit(model(OptionalDouble.of(curvature)), start);
+    NonlinearFit fit =
+        NonlinearLeastSquares.fit(model(OptionalDouble.of(curvature)), start, settings);
     return new Held(curvature, fit.parameters(), fit.ssr(), fit.converged());
   }
 

@@ -27,7 +27,13 @@ final class ProfiledEstimation {
    * Above this many rows the grid is walked on every k-th plant; every local minimum found is then
    * polished on all rows. The walk only has to find the valleys.
    */
-  static final int WALK_ROWS = 20_000;
+  static final int WALK_ROWS = 10_000;
+
+  /**
+   * In units of SSR/N: the threshold of an interval is a quantile of F(1, ∞), some 4 to 11, times
+   * the scaling for a covariance other than the classical one; a hundred is beyond it.
+   */
+  private static final double BEYOND = 100;
 
   /** How much better than the best held point a free optimum must at least be, relative. */
   private static final double SAME = 1e-9;
@@ -71,7 +77,8 @@ final class ProfiledEstimation {
     ProfileSearch search = search(panel, start);
     ProfileSearch walker = large ? search(ThinnedPanel.of(panel, WALK_ROWS), start) : search;
     List<ProfileSearch.Held> walked = walker.walk();
-    List<ProfileSearch.Held> profile = large ? repeatOnAllRows(search, walked) : walked;
+    List<ProfileSearch.Held> profile =
+        large ? repeatOnAllRows(search, walked, panel.rows()) : walked;
     Optional<NonlinearFit> best = freed(search, large ? minima(walked) : walked);
     double least = profile.stream().mapToDouble(ProfileSearch.Held::ssr).min().orElseThrow();
     if (best.isEmpty() || best.get().ssr() > least * (1 + SAME)) {
@@ -125,23 +132,46 @@ final class ProfiledEstimation {
 
   private ProfileSearch search(Panel rows, double[] start) {
     return new ProfileSearch(
-        rows, base, form, Circumstances.of(rows, specification.time()), within, start);
+        rows,
+        base,
+        form,
+        Circumstances.of(rows, specification.time()),
+        within,
+        start,
+        rows.rows() > 2 * WALK_ROWS);
   }
 
   /**
-   * The walked profile, made again on all rows at a few points: both ends, the minima, and between.
+   * The walked profile, made again on all rows where it matters: at its minima, and from the lowest
+   * of them outward on both sides until the sum of squares is beyond any interval.
    */
   private static List<ProfileSearch.Held> repeatOnAllRows(
-      ProfileSearch search, List<ProfileSearch.Held> walked) {
+      ProfileSearch search, List<ProfileSearch.Held> walked, int rows) {
     List<ProfileSearch.Held> repeated = new ArrayList<>();
-    int last = walked.size() - 1;
-    List<ProfileSearch.Held> minima = minima(walked);
-    for (int g = 0; g <= last; g++) {
-      ProfileSearch.Held held = walked.get(g);
-      if (g == 0 || g == last || g % 8 == 0 || minima.contains(held)) {
-        repeated.add(search.hold(held.curvature(), held.parameters()));
+    int lowest = -1;
+    double least = Double.POSITIVE_INFINITY;
+    for (ProfileSearch.Held minimum : minima(walked)) {
+      ProfileSearch.Held held = search.hold(minimum.curvature(), minimum.parameters());
+      repeated.add(held);
+      if (held.ssr() < least) {
+        least = held.ssr();
+        lowest = walked.indexOf(minimum);
       }
     }
+    for (int step : new int[] {-1, 1}) {
+      double ssr = least;
+      for (int g = lowest + step;
+          g >= 0 && g < walked.size() && ssr <= least * (1 + BEYOND / rows);
+          g += step) {
+        ProfileSearch.Held near = walked.get(g);
+        ProfileSearch.Held held = search.hold(near.curvature(), near.parameters());
+        ssr = held.ssr();
+        if (repeated.stream().noneMatch(other -> other.curvature() == held.curvature())) {
+          repeated.add(held);
+        }
+      }
+    }
+    repeated.sort(Comparator.comparingDouble(ProfileSearch.Held::curvature));
     return repeated;
   }
 
