@@ -5,7 +5,6 @@ import static org.assertj.core.api.Assertions.within;
 
 import java.nio.file.Path;
 import java.util.List;
-import java.util.Locale;
 import java.util.Optional;
 import java.util.Random;
 import org.junit.jupiter.api.Test;
@@ -17,68 +16,9 @@ import org.junit.jupiter.params.provider.ValueSource;
 /** The audit finds planted blemishes and is silent where there are none. */
 class PanelAuditTest {
 
-  private static final int PLANTS = 20;
-  private static final int PERIODS = 8;
-
   @TempDir private Path folder;
 
-  /** Clean records by plant and period, each column a table that a test may spoil. */
-  private static final class Records {
-    private final double[][] tonnes = new double[PLANTS][PERIODS];
-    private final double[][] hours = new double[PLANTS][PERIODS];
-    private final double[][] wage = new double[PLANTS][PERIODS];
-    private final double[][] payroll = new double[PLANTS][PERIODS];
-    private final double[][] machines = new double[PLANTS][PERIODS];
-    private final double[][] rent = new double[PLANTS][PERIODS];
-    private final double[][] filed = new double[PLANTS][PERIODS];
-    private final boolean[][] left = new boolean[PLANTS][PERIODS];
-
-    /** Sizes differ between plants, all grow by a rate, and quantities scatter. */
-    Records(long seed, double growth, double scatter) {
-      Random random = new Random(seed);
-      for (int p = 0; p < PLANTS; p++) {
-        double size = Math.exp(0.3 * random.nextGaussian());
-        double pay = 30 * Math.exp(0.05 * random.nextGaussian());
-        for (int t = 0; t < PERIODS; t++) {
-          double level = size * Math.exp(growth * t);
-          tonnes[p][t] = 1000 * level * Math.exp(scatter * random.nextGaussian());
-          hours[p][t] = 4000 * level * Math.exp(scatter * random.nextGaussian());
-          machines[p][t] = 2000 * level * Math.exp(scatter * random.nextGaussian());
-          wage[p][t] = pay * Math.exp(0.02 * t + 0.1 * random.nextGaussian());
-          rent[p][t] = 80 * Math.exp(0.1 * random.nextGaussian());
-          payroll[p][t] = wage[p][t] * hours[p][t];
-          filed[p][t] =
-              (payroll[p][t] + rent[p][t] * machines[p][t]) * (1 + 0.03 * random.nextDouble());
-        }
-      }
-    }
-
-    String csv() {
-      StringBuilder csv = new StringBuilder("plant,year,tonnes,hours,wage,payroll,mh,rent,filed\n");
-      for (int p = 0; p < PLANTS; p++) {
-        for (int t = 0; t < PERIODS; t++) {
-          if (!left[p][t]) {
-            csv.append(
-                String.format(
-                    Locale.ROOT,
-                    "GW-%02d,%d,%.6g,%.6g,%.6g,%.6g,%.6g,%.6g,%.6g%n",
-                    p,
-                    2010 + t,
-                    tonnes[p][t],
-                    hours[p][t],
-                    wage[p][t],
-                    payroll[p][t],
-                    machines[p][t],
-                    rent[p][t],
-                    filed[p][t]));
-          }
-        }
-      }
-      return csv.toString();
-    }
-  }
-
-  private Panel panel(Records records) throws Exception {
+  private Panel panel(CleanRecords records) throws Exception {
     return panel(records.csv());
   }
 
@@ -104,7 +44,7 @@ class PanelAuditTest {
     return RecordsReader.read(Glassworks.write(folder, "gw.csv", csv), roles, Keep.ALL).panel();
   }
 
-  private List<Remark> audit(Records records) throws Exception {
+  private List<Remark> audit(CleanRecords records) throws Exception {
     return PanelAudit.of(panel(records));
   }
 
@@ -117,7 +57,7 @@ class PanelAuditTest {
   @CsvSource({"0, 0.1", "0.05, 0.1", "0.3, 0.05", "-0.2, 0.1", "0.8, 0.02", "0, 0.3", "0.1, 0.2"})
   void cleanRecordsAreMetWithSilence(double growth, double scatter) throws Exception {
     for (long seed = 1; seed <= 5; seed++) {
-      assertThat(audit(new Records(seed, growth, scatter)))
+      assertThat(audit(new CleanRecords(seed, growth, scatter)))
           // A plant that grows steadily may end up far from the others; that is no blemish.
           .filteredOn(r -> !r.code().equals("extreme-value"))
           .as("seed %d", seed)
@@ -129,8 +69,8 @@ class PanelAuditTest {
   @ValueSource(doubles = {10, 0.1, 100, 0.01, 1000, 0.001})
   void aSlippedPowerOfTenIsFoundWhereverItStands(double factor) throws Exception {
     for (double growth : new double[] {0, 0.2}) {
-      for (int t = 0; t < PERIODS; t++) {
-        Records records = new Records(7, growth, 0.1);
+      for (int t = 0; t < CleanRecords.PERIODS; t++) {
+        CleanRecords records = new CleanRecords(7, growth, 0.1);
         records.machines[3][t] *= factor;
         records.filed[3][t] *= 1 + 10 * factor; // so that only the quantity is doubtful
         List<Remark> slips =
@@ -140,9 +80,10 @@ class PanelAuditTest {
                 .toList();
         Remark slip = only(slips);
         assertThat(slip.severity()).isEqualTo(Remark.Severity.WARNING);
-        assertThat(slip.rows()).containsExactly(2 + 3 * PERIODS + t);
+        assertThat(slip.rows()).containsExactly(2 + 3 * CleanRecords.PERIODS + t);
         assertThat(slip.message())
-            .contains("\"GW-03\"", "period " + (2010 + t), "row " + (2 + 3 * PERIODS + t))
+            .contains(
+                "\"GW-03\"", "period " + (2010 + t), "row " + (2 + 3 * CleanRecords.PERIODS + t))
             .contains("quantity of machines", "Compare it with its source");
       }
     }
@@ -150,22 +91,22 @@ class PanelAuditTest {
 
   @Test
   void aUnitThatChangesIsABreak() throws Exception {
-    Records records = new Records(7, 0.05, 0.1);
-    for (int t = 4; t < PERIODS; t++) {
+    CleanRecords records = new CleanRecords(7, 0.05, 0.1);
+    for (int t = 4; t < CleanRecords.PERIODS; t++) {
       records.tonnes[5][t] *= 1000;
     }
     Remark found =
         only(audit(records).stream().filter(r -> r.code().startsWith("power-of-ten")).toList());
     assertThat(found.code()).isEqualTo("power-of-ten-break");
-    assertThat(found.rows()).containsExactly(2 + 5 * PERIODS + 4);
+    assertThat(found.rows()).containsExactly(2 + 5 * CleanRecords.PERIODS + 4);
     assertThat(found.message()).contains("GW-05", "2014", "tonnes", "1,000 times", "one unit");
   }
 
   @Test
   void anUnsteadyPlantIsNotSuspected() throws Exception {
-    Records records = new Records(7, 0, 0.05);
+    CleanRecords records = new CleanRecords(7, 0, 0.05);
     double[] wild = {1, 8, 3, 20, 2, 9, 1, 12};
-    for (int t = 0; t < PERIODS; t++) {
+    for (int t = 0; t < CleanRecords.PERIODS; t++) {
       records.tonnes[5][t] *= wild[t];
     }
     assertThat(audit(records)).extracting(Remark::code).doesNotContain("power-of-ten-slip");
@@ -173,10 +114,10 @@ class PanelAuditTest {
 
   @Test
   void gapsAndPlantsSeenOnce() throws Exception {
-    Records records = new Records(2, 0, 0.1);
+    CleanRecords records = new CleanRecords(2, 0, 0.1);
     records.left[4][3] = true;
     records.left[4][4] = true;
-    for (int t = 1; t < PERIODS; t++) {
+    for (int t = 1; t < CleanRecords.PERIODS; t++) {
       records.left[9][t] = true;
     }
     List<Remark> remarks = audit(records);
@@ -189,8 +130,8 @@ class PanelAuditTest {
 
   @Test
   void aPeriodThatNoPlantHas() throws Exception {
-    Records records = new Records(2, 0, 0.1);
-    for (int p = 0; p < PLANTS; p++) {
+    CleanRecords records = new CleanRecords(2, 0, 0.1);
+    for (int p = 0; p < CleanRecords.PLANTS; p++) {
       records.left[p][5] = true;
     }
     Remark remark = only(audit(records));
@@ -200,19 +141,19 @@ class PanelAuditTest {
 
   @Test
   void priceTimesQuantityMustBeTheSpending() throws Exception {
-    Records records = new Records(3, 0, 0.1);
+    CleanRecords records = new CleanRecords(3, 0, 0.1);
     records.payroll[6][2] *= 1.3;
     Remark remark = only(audit(records));
     assertThat(remark.code()).isEqualTo("price-times-quantity");
-    assertThat(remark.rows()).containsExactly(2 + 6 * PERIODS + 2);
+    assertThat(remark.rows()).containsExactly(2 + 6 * CleanRecords.PERIODS + 2);
     assertThat(remark.message()).contains("GW-06", "2012", "wage", "hours", "payroll", "1 %");
   }
 
   @Test
   void spendingInAnotherUnitIsSaidOnce() throws Exception {
-    Records records = new Records(3, 0, 0.1);
+    CleanRecords records = new CleanRecords(3, 0, 0.1);
     for (double[] plant : records.payroll) {
-      for (int t = 0; t < PERIODS; t++) {
+      for (int t = 0; t < CleanRecords.PERIODS; t++) {
         plant[t] /= 1000;
       }
     }
@@ -223,7 +164,7 @@ class PanelAuditTest {
 
   @Test
   void filedCostAgainstItsParts() throws Exception {
-    Records below = new Records(3, 0, 0.1);
+    CleanRecords below = new CleanRecords(3, 0, 0.1);
     below.filed[1][1] *= 0.8;
     assertThat(only(audit(below)))
         .satisfies(
@@ -232,7 +173,7 @@ class PanelAuditTest {
               assertThat(r.severity()).isEqualTo(Remark.Severity.WARNING);
               assertThat(r.message()).contains("GW-01", "2011", "filed");
             });
-    Records above = new Records(3, 0, 0.1);
+    CleanRecords above = new CleanRecords(3, 0, 0.1);
     above.filed[1][1] *= 1.5;
     above.filed[2][1] *= 1.2;
     assertThat(only(audit(above)))
@@ -242,9 +183,9 @@ class PanelAuditTest {
               assertThat(r.severity()).isEqualTo(Remark.Severity.NOTE);
               assertThat(r.message()).contains("2 of 160 rows", "GW-01", "unreconciled");
             });
-    Records thousands = new Records(3, 0, 0.1);
+    CleanRecords thousands = new CleanRecords(3, 0, 0.1);
     for (double[] plant : thousands.filed) {
-      for (int t = 0; t < PERIODS; t++) {
+      for (int t = 0; t < CleanRecords.PERIODS; t++) {
         plant[t] /= 1000;
       }
     }
@@ -258,11 +199,11 @@ class PanelAuditTest {
 
   @Test
   void pricesThatNeverVary() throws Exception {
-    Records constant = new Records(4, 0, 0.1);
-    Records overTime = new Records(4, 0, 0.1);
-    Records between = new Records(4, 0, 0.1);
-    for (int p = 0; p < PLANTS; p++) {
-      for (int t = 0; t < PERIODS; t++) {
+    CleanRecords constant = new CleanRecords(4, 0, 0.1);
+    CleanRecords overTime = new CleanRecords(4, 0, 0.1);
+    CleanRecords between = new CleanRecords(4, 0, 0.1);
+    for (int p = 0; p < CleanRecords.PLANTS; p++) {
+      for (int t = 0; t < CleanRecords.PERIODS; t++) {
         constant.rent[p][t] = 80;
         overTime.rent[p][t] = 80 + t;
         between.rent[p][t] = 80 + p;
@@ -274,16 +215,16 @@ class PanelAuditTest {
     assertThat(aboutRent(between).code()).isEqualTo("price-only-between-plants");
   }
 
-  private Remark aboutRent(Records records) throws Exception {
+  private Remark aboutRent(CleanRecords records) throws Exception {
     return only(audit(records).stream().filter(r -> r.message().contains("\"rent\"")).toList());
   }
 
   @Test
   void inputsThatBarelyVaryWithinPlants() throws Exception {
-    Records never = new Records(4, 0, 0.1);
-    Records little = new Records(4, 0, 0.1);
-    for (int p = 0; p < PLANTS; p++) {
-      for (int t = 0; t < PERIODS; t++) {
+    CleanRecords never = new CleanRecords(4, 0, 0.1);
+    CleanRecords little = new CleanRecords(4, 0, 0.1);
+    for (int p = 0; p < CleanRecords.PLANTS; p++) {
+      for (int t = 0; t < CleanRecords.PERIODS; t++) {
         never.machines[p][t] = never.machines[p][0];
         little.machines[p][t] = little.machines[p][0] * (1 + 0.01 * t);
       }
@@ -294,11 +235,11 @@ class PanelAuditTest {
 
   @Test
   void copiedColumnsAndRows() throws Exception {
-    Records equal = new Records(4, 0, 0.1);
-    Records proportional = new Records(4, 0, 0.1);
-    Records row = new Records(4, 0, 0.1);
-    for (int p = 0; p < PLANTS; p++) {
-      for (int t = 0; t < PERIODS; t++) {
+    CleanRecords equal = new CleanRecords(4, 0, 0.1);
+    CleanRecords proportional = new CleanRecords(4, 0, 0.1);
+    CleanRecords row = new CleanRecords(4, 0, 0.1);
+    for (int p = 0; p < CleanRecords.PLANTS; p++) {
+      for (int t = 0; t < CleanRecords.PERIODS; t++) {
         equal.machines[p][t] = equal.tonnes[p][t];
         // Powers of two keep all six digits written.
         proportional.tonnes[p][t] = Math.rint(proportional.tonnes[p][t]);
@@ -324,13 +265,13 @@ class PanelAuditTest {
 
   @Test
   void aRowFarFromAllOthers() throws Exception {
-    Records records = new Records(4, 0, 0.1);
-    for (int t = 0; t < PERIODS; t++) {
+    CleanRecords records = new CleanRecords(4, 0, 0.1);
+    for (int t = 0; t < CleanRecords.PERIODS; t++) {
       records.tonnes[2][t] *= 5000;
     }
     assertThat(audit(records))
         .filteredOn(r -> r.code().equals("extreme-value"))
-        .hasSize(PERIODS)
+        .hasSize(CleanRecords.PERIODS)
         .allSatisfy(
             r -> {
               assertThat(r.severity()).isEqualTo(Remark.Severity.NOTE);
@@ -340,8 +281,8 @@ class PanelAuditTest {
 
   @Test
   void manyFindingsOfAKindAreCounted() throws Exception {
-    Records records = new Records(3, 0, 0.1);
-    for (int p = 0; p < PLANTS; p++) {
+    CleanRecords records = new CleanRecords(3, 0, 0.1);
+    for (int p = 0; p < CleanRecords.PLANTS; p++) {
       for (int t = 0; t < 3; t++) {
         records.payroll[p][t] *= 1.3;
       }

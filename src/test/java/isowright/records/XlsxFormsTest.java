@@ -392,15 +392,4 @@ class XlsxFormsTest {
     }
     return new Source(file, Optional.empty(), Optional.empty());
   }
-
-  @Test
-  void lettersOfColumns() {
-    assertThat(SheetCells.column("A1")).isZero();
-    assertThat(SheetCells.column("Z99")).isEqualTo(25);
-    assertThat(SheetCells.column("AA1")).isEqualTo(26);
-    assertThat(SheetCells.column("XFD1048576")).isEqualTo(16383);
-    for (int column : new int[] {0, 25, 26, 701, 702, 16383}) {
-      assertThat(SheetCells.column(Headings.columnLetters(column) + "7")).isEqualTo(column);
-    }
-  }
 }
