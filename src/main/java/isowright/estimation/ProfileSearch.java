@@ -19,11 +19,16 @@ import java.util.OptionalDouble;
 final class ProfileSearch {
 
   /**
-   * Evaluations at a held curvature on many rows: its start is the answer on a part of the rows or
-   * at a neighbouring curvature, from where steps close in quadratically, so that the second step
-   * leaves nothing that a profile shows.
+   * Evaluations at a held curvature from a near start: steps close in quadratically, so that eight
+   * leave nothing; where they do not suffice, the linear limit is tried without a bound.
    */
-  private static final int EVALUATIONS = 3;
+  private static final int EVALUATIONS = 8;
+
+  /**
+   * The same where each evaluation reads many rows: the start is the answer on a part of the rows
+   * or on the line between neighbours, and two steps leave nothing that a profile shows.
+   */
+  private static final int EVALUATIONS_OF_MANY = 3;
 
   /** A profile point: everything but the curvature, fitted at a held curvature. */
   record Held(double curvature, double[] parameters, double ssr, boolean converged) {}
@@ -34,7 +39,7 @@ final class ProfileSearch {
   private final Circumstances circumstances;
   private final boolean within;
   private final double[] limitStart;
-  private final NonlinearLeastSquares.Settings settings;
+  private final NonlinearLeastSquares.Settings near;
 
   /**
    * @param limitStart constant (if any), inner parameters and circumstances to start from
@@ -54,10 +59,9 @@ final class ProfileSearch {
     this.circumstances = circumstances;
     this.within = within;
     this.limitStart = limitStart.clone();
-    this.settings =
-        large
-            ? NonlinearLeastSquares.Settings.STANDARD.withMostEvaluations(EVALUATIONS)
-            : NonlinearLeastSquares.Settings.STANDARD;
+    this.near =
+        NonlinearLeastSquares.Settings.STANDARD.withMostEvaluations(
+            large ? EVALUATIONS_OF_MANY : EVALUATIONS);
   }
 
   /** The model with the curvature free. */
@@ -65,16 +69,20 @@ final class ProfileSearch {
     return model(OptionalDouble.empty());
   }
 
-  /** Fits all but the curvature from a start. */
+  /** Fits all but the curvature from a near start. */
   Held hold(double curvature, double[] start) {
+    return hold(curvature, start, near);
+  }
+
+  /** Fits all but the curvature from the linear limit, however long it takes. */
+  Held hold(double curvature) {
+    return hold(curvature, limitStart, NonlinearLeastSquares.Settings.STANDARD);
+  }
+
+  private Held hold(double curvature, double[] start, NonlinearLeastSquares.Settings settings) {
     NonlinearFit fit =
         NonlinearLeastSquares.fit(model(OptionalDouble.of(curvature)), start, settings);
     return new Held(curvature, fit.parameters(), fit.ssr(), fit.converged());
-  }
-
-  /** Fits all but the curvature from the linear limit. */
-  Held hold(double curvature) {
-    return hold(curvature, limitStart);
   }
 
   /**
@@ -85,7 +93,7 @@ final class ProfileSearch {
     if (first.converged()) {
       return first;
     }
-    Held second = hold(curvature, limitStart);
+    Held second = hold(curvature);
     return second.ssr() < first.ssr() ? second : first;
   }
 

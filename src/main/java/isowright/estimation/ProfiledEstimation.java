@@ -27,7 +27,7 @@ final class ProfiledEstimation {
    * Above this many rows the grid is walked on every k-th plant; every local minimum found is then
    * polished on all rows. The walk only has to find the valleys.
    */
-  static final int WALK_ROWS = 10_000;
+  static final int WALK_ROWS = 5_000;
 
   /**
    * In units of SSR/N: the threshold of an interval is a quantile of F(1, ∞), some 4 to 11, times
