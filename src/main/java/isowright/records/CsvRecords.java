@@ -85,7 +85,7 @@ final class CsvRecords {
     Feed feed = new Feed(intake);
     try (InputStream bytes = new DigestInputStream(Files.newInputStream(source.file()), digest)) {
       bytes.skipNBytes(encoding.markBytes());
-      Reader characters =
+      Reader decoded =
           new InputStreamReader(
               bytes,
               encoding
@@ -93,7 +93,9 @@ final class CsvRecords {
                   .newDecoder()
                   .onMalformedInput(CodingErrorAction.REPORT)
                   .onUnmappableCharacter(CodingErrorAction.REPORT));
-      rows(characters, feed, intake);
+      try (Reader characters = new ReadAhead(decoded)) {
+        rows(characters, feed, intake);
+      }
     } catch (UncheckedIOException e) {
       throw e.getCause();
     } catch (CsvParseException e) {
