@@ -43,7 +43,6 @@ final class Failures {
     }
     if (failure instanceof Publication.Refused refused) {
       err.println("isowright: " + refused.getMessage());
-      err.println("Nothing was written.");
       return ExitCode.MISTAKE;
     }
     if (failure instanceof Unfit unfit) {

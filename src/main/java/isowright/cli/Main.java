@@ -126,6 +126,7 @@ public final class Main implements Callable<Integer> {
     commandLine.setOut(out);
     commandLine.setErr(err);
     commandLine.setColorScheme(type(terminal));
+    commandLine.setExpandAtFiles(false); // a file may be called @study.yaml
     commandLine.setUsageHelpWidth(HELP_WIDTH);
     commandLine.setParameterExceptionHandler(
         (mistake, args) -> ArgumentMistakes.tell(mistake, err).number());

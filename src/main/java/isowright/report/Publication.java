@@ -1,7 +1,9 @@
 package isowright.report;
 
 import java.io.IOException;
+import java.nio.file.AccessDeniedException;
 import java.nio.file.AtomicMoveNotSupportedException;
+import java.nio.file.FileAlreadyExistsException;
 import java.nio.file.Files;
 import java.nio.file.LinkOption;
 import java.nio.file.Path;
@@ -77,7 +79,8 @@ public final class Publication {
         throw new Refused(above + " cannot be written to; choose another folder for the report.");
       }
     } catch (IOException unreadable) {
-      throw new Refused(folder + " cannot be used (" + unreadable + "); choose another folder.");
+      throw new Refused(
+          folder + " cannot be used (" + words(unreadable) + "); choose another folder.");
     }
     return new Publication(target);
   }
@@ -136,12 +139,12 @@ public final class Publication {
           "the report could not be written into "
               + folder
               + " ("
-              + failed
+              + words(failed)
               + "); choose another folder.");
     }
   }
 
-  private void exchange(Path fresh, Set<String> names) throws IOException {
+  private void exchange(Path fresh, Set<String> names) throws IOException, Refused {
     if (!Files.exists(folder, LinkOption.NOFOLLOW_LINKS)) {
       move(fresh, folder);
       return;
@@ -154,7 +157,16 @@ public final class Publication {
       move(old, folder);
       throw failed;
     }
-    keepForeign(old, names);
+    try {
+      keepForeign(old, names);
+    } catch (IOException stuck) {
+      throw new Refused(
+          "the report is in place, but other files of its folder could not be moved back into it ("
+              + words(stuck)
+              + "); they are in "
+              + old
+              + ".");
+    }
     removeQuietly(old);
   }
 
@@ -172,6 +184,16 @@ public final class Publication {
         move(entry, folder.resolve(name));
       }
     }
+  }
+
+  /** What the file system says, without the names of Java's exceptions. */
+  private static String words(IOException failure) {
+    if (failure instanceof AccessDeniedException denied) {
+      return "no permission for " + denied.getFile();
+    }
+    return failure instanceof FileAlreadyExistsException there
+        ? there.getFile() + " is in the way"
+        : String.valueOf(failure.getMessage());
   }
 
   private Path beside(String what) {

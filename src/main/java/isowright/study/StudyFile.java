@@ -75,7 +75,8 @@ public final class StudyFile {
       }
       return Files.readAllBytes(file);
     } catch (IOException unreadable) {
-      throw refused(file, "the file cannot be read (" + unreadable + "); check its permissions");
+      throw refused(
+          file, "the file cannot be read (" + unreadable.getMessage() + "); check its permissions");
     }
   }
 
