@@ -194,9 +194,9 @@ public final class Numbers {
   }
 
   /**
-   * A p-value as a phrase: "p = 0.184", "p < 0.001". Three significant digits; more where rounding
-   * would put it on a level that it is not on, so that "p = 0.0500" never stands beside a rejection
-   * at 5 %.
+   * A p-value as a phrase: "p = 0.184", "p &lt; 0.001". Three significant digits; more where
+   * rounding would put it on a level that it is not on, so that "p = 0.0500" never stands beside a
+   * rejection at 5 %.
    */
   public static String p(double p) {
     if (Double.isNaN(p)) {
