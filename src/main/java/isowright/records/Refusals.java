@@ -116,12 +116,12 @@ final class Refusals {
     }
   }
 
-  static RecordsRefused damagedWorkbook(Place place, Exception e) {
-    String said = e.getMessage() == null ? e.getClass().getSimpleName() : e.getMessage();
+  /** The library's own words name its classes and parts of the archive, which help no reader. */
+  static RecordsRefused damagedWorkbook(Place place) {
     return of(
         "damaged-workbook",
-        "%s cannot be read as a workbook (%s). Open it in a spreadsheet program and save it again as .xlsx, or save the sheet as .csv."
-            .formatted(place.file(), Shown.shortened(said.strip())));
+        "%s cannot be read as a workbook: the file is cut short, damaged, or of another kind. Open it in a spreadsheet program and save it again as .xlsx, or save the sheet as .csv."
+            .formatted(place.file()));
   }
 
   static void ifNothingIn(Place place, String beginning, boolean whole) throws RecordsRefused {
@@ -200,7 +200,7 @@ final class Refusals {
               .formatted(place.file()));
     }
     if (e instanceof java.util.zip.ZipException) {
-      return damagedWorkbook(place, e);
+      return damagedWorkbook(place);
     }
     return of(
         "not-readable",

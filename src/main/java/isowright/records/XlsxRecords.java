@@ -62,7 +62,7 @@ final class XlsxRecords implements AutoCloseable {
         | POIXMLException
         | UnsupportedFileFormatException
         | EmptyFileException e) {
-      throw Refusals.damagedWorkbook(place, e);
+      throw Refusals.damagedWorkbook(place);
     }
     boolean opened = false;
     try {
@@ -72,7 +72,7 @@ final class XlsxRecords implements AutoCloseable {
       sheet = chosen();
       opened = true;
     } catch (OpenXML4JException | OpenXML4JRuntimeException | POIXMLException | SAXException e) {
-      throw Refusals.damagedWorkbook(place, e);
+      throw Refusals.damagedWorkbook(place);
     } finally {
       if (!opened) {
         archive.revert();
@@ -167,7 +167,7 @@ final class XlsxRecords implements AutoCloseable {
     } catch (SheetCells.Refused e) {
       throw e.refusal();
     } catch (OpenXML4JException | OpenXML4JRuntimeException | POIXMLException | SAXException e) {
-      throw Refusals.damagedWorkbook(place, e);
+      throw Refusals.damagedWorkbook(place);
     }
   }
 

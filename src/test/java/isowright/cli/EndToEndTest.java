@@ -1,0 +1,117 @@
+package isowright.cli;
+
+import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.within;
+
+import com.fasterxml.jackson.databind.JsonNode;
+import com.fasterxml.jackson.databind.ObjectMapper;
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.security.MessageDigest;
+import java.security.NoSuchAlgorithmException;
+import java.util.HexFormat;
+import java.util.List;
+import java.util.Locale;
+import java.util.stream.Stream;
+import org.junit.jupiter.api.BeforeAll;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+
+/**
+ * The demo as a newcomer runs it: one command, a finished report whose parts agree with one another
+ * and with the files they come from. What is known of the invented plants is held against the
+ * findings in {@code DemoFindingsTest}.
+ */
+class EndToEndTest {
+
+  private static final Path DEMO = Path.of("notebooks-data");
+
+  @TempDir private static Path folder;
+
+  private static Invocation run;
+  private static JsonNode findings;
+  private static String html;
+
+  @BeforeAll
+  static void runTheDemo() throws IOException {
+    Path into = folder.resolve("report");
+    run = Invocation.of("run", DEMO.resolve("glassworks.yaml").toString(), "--into", "" + into);
+    assertThat(run.code()).as(run.err()).isZero();
+    findings = new ObjectMapper().readTree(into.resolve("findings.json").toFile());
+    html = Files.readString(into.resolve("report.html"));
+  }
+
+  @Test
+  void everythingPromisedIsWritten() throws IOException {
+    assertThat(run.err()).isEmpty();
+    Path report = folder.resolve("report");
+    assertThat(report).isDirectoryContaining("glob:**/{report.html,findings.json}");
+    assertThat(report.resolve("technology.json")).isRegularFile();
+    try (Stream<Path> charts = Files.list(report.resolve("charts"))) {
+      List<String> names = charts.map(path -> path.getFileName().toString()).sorted().toList();
+      List<String> drawn = names.stream().filter(name -> name.endsWith(".svg")).toList();
+      assertThat(drawn).hasSizeGreaterThan(10);
+      assertThat(names)
+          .containsAll(drawn.stream().map(name -> name.replace(".svg", ".png")).toList());
+    }
+  }
+
+  @Test
+  void theRunRecordHoldsTheFingerprintsOfWhatWasRead()
+      throws IOException, NoSuchAlgorithmException {
+    assertThat(findings.at("/study/sha256").asText()).isEqualTo(sha256("glassworks.yaml"));
+    assertThat(findings.at("/records/sha256").asText()).isEqualTo(sha256("glassworks.csv"));
+    assertThat(html).contains(sha256("glassworks.yaml"), sha256("glassworks.csv"));
+  }
+
+  private static String sha256(String name) throws IOException, NoSuchAlgorithmException {
+    byte[] bytes = Files.readAllBytes(DEMO.resolve(name));
+    return HexFormat.of().formatHex(MessageDigest.getInstance("SHA-256").digest(bytes));
+  }
+
+  @Test
+  void theAnswerInBriefIsThatOfTheFindings() {
+    JsonNode plan = plan("ces");
+    assertThat(plan.at("/status").asText()).isEqualTo("solved");
+    // The screen rounds by the standard error: here to the nearest thousand.
+    String cost =
+        String.format(
+            Locale.ROOT, "%,d", Math.round(plan.at("/cost/value").asDouble() / 1000) * 1000);
+    assertThat(run.out()).contains("Plan 2025, long run: 40,000", cost);
+    assertThat(html).contains(cost);
+  }
+
+  @Test
+  void thePlanKeepsTheConditionsOfLeastCost() {
+    for (String technology : List.of("cobb-douglas", "ces", "translog")) {
+      JsonNode plan = plan(technology);
+      double cost = 0;
+      for (String input : List.of("labour", "machines", "energy")) {
+        cost +=
+            plan.at("/prices/" + input).asDouble() * plan.at("/mix/" + input + "/value").asDouble();
+      }
+      // a sum of three products of full precision
+      assertThat(plan.at("/cost/value").asDouble()).isCloseTo(cost, within(1e-12 * cost));
+      // w = λ f_x to the digits a solver working in doubles can be asked for
+      assertThat(plan.at("/optimality").asDouble()).isLessThan(1e-9);
+    }
+  }
+
+  @Test
+  void bothBlemishesOfTheRecordsAreFoundAndShown() {
+    List<String> codes = findings.at("/records/remarks").findValuesAsText("code");
+    assertThat(codes).contains("power-of-ten-slip", "extreme-value");
+    assertThat(html).contains("14904487", "18.4957"); // the cells as they stand in the file
+  }
+
+  private static JsonNode plan(String technology) {
+    for (JsonNode plan : findings.at("/leastCost")) {
+      if (plan.at("/technology").asText().equals(technology)
+          && plan.at("/question").asText().equals("Plan 2025, long run")) {
+        return plan;
+      }
+    }
+    throw new AssertionError("no plan by " + technology);
+  }
+}
