@@ -5,6 +5,8 @@ import static org.assertj.core.api.Assertions.within;
 
 import com.fasterxml.jackson.databind.JsonNode;
 import com.fasterxml.jackson.databind.ObjectMapper;
+import isowright.report.Numbers;
+import isowright.study.Figure;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
@@ -14,6 +16,7 @@ import java.util.HexFormat;
 import java.util.List;
 import java.util.Locale;
 import java.util.stream.Stream;
+import java.util.stream.StreamSupport;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
@@ -101,8 +104,41 @@ class EndToEndTest {
   @Test
   void bothBlemishesOfTheRecordsAreFoundAndShown() {
     List<String> codes = findings.at("/records/remarks").findValuesAsText("code");
-    assertThat(codes).contains("power-of-ten-slip", "extreme-value");
-    assertThat(html).contains("14904487", "18.4957"); // the cells as they stand in the file
+    assertThat(codes).contains("power-of-ten-slip", "filed-cost-above-parts");
+    assertThat(html).contains("14904487", "3718418"); // the cells as they stand in the file
+  }
+
+  /** What README.md says the demo finds is what it finds. */
+  @Test
+  void theTableOfTheReadmeIsCurrent() throws IOException {
+    String readme = Files.readString(Path.of("README.md"));
+    JsonNode ces = findings.at("/fits/1");
+    assertThat(ces.at("/technology").asText()).isEqualTo("ces");
+    JsonNode trend =
+        StreamSupport.stream(ces.at("/parameters").spliterator(), false)
+            .filter(parameter -> parameter.at("/name").asText().equals("trend"))
+            .findFirst()
+            .orElseThrow();
+    Stream.of(
+            ces.at("/substitution/0"),
+            ces.at("/returnsToScale"),
+            ces.at("/outputElasticity/labour"),
+            ces.at("/outputElasticity/machines"),
+            ces.at("/outputElasticity/energy"),
+            trend,
+            plan("ces").at("/cost"),
+            plan("ces").at("/marginalCost"))
+        .forEach(figure -> assertThat(readme).contains("| " + words(figure) + " |"));
+  }
+
+  private static String words(JsonNode figure) {
+    return Numbers.valueAndInterval(
+        Figure.estimated(
+            figure.at("/value").asDouble(),
+            figure.at("/se").asDouble(),
+            figure.at("/low").asDouble(),
+            figure.at("/high").asDouble(),
+            figure.at("/method").asText()));
   }
 
   private static JsonNode plan(String technology) {

@@ -9,6 +9,8 @@ import static org.assertj.core.api.Assertions.within;
 
 import isowright.records.Panel;
 import isowright.technology.Form;
+import isowright.technology.Regularity;
+import java.util.DoubleSummaryStatistics;
 import java.util.Map;
 import org.assertj.core.data.Offset;
 import org.junit.jupiter.api.Test;
@@ -100,6 +102,41 @@ class PublishedFitsTest {
         SIX_DECIMALS);
     assertThat(fit.numbers().linear().ssr()).isCloseTo(.6799272, within(0.5e-7));
     assertThat(fit.numbers().statistics().logLikelihood()).isCloseTo(11.39035, within(0.5e-5));
+  }
+
+  /**
+   * Greene (2003), example 6.2, continued: mean elasticities of the translog, scale from .645 to
+   * 1.435, labour's elasticity negative at six states, the bordered Hessian right at all 27 (R 4.2;
+   * three and six decimals as printed).
+   */
+  @Test
+  void primaryMetalsTranslogIsIrregularAtSixStates() {
+    Panel panel = PanelFixtures.primaryMetals();
+    Fit fit = fit(panel, "translog", NONE, Specification.Time.NONE, false, CLASSICAL);
+    int notMonotone = 0;
+    int notQuasiConcave = 0;
+    double[] sum = new double[2];
+    DoubleSummaryStatistics scale = new DoubleSummaryStatistics();
+    for (int row = 0; row < panel.rows(); row++) {
+      double[] z = new double[2];
+      for (int i = 0; i < z.length; i++) {
+        z[i] = panel.logQuantities().get(i).get(row);
+      }
+      Regularity regularity = Regularity.at(fit.numbers().technology(), z);
+      notMonotone += regularity.monotone() ? 0 : 1;
+      notQuasiConcave += regularity.quasiConcave() ? 0 : 1;
+      double[] elasticities = new double[2];
+      fit.numbers().technology().logGradient(z, elasticities);
+      sum[0] += elasticities[0];
+      sum[1] += elasticities[1];
+      scale.accept(elasticities[0] + elasticities[1]);
+    }
+    assertThat(notMonotone).isEqualTo(6);
+    assertThat(notQuasiConcave).isZero();
+    assertThat(sum[0] / 27).isCloseTo(.383187, SIX_DECIMALS);
+    assertThat(sum[1] / 27).isCloseTo(.542475, SIX_DECIMALS);
+    assertThat(scale.getMin()).isCloseTo(.645, within(0.5e-3));
+    assertThat(scale.getMax()).isCloseTo(1.435, within(0.5e-3));
   }
 
   /**
