@@ -87,7 +87,7 @@ final class Answer {
                     + " as the price of "
                     + pair.second()
                     + " moves";
-        shown.put(between, uncertain(pair.figure()));
+        shown.put(between, Numbers.valueAndInterval(pair.figure()));
       }
     }
     if (shown.size() > 1 && shown.values().stream().distinct().count() == 1) {
@@ -95,14 +95,6 @@ final class Answer {
     } else {
       shown.forEach((between, figure) -> line("substitution", figure + ", " + between));
     }
-  }
-
-  /** A figure that the form fixes has no interval. */
-  private static String uncertain(Figure figure) {
-    boolean fixed = figure.uncertainty().map(u -> u.low() == u.high()).orElse(false);
-    return fixed
-        ? Numbers.amount(figure.value()) + " by its form"
-        : Numbers.valueAndInterval(figure);
   }
 
   private void line(String what, String value) {

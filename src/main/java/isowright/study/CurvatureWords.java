@@ -2,6 +2,8 @@ package isowright.study;
 
 import isowright.estimation.CurvatureProfile;
 import isowright.estimation.Fit;
+import java.math.BigDecimal;
+import java.math.MathContext;
 import java.util.Locale;
 
 /** What a profile over the elasticity of substitution says, in a sentence. */
@@ -10,7 +12,7 @@ final class CurvatureWords {
   private CurvatureWords() {}
 
   static String of(Fit fit, CurvatureProfile profile) {
-    String level = String.format(Locale.ROOT, "%.4g %%", 100 * fit.specification().confidence());
+    String level = percent(fit.specification().confidence());
     return switch (profile.state()) {
       case INTERIOR ->
           String.format(
@@ -23,6 +25,15 @@ final class CurvatureWords {
       case FLAT -> flat(profile, level);
       case BOUNDARY -> String.join(" ", fit.reasons()) + open(profile, level);
     };
+  }
+
+  /** A level without idle zeros: 95 %, 99.5 %. */
+  private static String percent(double confidence) {
+    return BigDecimal.valueOf(100 * confidence)
+            .round(new MathContext(6))
+            .stripTrailingZeros()
+            .toPlainString()
+        + " %";
   }
 
   private static String flat(CurvatureProfile profile, String level) {

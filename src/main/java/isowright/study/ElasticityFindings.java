@@ -17,6 +17,9 @@ import java.util.function.Function;
 /** Elasticities of a fit at the geometric mean of the sample, each with its uncertainty. */
 final class ElasticityFindings {
 
+  /** Derivatives of elasticities are differences and good to about 1e-9 of their size. */
+  private static final double ROUNDING = 1e-9;
+
   private final DeltaMethod delta;
   private final List<String> inputs;
   private final double[] mean;
@@ -97,8 +100,22 @@ final class ElasticityFindings {
                         p.substitutionLow(),
                         p.substitutionHigh(),
                         Estimate.Method.PROFILE.word()))
-            .orElse(figure);
+            .orElseGet(() -> fixedByTheForm(figure) ? exact(figure.value()) : figure);
     return new Pair(inputs.get(i), inputs.get(j), measure, shown);
+  }
+
+  /** No parameter moves it: what standard error there is comes from rounding. */
+  private static boolean fixedByTheForm(Figure figure) {
+    return figure
+        .uncertainty()
+        .map(u -> u.standardError() <= ROUNDING * Math.abs(figure.value()))
+        .orElse(true);
+  }
+
+  private static Figure exact(double value) {
+    double nearest = Math.rint(value);
+    boolean whole = Math.abs(value - nearest) <= ROUNDING * Math.abs(value);
+    return Figure.exact(whole ? nearest : value);
   }
 
   private List<Figure> figures(Function<Technology, double[]> functions) {

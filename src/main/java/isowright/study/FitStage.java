@@ -108,6 +108,7 @@ final class FitStage {
     EstimatedTechnology typical = fit.typical();
     DeltaMethod delta = DeltaMethod.of(typical, fit.specification().confidence());
     ElasticityFindings elasticities = new ElasticityFindings(fit, delta);
+    List<FitFindings.Pair> substitution = elasticities.substitution();
     FitStatistics statistics = numbers.statistics();
     FitFindings.Regular regular = RegularityFindings.of(fit);
     return new Fitted(
@@ -130,7 +131,7 @@ final class FitStage {
                 numbers.linear().residualDegreesOfFreedom())),
         elasticities.output(),
         Optional.of(elasticities.scale()),
-        elasticities.substitution(),
+        substitution,
         elasticities.demand(),
         Optional.of(regular),
         fit.profile().map(profile -> curvature(fit, profile)),
@@ -142,7 +143,7 @@ final class FitStage {
         Optional.of(numbers.smearing()),
         points(numbers),
         influential(numbers),
-        remarks(fit, regular));
+        remarks(fit, regular, substitution));
   }
 
   /** The regression knows groups of rows; here they are plants. */
@@ -275,7 +276,8 @@ final class FitStage {
         .toList();
   }
 
-  private List<Said> remarks(Fit fit, FitFindings.Regular regular) {
+  private List<Said> remarks(
+      Fit fit, FitFindings.Regular regular, List<FitFindings.Pair> elasticities) {
     List<Said> remarks = new ArrayList<>();
     fit.reasons().forEach(reason -> remarks.add(Said.of("warning", fit.state().word(), reason)));
     int clusters = fit.numbers().covarianceSource().clusters().orElse(0);
@@ -296,6 +298,14 @@ final class FitStage {
     }
     if (regular.both() < regular.rows()) {
       remarks.add(Said.of("warning", "irregular-rows", RegularityFindings.words(regular)));
+    }
+    if (elasticities.stream().allMatch(pair -> pair.figure().uncertainty().isEmpty())) {
+      remarks.add(
+          Said.of(
+              "note",
+              "substitution-fixed-by-form",
+              "The form itself fixes every elasticity of substitution; none was estimated, and the"
+                  + " records were not asked about it."));
     }
     if (fit.state() == Fit.State.FLAT) {
       fit.profile()
