@@ -95,11 +95,27 @@ public final class Estimation {
               + plants
               + " plants has a single row. Set plant-effects to none, or add periods.");
     }
-    if (specification.standardErrors() == Specification.StandardErrors.CLUSTERED && plants < 2) {
+    Specification.StandardErrors errors = specification.standardErrors();
+    if (errors.needsPlants() && plants < 2) {
       obstacles.add(
           "Standard errors clustered by plant need at least two plants; the records have "
               + plants
               + ". Set standard-errors to robust, or add records of other plants.");
+    }
+    if (errors.needsPeriods() && panel.periods().size() < 2) {
+      obstacles.add(
+          "Standard errors of the kind "
+              + errors.word()
+              + " need at least two periods; the records have one ("
+              + panel.periods().get(0)
+              + "). Set standard-errors to robust, or add periods.");
+    } else if (errors == Specification.StandardErrors.NEWEY_WEST
+        && !panel.repeats()
+        && panel.periods().size() < panel.rows()) {
+      obstacles.add(
+          "Newey-West standard errors need plants seen in more than one period, or a single series"
+              + " of one row a period; here every plant has one row and some share a period. Set"
+              + " standard-errors to robust, or name the plant column.");
     }
     if (specification.time() != Specification.Time.NONE && panel.periods().size() < 2) {
       obstacles.add(

@@ -76,7 +76,9 @@ final class LinearEstimation {
   }
 
   private Fit solved(Circumstances circumstances, LinearDesign raw, Design design, LinearFit fit) {
-    Covariance covariance = Covariance.estimate(design, fit, kind(specification.standardErrors()));
+    Covariance covariance =
+        Covariance.estimate(
+            design, fit, kind(specification.standardErrors()), PanelRows.of(panel, base).times());
     int slopes = fit.columns().size() - (within ? 0 : 1);
     GroupMeans means = GroupMeans.of(raw, fit.coefficients());
     double[][] slopeCovariance = slopeBlock(covariance.matrix(), slopes);
@@ -141,6 +143,9 @@ final class LinearEstimation {
       case ROBUST -> Covariance.Kind.HC1;
       case HC3 -> Covariance.Kind.HC3;
       case CLUSTERED -> Covariance.Kind.CLUSTERED;
+      case CLUSTERED_TWO_WAY -> Covariance.Kind.CLUSTERED_TWO_WAY;
+      case NEWEY_WEST -> Covariance.Kind.NEWEY_WEST;
+      case DRISCOLL_KRAAY -> Covariance.Kind.DRISCOLL_KRAAY;
     };
   }
 }

@@ -3,6 +3,7 @@ package isowright.estimation;
 import isowright.records.Column;
 import isowright.records.Panel;
 import isowright.regression.Groups;
+import isowright.regression.Times;
 
 /**
  * The rows of a panel as an estimator sees them: logged inputs divided by a base, logged output,
@@ -42,6 +43,26 @@ final class PanelRows {
 
   Groups groups() {
     return groups;
+  }
+
+  /** The periods of the rows. */
+  Times times() {
+    return new Times() {
+      @Override
+      public int rows() {
+        return panel.rows();
+      }
+
+      @Override
+      public int count() {
+        return panel.periods().size();
+      }
+
+      @Override
+      public int of(int row) {
+        return panel.rowPeriods().get(row);
+      }
+    };
   }
 
   /** A block's logged inputs divided by the base; {@code z[i][row − from]}, freshly made. */

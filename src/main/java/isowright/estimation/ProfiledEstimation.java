@@ -272,7 +272,11 @@ final class ProfiledEstimation {
     }
     Design design = model.linearisedAt(all);
     Covariance covariance =
-        Covariance.estimate(design, linear, LinearEstimation.kind(specification.standardErrors()));
+        Covariance.estimate(
+            design,
+            linear,
+            LinearEstimation.kind(specification.standardErrors()),
+            PanelRows.of(panel, base).times());
     double[] inner = model.inner(all);
     double curvature = model.curvature(all);
     double[][] toReported = toReported(inner, curvature);

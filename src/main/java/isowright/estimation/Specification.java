@@ -58,7 +58,23 @@ public record Specification(
     /** Unequal variances, with leverage (HC3). */
     HC3,
     /** Rows of a plant may be dependent (CR1). */
-    CLUSTERED;
+    CLUSTERED,
+    /** Rows of a plant, and rows of a period, may be dependent. */
+    CLUSTERED_TWO_WAY,
+    /** Rows of a plant may be dependent, less so the further apart in time. */
+    NEWEY_WEST,
+    /** All rows may be dependent, less so the further apart in time. */
+    DRISCOLL_KRAAY;
+
+    /** Whether plants have to be told apart. */
+    public boolean needsPlants() {
+      return this == CLUSTERED || this == CLUSTERED_TWO_WAY;
+    }
+
+    /** Whether periods have to be told apart. */
+    public boolean needsPeriods() {
+      return this == CLUSTERED_TWO_WAY || this == NEWEY_WEST || this == DRISCOLL_KRAAY;
+    }
 
     /** The word used in files. */
     public String word() {

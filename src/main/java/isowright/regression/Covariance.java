@@ -20,17 +20,33 @@ import java.util.OptionalInt;
  *       nested in the clusters. K.-Y. Liang and S. L. Zeger 1986, Biometrika 73, 13–22; A. C.
  *       Cameron and D. L. Miller 2015, Journal of Human Resources 50, 317–372, sections II.B and
  *       III.B.
+ *   <li>Clustered two ways, by group and by time: the sum of the two middles less that of the cells
+ *       of both, each with its own G/(G − 1), times (N − 1)/(N − K) as above. What is negative in
+ *       it is set to zero. A. C. Cameron, J. B. Gelbach and D. L. Miller 2011, Journal of Business
+ *       and Economic Statistics 29, 238–249, equations 2.11 to 2.13.
+ *   <li>Newey-West within groups: Σ over pairs of cells of one group up to m times apart, weighted
+ *       1 − l/(m + 1), times N/(N − K − a). W. K. Newey and K. D. West 1987, Econometrica 55,
+ *       703–708. With m = 0 and one row a cell it is HC1.
+ *   <li>Driscoll-Kraay: the same with the sum over all rows of a time in place of a cell, times
+ *       T/(T − 1) · (N − 1)/(N − K − a). J. C. Driscoll and A. C. Kraay 1998, Review of Economics
+ *       and Statistics 80, 549–560. It rests on many times, not on many groups.
  * </ul>
  *
+ * <p>The lag is m = ⌊4 (T/100)^(2/9)⌋ for T times (of the longest group, or of all), the rule of W.
+ * K. Newey and K. D. West 1994, Review of Economic Studies 61, 631–653, as it is commonly put.
+ *
  * <p>The middle matrix is gathered in the orthogonal basis F′x, so the condition of X enters once,
- * not twice. Tested in {@code CovarianceTest} against dense formulas and published values.
+ * not twice. Tested in {@code CovarianceTest} and {@code CovarianceOverTimeTest} against dense
+ * formulas, published values and R.
  *
  * @param kind the estimator
  * @param matrix K × K over all columns of the fit, zero where nothing was estimated, NaN where the
  *     rows cannot carry an estimate; copied in and out
- * @param factor the finite-sample factor, in the matrix already
+ * @param factor the finite-sample factor, in the matrix already (two ways: the part common to all
+ *     three middles)
  * @param degreesOfFreedom of the t distribution to use with it
- * @param clusters the number of clusters, for the clustered kind
+ * @param clusters the number of independent clusters that the kind rests on: groups, the smaller of
+ *     groups and times, or times; absent where it rests on rows
  * @param words one sentence: estimator, factor, degrees of freedom
  */
 public record Covariance(
@@ -50,7 +66,18 @@ public record Covariance(
     /** Unequal variances, independent rows, residuals enlarged for leverage. */
     HC3,
     /** Rows of the same group may depend on one another. */
-    CLUSTERED
+    CLUSTERED,
+    /** Rows of the same group, and rows of the same time, may depend on one another. */
+    CLUSTERED_TWO_WAY,
+    /** Rows of the same group may depend on one another, less so the further apart in time. */
+    NEWEY_WEST,
+    /** All rows may depend on one another, less so the further apart in time. */
+    DRISCOLL_KRAAY;
+
+    /** Whether the estimate needs the times of the rows. */
+    public boolean needsTimes() {
+      return this == CLUSTERED_TWO_WAY || this == NEWEY_WEST || this == DRISCOLL_KRAAY;
+    }
   }
 
   /** A row whose leverage comes closer to one than this is fitted exactly, up to rounding. */
@@ -77,13 +104,27 @@ public record Covariance(
    *
    * @param design the design that was fitted, or the linearisation at the end of a nonlinear fit
    * @param fit its fit
+   * @throws IllegalArgumentException for a kind that needs the times of the rows
    */
   public static Covariance estimate(Design design, LinearFit fit, Kind kind) {
     return switch (kind) {
       case CLASSICAL -> classical(fit);
       case HC1, HC3 -> heteroskedastic(design, fit, kind);
       case CLUSTERED -> clustered(design, fit);
+      case CLUSTERED_TWO_WAY, NEWEY_WEST, DRISCOLL_KRAAY ->
+          throw new IllegalArgumentException(kind + " needs the times of the rows");
     };
+  }
+
+  /**
+   * The same, with the times of the rows for the kinds that need them.
+   *
+   * @param times when each row of the design was observed
+   */
+  public static Covariance estimate(Design design, LinearFit fit, Kind kind, Times times) {
+    return kind.needsTimes()
+        ? CovarianceOverTime.estimate(design, fit, kind, times)
+        : estimate(design, fit, kind);
   }
 
   private static Covariance classical(LinearFit fit) {
@@ -101,7 +142,7 @@ public record Covariance(
   }
 
   private static Covariance heteroskedastic(Design design, LinearFit fit, Kind kind) {
-    Middle middle = Middle.of(design, fit, kind);
+    RowMiddle middle = RowMiddle.of(design, fit, kind);
     int freedom = fit.residualDegreesOfFreedom();
     boolean third = kind == Kind.HC3;
     double factor = third ? (freedom > 0 ? 1 : Double.NaN) : ratio(fit.rows(), freedom);
@@ -128,7 +169,7 @@ public record Covariance(
     int rows = fit.rows();
     double factor = ratio(clusters, clusters - 1) * ratio(rows - 1, rows - fit.rank());
     double[][] matrix =
-        Matrices.sandwich(fit.inverseFactor(), Middle.of(design, fit, Kind.CLUSTERED).matrix());
+        Matrices.sandwich(fit.inverseFactor(), RowMiddle.of(design, fit, Kind.CLUSTERED).matrix());
     scale(matrix, fit, factor);
     String words =
         String.format(
@@ -146,12 +187,12 @@ public record Covariance(
         Kind.CLUSTERED, matrix, factor, clusters - 1, OptionalInt.of(clusters), words);
   }
 
-  private static double ratio(double above, double below) {
+  static double ratio(double above, double below) {
     return below > 0 ? above / below : Double.NaN;
   }
 
   /** Multiplies what was estimated; what was not stays zero, even where the factor is NaN. */
-  private static void scale(double[][] matrix, LinearFit fit, double by) {
+  static void scale(double[][] matrix, LinearFit fit, double by) {
     boolean[] estimated = fit.estimated();
     for (int i = 0; i < matrix.length; i++) {
       for (int j = 0; j < matrix.length; j++) {
@@ -160,7 +201,7 @@ public record Covariance(
     }
   }
 
-  private static String residualFactor(LinearFit fit) {
+  static String residualFactor(LinearFit fit) {
     return String.format(
         Locale.ROOT,
         "N/(N − K%s) = %d/%d",
@@ -169,7 +210,7 @@ public record Covariance(
         fit.residualDegreesOfFreedom());
   }
 
-  private static String freedom(int degrees) {
+  static String freedom(int degrees) {
     return degrees > 0
         ? "t with " + degrees + (degrees == 1 ? " degree" : " degrees") + " of freedom"
         : "no degrees of freedom are left, so nothing can be said";
@@ -183,113 +224,5 @@ public record Covariance(
             " (%d %s leverage one, fitted exactly, and cannot contribute)",
             rows,
             rows == 1 ? "row has" : "rows have");
-  }
-
-  /** The middle of the sandwich in the basis F′x, Σ u u′ over rows or groups. */
-  private static final class Middle {
-    private final double[][] factor;
-    private final int[] kept;
-    private final double[] coefficients;
-    private final double[][] sum;
-    private final Residuals residuals;
-    private long exactRows;
-
-    private Middle(LinearFit fit, int longest) {
-      factor = fit.inverseFactor();
-      kept = fit.kept();
-      coefficients = fit.coefficients();
-      sum = new double[factor.length][factor.length];
-      residuals = new Residuals(longest);
-    }
-
-    static Middle of(Design design, LinearFit fit, Kind kind) {
-      Blocks blocks = Blocks.of(design.groups());
-      return blocks.gather(
-          fit.columns().size() + 1,
-          () -> new Middle(fit, blocks.longest()),
-          (middle, from, to, buffer) -> {
-            design.fill(from, to, buffer);
-            if (kind == Kind.CLUSTERED) {
-              middle.addGroups(buffer, from, to, design.groups());
-            } else {
-              middle.addRows(buffer, from, to, design, kind == Kind.HC3);
-            }
-          },
-          Middle::add);
-    }
-
-    private void addRows(double[][] block, int from, int to, Design design, boolean enlarged) {
-      int rows = to - from;
-      double[] weight = residuals.of(block, rows, coefficients);
-      Leverage.rotate(block, rows, factor, kept);
-      if (enlarged) {
-        double[] leverage = block[coefficients.length];
-        Leverage.of(block, from, rows, kept, design, leverage);
-        for (int i = 0; i < rows; i++) {
-          double left = 1 - leverage[i];
-          if (left > LEVERAGE_ONE) {
-            weight[i] /= left;
-          } else {
-            weight[i] = 0;
-            exactRows++;
-          }
-        }
-      }
-      for (int k : kept) {
-        for (int i = 0; i < rows; i++) {
-          block[k][i] *= weight[i];
-        }
-      }
-      addProducts(block, rows);
-    }
-
-    private void addGroups(double[][] block, int from, int to, Groups groups) {
-      double[] r = residuals.of(block, to - from, coefficients);
-      int first = groups.of(from);
-      int count = 0;
-      for (int g = first; g < groups.count() && groups.start(g) < to; g++, count++) {
-        int start = groups.start(g) - from;
-        int end = groups.end(g) - from;
-        for (int k : kept) {
-          // Group g − first never lies behind its own rows, so the sums may overwrite the block.
-          block[k][count] = OrthogonalDecomposition.product(r, block[k], start, end);
-        }
-      }
-      Leverage.rotate(block, count, factor, kept);
-      addProducts(block, count);
-    }
-
-    private void addProducts(double[][] block, int rows) {
-      for (int k : kept) {
-        for (int l : kept) {
-          if (l <= k) {
-            sum[k][l] += OrthogonalDecomposition.product(block[k], block[l], 0, rows);
-          }
-        }
-      }
-    }
-
-    private void add(Middle other) {
-      for (int k = 0; k < sum.length; k++) {
-        for (int l = 0; l <= k; l++) {
-          sum[k][l] += other.sum[k][l];
-        }
-      }
-      exactRows += other.exactRows;
-    }
-
-    long exactRows() {
-      return exactRows;
-    }
-
-    double[][] matrix() {
-      double[][] full = Matrices.copy(sum);
-      for (int k = 0; k < full.length; k++) {
-        for (int l = 0; l < k; l++) {
-          full[l][k] = full[k][l];
-        }
-      }
-      return full;
-    }
   }
 }

@@ -178,6 +178,29 @@ final class MethodSection {
     if (with("robust") || with("hc3")) {
       points.add(Text.of("Covariance robust to unequal variances " + cite(Source.MACKINNON) + "."));
     }
+    if (with("clustered-two-way")) {
+      points.add(
+          Text.of(
+              "Covariance clustered by plant and by period: the sum of the two less that of their cells,"
+                  + " with t quantiles on the smaller number of clusters less one "
+                  + cite(Source.CAMERON_GELBACH)
+                  + "."));
+    }
+    if (with("newey-west")) {
+      points.add(
+          Text.of(
+              "Covariance for rows of a plant that depend on one another less and less over time "
+                  + cite(Source.NEWEY)
+                  + lags()));
+    }
+    if (with("driscoll-kraay")) {
+      points.add(
+          Text.of(
+              "Covariance for rows of all plants that move together and depend on one another less and"
+                  + " less over time "
+                  + cite(Source.DRISCOLL)
+                  + lags()));
+    }
     points.add(
         Text.of(
             "Standard errors of derived figures by first-order propagation of the parameter covariance;"
@@ -196,6 +219,12 @@ final class MethodSection {
     points.add(
         Text.of("On inputs chosen knowing productivity, see " + cite(Source.MARSCHAK) + "."));
     return new Section(ID + "-estimation", "Estimation", List.of(new Points(false, points)));
+  }
+
+  private String lags() {
+    return "; the number of lags follows from the number of periods "
+        + cite(Source.NEWEY_LAGS)
+        + ".";
   }
 
   private boolean any(String technology) {

@@ -22,6 +22,11 @@ enum Source {
       "Cameron, A. C. and Miller, D. L. (2015)",
       "A Practitioner’s Guide to Cluster-Robust Inference",
       "Journal of Human Resources 50, 317–372"),
+  CAMERON_GELBACH(
+      "Cameron, Gelbach and Miller 2011",
+      "Cameron, A. C., Gelbach, J. B. and Miller, D. L. (2011)",
+      "Robust Inference with Multiway Clustering",
+      "Journal of Business and Economic Statistics 29, 238–249"),
   CHRISTENSEN(
       "Christensen, Jorgenson and Lau 1973",
       "Christensen, L. R., Jorgenson, D. W. and Lau, L. J. (1973)",
@@ -37,6 +42,11 @@ enum Source {
       "Cook, R. D. (1977)",
       "Detection of Influential Observation in Linear Regression",
       "Technometrics 19, 15–18"),
+  DRISCOLL(
+      "Driscoll and Kraay 1998",
+      "Driscoll, J. C. and Kraay, A. C. (1998)",
+      "Consistent Covariance Matrix Estimation with Spatially Dependent Panel Data",
+      "Review of Economics and Statistics 80, 549–560"),
   DUAN(
       "Duan 1983",
       "Duan, N. (1983)",
@@ -80,6 +90,17 @@ enum Source {
       "Marschak, J. and Andrews, W. H. (1944)",
       "Random Simultaneous Equations and the Theory of Production",
       "Econometrica 12, 143–205"),
+  NEWEY(
+      "Newey and West 1987",
+      "Newey, W. K. and West, K. D. (1987)",
+      "A Simple, Positive Semi-Definite, Heteroskedasticity and Autocorrelation Consistent Covariance"
+          + " Matrix",
+      "Econometrica 55, 703–708"),
+  NEWEY_LAGS(
+      "Newey and West 1994",
+      "Newey, W. K. and West, K. D. (1994)",
+      "Automatic Lag Selection in Covariance Matrix Estimation",
+      "Review of Economic Studies 61, 631–653"),
   SHEPHARD(
       "Shephard 1953",
       "Shephard, R. W. (1953)",

@@ -35,9 +35,6 @@ final class FitStage {
   /** Rows named as the most influential of a fit. */
   private static final int INFLUENTIAL = 5;
 
-  /** Below this many clusters, intervals are known to be too narrow (Cameron and Miller 2015). */
-  private static final int FEW_CLUSTERS = 30;
-
   private final Panel panel;
   private final Study study;
 
@@ -115,7 +112,7 @@ final class FitStage {
         fit.specification().form().name(),
         how(
             fit,
-            plantsForGroups(numbers.covarianceSource().words()),
+            CovarianceWords.of(numbers.covarianceSource()),
             numbers.covarianceSource().degreesOfFreedom()),
         fit.state().word(),
         parameters(fit, delta),
@@ -144,11 +141,6 @@ final class FitStage {
         points(numbers),
         influential(numbers),
         remarks(fit, regular, substitution));
-  }
-
-  /** The regression knows groups of rows; here they are plants. */
-  private static String plantsForGroups(String words) {
-    return words.replace("by group", "by plant").replace("group effects", "plant effects");
   }
 
   private FitFindings.How how(Fit fit, String covarianceWords, double degreesOfFreedom) {
@@ -280,22 +272,7 @@ final class FitStage {
       Fit fit, FitFindings.Regular regular, List<FitFindings.Pair> elasticities) {
     List<Said> remarks = new ArrayList<>();
     fit.reasons().forEach(reason -> remarks.add(Said.of("warning", fit.state().word(), reason)));
-    int clusters = fit.numbers().covarianceSource().clusters().orElse(0);
-    boolean clustered =
-        fit.specification().standardErrors() == Specification.StandardErrors.CLUSTERED;
-    if (clustered && clusters < FEW_CLUSTERS) {
-      remarks.add(
-          Said.of(
-              "warning",
-              "few-clusters",
-              "Standard errors are clustered over only "
-                  + clusters
-                  + " plants; below about "
-                  + FEW_CLUSTERS
-                  + " such intervals tend to be too narrow. They use Student's law with "
-                  + (clusters - 1)
-                  + " degrees of freedom, which helps but does not cure it."));
-    }
+    CovarianceWords.few(fit.numbers().covarianceSource()).ifPresent(remarks::add);
     if (regular.both() < regular.rows()) {
       remarks.add(Said.of("warning", "irregular-rows", RegularityFindings.words(regular)));
     }

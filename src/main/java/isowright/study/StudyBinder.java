@@ -58,8 +58,6 @@ final class StudyBinder {
       List.of("random", "between", "differences", "mundlak");
   private static final List<String> TIME_LATER =
       List.of("quadratic-trend", "biased-trend", "two-way");
-  private static final List<String> STANDARD_ERRORS_LATER =
-      List.of("clustered-two-way", "newey-west", "driscoll-kraay");
 
   private final Path file;
   private final String sha256;
@@ -168,11 +166,7 @@ final class StudyBinder {
     Time time = choice(section, "time", Time.values(), Time::word, TIME_LATER).orElse(Time.NONE);
     Optional<StandardErrors> errors =
         choice(
-            section,
-            "standard-errors",
-            StandardErrors.values(),
-            StandardErrors::word,
-            STANDARD_ERRORS_LATER);
+            section, "standard-errors", StandardErrors.values(), StandardErrors::word, List.of());
     boolean scaled =
         section
             .get("scaling")
@@ -186,11 +180,21 @@ final class StudyBinder {
       section.refuse(
           "time", "`" + time.word() + "` needs periods, but `records.period` names no column");
     }
-    if (errors.equals(Optional.of(StandardErrors.CLUSTERED)) && !declared.plant()) {
-      section.refuse(
-          "standard-errors", "`clustered` needs plants, but `records.plant` names no column");
-    }
+    errors.ifPresent(kind -> checkColumns(section, kind, declared));
     return new Estimation(effects, time, scaled, errors, confidence(section));
+  }
+
+  private static void checkColumns(YamlSection section, StandardErrors kind, Declared declared) {
+    if (kind.needsPlants() && !declared.plant()) {
+      section.refuse(
+          "standard-errors",
+          "`" + kind.word() + "` needs plants, but `records.plant` names no column");
+    }
+    if (kind.needsPeriods() && !declared.period()) {
+      section.refuse(
+          "standard-errors",
+          "`" + kind.word() + "` needs periods, but `records.period` names no column");
+    }
   }
 
   private static double confidence(YamlSection section) {

@@ -4,11 +4,7 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
 import java.io.IOException;
-import java.io.InputStream;
-import java.nio.charset.StandardCharsets;
-import java.util.ArrayList;
 import java.util.List;
-import java.util.Objects;
 import org.junit.jupiter.api.Test;
 
 /**
@@ -22,11 +18,9 @@ class PublishedPanelTest {
   /** Half a unit of the sixth decimal, the last one written in the reference. */
   private static final double PRINTED = 5e-7;
 
-  private static final List<String> COLUMNS = List.of("constant", "pcap", "pc", "emp", "unemp");
-
   @Test
   void pooled() throws IOException {
-    Design states = states();
+    Design states = PublishedDesigns.states();
     LinearFit fit = LeastSquares.fit(states);
     assertThat(fit.coefficients())
         .containsExactly(
@@ -48,7 +42,7 @@ class PublishedPanelTest {
 
   @Test
   void withinStates() throws IOException {
-    Design states = Effects.within(states());
+    Design states = Effects.within(PublishedDesigns.states());
     LinearFit fit = LeastSquares.fit(states);
     assertThat(fit.collinearities())
         .containsExactly(new Collinearity("constant", List.of(Collinearity.GROUP_EFFECTS)));
@@ -70,43 +64,5 @@ class PublishedPanelTest {
     for (int k = 0; k < expected.length; k++) {
       assertThat(covariance.standardError(k)).isCloseTo(expected[k], within(PRINTED));
     }
-  }
-
-  private static Design states() throws IOException {
-    List<String> lines;
-    try (InputStream in =
-        Objects.requireNonNull(
-            PublishedPanelTest.class.getResourceAsStream(
-                "/published/us-states-public-capital.csv"))) {
-      lines = new String(in.readAllBytes(), StandardCharsets.UTF_8).lines().toList();
-    }
-    List<String> names = List.of(lines.get(0).split(","));
-    int rows = lines.size() - 1;
-    double[][] x = new double[COLUMNS.size()][rows];
-    double[] y = new double[rows];
-    List<Integer> starts = new ArrayList<>();
-    String last = "";
-    for (int i = 0; i < rows; i++) {
-      List<String> cells = List.of(lines.get(i + 1).split(","));
-      if (!cells.get(0).equals(last)) {
-        last = cells.get(0);
-        starts.add(i);
-      }
-      x[0][i] = 1;
-      x[1][i] = log(cells, names, "pcap");
-      x[2][i] = log(cells, names, "pc");
-      x[3][i] = log(cells, names, "emp");
-      x[4][i] = Double.parseDouble(cells.get(names.indexOf("unemp")));
-      y[i] = log(cells, names, "gsp");
-    }
-    return ArrayDesign.of(
-        COLUMNS,
-        x,
-        y,
-        Groups.startingAt(rows, starts.stream().mapToInt(Integer::intValue).toArray()));
-  }
-
-  private static double log(List<String> cells, List<String> names, String column) {
-    return Math.log(Double.parseDouble(cells.get(names.indexOf(column))));
   }
 }
