@@ -30,12 +30,17 @@ class LeastSquaresTest {
         }
       }
       ArrayDesign scaled = RandomDesigns.design(design.columns(), rows, design.groups());
+      int[] place = new int[200];
+      for (int i = 0; i < 200; i++) {
+        place[i] = i - design.groups().start(design.groups().of(i));
+      }
+      Times times = Times.of(3, place);
       LinearFit before = LeastSquares.fit(design);
       LinearFit after = LeastSquares.fit(scaled);
       assertThat(after.rank()).isEqualTo(4);
       for (Covariance.Kind kind : Covariance.Kind.values()) {
-        Covariance first = Covariance.estimate(design, before, kind);
-        Covariance second = Covariance.estimate(scaled, after, kind);
+        Covariance first = Covariance.estimate(design, before, kind, times);
+        Covariance second = Covariance.estimate(scaled, after, kind, times);
         for (int k = 0; k < 4; k++) {
           double unit = units[4] / units[k];
           assertClose(after.coefficients()[k] / unit, before.coefficients()[k]);
