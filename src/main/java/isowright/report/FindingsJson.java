@@ -36,6 +36,7 @@ public final class FindingsJson {
     file.list("given", findings.given(), false, given -> FitJson.write(file, given));
     file.list("leastCost", findings.plans(), false, plan -> PlanJson.write(file, plan));
     file.list("filing", findings.reviews(), false, review -> PlanJson.write(file, review));
+    SpecificationJson.write(file, findings.specification());
     file.remarks("remarks", findings.remarks());
   }
 

@@ -37,6 +37,7 @@ public final class ReportContent {
     }
     sections.add(ElasticitiesSection.of(material));
     sections.add(RegularitySection.of(material));
+    ExpectationsSection.of(material).ifPresent(sections::add);
     if (!findings.plans().isEmpty()) {
       sections.add(PlansSection.of(material));
     }
@@ -44,6 +45,7 @@ public final class ReportContent {
       sections.add(FilingSection.of(material));
     }
     sections.add(SensitivitySection.of(material));
+    DecisionsSection.of(material).ifPresent(sections::add);
     sections.add(CautionsSection.of(material));
     sections.add(MethodSection.of(material));
     sections.add(RunSection.of(material));

@@ -23,6 +23,7 @@ import java.util.Optional;
  * @param plans the answers to the least-cost questions, question by question, technology by
  *     technology
  * @param reviews filed costs held against least cost
+ * @param specification results beside what was laid down before fitting
  * @param remarks what must be said of the whole study
  */
 public record Findings(
@@ -34,7 +35,32 @@ public record Findings(
     List<FitFindings.Given> given,
     List<Planned> plans,
     List<Reviewed> reviews,
+    SpecificationFindings specification,
     List<Said> remarks) {
+
+  /** Findings of a study that laid nothing down beforehand. */
+  public Findings(
+      Run run,
+      Units units,
+      double confidence,
+      Optional<Records> records,
+      List<Fitted> fits,
+      List<FitFindings.Given> given,
+      List<Planned> plans,
+      List<Reviewed> reviews,
+      List<Said> remarks) {
+    this(
+        run,
+        units,
+        confidence,
+        records,
+        fits,
+        given,
+        plans,
+        reviews,
+        SpecificationFindings.NONE,
+        remarks);
+  }
 
   /** Copies the lists. */
   public Findings {

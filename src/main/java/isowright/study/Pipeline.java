@@ -86,6 +86,9 @@ public final class Pipeline {
         study.given().stream().map(GivenStage::describe).toList(),
         plans,
         reviews,
+        new SpecificationFindings(
+            ExpectationStage.held(study.protocol().expectations(), fitted),
+            study.protocol().decisions()),
         remarks(fitted, plans));
   }
 

@@ -80,6 +80,20 @@ final class Settings {
     }
     settings.put("estimation.confidence", Double.toString(study.estimation().confidence()));
     settings.put("money", study.money().words());
+    protocol(study.protocol(), settings);
     return settings;
+  }
+
+  private static void protocol(Protocol protocol, Map<String, String> settings) {
+    for (Protocol.Expectation expected : protocol.expectations()) {
+      settings.put(
+          "expect."
+              + expected.subject().word()
+              + expected.input().map(input -> "." + input).orElse(""),
+          expected.low() + " to " + expected.high());
+    }
+    if (!protocol.decisions().isEmpty()) {
+      settings.put("decisions", Integer.toString(protocol.decisions().size()));
+    }
   }
 }

@@ -30,6 +30,7 @@ import java.util.Optional;
  * @param questions what is tested
  * @param leastCost the least-cost questions
  * @param filing the filed costs to be reviewed
+ * @param protocol what was laid down before fitting
  */
 public record Study(
     Path file,
@@ -45,7 +46,8 @@ public record Study(
     Estimation estimation,
     Questions questions,
     List<LeastCostQuestion> leastCost,
-    Optional<Filing> filing) {
+    Optional<Filing> filing,
+    Protocol protocol) {
 
   /** Copies the lists. */
   public Study {

@@ -38,9 +38,10 @@ final class StudyBinder {
           "estimation",
           "questions",
           "least-cost",
-          "filing");
-  private static final List<String> LATER =
-      List.of("matrix", "expect", "decisions", "capital", "owner", "costs");
+          "filing",
+          "expect",
+          "decisions");
+  private static final List<String> LATER = List.of("matrix", "capital", "owner", "costs");
 
   private static final List<String> ESTIMATION_KEYS =
       List.of("plant-effects", "time", "scaling", "standard-errors", "confidence");
@@ -88,6 +89,7 @@ final class StudyBinder {
     Questions questions = questions(root.section("questions"));
     var leastCost = new PlanBinder(declared, names).bind(root);
     Optional<Filing> filing = filing(root, declared);
+    Protocol protocol = new ProtocolBinder(root, declared, !fitted.isEmpty()).bind();
     return Optional.of(
         new Study(
             file,
@@ -103,7 +105,8 @@ final class StudyBinder {
             estimation,
             questions,
             leastCost,
-            filing));
+            filing,
+            protocol));
   }
 
   private static void needRecordsOrGiven(YamlSection root, Declared declared) {
