@@ -1,9 +1,11 @@
 package isowright.report;
 
 import isowright.study.Findings;
+import isowright.study.Findings.Described;
 import isowright.study.Findings.Records;
 import isowright.study.Findings.Units;
 import java.io.IOException;
+import java.util.List;
 
 /**
  * The findings file: every figure at full precision, for programs.
@@ -118,5 +120,16 @@ public final class FindingsJson {
           file.number("most", column.most());
           file.number("withinShare", column.withinShare().orElse(Double.NaN));
         });
+    List<String> without =
+        records.columns().stream()
+            .filter(column -> column.withinShare().isEmpty())
+            .map(Described::column)
+            .toList();
+    if (!without.isEmpty()) {
+      file.remember(
+          "withinShare is null for "
+              + Phrases.list(without)
+              + ": no plant is seen twice there, or the column does not vary.");
+    }
   }
 }

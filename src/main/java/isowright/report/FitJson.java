@@ -62,6 +62,17 @@ final class FitJson {
           file.uncertain(parameter.name(), parameter.figure());
           file.number("p", parameter.p());
         });
+    List<String> without =
+        fit.parameters().stream()
+            .filter(parameter -> !Double.isFinite(parameter.p()))
+            .map(Parameter::name)
+            .toList();
+    if (!without.isEmpty()) {
+      file.remember(
+          "p is null for "
+              + Phrases.list(without)
+              + ": zero is no value of interest there, or could not be tested.");
+    }
   }
 
   private static void summary(JsonFile file, Optional<Summary> summary) throws IOException {

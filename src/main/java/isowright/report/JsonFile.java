@@ -233,6 +233,11 @@ final class JsonFile {
     }
   }
 
+  /** Remembers why a number is null, so that the nearest remarks say it. */
+  void remember(String why) {
+    pending.add(Said.of("note", "no-number", why));
+  }
+
   private static Said open(String name, String where, String end) {
     return Said.of(
         "note",

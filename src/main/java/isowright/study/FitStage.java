@@ -193,7 +193,11 @@ final class FitStage {
     return Figure.estimated(value, error, low, high, Estimate.Method.PROFILE.word());
   }
 
+  /** What no parameter moves, such as a quantity that is held, is exact. */
   static Figure figure(Estimate estimate) {
+    if (estimate.standardError() == 0) {
+      return Figure.exact(estimate.value());
+    }
     return Figure.estimated(
         estimate.value(),
         estimate.standardError(),

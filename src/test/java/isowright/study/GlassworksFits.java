@@ -358,7 +358,8 @@ final class GlassworksFits {
       double[][] covariance = new double[n][n];
       for (int i = 0; i < n; i++) {
         for (int j = 0; j < n; j++) {
-          covariance[i][j] = Math.pow(-0.3, Math.abs(i - j)) * standardError(i) * standardError(j);
+          covariance[i][j] =
+              Math.pow(-0.3, Math.abs(i - j)) * (standardError(i) * standardError(j));
         }
       }
       return covariance;
