@@ -11,6 +11,7 @@ import java.util.Locale;
  * df)/df), the set that a likelihood-ratio test does not reject; r scales the test for a covariance
  * other than the classical one (Kent 1982, <i>Biometrika</i> 69, 19–27).
  *
+ * @param name the name of the curvature among the parameters, such as {@code rho}
  * @param state where the optimum lies
  * @param points by ascending curvature
  * @param best the curvature with the least sum of squares found in the region
@@ -20,6 +21,7 @@ import java.util.Locale;
  * @param scaling r
  */
 public record CurvatureProfile(
+    String name,
     State state,
     List<Point> points,
     double best,

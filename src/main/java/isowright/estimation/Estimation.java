@@ -3,7 +3,7 @@ package isowright.estimation;
 import isowright.records.Panel;
 import isowright.technology.Form;
 import isowright.technology.LinearForm;
-import isowright.technology.ProfiledForm;
+import isowright.technology.NonlinearForm;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
@@ -33,15 +33,15 @@ public final class Estimation {
     if (form instanceof LinearForm linear) {
       return new LinearEstimation(panel, specification, base, linear).fit();
     }
-    return new ProfiledEstimation(panel, specification, base, (ProfiledForm) form).fit();
+    return new ProfiledEstimation(panel, specification, base, (NonlinearForm) form).fit();
   }
 
   /**
-   * The least sum of squares of a profiled form with its curvature held at a value, all else as in
-   * the fit.
+   * The least sum of squares of a nonlinear form with every curvature held at the same value, all
+   * else as in the fit.
    */
   public static double ssrAt(Fit fit, double curvature) {
-    ProfiledForm form = (ProfiledForm) fit.specification().form();
+    NonlinearForm form = (NonlinearForm) fit.specification().form();
     return new ProfiledEstimation(fit.panel(), fit.specification(), fit.base(), form)
         .ssrAt(curvature);
   }
@@ -51,7 +51,7 @@ public final class Estimation {
    * the records cannot carry it.
    */
   public static double leastSsr(Panel panel, Specification specification) {
-    if (specification.form() instanceof ProfiledForm form) {
+    if (specification.form() instanceof NonlinearForm form) {
       return obstacles(panel, specification).isEmpty()
           ? new ProfiledEstimation(panel, specification, base(panel, specification), form)
               .leastSsr()
@@ -76,7 +76,7 @@ public final class Estimation {
       double[] base,
       Fit.State state,
       List<String> reasons) {
-    return new Fit(specification, panel, base, state, reasons, Optional.empty(), Optional.empty());
+    return new Fit(specification, panel, base, state, reasons, Optional.empty(), List.of());
   }
 
   /** What stands in the way of a specification whatever the form. */

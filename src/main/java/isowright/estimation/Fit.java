@@ -15,7 +15,8 @@ import java.util.Optional;
  * @param state what kind of answer this is
  * @param reasons in words, why there is no answer or what must be known of it; may be empty
  * @param solution the numbers; present where {@link State#usable()}
- * @param profile the profile over the curvature; present for profiled forms that could be tried
+ * @param profiles the profile over each of the form's curvatures, in its order; empty for forms
+ *     without one and where nothing could be tried
  */
 public record Fit(
     Specification specification,
@@ -24,7 +25,7 @@ public record Fit(
     State state,
     List<String> reasons,
     Optional<Solution> solution,
-    Optional<CurvatureProfile> profile) {
+    List<CurvatureProfile> profiles) {
 
   /** What kind of answer a fit is. */
   public enum State {
@@ -52,9 +53,15 @@ public record Fit(
     }
   }
 
-  /** Copies the reasons. */
+  /** Copies the lists. */
   public Fit {
     reasons = List.copyOf(reasons);
+    profiles = List.copyOf(profiles);
+  }
+
+  /** The profile of the only curvature, or of the first of several. */
+  public Optional<CurvatureProfile> profile() {
+    return profiles.stream().findFirst();
   }
 
   /** The numbers, where the state is usable. */

@@ -124,7 +124,7 @@ final class LinearEstimation {
         Fit.State.ESTIMATED,
         List.of(),
         Optional.of(solution),
-        Optional.empty());
+        List.of());
   }
 
   /** The last rows and columns of a covariance. */

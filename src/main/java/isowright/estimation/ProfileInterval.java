@@ -1,6 +1,6 @@
 package isowright.estimation;
 
-import isowright.technology.ProfiledForm;
+import isowright.technology.NonlinearForm;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
@@ -21,7 +21,8 @@ final class ProfileInterval {
 
   private static final int STEPS = 60;
 
-  private final ProfiledForm form;
+  private final ProfileSearch search;
+  private final NonlinearForm form;
   private final double least;
   private final double threshold;
   private final double scaling;
@@ -29,8 +30,9 @@ final class ProfileInterval {
   private double low;
   private double high;
 
-  private ProfileInterval(ProfiledForm form, double least, double threshold, double scaling) {
-    this.form = form;
+  private ProfileInterval(ProfileSearch search, double least, double threshold, double scaling) {
+    this.search = search;
+    this.form = search.problem().form();
     this.least = least;
     this.threshold = threshold;
     this.scaling = scaling;
@@ -39,15 +41,13 @@ final class ProfileInterval {
   /**
    * Finds the interval.
    *
-   * @param profile the profile on the form's grid, ascending in curvature
+   * @param profiled the profile on the form's grid and the search that made it
    * @param top the point with the least sum of squares
    * @param degreesOfFreedom df, of the fit with the curvature free
    * @param scaling r
    */
   static ProfileInterval around(
-      ProfileSearch search,
-      ProfiledForm form,
-      List<ProfileSearch.Held> profile,
+      CurvatureSearch.Profiled profiled,
       ProfileSearch.Held top,
       double degreesOfFreedom,
       double confidence,
@@ -55,7 +55,9 @@ final class ProfileInterval {
     double quantile =
         FDistribution.of(1, degreesOfFreedom).inverseCumulativeProbability(confidence);
     double threshold = top.ssr() * (1 + scaling * quantile / degreesOfFreedom);
-    ProfileInterval interval = new ProfileInterval(form, top.ssr(), threshold, scaling);
+    ProfileInterval interval =
+        new ProfileInterval(profiled.search(), top.ssr(), threshold, scaling);
+    List<ProfileSearch.Held> profile = profiled.points();
     List<ProfileSearch.Held> above =
         profile.stream().filter(held -> held.curvature() > top.curvature()).toList();
     List<ProfileSearch.Held> below =
@@ -63,8 +65,8 @@ final class ProfileInterval {
             .filter(held -> held.curvature() < top.curvature())
             .sorted(Comparator.comparingDouble(ProfileSearch.Held::curvature).reversed())
             .toList();
-    interval.low = interval.end(search, top, above, 0);
-    interval.high = interval.end(search, top, below, Double.POSITIVE_INFINITY);
+    interval.low = interval.end(top, above, 0);
+    interval.high = interval.end(top, below, Double.POSITIVE_INFINITY);
     return interval;
   }
 
@@ -76,6 +78,13 @@ final class ProfileInterval {
   /** Whether the interval of σ reaches up to perfect substitution. */
   boolean openAbove() {
     return Double.isInfinite(high);
+  }
+
+  /** The state of a profile whose optimum lies inside the region. */
+  CurvatureProfile.State insideState() {
+    return openBelow() || openAbove()
+        ? CurvatureProfile.State.FLAT
+        : CurvatureProfile.State.INTERIOR;
   }
 
   /** The profile described, with the points found on the way. */
@@ -93,16 +102,16 @@ final class ProfileInterval {
             .distinct()
             .sorted(Comparator.comparingDouble(CurvatureProfile.Point::curvature))
             .toList();
-    return new CurvatureProfile(state, points, top.curvature(), low, high, threshold, scaling);
+    return new CurvatureProfile(
+        search.name(), state, points, top.curvature(), low, high, threshold, scaling);
   }
 
   /** Walks outward to the first grid point above the threshold and closes in on the crossing. */
-  private double end(
-      ProfileSearch search, ProfileSearch.Held top, List<ProfileSearch.Held> outward, double open) {
+  private double end(ProfileSearch.Held top, List<ProfileSearch.Held> outward, double open) {
     ProfileSearch.Held inside = top;
     for (ProfileSearch.Held held : outward) {
       if (held.ssr() > threshold) {
-        return crossing(search, inside, held);
+        return crossing(inside, held);
       }
       inside = held;
     }
@@ -113,8 +122,7 @@ final class ProfileInterval {
    * The crossing between a point inside and one outside, by false position in √(SSR − SSR_min),
    * which is nearly straight along the curvature, with bisection as the safeguard.
    */
-  private double crossing(
-      ProfileSearch search, ProfileSearch.Held inside, ProfileSearch.Held outside) {
+  private double crossing(ProfileSearch.Held inside, ProfileSearch.Held outside) {
     ProfileSearch.Held in = inside;
     ProfileSearch.Held out = outside;
     for (int step = 0; step < STEPS; step++) {

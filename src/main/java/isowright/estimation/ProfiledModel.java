@@ -4,50 +4,54 @@ import isowright.regression.Design;
 import isowright.regression.Effects;
 import isowright.regression.Groups;
 import isowright.regression.NonlinearModel;
-import isowright.technology.ProfiledForm;
+import isowright.technology.NonlinearForm;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
-import java.util.OptionalDouble;
 
 /**
- * The regression of a profiled form: parameters are a constant (if any), the inner parameters, the
- * curvature ρ (unless it is held), the circumstances.
+ * The regression of a nonlinear form: parameters are a constant (if any), the inner parameters, the
+ * curvatures that are not held, the circumstances.
+ *
+ * <p>A single curvature is searched as ρ itself, and may step out of the economic region, which is
+ * how its edge is seen. Of several, each is searched as ln σ, so that none leaves the region while
+ * another is walked; far out it stays at σ = {@link #FARTHEST} or its inverse.
  */
 final class ProfiledModel implements NonlinearModel {
 
-  private final PanelRows rows;
-  private final ProfiledForm form;
-  private final Circumstances circumstances;
+  /** A σ beyond which isoquants are straight, and below whose inverse they are corners. */
+  private static final double FARTHEST = 1e4;
+
+  private final ProfiledProblem problem;
+  private final NonlinearForm form;
   private final boolean constant;
-  private final boolean within;
-  private final OptionalDouble heldCurvature;
+  private final double[] held;
+  private final boolean inLogs;
   private final int inner;
   private final List<String> parameters;
 
-  ProfiledModel(
-      PanelRows rows,
-      ProfiledForm form,
-      List<String> inputs,
-      Circumstances circumstances,
-      boolean within,
-      OptionalDouble heldCurvature) {
-    this.rows = rows;
-    this.form = form;
-    this.circumstances = circumstances;
-    this.within = within;
-    this.constant = !within;
-    this.heldCurvature = heldCurvature;
+  /**
+   * @param held shape K, NaN where free
+   */
+  ProfiledModel(ProfiledProblem problem, double[] held) {
+    this.problem = problem;
+    this.form = problem.form();
+    this.constant = !problem.within();
+    this.held = held.clone();
+    this.inLogs = held.length > 1;
     List<String> names = new ArrayList<>();
     if (constant) {
       names.add("constant");
     }
-    names.addAll(form.innerNames(inputs));
-    this.inner = form.innerNames(inputs).size();
-    if (heldCurvature.isEmpty()) {
-      names.add("rho");
+    names.addAll(form.innerNames(problem.inputs()));
+    this.inner = form.innerNames(problem.inputs()).size();
+    for (int k = 0; k < held.length; k++) {
+      if (Double.isNaN(held[k])) {
+        String name = form.curvatureNames(problem.inputs()).get(k);
+        names.add(inLogs ? "ln(substitution of " + name + ")" : name);
+      }
     }
-    names.addAll(circumstances.names());
+    names.addAll(problem.circumstances().names());
     this.parameters = List.copyOf(names);
   }
 
@@ -66,15 +70,37 @@ final class ProfiledModel implements NonlinearModel {
     return Arrays.copyOfRange(all, innerOffset(), innerOffset() + inner);
   }
 
-  /** The curvature among all, or the one that is held. */
-  double curvature(double[] all) {
-    return heldCurvature.orElseGet(() -> all[innerOffset() + inner]);
+  /** The curvatures ρ: those among all, and those that are held; shape K. */
+  double[] curvatures(double[] all) {
+    double[] curvatures = held.clone();
+    int at = innerOffset() + inner;
+    for (int k = 0; k < held.length; k++) {
+      if (Double.isNaN(held[k])) {
+        curvatures[k] = inLogs ? fromLog(all[at++]) : all[at++];
+      }
+    }
+    return curvatures;
+  }
+
+  /** What the search moves for a curvature ρ. */
+  double searched(double curvature) {
+    return inLogs ? Math.log(form.substitution(curvature)) : curvature;
+  }
+
+  /** ∂ρ/∂(what the search moves). */
+  double slope(double curvature) {
+    return inLogs ? -(1 + curvature) : 1;
+  }
+
+  private double fromLog(double logSubstitution) {
+    double most = Math.log(FARTHEST);
+    return form.curvature(Math.exp(Math.min(Math.max(logSubstitution, -most), most)));
   }
 
   @Override
   public Design linearisedAt(double[] all) {
     Design raw = rawAt(all);
-    return within ? Effects.within(raw) : raw;
+    return problem.within() ? Effects.within(raw) : raw;
   }
 
   /** The linearisation before plant means are removed. */
@@ -85,14 +111,16 @@ final class ProfiledModel implements NonlinearModel {
   private final class Linearised implements Design {
 
     private final double[] all;
+    private final double[] curvatures;
 
     Linearised(double[] all) {
       this.all = all;
+      this.curvatures = curvatures(all);
     }
 
     @Override
     public int rows() {
-      return rows.count();
+      return problem.rows().count();
     }
 
     @Override
@@ -102,28 +130,32 @@ final class ProfiledModel implements NonlinearModel {
 
     @Override
     public Groups groups() {
-      return rows.groups();
+      return problem.rows().groups();
     }
 
     @Override
     public void fill(int from, int to, double[][] into) {
       int size = to - from;
-      int offset = innerOffset();
       if (constant) {
         Arrays.fill(into[0], 0, size, 1);
       }
-      boolean free = heldCurvature.isEmpty();
-      double[][] derivatives = new double[inner + 1][];
-      for (int k = 0; k < inner; k++) {
-        derivatives[k] = into[offset + k];
-      }
-      derivatives[inner] = free ? into[offset + inner] : new double[size];
       double[] value = new double[size];
-      form.evaluate(rows.logInputs(from, to), size, inner(all), curvature(all), value, derivatives);
-      int rest = offset + inner + (free ? 1 : 0);
-      circumstances.fill(from, to, into, rest);
+      form.evaluate(
+          problem.rows().logInputs(from, to),
+          size,
+          inner(all),
+          curvatures,
+          value,
+          derivatives(into, size));
+      int rest = innerOffset() + inner;
+      for (int k = 0; k < held.length; k++) {
+        if (Double.isNaN(held[k])) {
+          rescale(into[rest++], size, slope(curvatures[k]));
+        }
+      }
+      problem.circumstances().fill(from, to, into, rest);
       double[] residual = into[parameters.size()];
-      rows.logOutput(from, to, residual);
+      problem.rows().logOutput(from, to, residual);
       double level = constant ? all[0] : 0;
       for (int r = 0; r < size; r++) {
         residual[r] -= level + value[r];
@@ -133,6 +165,23 @@ final class ProfiledModel implements NonlinearModel {
         for (int r = 0; r < size; r++) {
           residual[r] -= all[k] * column[r];
         }
+      }
+    }
+
+    /** The columns of the block into which the form writes its derivatives. */
+    private double[][] derivatives(double[][] into, int size) {
+      double[][] derivatives = new double[inner + held.length][];
+      int at = innerOffset();
+      for (int k = 0; k < derivatives.length; k++) {
+        boolean kept = k < inner || Double.isNaN(held[k - inner]);
+        derivatives[k] = kept ? into[at++] : new double[size];
+      }
+      return derivatives;
+    }
+
+    private void rescale(double[] column, int size, double by) {
+      for (int r = 0; by != 1 && r < size; r++) {
+        column[r] *= by;
       }
     }
   }

@@ -6,7 +6,7 @@ import isowright.estimation.Solution;
 import isowright.estimation.Specification;
 import isowright.estimation.Specification.PlantEffects;
 import isowright.technology.LinearForm;
-import isowright.technology.ProfiledForm;
+import isowright.technology.NonlinearForm;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
@@ -82,7 +82,7 @@ public final class Hypotheses {
   }
 
   private Optional<Verdict> substitution() {
-    if (!(fit.specification().form() instanceof ProfiledForm form) || fit.profile().isEmpty()) {
+    if (!(fit.specification().form() instanceof NonlinearForm form) || fit.profile().isEmpty()) {
       return Optional.empty();
     }
     double free = numbers.linear().ssr();

@@ -19,7 +19,7 @@ import isowright.study.FitFindings.Fitted;
 import isowright.study.FitFindings.Parameter;
 import isowright.study.FitFindings.Point;
 import isowright.technology.Form;
-import isowright.technology.ProfiledForm;
+import isowright.technology.NonlinearForm;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -187,7 +187,7 @@ final class FitStage {
   /** The interval of ρ is that of σ from the profile, carried over. */
   private static Figure curvatureFigure(Fit fit, double value, double error) {
     CurvatureProfile profile = fit.profile().orElseThrow();
-    ProfiledForm form = (ProfiledForm) fit.specification().form();
+    NonlinearForm form = (NonlinearForm) fit.specification().form();
     double low = form.curvature(profile.substitutionHigh());
     double high = form.curvature(profile.substitutionLow());
     return Figure.estimated(value, error, low, high, Estimate.Method.PROFILE.word());

@@ -48,7 +48,7 @@ import java.util.Optional;
 public final class Ces implements Technology {
 
   /** How the form presents itself to an estimator. */
-  public static final ProfiledForm FORM = new CesForm();
+  public static final NonlinearForm FORM = new CesForm();
 
   /** How far given shares may sum from one: what printing them to nine decimals leaves. */
   private static final double SUM_TOLERANCE = 1e-9;

@@ -17,7 +17,7 @@ import java.util.List;
  *
  * <p>Tested in {@code CesFormTest}.
  */
-final class CesForm implements ProfiledForm {
+final class CesForm implements NonlinearForm {
 
   /** A share under this says that the input adds nothing: the log ratio has run away. */
   private static final double SMALLEST_SHARE = 1e-6;
@@ -41,6 +41,11 @@ final class CesForm implements ProfiledForm {
   }
 
   @Override
+  public List<String> curvatureNames(List<String> inputs) {
+    return List.of("rho");
+  }
+
+  @Override
   public LinearForm limit() {
     return CobbDouglas.FORM;
   }
@@ -50,7 +55,11 @@ final class CesForm implements ProfiledForm {
    * that are not positive count as a small positive part of the others, since no share can be.
    */
   @Override
-  public double[] start(double[] cobbDouglasCoefficients) {
+  public List<double[]> starts(double[] cobbDouglasCoefficients) {
+    return List.of(start(cobbDouglasCoefficients));
+  }
+
+  static double[] start(double[] cobbDouglasCoefficients) {
     int n = cobbDouglasCoefficients.length;
     double positive = 0;
     for (double coefficient : cobbDouglasCoefficients) {
@@ -101,29 +110,14 @@ final class CesForm implements ProfiledForm {
   }
 
   @Override
-  public double[] region() {
-    return new double[] {-1, Double.POSITIVE_INFINITY};
-  }
-
-  @Override
-  public double substitution(double curvature) {
-    return 1 / (1 + curvature);
-  }
-
-  @Override
-  public double curvature(double substitution) {
-    return 1 / substitution - 1;
-  }
-
-  @Override
   public void evaluate(
       double[][] z,
       int rows,
       double[] inner,
-      double curvature,
+      double[] curvatures,
       double[] value,
       double[][] derivatives) {
-    CesRows block = new CesRows(z, shares(inner), inner[0], -curvature, value, derivatives);
+    CesRows block = new CesRows(z, shares(inner), inner[0], -curvatures[0], value, derivatives);
     for (int from = 0; from < rows; from += CesRows.BLOCK) {
       block.evaluate(from, Math.min(CesRows.BLOCK, rows - from));
     }
@@ -145,13 +139,13 @@ final class CesForm implements ProfiledForm {
 
   @Override
   public Technology technology(
-      List<String> inputs, double[] base, double constant, double[] inner, double curvature) {
-    return new Ces(new InputScale(inputs, base), constant, shares(inner), curvature, inner[0]);
+      List<String> inputs, double[] base, double constant, double[] inner, double[] curvatures) {
+    return new Ces(new InputScale(inputs, base), constant, shares(inner), curvatures[0], inner[0]);
   }
 
   /** ∂δ_j/∂θ_i = δ_j ([i = j] − δ_i); constant, ρ and scale are carried over as they are. */
   @Override
-  public double[][] reported(double[] inner, double curvature) {
+  public double[][] reported(double[] inner, double[] curvatures) {
     int n = inner.length;
     double[] shares = shares(inner);
     double[][] jacobian = new double[n + 3][n + 2];
@@ -164,11 +158,6 @@ final class CesForm implements ProfiledForm {
     jacobian[n + 1][n + 1] = 1;
     jacobian[n + 2][1] = 1;
     return jacobian;
-  }
-
-  @Override
-  public int scaleIndex() {
-    return 1;
   }
 
   /**

@@ -4,10 +4,10 @@ import java.util.List;
 
 /**
  * How a functional form presents itself to an estimator, which knows the two descriptions below and
- * never a concrete form: either the form is linear in its parameters, or it has one curvature
- * parameter that is profiled.
+ * never a concrete form: either the form is linear in its parameters, or it is not and has any
+ * number of curvatures that are profiled.
  */
-public sealed interface Form permits LinearForm, ProfiledForm {
+public sealed interface Form permits LinearForm, NonlinearForm {
 
   /** The form's name in study files. */
   String name();

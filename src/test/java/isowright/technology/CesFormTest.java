@@ -11,7 +11,7 @@ import org.junit.jupiter.api.Test;
 
 class CesFormTest {
 
-  private static final ProfiledForm FORM = Ces.FORM;
+  private static final NonlinearForm FORM = Ces.FORM;
 
   private static double[] inner(Random random, int n) {
     double[] inner = new double[n];
@@ -29,14 +29,14 @@ class CesFormTest {
         .containsExactly(
             "scale", "ln(share:labour/share:energy)", "ln(share:machines/share:energy)");
     double[] inner = {1.2, Math.log(0.5 / 0.2), Math.log(0.3 / 0.2)};
-    Ces ces = (Ces) FORM.technology(inputs, new double[] {2, 3, 4}, 0.7, inner, 0.4);
+    Ces ces = (Ces) FORM.technology(inputs, new double[] {2, 3, 4}, 0.7, inner, new double[] {0.4});
     assertThat(ces.scale()).isEqualTo(1.2);
     assertThat(ces.rho()).isEqualTo(0.4);
     assertThat(ces.base()).containsExactly(2, 3, 4);
     assertThat(ces.shares()[0]).isCloseTo(0.5, within(1e-15));
     assertThat(ces.shares()[1]).isCloseTo(0.3, within(1e-15));
     assertThat(ces.shares()[2]).isCloseTo(0.2, within(1e-15));
-    assertThat(FORM.scaleIndex()).isEqualTo(1);
+    assertThat(FORM.curvatureNames(inputs)).containsExactly("rho");
   }
 
   /** Rows in blocks give what the technology gives one mix at a time, over more than one block. */
@@ -53,10 +53,11 @@ class CesFormTest {
         double[] inner = inner(random, n);
         double[] value = new double[rows];
         double[][] derivatives = new double[n + 1][rows];
-        FORM.evaluate(z, rows, inner, rho, value, derivatives);
+        FORM.evaluate(z, rows, inner, new double[] {rho}, value, derivatives);
         double[] base = new double[n];
         Arrays.fill(base, 1);
-        Technology technology = FORM.technology(RandomTechnologies.inputs(n), base, 0, inner, rho);
+        Technology technology =
+            FORM.technology(RandomTechnologies.inputs(n), base, 0, inner, new double[] {rho});
         double[] shares = ((Ces) technology).shares();
         double[] gradient = new double[n + 3];
         double[] apart = new double[2];
@@ -95,13 +96,19 @@ class CesFormTest {
       double[] all = Arrays.copyOf(inner(random, n), n + 1);
       all[n] = rho;
       double[][] derivatives = new double[n + 1][1];
-      FORM.evaluate(z, 1, Arrays.copyOf(all, n), rho, new double[1], derivatives);
+      FORM.evaluate(z, 1, Arrays.copyOf(all, n), new double[] {rho}, new double[1], derivatives);
       for (int p = 0; p <= n; p++) {
         double numerical =
             TechnologyContract.derivative(
                 at -> {
                   double[] value = new double[1];
-                  FORM.evaluate(z, 1, Arrays.copyOf(at, n), at[n], value, new double[n + 1][1]);
+                  FORM.evaluate(
+                      z,
+                      1,
+                      Arrays.copyOf(at, n),
+                      new double[] {at[n]},
+                      value,
+                      new double[n + 1][1]);
                   return value[0];
                 },
                 all,
@@ -124,7 +131,7 @@ class CesFormTest {
       all[0] = random.nextGaussian();
       System.arraycopy(inner, 0, all, 1, n);
       all[n + 1] = rho;
-      double[][] jacobian = FORM.reported(inner, rho);
+      double[][] jacobian = FORM.reported(inner, new double[] {rho});
       double[] base = new double[n];
       Arrays.fill(base, 1);
       for (int row = 0; row < n + 3; row++) {
@@ -138,7 +145,7 @@ class CesFormTest {
                               base,
                               at[0],
                               Arrays.copyOfRange(at, 1, n + 1),
-                              at[n + 1])
+                              new double[] {at[n + 1]})
                           .parameters()[which],
                   all,
                   column,
@@ -146,7 +153,7 @@ class CesFormTest {
           assertThat(jacobian[row][column]).isCloseTo(numerical, within(1e-11));
         }
       }
-      assertThat(jacobian[n + 2][FORM.scaleIndex()]).isEqualTo(1);
+      assertThat(jacobian[n + 2][1]).isEqualTo(1);
     }
   }
 
@@ -174,9 +181,11 @@ class CesFormTest {
 
   @Test
   void startIsCobbDouglasWherePossibleAndAdmissibleAlways() {
-    double[] start = FORM.start(new double[] {0.6, 0.3, 0.2});
+    double[] start = FORM.starts(new double[] {0.6, 0.3, 0.2}).get(0);
     Ces ces =
-        (Ces) FORM.technology(RandomTechnologies.inputs(3), new double[] {1, 1, 1}, 0, start, 0);
+        (Ces)
+            FORM.technology(
+                RandomTechnologies.inputs(3), new double[] {1, 1, 1}, 0, start, new double[] {0});
     double[] e = new double[3];
     ces.logGradient(new double[] {1, 2, 3}, e);
     assertThat(e[0]).isCloseTo(0.6, within(1e-15));
@@ -186,7 +195,7 @@ class CesFormTest {
         new double[][] {
           {1.2, -0.3}, {0, 0}, {-1, -2}, {Double.NaN, 0.5}, {1e-9, 1}, {Double.NaN, Double.NaN}
         }) {
-      assertThat(FORM.admissible(FORM.start(odd))).as(Arrays.toString(odd)).isTrue();
+      assertThat(FORM.admissible(FORM.starts(odd).get(0))).as(Arrays.toString(odd)).isTrue();
     }
   }
 

@@ -140,7 +140,7 @@ class CesPrecisionTest {
           Arrays.setAll(columns, i -> new double[] {z[i]});
           double[] value = new double[1];
           double[][] derivatives = new double[n + 1][1];
-          Ces.FORM.evaluate(columns, 1, inner, ces.rho(), value, derivatives);
+          Ces.FORM.evaluate(columns, 1, inner, new double[] {ces.rho()}, value, derivatives);
           double size = Arrays.stream(z).map(Math::abs).max().orElseThrow();
           // Shares pass through a logarithm here, which costs a few units more.
           assertThat(value[0]).isCloseTo(precise.logMean(), within(1e-14 * size));
