@@ -12,6 +12,7 @@ import java.util.Locale;
  * @param scaled whether inputs are divided by their geometric means before logs
  * @param standardErrors how the covariance of the parameters is estimated
  * @param confidence the level of all intervals, such as 0.95
+ * @param estimator by which principle
  */
 public record Specification(
     Form form,
@@ -19,7 +20,32 @@ public record Specification(
     Time time,
     boolean scaled,
     StandardErrors standardErrors,
-    double confidence) {
+    double confidence,
+    Estimator estimator) {
+
+  /** By least squares. */
+  public Specification(
+      Form form,
+      PlantEffects plantEffects,
+      Time time,
+      boolean scaled,
+      StandardErrors standardErrors,
+      double confidence) {
+    this(
+        form,
+        plantEffects,
+        time,
+        scaled,
+        standardErrors,
+        confidence,
+        new Estimator.LeastSquares());
+  }
+
+  /** The same by another principle. */
+  public Specification by(Estimator other) {
+    return new Specification(
+        form, plantEffects, time, scaled, standardErrors, confidence, other);
+  }
 
   /** What is done about lasting differences between plants. */
   public enum PlantEffects {

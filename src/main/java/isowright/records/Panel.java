@@ -29,6 +29,7 @@ import java.util.Optional;
  * @param spending money spent on each input; absent where not declared
  * @param controls each control as it enters (logged where declared)
  * @param filedCost filed cost
+ * @param further columns that only an estimator looks at, in the order of the roles; NaN where blank
  */
 public record Panel(
     Roles roles,
@@ -45,7 +46,8 @@ public record Panel(
     List<Optional<Column>> prices,
     List<Optional<Column>> spending,
     List<Column> controls,
-    Optional<Column> filedCost) {
+    Optional<Column> filedCost,
+    List<Column> further) {
 
   /** Copies the lists. */
   public Panel {
@@ -57,6 +59,43 @@ public record Panel(
     prices = List.copyOf(prices);
     spending = List.copyOf(spending);
     controls = List.copyOf(controls);
+    further = List.copyOf(further);
+  }
+
+  /** A panel without further columns. */
+  public Panel(
+      Roles roles,
+      List<String> plants,
+      Rows plantStarts,
+      List<String> periods,
+      List<Double> periodNumbers,
+      Rows rowPeriods,
+      Rows fileRows,
+      Column output,
+      Column logOutput,
+      List<Column> quantities,
+      List<Column> logQuantities,
+      List<Optional<Column>> prices,
+      List<Optional<Column>> spending,
+      List<Column> controls,
+      Optional<Column> filedCost) {
+    this(
+        roles,
+        plants,
+        plantStarts,
+        periods,
+        periodNumbers,
+        rowPeriods,
+        fileRows,
+        output,
+        logOutput,
+        quantities,
+        logQuantities,
+        prices,
+        spending,
+        controls,
+        filedCost,
+        List.of());
   }
 
   /** The number of rows, N. */

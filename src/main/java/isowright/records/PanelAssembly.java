@@ -170,7 +170,8 @@ final class PanelAssembly {
         prices,
         spending,
         controls(),
-        money(slots.filedCost(), factor));
+        money(slots.filedCost(), factor),
+        further());
   }
 
   private double[] gather(int slot) {
@@ -221,6 +222,14 @@ final class PanelAssembly {
       controls.add(roles.controls().get(k).log() ? control.logs() : control);
     }
     return controls;
+  }
+
+  private List<Column> further() {
+    List<Column> further = new ArrayList<>();
+    for (int k = 0; k < roles.further().size(); k++) {
+      further.add(column(slots.further(k)));
+    }
+    return further;
   }
 
   private List<String> plants(List<String> plantNames) {

@@ -24,11 +24,12 @@ record PanelColumn(
     PRICE,
     SPENDING,
     CONTROL,
-    FILED_COST;
+    FILED_COST,
+    FURTHER;
 
     /** Whether values are positive by the rules of reading, so that logs exist. */
     boolean positive() {
-      return this != CONTROL;
+      return this != CONTROL && this != FURTHER;
     }
 
     boolean money() {
@@ -37,7 +38,8 @@ record PanelColumn(
   }
 
   /**
-   * Every column of a panel, output first, then each input with its money, controls, filed cost.
+   * Every column of a panel, output first, then each input with its money, controls, filed cost,
+   * further columns.
    */
   static List<PanelColumn> of(Panel panel) {
     Roles roles = panel.roles();
@@ -87,6 +89,10 @@ record PanelColumn(
     Optional<Column> filed = panel.filedCost();
     filed.ifPresent(
         c -> all.add(new PanelColumn(c, Kind.FILED_COST, "filed cost", money, -1, false)));
+    for (Column column : panel.further()) {
+      all.add(
+          new PanelColumn(column, Kind.FURTHER, "instrument or proxy", "", -1, false));
+    }
     return all;
   }
 

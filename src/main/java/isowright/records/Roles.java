@@ -14,6 +14,8 @@ import java.util.Optional;
  * @param controls what else moves output
  * @param deflator the column by which money is divided, and the period whose money is used
  * @param filedCost the column of filed cost
+ * @param further numeric columns that are neither input nor control but that an estimator looks at,
+ *     such as what shifts an input
  */
 public record Roles(
     Optional<String> plant,
@@ -23,12 +25,34 @@ public record Roles(
     List<Input> inputs,
     List<Control> controls,
     Optional<Deflator> deflator,
-    Optional<String> filedCost) {
+    Optional<String> filedCost,
+    List<String> further) {
 
   /** Copies the lists. */
   public Roles {
     inputs = List.copyOf(inputs);
     controls = List.copyOf(controls);
+    further = List.copyOf(further);
+  }
+
+  /** Roles without further columns. */
+  public Roles(
+      Optional<String> plant,
+      Optional<String> period,
+      String output,
+      Optional<String> outputUnit,
+      List<Input> inputs,
+      List<Control> controls,
+      Optional<Deflator> deflator,
+      Optional<String> filedCost) {
+    this(
+        plant, period, output, outputUnit, inputs, controls, deflator, filedCost, List.of());
+  }
+
+  /** The same with these further columns. */
+  public Roles withFurther(List<String> columns) {
+    return new Roles(
+        plant, period, output, outputUnit, inputs, controls, deflator, filedCost, columns);
   }
 
   /**

@@ -55,7 +55,9 @@ final class RowRules {
     this.kinds = slots.kinds();
     this.needed = where(Kind::neededInEveryRow);
     this.quantities = where(k -> k == Kind.QUANTITY);
-    this.positive = where(k -> k.numeric() && k != Kind.CONTROL && k != Kind.QUANTITY);
+    this.positive =
+        where(
+            k -> k.numeric() && k != Kind.CONTROL && k != Kind.QUANTITY && k != Kind.FURTHER);
     this.givesPrice = new boolean[kinds.length];
     this.period = slots.period().orElse(NONE);
     this.plant = slots.plant().orElse(NONE);

@@ -30,7 +30,9 @@ record Slot(String heading, Kind kind, String role) {
     /** A positive number; blank leaves the row's money unknown. */
     DEFLATOR,
     /** A positive number; blank leaves the filed cost unknown. */
-    FILED_COST;
+    FILED_COST,
+    /** A number; blank leaves it unknown. */
+    FURTHER;
 
     /** Whether the cells are numbers. */
     boolean numeric() {
@@ -41,7 +43,7 @@ record Slot(String heading, Kind kind, String role) {
     boolean neededInEveryRow() {
       return switch (this) {
         case PLANT, PERIOD, OUTPUT, QUANTITY, CONTROL, LOGGED_CONTROL -> true;
-        case PRICE, SPENDING, DEFLATOR, FILED_COST -> false;
+        case PRICE, SPENDING, DEFLATOR, FILED_COST, FURTHER -> false;
       };
     }
   }

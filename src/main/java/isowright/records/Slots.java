@@ -20,6 +20,7 @@ final class Slots {
   private final int[] controls;
   private final OptionalInt deflator;
   private final OptionalInt filedCost;
+  private final int[] further;
 
   /** The slots that these roles declare. */
   Slots(Roles roles) {
@@ -59,6 +60,10 @@ final class Slots {
             .filedCost()
             .map(c -> add(c, Kind.FILED_COST, "filed cost"))
             .orElse(OptionalInt.empty());
+    further =
+        roles.further().stream()
+            .mapToInt(c -> add(c, Kind.FURTHER, "further column").getAsInt())
+            .toArray();
   }
 
   private OptionalInt add(String heading, Kind kind, String role) {
@@ -131,5 +136,9 @@ final class Slots {
 
   OptionalInt filedCost() {
     return filedCost;
+  }
+
+  int further(int k) {
+    return further[k];
   }
 }

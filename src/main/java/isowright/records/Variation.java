@@ -32,7 +32,7 @@ final class Variation {
             "column-constant",
             () ->
                 "%s is %s in every row; what never varies can explain nothing. Check the column, or leave it out of the study."
-                    .formatted(column.words(), Shown.value(column.column().get(0))),
+                    .formatted(column.words(), Shown.value(firstKnown(column.column()))),
             0);
       } else if (panel.repeats() && column.kind() != Kind.FILED_COST) {
         withinPlants(panel, column, remarks);
@@ -69,7 +69,8 @@ final class Variation {
   }
 
   private static void withinPlants(Panel panel, PanelColumn column, AuditRemarks remarks) {
-    Severity severity = column.kind() == Kind.CONTROL ? Severity.NOTE : Severity.WARNING;
+    Severity severity =
+        column.kind() == Kind.CONTROL || column.kind() == Kind.FURTHER ? Severity.NOTE : Severity.WARNING;
     if (constant(panel, column.column(), Grouping.PLANT)) {
       remarks.add(
           severity,
