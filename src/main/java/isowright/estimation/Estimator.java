@@ -73,8 +73,8 @@ public sealed interface Estimator {
   }
 
   /**
-   * A frontier: output falls short of the technology by an inefficiency of one sign, beside noise of
-   * both signs.
+   * A frontier: output falls short of the technology by an inefficiency of one sign, beside noise
+   * of both signs.
    *
    * @param inefficiency its law
    * @param overTime whose it is and how it changes

@@ -32,19 +32,12 @@ public record Specification(
       StandardErrors standardErrors,
       double confidence) {
     this(
-        form,
-        plantEffects,
-        time,
-        scaled,
-        standardErrors,
-        confidence,
-        new Estimator.LeastSquares());
+        form, plantEffects, time, scaled, standardErrors, confidence, new Estimator.LeastSquares());
   }
 
   /** The same by another principle. */
   public Specification by(Estimator other) {
-    return new Specification(
-        form, plantEffects, time, scaled, standardErrors, confidence, other);
+    return new Specification(form, plantEffects, time, scaled, standardErrors, confidence, other);
   }
 
   /** What is done about lasting differences between plants. */

@@ -29,7 +29,8 @@ import java.util.Optional;
  * @param spending money spent on each input; absent where not declared
  * @param controls each control as it enters (logged where declared)
  * @param filedCost filed cost
- * @param further columns that only an estimator looks at, in the order of the roles; NaN where blank
+ * @param further columns that only an estimator looks at, in the order of the roles; NaN where
+ *     blank
  */
 public record Panel(
     Roles roles,

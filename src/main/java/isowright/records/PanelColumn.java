@@ -90,8 +90,7 @@ record PanelColumn(
     filed.ifPresent(
         c -> all.add(new PanelColumn(c, Kind.FILED_COST, "filed cost", money, -1, false)));
     for (Column column : panel.further()) {
-      all.add(
-          new PanelColumn(column, Kind.FURTHER, "instrument or proxy", "", -1, false));
+      all.add(new PanelColumn(column, Kind.FURTHER, "instrument or proxy", "", -1, false));
     }
     return all;
   }

@@ -45,8 +45,7 @@ public record Roles(
       List<Control> controls,
       Optional<Deflator> deflator,
       Optional<String> filedCost) {
-    this(
-        plant, period, output, outputUnit, inputs, controls, deflator, filedCost, List.of());
+    this(plant, period, output, outputUnit, inputs, controls, deflator, filedCost, List.of());
   }
 
   /** The same with these further columns. */

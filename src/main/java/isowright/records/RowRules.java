@@ -56,8 +56,7 @@ final class RowRules {
     this.needed = where(Kind::neededInEveryRow);
     this.quantities = where(k -> k == Kind.QUANTITY);
     this.positive =
-        where(
-            k -> k.numeric() && k != Kind.CONTROL && k != Kind.QUANTITY && k != Kind.FURTHER);
+        where(k -> k.numeric() && k != Kind.CONTROL && k != Kind.QUANTITY && k != Kind.FURTHER);
     this.givesPrice = new boolean[kinds.length];
     this.period = slots.period().orElse(NONE);
     this.plant = slots.plant().orElse(NONE);

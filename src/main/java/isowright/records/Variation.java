@@ -70,7 +70,9 @@ final class Variation {
 
   private static void withinPlants(Panel panel, PanelColumn column, AuditRemarks remarks) {
     Severity severity =
-        column.kind() == Kind.CONTROL || column.kind() == Kind.FURTHER ? Severity.NOTE : Severity.WARNING;
+        column.kind() == Kind.CONTROL || column.kind() == Kind.FURTHER
+            ? Severity.NOTE
+            : Severity.WARNING;
     if (constant(panel, column.column(), Grouping.PLANT)) {
       remarks.add(
           severity,

@@ -34,6 +34,13 @@ record Declared(
     unpriced = List.copyOf(unpriced);
   }
 
+  /** The same with further columns of the records. */
+  Declared withFurther(List<String> columns) {
+    Optional<Study.Records> more =
+        records.map(r -> new Study.Records(r.source(), r.roles().withFurther(columns), r.keep()));
+    return new Declared(present, more, plant, period, inputs, units, unpriced, outputUnit, money);
+  }
+
   /** The same with inputs whose names come from given technologies. */
   Declared withInputs(List<String> names) {
     List<Optional<String>> none = names.stream().map(name -> Optional.<String>empty()).toList();

@@ -58,7 +58,8 @@ final class FitStage {
         how.time(),
         how.scaled(),
         standardErrors(study),
-        how.confidence());
+        how.confidence(),
+        how.estimator());
   }
 
   static Specification.StandardErrors standardErrors(Study study) {

@@ -1,5 +1,6 @@
 package isowright.study;
 
+import isowright.estimation.Estimator;
 import isowright.estimation.Specification;
 import isowright.records.Keep;
 import isowright.records.Roles;
@@ -90,14 +91,42 @@ public record Study(
 
   /**
    * How technologies are fitted; {@code standardErrors} absent means clustered where there is a
-   * plant column, else robust.
+   * plant column, else robust. Of the principles asked for, the technologies rest on the first; the
+   * others are set beside it. None: least squares.
    */
   public record Estimation(
       Specification.PlantEffects plantEffects,
       Specification.Time time,
       boolean scaled,
       Optional<Specification.StandardErrors> standardErrors,
-      double confidence) {}
+      double confidence,
+      List<Estimator> estimators) {
+
+    /** Copies the list. */
+    public Estimation {
+      estimators = List.copyOf(estimators);
+    }
+
+    /** By least squares. */
+    public Estimation(
+        Specification.PlantEffects plantEffects,
+        Specification.Time time,
+        boolean scaled,
+        Optional<Specification.StandardErrors> standardErrors,
+        double confidence) {
+      this(plantEffects, time, scaled, standardErrors, confidence, List.of());
+    }
+
+    /** The same by these principles. */
+    Estimation by(List<Estimator> principles) {
+      return new Estimation(plantEffects, time, scaled, standardErrors, confidence, principles);
+    }
+
+    /** The principle that the technologies rest on. */
+    public Estimator estimator() {
+      return estimators.isEmpty() ? new Estimator.LeastSquares() : estimators.get(0);
+    }
+  }
 
   /**
    * What is tested.
