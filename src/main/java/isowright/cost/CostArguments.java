@@ -72,7 +72,7 @@ public record CostArguments(
 
   /** Whether argument k is a price. */
   public boolean price(int k) {
-    return k < inputs.size();
+    return k >= 0 && k < inputs.size();
   }
 
   /** Whether argument k is an output. */

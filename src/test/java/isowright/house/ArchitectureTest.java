@@ -55,7 +55,7 @@ class ArchitectureTest {
   }
 
   static Stream<Room> plan() {
-    List<String> ground = List.of("technology", "regression", "records");
+    List<String> ground = List.of("technology", "cost", "regression", "records");
     List<String> fitting = with(ground, "estimation");
     List<String> concluding = with(fitting, "inference");
     List<String> reviewing = with(with(concluding, "leastcost"), "review");
@@ -65,6 +65,11 @@ class ArchitectureTest {
             List.of(),
             List.of(MATHS, DISTRIBUTIONS),
             "a technology is economics alone: it must serve a filing's formula as well as a fit"),
+        new Room(
+            "cost",
+            List.of(),
+            List.of(MATHS, DISTRIBUTIONS),
+            "a cost function is economics alone, the other side of a technology"),
         new Room(
             "regression",
             List.of(),
@@ -84,7 +89,7 @@ class ArchitectureTest {
             "estimation",
             ground,
             List.of(MATHS, DISTRIBUTIONS),
-            "estimation joins the three ground rooms, no more"),
+            "estimation joins the ground rooms, no more"),
         new Room(
             "inference",
             fitting,
