@@ -36,3 +36,10 @@ restrictions <- c(
   "K_(Intercept) - C_k = 0", "K_k - C_kk = 0", "K_l - C_kl = 0", "K_y - C_yk = 0",
   "L_(Intercept) - C_l = 0", "L_k - C_kl = 0", "L_l - C_ll = 0", "L_y - C_yl = 0")
 out("electricity", iterated(equations, d, restrictions))
+
+# F of homogeneity in prices in the cost equation alone, by least squares with and without it.
+d <- transform(d, ln_cost = log(cost), lk = log(capital), llab = log(labor), lf = log(fuel))
+ssr <- function(m) sum(resid(m)^2)
+free <- lm(ln_cost ~ y + yy + lk + llab + lf, d)
+held <- lm(c ~ y + yy + k + l, d)
+cat(sprintf("electricity-equation,homogeneity F,%.15g,\n", (ssr(held) - ssr(free)) / (ssr(free) / 117)))

@@ -180,6 +180,54 @@ final class CostEquations {
     return new EquationSystem(names, equations);
   }
 
+  /**
+   * The same equations, each share equation with coefficients of its own: what symmetry is tested
+   * against. Homogeneity, where imposed, is imposed on each.
+   */
+  EquationSystem asymmetric(CostDesign design) {
+    List<String> names = new ArrayList<>();
+    if (specification.equations() == Equations.SYSTEM) {
+      names.addAll(freeNames());
+    }
+    int first = names.size();
+    List<Integer> regressors = ownRegressors();
+    for (int i : fittedShares()) {
+      regressors.forEach(k -> names.add("share " + i + " on " + k));
+    }
+    List<Equation> equations = new ArrayList<>();
+    if (specification.equations() == Equations.SYSTEM) {
+      equations.add(costEquation(design, names.size()));
+    }
+    for (int i : fittedShares()) {
+      double[] explained = new double[design.size()];
+      explained[design.share(i)] = 1;
+      double[][] load = new double[design.size()][names.size()];
+      for (int k : regressors) {
+        int at = first++;
+        load[k < 0 ? 0 : design.argument(k)][at] = 1;
+        if (specification.homogeneous() && k >= 0 && arguments.price(k)) {
+          load[design.argument(arguments.inputs().size() - 1)][at] = -1;
+        }
+      }
+      equations.add(new Equation("share of " + arguments.inputs().get(i), explained, load, false));
+    }
+    return new EquationSystem(names, equations);
+  }
+
+  /** What a share depends on: −1 for the constant, else the argument. */
+  private List<Integer> ownRegressors() {
+    List<Integer> regressors = new ArrayList<>(List.of(-1));
+    int last = arguments.inputs().size() - 1;
+    for (int k = 0; k < arguments.size(); k++) {
+      Term term = new Term(0, Math.max(k, 0));
+      boolean present = terms.contains(term) && !vanishes(term);
+      if (present && !(specification.homogeneous() && k == last)) {
+        regressors.add(k);
+      }
+    }
+    return regressors;
+  }
+
   private Equation costEquation(CostDesign design, int parameters) {
     double[] explained = new double[design.size()];
     double[][] load = new double[design.size()][parameters];

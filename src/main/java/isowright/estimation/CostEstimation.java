@@ -57,6 +57,35 @@ public final class CostEstimation {
         fit);
   }
 
+  /** The same equations with share coefficients that need not be symmetric; what it fits counts. */
+  public static SystemFit withoutSymmetry(CostData data, CostSpecification specification) {
+    CostEquations equations = new CostEquations(data, specification);
+    CostDesign design = new CostDesign(data, equations.terms());
+    return SeeminglyUnrelated.fit(design, equations.asymmetric(design));
+  }
+
+  /**
+   * By how much the estimates depend on which share equation is left out: the largest difference of
+   * a coefficient between any two choices. Zero up to rounding where the shares of every row add up
+   * to one; not zero where they do not.
+   */
+  public static double dependenceOnLeftOut(CostData data, CostFit fit) {
+    CostSpecification specification = fit.specification();
+    if (specification.equations() == Equations.COST) {
+      return 0;
+    }
+    double most = 0;
+    for (int i = 0; i < data.arguments().inputs().size(); i++) {
+      if (i != specification.leftOut()) {
+        double[] other = fit(data, specification.leavingOut(i)).values();
+        for (int k = 0; k < other.length; k++) {
+          most = Math.max(most, Math.abs(other[k] - fit.values()[k]));
+        }
+      }
+    }
+    return most;
+  }
+
   private record Uncertainty(double[][] covariance, String words, double degreesOfFreedom) {}
 
   private static Uncertainty uncertainty(

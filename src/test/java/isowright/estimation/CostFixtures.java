@@ -9,7 +9,7 @@ import java.util.ArrayList;
 import java.util.List;
 
 /** Published records of costs and shares. */
-final class CostFixtures {
+public final class CostFixtures {
 
   private CostFixtures() {}
 
@@ -17,7 +17,7 @@ final class CostFixtures {
    * 123 United States electricity companies, 1970: Christensen and Greene 1976; Greene, Econometric
    * Analysis, 5th ed., example 5.6. Inputs capital, labour, fuel; output in million kWh.
    */
-  static CostData electricity() throws IOException {
+  public static CostData electricity() throws IOException {
     double[][] c = columns("electricity-1970.csv", 123);
     CostArguments arguments =
         CostArguments.ownUnits(
@@ -35,7 +35,7 @@ final class CostFixtures {
   }
 
   /** United States manufacturing, 1947–1971: Berndt and Wood 1975. Shares and prices alone. */
-  static CostData manufacturing() throws IOException {
+  public static CostData manufacturing() throws IOException {
     double[][] c = columns("us-manufacturing-klem.csv", 25);
     CostArguments arguments =
         CostArguments.ownUnits(

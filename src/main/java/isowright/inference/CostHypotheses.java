@@ -1,0 +1,137 @@
+package isowright.inference;
+
+import isowright.cost.CostArguments;
+import isowright.cost.CostForm;
+import isowright.cost.TranslogCost.Term;
+import isowright.estimation.CostData;
+import isowright.estimation.CostEstimation;
+import isowright.estimation.CostFit;
+import isowright.estimation.CostSpecification;
+import isowright.estimation.CostSpecification.Equations;
+import isowright.estimation.CostSpecification.Restriction;
+import isowright.regression.SystemFit;
+import java.util.ArrayList;
+import java.util.List;
+
+/**
+ * The tests that belong to a cost function: homogeneity in prices and symmetry, which any cost
+ * function of price-taking, cost-minimising firms obeys; and homotheticity, homogeneity in output,
+ * constant returns, unit substitution, neutral technical change, which it may or may not.
+ *
+ * <p>Systems are compared by their likelihoods, χ² = 2 (ln L_free − ln L_held); a cost equation
+ * alone by F from the sums of squares. Both take errors as equal in all rows; where rows of a firm
+ * may depend on one another (clustered), the comparison is still that one and is said to be so.
+ *
+ * <p>Checked against Berndt and Wood (1975): likelihood ratio of symmetry 12.84, in {@code
+ * CostHypothesesTest}.
+ */
+public final class CostHypotheses {
+
+  private final CostData data;
+  private final CostFit fit;
+
+  private CostHypotheses(CostData data, CostFit fit) {
+    this.data = data;
+    this.fit = fit;
+  }
+
+  /** The tests that apply to a fit. */
+  public static List<Verdict> of(CostData data, CostFit fit) {
+    CostHypotheses tests = new CostHypotheses(data, fit);
+    List<Verdict> verdicts = new ArrayList<>();
+    tests.homogeneity(verdicts);
+    tests.symmetry(verdicts);
+    for (Restriction restriction : Restriction.values()) {
+      if (tests.applies(restriction)) {
+        tests.restriction(restriction, verdicts);
+      }
+    }
+    return List.copyOf(verdicts);
+  }
+
+  private void homogeneity(List<Verdict> verdicts) {
+    CostSpecification own = fit.specification();
+    CostFit free = own.homogeneous() ? CostEstimation.fit(data, own.homogeneous(false)) : fit;
+    CostFit held = own.homogeneous() ? fit : CostEstimation.fit(data, own.homogeneous(true));
+    verdicts.add(
+        compared(
+            "price-homogeneity",
+            "cost doubles when all prices double",
+            free.system(),
+            held.system()));
+  }
+
+  private void symmetry(List<Verdict> verdicts) {
+    boolean products = fit.specification().form() == CostForm.TRANSLOG;
+    if (fit.specification().equations() == Equations.COST || !products) {
+      return;
+    }
+    SystemFit free = CostEstimation.withoutSymmetry(data, fit.specification());
+    verdicts.add(
+        compared(
+            "symmetric-shares",
+            "the share equations are derivatives of one cost function",
+            free,
+            fit.system()));
+  }
+
+  private boolean applies(Restriction restriction) {
+    List<Restriction> imposed = fit.specification().restrictions();
+    CostArguments arguments = data.arguments();
+    boolean second = fit.function().terms().stream().anyMatch(Term::secondOrder);
+    boolean translog = fit.specification().form() == CostForm.TRANSLOG;
+    boolean cost = fit.specification().equations() != Equations.SHARES;
+    boolean outputs = !arguments.outputs().isEmpty();
+    boolean implied =
+        imposed.contains(restriction)
+            || imposed.contains(Restriction.CONSTANT_RETURNS)
+                && restriction.ordinal() < Restriction.CONSTANT_RETURNS.ordinal()
+            || imposed.contains(Restriction.HOMOGENEOUS_IN_OUTPUT)
+                && restriction == Restriction.HOMOTHETIC;
+    return !implied
+        && switch (restriction) {
+          case HOMOTHETIC -> translog && outputs;
+          case HOMOGENEOUS_IN_OUTPUT -> second && outputs && cost;
+          case CONSTANT_RETURNS -> outputs && cost;
+          case UNIT_SUBSTITUTION -> translog;
+          case NEUTRAL_CHANGE -> translog && arguments.time();
+        };
+  }
+
+  private void restriction(Restriction restriction, List<Verdict> verdicts) {
+    List<Restriction> imposed = new ArrayList<>(fit.specification().restrictions());
+    imposed.add(restriction);
+    CostFit held = CostEstimation.fit(data, fit.specification().restricted(imposed));
+    if (held.free() == fit.free()) {
+      return;
+    }
+    String null0 =
+        switch (restriction) {
+          case HOMOTHETIC -> "the mix of inputs does not depend on the scale of output";
+          case HOMOGENEOUS_IN_OUTPUT ->
+              "the mix does not depend on scale, and scale economies are the same at every output";
+          case CONSTANT_RETURNS -> "returns to scale are constant at every output";
+          case UNIT_SUBSTITUTION -> "every elasticity of substitution is one";
+          case NEUTRAL_CHANGE -> "technical change saves all inputs alike";
+        };
+    verdicts.add(compared(restriction.word(), null0, fit.system(), held.system()));
+  }
+
+  private Verdict compared(String name, String null0, SystemFit free, SystemFit held) {
+    double restrictions = free.rank() - (double) held.rank();
+    if (fit.specification().equations() == Equations.COST) {
+      double freeSsr = free.residualCovariance()[0][0];
+      double heldSsr = held.residualCovariance()[0][0];
+      double left = free.rows() - free.rank() - (double) free.absorbed();
+      double f = Math.max(0, heldSsr - freeSsr) / restrictions / (freeSsr / left);
+      return verdict(name, null0, f, new Law.F(restrictions, left));
+    }
+    double ratio = 2 * (free.logLikelihood() - held.logLikelihood());
+    return verdict(name, null0, Math.max(0, ratio), new Law.ChiSquared(restrictions));
+  }
+
+  private static Verdict verdict(String name, String null0, double statistic, Law law) {
+    double p = law.p(statistic);
+    return new Verdict(name, null0, statistic, law, p, Hypotheses.sentence(null0, p));
+  }
+}

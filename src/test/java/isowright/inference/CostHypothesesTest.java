@@ -1,0 +1,105 @@
+package isowright.inference;
+
+import static org.assertj.core.api.Assertions.assertThat;
+import static org.assertj.core.api.Assertions.within;
+
+import isowright.cost.CostForm;
+import isowright.estimation.CostData;
+import isowright.estimation.CostEstimation;
+import isowright.estimation.CostFit;
+import isowright.estimation.CostFixtures;
+import isowright.estimation.CostSpecification;
+import isowright.estimation.CostSpecification.Equations;
+import java.io.IOException;
+import java.util.List;
+import org.junit.jupiter.api.Test;
+
+/** Tests of cost functions against published statistics and against R. */
+class CostHypothesesTest {
+
+  private static CostFit fit(CostData data, CostForm form, Equations equations) {
+    int last = data.arguments().inputs().size() - 1;
+    return CostEstimation.fit(
+        data, new CostSpecification(form, equations, true, List.of(), false, false, last, 0.95));
+  }
+
+  private static Verdict verdict(CostData data, CostFit fit, String name) {
+    return CostHypotheses.of(data, fit).stream()
+        .filter(v -> v.name().equals(name))
+        .findFirst()
+        .orElseThrow();
+  }
+
+  /** Berndt and Wood (1975): likelihood ratio of symmetry 12.84, three degrees of freedom. */
+  @Test
+  void symmetryOfManufacturing() throws IOException {
+    CostData data = CostFixtures.manufacturing();
+    Verdict verdict =
+        verdict(data, fit(data, CostForm.TRANSLOG, Equations.SHARES), "symmetric-shares");
+    assertThat(verdict.statistic()).isCloseTo(12.84, within(0.5e-2));
+    assertThat(verdict.law().degreesOfFreedom()).containsExactly(3.0);
+    assertThat(verdict.rejects()).isTrue();
+  }
+
+  /** The tests that apply, each with restrictions counted by hand for three prices, one output. */
+  @Test
+  void testsOfElectricity() throws IOException {
+    CostData data = CostFixtures.electricity();
+    List<Verdict> verdicts =
+        CostHypotheses.of(data, fit(data, CostForm.TRANSLOG, Equations.SYSTEM));
+    assertThat(verdicts)
+        .extracting(Verdict::name)
+        .containsExactly(
+            "price-homogeneity",
+            "symmetric-shares",
+            "homothetic",
+            "homogeneous-in-output",
+            "constant-returns",
+            "unit-substitution");
+    assertThat(verdicts)
+        .extracting(v -> v.law().degreesOfFreedom().get(0))
+        // 1 + 3 + 1; shares of capital and labour: 2 × (constant, two prices, output); two
+        // products with output; the square as well; its coefficient as well; three of prices
+        .containsExactly(5.0, 8.0, 2.0, 3.0, 4.0, 3.0);
+    assertThat(verdicts).allSatisfy(v -> assertThat(v.p()).isBetween(0.0, 1.0));
+  }
+
+  /** One equation: F of homogeneity equals what least squares with and without it gives. */
+  @Test
+  void homogeneityOfTheCostEquation() throws IOException {
+    CostData data = CostFixtures.electricity();
+    CostFit held = fit(data, CostForm.COBB_DOUGLAS_SQUARED_OUTPUT, Equations.COST);
+    Verdict verdict = verdict(data, held, "price-homogeneity");
+    // R 4.2.2: anova(lm(c ~ y + yy + k + l), lm(ln cost ~ y + yy + ln capital + ln labor + ln
+    // fuel))
+    assertThat(verdict.statistic()).isCloseTo(F_OF_HOMOGENEITY, within(1e-9));
+    assertThat(verdict.law().degreesOfFreedom()).containsExactly(1.0, 117.0);
+  }
+
+  /** Shares printed with a slip in row 62 depend on the one left out; rescaled ones do not. */
+  @Test
+  void dependenceOnTheShareLeftOutShowsSlips() throws IOException {
+    CostData data = CostFixtures.electricity();
+    CostFit fit = fit(data, CostForm.TRANSLOG, Equations.SYSTEM);
+    assertThat(CostEstimation.dependenceOnLeftOut(data, fit)).isGreaterThan(1e-3);
+    double[][] shares = new double[3][data.rows()];
+    for (int row = 0; row < data.rows(); row++) {
+      double sum = data.shares()[0][row] + data.shares()[1][row] + data.shares()[2][row];
+      for (int i = 0; i < 3; i++) {
+        shares[i][row] = data.shares()[i][row] / sum;
+      }
+    }
+    CostData mended =
+        new CostData(
+            data.arguments(),
+            data.points(),
+            data.logCost(),
+            shares,
+            data.controls(),
+            data.controlNames(),
+            data.groups());
+    CostFit again = fit(mended, CostForm.TRANSLOG, Equations.SYSTEM);
+    // renewals end at 1e-9 of standard errors, which reach 0.2
+    assertThat(CostEstimation.dependenceOnLeftOut(mended, again)).isLessThan(1e-8);
+  }
+}
