@@ -11,6 +11,8 @@ import isowright.estimation.CostFixtures;
 import isowright.estimation.CostSpecification;
 import isowright.estimation.CostSpecification.Equations;
 import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
 import java.util.List;
 import org.junit.jupiter.api.Test;
 
