@@ -96,7 +96,7 @@ final class Answer {
     for (int i = 0; i < mix.length; i++) {
       shares[i] = spent[i] / cost;
       corner |= at[i] >= ActiveLimits.LOW || mix[i] == 0;
-      if (at[i] != ActiveLimits.FREE) {
+      if (at[i] != ActiveLimits.FREE && mix[i] > 0) {
         values[i] = (worth * elasticities[i] - spent[i]) / mix[i];
       }
       departure = Math.max(departure, departure(i, multiplier));

@@ -53,6 +53,12 @@ public record Plan(
     return status == Status.SOLVED || status == Status.CORNER;
   }
 
+  /** The same with something more to be said of it. */
+  Plan because(String more) {
+    String both = reason.isEmpty() ? more : reason + "; " + more;
+    return new Plan(status, mix, cost, marginalCost, shares, limitValues, optimality, both);
+  }
+
   @Override
   public double[] mix() {
     return mix.clone();

@@ -29,7 +29,7 @@ public record Question(double target, double[] prices, double[] low, double[] hi
       if (!(prices[i] > 0) || Double.isInfinite(prices[i])) {
         throw new IllegalArgumentException("price " + i + " is " + prices[i]);
       }
-      if (!(low[i] >= 0) || !(high[i] >= low[i]) || Double.isInfinite(low[i]) || high[i] == 0) {
+      if (!(low[i] >= 0) || !(high[i] >= low[i]) || Double.isInfinite(low[i])) {
         throw new IllegalArgumentException("limits " + i + " are " + low[i] + " and " + high[i]);
       }
     }

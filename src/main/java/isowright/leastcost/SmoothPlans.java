@@ -3,7 +3,9 @@ package isowright.leastcost;
 import isowright.leastcost.Plan.Status;
 import isowright.technology.ConditionalDemand;
 import isowright.technology.Technology;
+import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.List;
 import java.util.Optional;
 import org.jspecify.annotations.Nullable;
 
@@ -45,9 +47,38 @@ final class SmoothPlans implements Plans {
       }
     }
     LogQuestion asked = new LogQuestion(question);
+    Optional<Plan> idle = withoutOutput(asked);
+    if (idle.isPresent()) {
+      return idle.get();
+    }
     return LogQuestion.limited(question)
         ? edge(asked).orElseGet(() -> searched(asked, near))
         : searched(asked, near);
+  }
+
+  /**
+   * Where inputs are held at zero: the plan that says so if the form has no output without them.
+   */
+  private Optional<Plan> withoutOutput(LogQuestion asked) {
+    double[] z = logBase.clone();
+    boolean zero = false;
+    for (int i = 0; i < asked.n; i++) {
+      if (asked.asked.high(i) == 0) {
+        z[i] = Double.NEGATIVE_INFINITY;
+        zero = true;
+      }
+    }
+    if (!zero || Double.isFinite(technology.logOutput(z))) {
+      return Optional.empty();
+    }
+    List<String> missing = new ArrayList<>();
+    for (int i = 0; i < asked.n; i++) {
+      if (asked.asked.high(i) == 0) {
+        missing.add(technology.inputs().get(i));
+      }
+    }
+    String reason = "nothing can be made without " + Wording.list(missing);
+    return Optional.of(Answer.none(Status.INFEASIBLE, reason));
   }
 
   /** The closed form; null where a limit stands in its way. */

@@ -80,6 +80,15 @@ public sealed interface Technology permits CobbDouglas, Ces, Translog {
     return Optional.empty();
   }
 
+  /**
+   * Whether the technology is known to be regular at every mix, so that a mix which meets the
+   * first-order conditions is the cheapest of all. A form that can write its demand down is; others
+   * say so themselves where their parameters make it certain.
+   */
+  default boolean regularThroughout() {
+    return conditionalDemand().isPresent();
+  }
+
   /** The number of inputs, n. */
   default int dimension() {
     return inputs().size();
