@@ -7,13 +7,22 @@ import java.util.Arrays;
 import java.util.List;
 
 /**
- * What besides inputs moves output in a panel: controls, a trend, or a constant for each period.
- * All enter ln Q additively.
+ * What besides inputs moves output in a panel: controls, technical change, or a constant for each
+ * period.
  *
- * <p>The trend counts from the first period of the records: t = period − first period. Period
- * effects are measured against the first period.
+ * <p>With t = period − first period of the records and z_i the logged, divided inputs, what time
+ * adds to ln Q is τ t (trend), τ t + ½ τ₂ t² (quadratic trend), τ t + ½ τ₂ t² + Σ_i τ_i z_i t
+ * (biased trend: it changes the output elasticities too), or γ_t, measured against the first period
+ * (period effects and two-way). Source of the biased trend: Christensen, L. R., Jorgenson, D. W.
+ * and Lau, L. J. (1973), <i>Review of Economics and Statistics</i> 55, 28–45.
  */
 final class Circumstances {
+
+  /** The parameter of t. */
+  static final String TREND = "trend";
+
+  /** The parameter of ½ t². */
+  static final String TREND_SQUARED = "trend*trend";
 
   private final Panel panel;
   private final Specification.Time time;
@@ -40,12 +49,24 @@ final class Circumstances {
       }
       means[c] = sum / control.size();
     }
-    if (time == Specification.Time.TREND) {
-      names.add("trend");
-    } else if (time == Specification.Time.PERIOD_EFFECTS) {
+    if (time.trending()) {
+      names.add(TREND);
+    }
+    if (time.quadratic()) {
+      names.add(TREND_SQUARED);
+    }
+    if (time == Specification.Time.BIASED_TREND) {
+      panel.inputs().forEach(input -> names.add(biasOf(input)));
+    }
+    if (time.byPeriod()) {
       panel.periods().stream().skip(1).forEach(period -> names.add("period:" + period));
     }
     return new Circumstances(panel, time, List.copyOf(names), means);
+  }
+
+  /** The parameter of z_i t. */
+  static String biasOf(String input) {
+    return input + "*" + TREND;
   }
 
   /** The names of the parameters that belong to the columns. */
@@ -57,46 +78,83 @@ final class Circumstances {
     return names.size();
   }
 
-  /** Writes the columns for rows {@code from} to {@code to − 1}. */
-  void fill(int from, int to, double[][] into, int offset) {
+  /**
+   * Writes the columns for rows {@code from} to {@code to − 1}.
+   *
+   * @param z the logged, divided inputs of those rows
+   */
+  void fill(int from, int to, double[][] z, double[][] into, int offset) {
     int k = offset;
     for (Column control : panel.controls()) {
       control.copy(from, to, into[k++]);
     }
-    switch (time) {
-      case NONE -> {}
-      case TREND -> {
-        double[] column = into[k];
-        for (int r = from; r < to; r++) {
-          column[r - from] = since(panel.rowPeriods().get(r));
-        }
+    if (time.byPeriod()) {
+      periods(from, to, into, k);
+    } else if (time.trending()) {
+      trend(from, to, z, into, k);
+    }
+  }
+
+  private void trend(int from, int to, double[][] z, double[][] into, int first) {
+    double[] t = into[first];
+    for (int r = from; r < to; r++) {
+      t[r - from] = since(panel.rowPeriods().get(r));
+    }
+    int k = first + 1;
+    if (time.quadratic()) {
+      double[] square = into[k++];
+      for (int r = 0; r < to - from; r++) {
+        square[r] = 0.5 * t[r] * t[r];
       }
-      case PERIOD_EFFECTS -> {
-        for (int p = 1; p < panel.periods().size(); p++) {
-          Arrays.fill(into[k + p - 1], 0, to - from, 0);
-        }
-        for (int r = from; r < to; r++) {
-          int p = panel.rowPeriods().get(r);
-          if (p > 0) {
-            into[k + p - 1][r - from] = 1;
-          }
+    }
+    if (time == Specification.Time.BIASED_TREND) {
+      for (double[] input : z) {
+        double[] product = into[k++];
+        for (int r = 0; r < to - from; r++) {
+          product[r] = input[r] * t[r];
         }
       }
     }
   }
 
-  /** The values of the columns at a period, with controls at their means over the records. */
+  private void periods(int from, int to, double[][] into, int first) {
+    for (int p = 1; p < panel.periods().size(); p++) {
+      Arrays.fill(into[first + p - 1], 0, to - from, 0);
+    }
+    for (int r = from; r < to; r++) {
+      int p = panel.rowPeriods().get(r);
+      if (p > 0) {
+        into[first + p - 1][r - from] = 1;
+      }
+    }
+  }
+
+  /**
+   * What a unit of each parameter adds to ln Q at a period whatever the mix, controls at their
+   * means over the records; zero for parameters that work through an input.
+   */
   double[] at(int period) {
     double[] values = Arrays.copyOf(controlMeans, names.size());
-    if (time == Specification.Time.TREND) {
-      values[controlMeans.length] = since(period);
-    } else if (time == Specification.Time.PERIOD_EFFECTS && period > 0) {
-      values[controlMeans.length + period - 1] = 1;
+    int k = controlMeans.length;
+    if (time.byPeriod() && period > 0) {
+      values[k + period - 1] = 1;
+    } else if (time.trending()) {
+      double t = since(period);
+      values[k] = t;
+      if (time.quadratic()) {
+        values[k + 1] = 0.5 * t * t;
+      }
     }
     return values;
   }
 
-  private double since(int period) {
+  /** The place of the parameter through which time works on input i; −1 where there is none. */
+  int bias(int input) {
+    return time == Specification.Time.BIASED_TREND ? controlMeans.length + 2 + input : -1;
+  }
+
+  /** t: the distance of a period from the first one, in the unit of the periods. */
+  double since(int period) {
     return panel.periodNumbers().get(period) - panel.periodNumbers().get(0);
   }
 }

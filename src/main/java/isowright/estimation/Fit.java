@@ -1,6 +1,8 @@
 package isowright.estimation;
 
 import isowright.records.Panel;
+import isowright.technology.LinearForm;
+import isowright.technology.Technology;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
@@ -72,36 +74,69 @@ public record Fit(
 
   /**
    * The technology at a period for a productivity, controls at their means, with the covariance of
-   * its parameters. The constant takes up what period, controls and productivity add to ln Q.
+   * its parameters. The constant takes up what period, controls and productivity add to ln Q; a
+   * biased trend also moves the coefficients of the inputs' logs to where they are at that period.
    *
    * @param period the index of the period in the panel
    */
   public EstimatedTechnology at(int period, Productivity productivity) {
     Solution numbers = numbers();
-    double[] circumstances = Circumstances.of(panel, specification.time()).at(period);
-    int p = numbers.technology().parameters().length;
-    double[][] toTechnology = new double[p][numbers.parameters().length];
-    for (int k = 0; k < p; k++) {
-      toTechnology[k][k] = 1;
-    }
+    boolean ownConstant =
+        !(productivity instanceof Productivity.Typical) || !specification.plantEffects().constant();
+    double[][] toTechnology = toTechnology(period, !ownConstant);
+    double[] own = numbers.technology().parameters();
+    double[] all = numbers.parameters();
+    double[] moved = own.clone();
     double shift = 0;
-    for (int c = 0; c < circumstances.length; c++) {
-      toTechnology[0][p + c] = circumstances[c];
-      shift += circumstances[c] * numbers.parameters()[p + c];
+    for (int j = own.length; j < all.length; j++) {
+      shift += toTechnology[0][j] * all[j];
+      for (int k = 1; k < own.length; k++) {
+        moved[k] += toTechnology[k][j] * all[j];
+      }
     }
     double[][] covariance = numbers.covariance();
-    boolean ownConstant =
-        !(productivity instanceof Productivity.Typical)
-            || specification.plantEffects() == Specification.PlantEffects.WITHIN;
     if (ownConstant) {
       double[] weights = numbers.levels().weights(productivity);
       shift += numbers.levels().shift(weights);
       covariance = numbers.levels().covariance(weights);
     }
+    Technology technology =
+        specification.time() == Specification.Time.BIASED_TREND
+            ? numbers.technology().withParameters(moved)
+            : numbers.technology();
     return new EstimatedTechnology(
-        numbers.technology().shifted(shift),
+        technology.shifted(shift),
         Matrices.sandwich(toTechnology, covariance),
         numbers.covarianceSource().degreesOfFreedom());
+  }
+
+  /**
+   * The technology's parameters at a period by all reported ones, p × P.
+   *
+   * @param plantMeans whether plant means that were added stand at their means over the rows (the
+   *     typical plant); a plant's own constant holds its own
+   */
+  private double[][] toTechnology(int period, boolean plantMeans) {
+    Solution numbers = numbers();
+    int p = numbers.technology().parameters().length;
+    double[][] to = new double[p][numbers.parameters().length];
+    for (int k = 0; k < p; k++) {
+      to[k][k] = 1;
+    }
+    Circumstances circumstances = Circumstances.of(panel, specification.time());
+    System.arraycopy(circumstances.at(period), 0, to[0], p, circumstances.count());
+    if (specification.time() == Specification.Time.BIASED_TREND
+        && specification.form() instanceof LinearForm linear) {
+      int[] places = linear.firstOrder(panel.inputs().size());
+      for (int i = 0; i < places.length; i++) {
+        to[1 + places[i]][p + circumstances.bias(i)] = circumstances.since(period);
+      }
+    }
+    double[] means = numbers.treatment().plantMeans();
+    if (plantMeans) {
+      System.arraycopy(means, 0, to[0], p + circumstances.count(), means.length);
+    }
+    return to;
   }
 
   /** The technology of the typical plant in the last period. */

@@ -67,22 +67,14 @@ final class GroupMeans {
     return weights;
   }
 
-  /** Σ_g weight_g × mean_g. */
-  double weighted(double[] weights) {
-    double sum = 0;
-    for (int g = 0; g < means.length; g++) {
-      sum += weights[g] * means[g];
-    }
-    return sum;
-  }
-
   /**
-   * Σ_g weight_g² / rows of g: the variance of the weighted mean of independent unit-variance rows.
+   * Σ_g weight_g² shrinkage_g / rows of g: with shrinkages of one, the variance of the weighted
+   * mean of independent unit-variance rows.
    */
-  double unitVariance(double[] weights) {
+  double unitVariance(double[] weights, double[] shrinkage) {
     double sum = 0;
     for (int g = 0; g < means.length; g++) {
-      sum += weights[g] * weights[g] / size(g);
+      sum += weights[g] * weights[g] * shrinkage[g] / size(g);
     }
     return sum;
   }

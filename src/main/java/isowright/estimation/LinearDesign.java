@@ -62,8 +62,9 @@ final class LinearDesign implements Design {
       Arrays.fill(into[0], 0, to - from, 1);
       offset = 1;
     }
-    form.regressors(rows.logInputs(from, to), to - from, into, offset);
-    circumstances.fill(from, to, into, offset + formColumns);
+    double[][] z = rows.logInputs(from, to);
+    form.regressors(z, to - from, into, offset);
+    circumstances.fill(from, to, z, into, offset + formColumns);
     rows.logOutput(from, to, into[columns.size()]);
   }
 }

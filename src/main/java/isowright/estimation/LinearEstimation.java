@@ -8,6 +8,7 @@ import isowright.regression.Effects;
 import isowright.regression.FitStatistics;
 import isowright.regression.LeastSquares;
 import isowright.regression.LinearFit;
+import isowright.regression.VarianceComponents;
 import isowright.technology.LinearForm;
 import isowright.technology.Technology;
 import java.util.ArrayList;
@@ -16,7 +17,9 @@ import java.util.List;
 import java.util.Optional;
 
 /**
- * Fits a form that is linear in its parameters: ordinary least squares, pooled or within plants.
+ * Fits a form that is linear in its parameters: ordinary least squares on the rows as they are, on
+ * what varies within plants, on means of plants, on differences, or on rows less a share of the
+ * means of their plant (random effects).
  */
 final class LinearEstimation {
 
@@ -24,38 +27,51 @@ final class LinearEstimation {
   private final Specification specification;
   private final double[] base;
   private final LinearForm form;
-  private final boolean within;
+  private final boolean constant;
+  private final Circumstances circumstances;
 
   LinearEstimation(Panel panel, Specification specification, double[] base, LinearForm form) {
     this.panel = panel;
     this.specification = specification;
     this.base = base;
     this.form = form;
-    this.within = specification.plantEffects() == Specification.PlantEffects.WITHIN;
+    this.constant = specification.plantEffects().constant();
+    this.circumstances = Circumstances.of(panel, specification.time());
   }
 
   Fit fit() {
-    Circumstances circumstances = Circumstances.of(panel, specification.time());
     LinearDesign raw =
-        new LinearDesign(PanelRows.of(panel, base), form, panel.inputs(), circumstances, !within);
-    Design design = within ? Effects.within(raw) : raw;
-    LinearFit fit = LeastSquares.fit(design);
-    Optional<Fit> lacking = lacking(panel, specification, base, fit);
-    return lacking.orElseGet(() -> solved(circumstances, raw, design, fit));
+        new LinearDesign(PanelRows.of(panel, base), form, panel.inputs(), circumstances, constant);
+    PlantTreatment treatment = PlantTreatment.of(panel, specification, raw);
+    if (!treatment.lacking().isEmpty()) {
+      return Estimation.without(panel, specification, base, Fit.State.REFUSED, treatment.lacking());
+    }
+    LinearFit fit = LeastSquares.fit(treatment.design());
+    Optional<Fit> lacking =
+        lacking(panel, specification, base, fit, treatment.outcome().rows().kind());
+    return lacking.orElseGet(() -> solved(treatment, fit));
   }
 
   /** The fit that says what the rows lack, if anything. */
   static Optional<Fit> lacking(
-      Panel panel, Specification specification, double[] base, LinearFit fit) {
+      Panel panel, Specification specification, double[] base, LinearFit fit, RowsUsed.Kind kind) {
     int parameters = fit.columns().size() + fit.absorbed();
     if (fit.rows() <= parameters) {
+      String rows =
+          switch (kind) {
+            case EACH -> fit.rows() + " rows";
+            case PLANT_MEANS -> fit.rows() + " plants (one mean each)";
+            case DIFFERENCES ->
+                fit.rows() + (fit.rows() == 1 ? " difference" : " differences") + " of rows";
+          };
       String reason =
-          fit.rows()
-              + " rows cannot carry "
+          rows
+              + " cannot carry "
               + parameters
               + " parameters"
               + (fit.absorbed() > 0 ? " (plant effects among them)" : "")
-              + ": add records, or ask for a form with fewer parameters.";
+              + ": add records, or ask for a form with fewer parameters"
+              + (kind == RowsUsed.Kind.EACH ? "." : ", or set plant-effects to within.");
       return Optional.of(
           Estimation.without(panel, specification, base, Fit.State.REFUSED, List.of(reason)));
     }
@@ -65,7 +81,7 @@ final class LinearEstimation {
         reasons.add(
             collinearity.column()
                 + " cannot be told apart from "
-                + String.join(", ", collinearity.among())
+                + among(collinearity)
                 + ": in these records it is an exact combination of them. Leave one of them out, add"
                 + " records in which they move apart, or ask for a simpler form.");
       }
@@ -75,36 +91,50 @@ final class LinearEstimation {
     return Optional.empty();
   }
 
-  private Fit solved(Circumstances circumstances, LinearDesign raw, Design design, LinearFit fit) {
+  private static String among(Collinearity collinearity) {
+    return collinearity.among().isEmpty()
+        ? "zero"
+        : String.join(", ", collinearity.among())
+            .replace(Collinearity.GROUP_EFFECTS, "the plant effects");
+  }
+
+  private Fit solved(PlantTreatment treatment, LinearFit fit) {
+    Design design = treatment.design();
+    Treatment outcome = treatment.outcome();
     Covariance covariance =
         Covariance.estimate(
-            design, fit, kind(specification.standardErrors()), PanelRows.of(panel, base).times());
-    int slopes = fit.columns().size() - (within ? 0 : 1);
-    GroupMeans means = GroupMeans.of(raw, fit.coefficients());
-    double[][] slopeCovariance = slopeBlock(covariance.matrix(), slopes);
+            design,
+            fit,
+            kind(specification.standardErrors()),
+            PanelRows.of(panel, base).times(outcome.rows()));
+    int columns = fit.columns().size();
+    int first = constant ? 0 : 1;
+    double[] residuals = residuals(treatment, fit);
     PlantLevels levels =
         new PlantLevels(
-            means,
-            slopeCovariance,
-            within ? 0 : 1,
-            fit.residualVariance(),
-            Matrices.identity(slopes + 1));
-    double[] parameters = new double[slopes + 1];
-    System.arraycopy(fit.coefficients(), 0, parameters, within ? 1 : 0, fit.coefficients().length);
+            treatment.levels(),
+            fit.coefficients(),
+            covariance.matrix(),
+            PlantLevels.level(columns, constant, outcome.plantMeans().length),
+            size -> outcome.components().map(c -> c.shrinkage(size)).orElse(1.0),
+            rowVariance(treatment, fit, residuals),
+            Matrices.identity(columns + first));
+    double[] parameters = new double[columns + first];
+    System.arraycopy(fit.coefficients(), 0, parameters, first, columns);
     double[][] full = covariance.matrix();
-    if (within) {
+    if (!constant) {
       parameters[0] = levels.typical();
       full = levels.covariance(levels.weights(new Productivity.Typical()));
     }
-    int formColumns = slopes - circumstances.count();
+    int beside = circumstances.count() + outcome.plantMeans().length;
     Technology technology =
         form.technology(
             panel.inputs(),
             base,
             parameters[0],
-            Arrays.copyOfRange(parameters, 1, 1 + formColumns));
+            Arrays.copyOfRange(parameters, 1, parameters.length - beside));
     List<String> names = new ArrayList<>(technology.parameterNames());
-    names.addAll(circumstances.names());
+    names.addAll(fit.columns().subList(columns - beside, columns));
     Solution solution =
         new Solution(
             technology,
@@ -112,11 +142,12 @@ final class LinearEstimation {
             parameters,
             full,
             covariance,
-            FitStatistics.of(fit),
+            statistics(treatment, fit),
             design,
             fit,
-            LeastSquares.residuals(design, fit),
-            levels);
+            residuals,
+            levels,
+            outcome);
     return new Fit(
         specification,
         panel,
@@ -127,14 +158,62 @@ final class LinearEstimation {
         List.of());
   }
 
-  /** The last rows and columns of a covariance. */
-  static double[][] slopeBlock(double[][] covariance, int slopes) {
-    int skip = covariance.length - slopes;
-    double[][] block = new double[slopes][];
-    for (int k = 0; k < slopes; k++) {
-      block[k] = Arrays.copyOfRange(covariance[skip + k], skip, covariance.length);
+  /**
+   * What is left of ln Q, row by row, once the level of the plant is taken off where it has one.
+   */
+  private double[] residuals(PlantTreatment treatment, LinearFit fit) {
+    Design levels = treatment.levels();
+    return switch (specification.plantEffects()) {
+      case NONE, WITHIN -> LeastSquares.residuals(treatment.design(), fit);
+      case BETWEEN -> LeastSquares.residuals(levels, fit);
+      case DIFFERENCES -> LeastSquares.residuals(Effects.within(levels), fit);
+      case RANDOM, MUNDLAK -> {
+        double[] residuals = LeastSquares.residuals(levels, fit);
+        VarianceComponents components = treatment.outcome().components().orElseThrow();
+        for (int g = 0; g < levels.groups().count(); g++) {
+          int start = levels.groups().start(g);
+          int end = levels.groups().end(g);
+          double mean = 0;
+          for (int r = start; r < end; r++) {
+            mean += residuals[r] / (end - start);
+          }
+          double effect = components.shrinkage(end - start) * mean;
+          for (int r = start; r < end; r++) {
+            residuals[r] -= effect;
+          }
+        }
+        yield residuals;
+      }
+    };
+  }
+
+  /** The variance of a row's error about the level of its plant. */
+  private double rowVariance(PlantTreatment treatment, LinearFit fit, double[] residuals) {
+    return switch (specification.plantEffects()) {
+      case NONE, WITHIN -> fit.residualVariance();
+      case RANDOM, MUNDLAK -> treatment.outcome().components().orElseThrow().row();
+      case BETWEEN -> withinSsr(treatment.levels(), fit) / (residuals.length - fit.rows());
+      case DIFFERENCES -> {
+        int groups = treatment.levels().groups().count();
+        yield withinSsr(treatment.levels(), fit) / (residuals.length - groups - fit.rank());
+      }
+    };
+  }
+
+  private static double withinSsr(Design levels, LinearFit fit) {
+    double sum = 0;
+    for (double residual : LeastSquares.residuals(Effects.within(levels), fit)) {
+      sum += residual * residual;
     }
-    return block;
+    return sum;
+  }
+
+  private static FitStatistics statistics(PlantTreatment treatment, LinearFit fit) {
+    return treatment
+        .outcome()
+        .components()
+        .map(c -> FitStatistics.ofPartlyWithin(fit, c.shares(treatment.levels().groups())))
+        .orElseGet(() -> FitStatistics.of(fit));
   }
 
   static Covariance.Kind kind(Specification.StandardErrors standardErrors) {

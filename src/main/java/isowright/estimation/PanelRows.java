@@ -47,10 +47,15 @@ final class PanelRows {
 
   /** The periods of the rows. */
   Times times() {
+    return times(RowsUsed.each(panel.rows()));
+  }
+
+  /** The periods of the rows of a regression; of a difference, that of its later row. */
+  Times times(RowsUsed used) {
     return new Times() {
       @Override
       public int rows() {
-        return panel.rows();
+        return used.count();
       }
 
       @Override
@@ -60,7 +65,7 @@ final class PanelRows {
 
       @Override
       public int of(int row) {
-        return panel.rowPeriods().get(row);
+        return panel.rowPeriods().get(used.panelRow(row));
       }
     };
   }

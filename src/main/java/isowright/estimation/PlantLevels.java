@@ -1,69 +1,123 @@
 package isowright.estimation;
 
+import isowright.regression.Design;
 import java.util.Arrays;
 import java.util.Comparator;
+import java.util.function.IntToDoubleFunction;
 import java.util.stream.IntStream;
 
 /**
  * Plants' productivity and the constant that belongs to any of them.
  *
- * <p>The level of plant i is the mean over its rows of ln Q less what slopes, inputs and
- * circumstances explain: c_i = ȳ_i − h̄_i(θ). For weights ω over plants the constant is c_ω = Σ ω_i
- * c_i, with
+ * <p>Notation: θ the estimates over the columns of the regression in levels, V their covariance,
+ * x̄_i the means of the columns over the T_i rows of plant i, r̄_i its mean residual ȳ_i − x̄_i′θ,
+ * z_i the part of x̄_i that is level rather than slope (the constant, plant means that were added;
+ * zero elsewhere), s² the variance of a row's error. The constant of plant i is
  *
- * <pre>
- *   cov(c_ω, θ) = −m_ω′ V,   var(c_ω) = m_ω′ V m_ω + s² Σ ω_i² / T_i,
- * </pre>
+ * <pre>  c_i = z_i′θ + λ_i r̄_i. </pre>
  *
- * m_ω the weighted means of the regressors (∂h/∂θ), V the covariance of the slopes, s² the residual
- * variance, T_i the rows of plant i. The levels are those of the plants in the records over the
- * periods recorded, not of a wider population of plants.
+ * With λ_i = 1 it is the plant's own mean; with λ_i = T_i σ²_u / (T_i σ²_u + σ²_e) it is the best
+ * linear prediction of a random effect (Henderson 1975, <i>Biometrics</i> 31, 423–447; Baltagi,
+ * <i>Econometric Analysis of Panel Data</i>, section on prediction). For weights ω over plants, c_ω
+ * = Σ ω_i c_i and d = Σ ω_i (z_i − λ_i x̄_i),
+ *
+ * <pre>  cov(c_ω, θ) = V d,   var(c_ω) = d′V d + s² Σ ω_i² λ_i / T_i, </pre>
+ *
+ * the second term being that of the error of the rows, and of the effect as far as it is not known
+ * (λ² σ²_e/T + (1 − λ)² σ²_u = λ σ²_e/T). The levels are those of the plants in the records over
+ * the periods recorded, not of a wider population of plants. Tested in {@code PlantLevelsTest}.
  */
 public final class PlantLevels {
 
   private final GroupMeans means;
-  private final double[][] slopeCovariance;
-  private final double residualVariance;
+  private final double[] own;
+  private final double[] shrinkage;
+  private final double[][] covariance;
+  private final boolean[] level;
+  private final boolean constant;
+  private final double rowVariance;
   private final double[][] toReported;
-  private final int firstSlope;
 
   /**
-   * @param means group means of the design before plant means are removed, with the estimated
-   *     coefficients
-   * @param slopeCovariance V, over the columns of that design from {@code firstSlope} on
-   * @param firstSlope 1 where the design has a constant, else 0
+   * @param levels the regression in levels, before anything is removed
+   * @param coefficients θ; zeros where the response is a residual
+   * @param covariance V
+   * @param level the columns that are level rather than slope
+   * @param shrinkage λ_i by the number of rows of the plant
+   * @param rowVariance s²
    * @param toReported reported parameters by free ones (constant, slopes)
    */
   PlantLevels(
-      GroupMeans means,
-      double[][] slopeCovariance,
-      int firstSlope,
-      double residualVariance,
+      Design levels,
+      double[] coefficients,
+      double[][] covariance,
+      boolean[] level,
+      IntToDoubleFunction shrinkage,
+      double rowVariance,
       double[][] toReported) {
-    this.means = means;
-    this.slopeCovariance = slopeCovariance;
-    this.firstSlope = firstSlope;
-    this.residualVariance = residualVariance;
+    this.means = GroupMeans.of(levels, coefficients);
+    this.covariance = covariance;
+    this.level = level;
+    this.constant = level.length > 0 && level[0];
+    this.rowVariance = rowVariance;
     this.toReported = toReported;
+    this.own = own(levels, coefficients);
+    this.shrinkage = new double[means.count()];
+    Arrays.setAll(this.shrinkage, g -> shrinkage.applyAsDouble(means.size(g)));
   }
 
-  /**
-   * The constant of the typical plant on the scale of the levels: 0 where the design has a
-   * constant.
-   */
+  /** z_i′θ without the constant, by plant. */
+  private double[] own(Design levels, double[] coefficients) {
+    double[] own = new double[means.count()];
+    double[] others = coefficients.clone();
+    boolean any = false;
+    for (int k = 1; k < level.length; k++) {
+      if (level[k]) {
+        others[k] = 0;
+        any = true;
+      }
+    }
+    if (any) {
+      GroupMeans without = GroupMeans.of(levels, others);
+      Arrays.setAll(own, g -> without.get(g) - means.get(g));
+    }
+    return own;
+  }
+
+  /** Which columns are level: a constant that stands first, and those after the others. */
+  static boolean[] level(int columns, boolean constant, int last) {
+    boolean[] level = new boolean[columns];
+    Arrays.fill(level, columns - last, columns, true);
+    if (constant) {
+      level[0] = true;
+    }
+    return level;
+  }
+
+  /** c_i, less the constant of the regression where it has one. */
+  private double get(int plant) {
+    return own[plant] + shrinkage[plant] * means.get(plant);
+  }
+
+  /** The typical plant on that scale: the mean over rows of what is level. */
   double typical() {
-    return means.weighted(means.byRows());
+    double sum = 0;
+    double[] weights = means.byRows();
+    for (int g = 0; g < weights.length; g++) {
+      sum += weights[g] * (constant ? own[g] : get(g));
+    }
+    return sum;
   }
 
-  /** Log output of plant p relative to the typical plant. */
+  /** Log output of plant p relative to the typical plant, at equal inputs. */
   public double relative(int plant) {
-    return means.get(plant) - typical();
+    return get(plant) - typical();
   }
 
-  /** Log output of every plant relative to the typical one. */
+  /** Log output of every plant relative to the typical one, at equal inputs. */
   public double[] relative() {
     double typical = typical();
-    return IntStream.range(0, means.count()).mapToDouble(p -> means.get(p) - typical).toArray();
+    return IntStream.range(0, means.count()).mapToDouble(p -> get(p) - typical).toArray();
   }
 
   /** The weights over plants that stand for a productivity. */
@@ -79,30 +133,50 @@ public final class PlantLevels {
     return means.byRows();
   }
 
-  /** The constant's distance from the typical one, Σ ω_i c_i − c. */
+  /** The distance of c_ω from the reported constant. */
   double shift(double[] weights) {
-    return means.weighted(weights) - typical();
+    double sum = 0;
+    for (int g = 0; g < weights.length; g++) {
+      sum += weights[g] * get(g);
+    }
+    return constant ? sum : sum - typical();
   }
 
-  /** The covariance of the reported parameters with the constant of these weights. */
+  /** The covariance of the reported parameters with c_ω in the place of the constant. */
   double[][] covariance(double[] weights) {
-    int slopes = slopeCovariance.length;
-    double[] all = means.regressors(weights);
-    double[] m = Arrays.copyOfRange(all, firstSlope, firstSlope + slopes);
-    double[][] free = new double[slopes + 1][slopes + 1];
-    double variance = residualVariance * means.unitVariance(weights);
-    for (int k = 0; k < slopes; k++) {
-      double product = 0;
-      for (int l = 0; l < slopes; l++) {
-        product += slopeCovariance[k][l] * m[l];
-        free[k + 1][l + 1] = slopeCovariance[k][l];
+    int columns = covariance.length;
+    int first = constant ? 0 : 1;
+    double[] d = direction(weights);
+    double[][] free = new double[columns + first][columns + first];
+    for (int k = 0; k < columns; k++) {
+      System.arraycopy(covariance[k], 0, free[k + first], first, columns);
+    }
+    double variance = rowVariance * means.unitVariance(weights, shrinkage);
+    double[] with = new double[columns];
+    for (int k = 0; k < columns; k++) {
+      for (int l = 0; l < columns; l++) {
+        with[k] += covariance[k][l] * d[l];
       }
-      free[0][k + 1] = -product;
-      free[k + 1][0] = -product;
-      variance += m[k] * product;
+      variance += d[k] * with[k];
+    }
+    for (int k = 1 - first; k < columns; k++) {
+      free[0][k + first] = with[k];
+      free[k + first][0] = with[k];
     }
     free[0][0] = variance;
     return Matrices.sandwich(toReported, free);
+  }
+
+  /** d. */
+  private double[] direction(double[] weights) {
+    double[] shrunk = new double[weights.length];
+    Arrays.setAll(shrunk, g -> weights[g] * shrinkage[g]);
+    double[] d = means.regressors(shrunk);
+    double[] whole = means.regressors(weights);
+    for (int k = 0; k < d.length; k++) {
+      d[k] = (level[k] ? whole[k] : 0) - d[k];
+    }
+    return d;
   }
 
   /** The linear interpolation between order statistics that R calls type 7. */
@@ -111,7 +185,7 @@ public final class PlantLevels {
     int[] order =
         IntStream.range(0, plants)
             .boxed()
-            .sorted(Comparator.comparingDouble(means::get))
+            .sorted(Comparator.comparingDouble(this::get))
             .mapToInt(Integer::intValue)
             .toArray();
     double position = 0.75 * (plants - 1);

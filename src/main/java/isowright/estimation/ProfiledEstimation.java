@@ -38,7 +38,8 @@ final class ProfiledEstimation {
 
   Fit fit() {
     LinearFit limit = limitFit();
-    Optional<Fit> lacking = LinearEstimation.lacking(panel, specification, base, limit);
+    Optional<Fit> lacking =
+        LinearEstimation.lacking(panel, specification, base, limit, RowsUsed.Kind.EACH);
     if (lacking.isPresent()) {
       return lacking.get();
     }

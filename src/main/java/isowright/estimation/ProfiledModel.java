@@ -140,8 +140,9 @@ final class ProfiledModel implements NonlinearModel {
         Arrays.fill(into[0], 0, size, 1);
       }
       double[] value = new double[size];
+      double[][] z = problem.rows().logInputs(from, to);
       form.evaluate(
-          problem.rows().logInputs(from, to),
+          z,
           size,
           inner(all),
           curvatures,
@@ -153,7 +154,7 @@ final class ProfiledModel implements NonlinearModel {
           rescale(into[rest++], size, slope(curvatures[k]));
         }
       }
-      problem.circumstances().fill(from, to, into, rest);
+      problem.circumstances().fill(from, to, z, into, rest);
       double[] residual = into[parameters.size()];
       problem.rows().logOutput(from, to, residual);
       double level = constant ? all[0] : 0;

@@ -35,7 +35,8 @@ final class ProfiledSolution {
   /** The fit at an optimum, with the profiles of its curvatures. */
   Fit fit(NonlinearFit best, List<CurvatureSearch.Profiled> profiles, double totalSumOfSquares) {
     LinearFit linear = best.linearisation();
-    Optional<Fit> lacking = LinearEstimation.lacking(panel, specification, base, linear);
+    Optional<Fit> lacking =
+        LinearEstimation.lacking(panel, specification, base, linear, RowsUsed.Kind.EACH);
     if (lacking.isPresent()) {
       return lacking.get();
     }
@@ -84,13 +85,15 @@ final class ProfiledSolution {
     double[] inner = model.inner(all);
     double[] curvatures = model.curvatures(all);
     double[][] toReported = toReported(model, inner, curvatures);
-    int slopes = linear.columns().size() - (within ? 0 : 1);
-    GroupMeans means = GroupMeans.of(model.rawAt(all), new double[linear.columns().size()]);
+    int columns = linear.columns().size();
+    Design raw = model.rawAt(all);
     PlantLevels levels =
         new PlantLevels(
-            means,
-            LinearEstimation.slopeBlock(covariance.matrix(), slopes),
-            within ? 0 : 1,
+            raw,
+            new double[columns],
+            covariance.matrix(),
+            PlantLevels.level(columns, !within, 0),
+            size -> 1,
             linear.residualVariance(),
             toReported);
     double constant = within ? levels.typical() : all[0];
@@ -110,7 +113,8 @@ final class ProfiledSolution {
         design,
         linear,
         LeastSquares.residuals(design, linear),
-        levels);
+        levels,
+        Treatment.none(raw));
   }
 
   private List<String> names(Technology technology) {

@@ -10,8 +10,10 @@ import java.util.List;
 /**
  * The numbers of a fit.
  *
- * @param technology the typical plant in the first period, with controls at zero
- * @param names the names of the reported parameters: the technology's, then controls and time
+ * @param technology the typical plant in the first period, with controls (and plant means that were
+ *     added) at zero
+ * @param names the names of the reported parameters: the technology's, then controls and time, then
+ *     plant means where they were added
  * @param parameters the reported parameters, shape P
  * @param covariance their covariance, P × P
  * @param covarianceSource the estimator, its factor and degrees of freedom
@@ -20,6 +22,7 @@ import java.util.List;
  * @param linear its decomposition
  * @param residuals residuals in ln Q, by row of the panel
  * @param levels what is needed to move to another plant's productivity
+ * @param treatment what was done about plants
  */
 public record Solution(
     Technology technology,
@@ -31,7 +34,8 @@ public record Solution(
     Design design,
     LinearFit linear,
     double[] residuals,
-    PlantLevels levels) {
+    PlantLevels levels,
+    Treatment treatment) {
 
   /** The mean of exp(residual), by which exp(predicted ln Q) is multiplied (Duan 1983). */
   public double smearing() {

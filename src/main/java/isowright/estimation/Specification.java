@@ -1,5 +1,6 @@
 package isowright.estimation;
 
+import isowright.regression.VarianceComponents;
 import isowright.technology.Form;
 import java.util.Locale;
 
@@ -12,6 +13,7 @@ import java.util.Locale;
  * @param scaled whether inputs are divided by their geometric means before logs
  * @param standardErrors how the covariance of the parameters is estimated
  * @param confidence the level of all intervals, such as 0.95
+ * @param components how the variances of random effects are estimated; of no meaning without them
  * @param estimator by which principle
  */
 public record Specification(
@@ -21,9 +23,10 @@ public record Specification(
     boolean scaled,
     StandardErrors standardErrors,
     double confidence,
+    VarianceComponents.Method components,
     Estimator estimator) {
 
-  /** By least squares. */
+  /** By least squares, variances of random effects (if any) estimated after Swamy and Arora. */
   public Specification(
       Form form,
       PlantEffects plantEffects,
@@ -32,12 +35,32 @@ public record Specification(
       StandardErrors standardErrors,
       double confidence) {
     this(
-        form, plantEffects, time, scaled, standardErrors, confidence, new Estimator.LeastSquares());
+        form,
+        plantEffects,
+        time,
+        scaled,
+        standardErrors,
+        confidence,
+        VarianceComponents.Method.SWAMY_ARORA,
+        new Estimator.LeastSquares());
   }
 
   /** The same by another principle. */
   public Specification by(Estimator other) {
-    return new Specification(form, plantEffects, time, scaled, standardErrors, confidence, other);
+    return new Specification(
+        form, plantEffects, time, scaled, standardErrors, confidence, components, other);
+  }
+
+  /** The same with the variances of random effects estimated otherwise. */
+  public Specification with(VarianceComponents.Method method) {
+    return new Specification(
+        form, plantEffects, time, scaled, standardErrors, confidence, method, estimator);
+  }
+
+  /** The same with another treatment of plants, of time, and of the covariance. */
+  public Specification with(PlantEffects effects, Time change, StandardErrors errors) {
+    return new Specification(
+        form, effects, change, scaled, errors, confidence, components, estimator);
   }
 
   /** What is done about lasting differences between plants. */
@@ -45,11 +68,34 @@ public record Specification(
     /** One constant for all plants. */
     NONE,
     /** A constant for each plant, removed by taking deviations from plant means. */
-    WITHIN;
+    WITHIN,
+    /** Least squares on the means of plants, one row a plant. */
+    BETWEEN,
+    /** A random draw for each plant, independent of inputs: generalised least squares. */
+    RANDOM,
+    /** A constant for each plant, removed by taking differences of successive periods. */
+    DIFFERENCES,
+    /** A random draw for each plant whose mean moves with the plant's means of the inputs. */
+    MUNDLAK;
 
     /** The word used in files. */
     public String word() {
       return words(this);
+    }
+
+    /** Whether one constant of all plants is estimated, beside which plants may differ. */
+    public boolean constant() {
+      return this != WITHIN && this != DIFFERENCES;
+    }
+
+    /** Whether plants are random draws. */
+    public boolean random() {
+      return this == RANDOM || this == MUNDLAK;
+    }
+
+    /** Whether a form that is not linear in its parameters can be fitted so. */
+    public boolean anyForm() {
+      return this == NONE || this == WITHIN;
     }
   }
 
@@ -59,12 +105,33 @@ public record Specification(
     NONE,
     /** A linear trend in the period. */
     TREND,
+    /** A trend with its square. */
+    QUADRATIC_TREND,
+    /** A trend with its square that also works through each input. */
+    BIASED_TREND,
     /** A constant for each period but the first. */
-    PERIOD_EFFECTS;
+    PERIOD_EFFECTS,
+    /** A constant for each period but the first, beside a constant for each plant. */
+    TWO_WAY;
 
     /** The word used in files. */
     public String word() {
       return words(this);
+    }
+
+    /** Whether there is a trend of any kind. */
+    public boolean trending() {
+      return this == TREND || quadratic();
+    }
+
+    /** Whether the square of the trend is there. */
+    public boolean quadratic() {
+      return this == QUADRATIC_TREND || this == BIASED_TREND;
+    }
+
+    /** Whether each period has a constant. */
+    public boolean byPeriod() {
+      return this == PERIOD_EFFECTS || this == TWO_WAY;
     }
   }
 

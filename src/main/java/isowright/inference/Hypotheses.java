@@ -4,7 +4,6 @@ import isowright.estimation.Estimation;
 import isowright.estimation.Fit;
 import isowright.estimation.Solution;
 import isowright.estimation.Specification;
-import isowright.estimation.Specification.PlantEffects;
 import isowright.technology.LinearForm;
 import isowright.technology.NonlinearForm;
 import java.util.ArrayList;
@@ -14,8 +13,8 @@ import java.util.Optional;
 
 /**
  * The tests that belong to a fit: constant returns, unit elasticity of substitution, Cobb-Douglas
- * within a richer form, plant effects. Each states its null in words, its statistic and law, p, and
- * a verdict.
+ * within a richer form, and those of plants and periods. Each states its null in words, its
+ * statistic and law, p, and a verdict.
  *
  * <p>Checked against Greene (2003), example 6.2 (F(3, 21) = 1.7678; constant returns F(1, 24) =
  * .1158) and Baltagi's table of the US states (plant effects F(47, 764) = 75.82) in {@code
@@ -47,7 +46,7 @@ public final class Hypotheses {
     verdicts.add(hypotheses.constantReturns());
     hypotheses.substitution().ifPresent(verdicts::add);
     hypotheses.cobbDouglas().ifPresent(verdicts::add);
-    hypotheses.plantEffects().ifPresent(verdicts::add);
+    verdicts.addAll(PanelHypotheses.of(fit));
     return List.copyOf(verdicts);
   }
 
@@ -62,7 +61,7 @@ public final class Hypotheses {
     right[0] = returnsToScale;
     double f =
         LinearRestrictions.statistic(rows, right, numbers.parameters(), numbers.covariance());
-    return verdict("constant-returns", subject, f, new Law.F(rows.length, degrees()));
+    return Verdict.of("constant-returns", subject, f, new Law.F(rows.length, degrees()));
   }
 
   /** The restrictions of constant returns over the reported parameters. */
@@ -70,9 +69,16 @@ public final class Hypotheses {
     int all = numbers.parameters().length;
     if (fit.specification().form() instanceof LinearForm linear) {
       double[][] own = linear.constantReturns(n);
-      double[][] rows = new double[own.length][all];
+      boolean biased = fit.specification().time() == Specification.Time.BIASED_TREND;
+      double[][] rows = new double[own.length + (biased ? 1 : 0)][all];
       for (int i = 0; i < own.length; i++) {
         System.arraycopy(own[i], 0, rows[i], 1, own[i].length - 1);
+      }
+      if (biased) {
+        // Returns stay what they are only if what time adds to the elasticities sums to nothing.
+        for (String input : fit.panel().inputs()) {
+          rows[own.length][numbers.index(input + "*trend")] = 1;
+        }
       }
       return rows;
     }
@@ -94,7 +100,7 @@ public final class Hypotheses {
             + plain(substitution)
             + (substitution == 1 ? " (Cobb-Douglas)" : "");
     return Optional.of(
-        verdict("unit-substitution", null0, Math.max(ratio, 0), new Law.ChiSquared(1)));
+        Verdict.of("unit-substitution", null0, Math.max(ratio, 0), new Law.ChiSquared(1)));
   }
 
   private Optional<Verdict> cobbDouglas() {
@@ -112,49 +118,15 @@ public final class Hypotheses {
         LinearRestrictions.statistic(
             rows, new double[places.length], numbers.parameters(), numbers.covariance());
     return Optional.of(
-        verdict(
+        Verdict.of(
             "cobb-douglas-in-translog",
             "all second-order terms are zero, so that Cobb-Douglas is enough",
             f,
             new Law.F(places.length, degrees())));
   }
 
-  /**
-   * F from the sums of squares with and without plant effects; assumes independent, equal errors.
-   */
-  private Optional<Verdict> plantEffects() {
-    Specification with = fit.specification();
-    if (with.plantEffects() != PlantEffects.WITHIN) {
-      return Optional.empty();
-    }
-    Specification without =
-        new Specification(
-            with.form(),
-            PlantEffects.NONE,
-            with.time(),
-            with.scaled(),
-            Specification.StandardErrors.CLASSICAL,
-            with.confidence());
-    double held = Estimation.leastSsr(fit.panel(), without);
-    if (Double.isNaN(held)) {
-      return Optional.empty();
-    }
-    double free = numbers.linear().ssr();
-    double restrictions = fit.panel().plants().size() - 1;
-    double degrees = numbers.linear().residualDegreesOfFreedom();
-    double f = (held - free) / restrictions / (free / degrees);
-    return Optional.of(
-        verdict(
-            "plant-effects", "all plants share one constant", f, new Law.F(restrictions, degrees)));
-  }
-
   private double degrees() {
     return numbers.covarianceSource().degreesOfFreedom();
-  }
-
-  private static Verdict verdict(String name, String null0, double statistic, Law law) {
-    double p = law.p(statistic);
-    return new Verdict(name, null0, statistic, law, p, sentence(null0, p));
   }
 
   /** A verdict in words that cannot contradict its p-value. */

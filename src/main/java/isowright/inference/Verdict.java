@@ -16,6 +16,18 @@ public record Verdict(
   /** The level at which a sentence says that the records speak against a null: common practice. */
   public static final double LEVEL = 0.05;
 
+  /** A verdict with its p-value and sentence. */
+  static Verdict of(String name, String nullHypothesis, double statistic, Law law) {
+    double p = law.p(statistic);
+    return new Verdict(
+        name, nullHypothesis, statistic, law, p, Hypotheses.sentence(nullHypothesis, p));
+  }
+
+  /** The same with something more that must be known of it. */
+  Verdict noting(String note) {
+    return new Verdict(name, nullHypothesis, statistic, law, p, sentence + " " + note);
+  }
+
   /** Whether the null is rejected at {@link #LEVEL}. */
   public boolean rejects() {
     return p < LEVEL;

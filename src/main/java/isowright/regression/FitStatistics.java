@@ -30,6 +30,28 @@ public record FitStatistics(
   }
 
   /**
+   * The statistics of generalised least squares with one random effect a group, fitted on rows less
+   * shares θ_g of their group means: the log-likelihood is that of the rows themselves, to which
+   * that transformation adds Σ_g ln(1 − θ_g), and the variance of the effects is one more
+   * parameter.
+   */
+  public static FitStatistics ofPartlyWithin(LinearFit fit, double[] shares) {
+    FitStatistics rows = of(fit);
+    double logLikelihood = rows.logLikelihood;
+    for (double share : shares) {
+      logLikelihood += Math.log1p(-share);
+    }
+    int parameters = rows.parameters + 1;
+    return new FitStatistics(
+        rows.rSquared,
+        rows.residualStandardError,
+        logLikelihood,
+        parameters,
+        -2 * logLikelihood + 2 * parameters,
+        -2 * logLikelihood + parameters * Math.log(fit.rows()));
+  }
+
+  /**
    * The statistics of a fit whose response is not that of its design, such as the linearisation of
    * a nonlinear fit, whose response is the residual.
    *

@@ -59,6 +59,7 @@ final class FitStage {
         how.scaled(),
         standardErrors(study),
         how.confidence(),
+        how.components(),
         how.estimator());
   }
 

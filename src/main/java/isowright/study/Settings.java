@@ -72,6 +72,9 @@ final class Settings {
       settings.put("technologies", String.join(", ", study.technologies()));
       settings.put("estimation.plant-effects", how.plantEffects().word());
       settings.put("estimation.time", how.time().word());
+      if (how.plantEffects().random()) {
+        settings.put("estimation.variance-components", how.components().word());
+      }
       settings.put("estimation.scaling", how.scaled() ? "geometric-mean" : "none");
       settings.put("estimation.standard-errors", FitStage.standardErrors(study).word());
       settings.put(

@@ -5,6 +5,7 @@ import isowright.estimation.Specification;
 import isowright.records.Keep;
 import isowright.records.Roles;
 import isowright.records.Source;
+import isowright.regression.VarianceComponents;
 import isowright.technology.Technology;
 import java.nio.file.Path;
 import java.util.List;
@@ -97,6 +98,7 @@ public record Study(
   public record Estimation(
       Specification.PlantEffects plantEffects,
       Specification.Time time,
+      VarianceComponents.Method components,
       boolean scaled,
       Optional<Specification.StandardErrors> standardErrors,
       double confidence,

@@ -3,6 +3,7 @@ package isowright.study;
 import isowright.estimation.Specification.PlantEffects;
 import isowright.estimation.Specification.StandardErrors;
 import isowright.estimation.Specification.Time;
+import isowright.regression.VarianceComponents;
 import isowright.study.Study.Estimation;
 import isowright.study.Study.Filing;
 import isowright.study.Study.Given;
@@ -44,7 +45,13 @@ final class StudyBinder {
   private static final List<String> LATER = List.of("matrix", "capital", "owner", "costs");
 
   private static final List<String> ESTIMATION_KEYS =
-      List.of("plant-effects", "time", "scaling", "standard-errors", "confidence");
+      List.of(
+          "plant-effects",
+          "time",
+          "variance-components",
+          "scaling",
+          "standard-errors",
+          "confidence");
   private static final List<String> ESTIMATION_LATER =
       List.of(
           "resampling",
@@ -55,10 +62,6 @@ final class StudyBinder {
           "instruments",
           "proxy",
           "frontier");
-  private static final List<String> PLANT_EFFECTS_LATER =
-      List.of("random", "between", "differences", "mundlak");
-  private static final List<String> TIME_LATER =
-      List.of("quadratic-trend", "biased-trend", "two-way");
 
   private final Path file;
   private final String sha256;
@@ -85,7 +88,7 @@ final class StudyBinder {
     List<String> fitted = technologies(root, declared);
     List<String> names = new ArrayList<>(fitted);
     names.addAll(givenBinder.names());
-    Estimation estimation = estimation(root.section("estimation"), declared);
+    Estimation estimation = estimation(root.section("estimation"), declared, fitted);
     Questions questions = questions(root.section("questions"));
     var leastCost = new PlanBinder(declared, names).bind(root);
     Optional<Filing> filing = filing(root, declared);
@@ -152,39 +155,45 @@ final class StudyBinder {
     return fitted;
   }
 
-  private static Estimation estimation(Optional<YamlSection> written, Declared declared) {
+  private static Estimation estimation(
+      Optional<YamlSection> written, Declared declared, List<String> technologies) {
     if (written.isEmpty()) {
-      return new Estimation(PlantEffects.NONE, Time.NONE, true, Optional.empty(), USUAL_CONFIDENCE);
+      return new Estimation(
+          PlantEffects.NONE,
+          Time.NONE,
+          VarianceComponents.Method.SWAMY_ARORA,
+          true,
+          Optional.empty(),
+          USUAL_CONFIDENCE);
     }
     YamlSection section = written.get();
     section.allow("`estimation`", ESTIMATION_KEYS, ESTIMATION_LATER);
-    PlantEffects effects =
-        choice(
-                section,
-                "plant-effects",
-                PlantEffects.values(),
-                PlantEffects::word,
-                PLANT_EFFECTS_LATER)
-            .orElse(PlantEffects.NONE);
-    Time time = choice(section, "time", Time.values(), Time::word, TIME_LATER).orElse(Time.NONE);
+    EffectsBinder.Effects effects = new EffectsBinder(section, declared, technologies).bind();
     Optional<StandardErrors> errors =
-        choice(
-            section, "standard-errors", StandardErrors.values(), StandardErrors::word, List.of());
+        choice(section, "standard-errors", StandardErrors.values(), StandardErrors::word);
     boolean scaled =
         section
             .get("scaling")
             .flatMap(value -> value.word(List.of("geometric-mean", "none"), List.of()))
             .map(word -> word.equals("geometric-mean"))
             .orElse(true);
-    if (effects == PlantEffects.WITHIN && !declared.plant()) {
-      section.refuse("plant-effects", "`within` needs plants, but `records.plant` names no column");
-    }
-    if (time != Time.NONE && !declared.period()) {
-      section.refuse(
-          "time", "`" + time.word() + "` needs periods, but `records.period` names no column");
-    }
     errors.ifPresent(kind -> checkColumns(section, kind, declared));
-    return new Estimation(effects, time, scaled, errors, confidence(section));
+    if (effects.plants() == PlantEffects.BETWEEN
+        && errors.map(StandardErrors::needsPeriods).orElse(false)) {
+      section.refuse(
+          "standard-errors",
+          "`"
+              + errors.get().word()
+              + "` needs rows of several periods, and `plant-effects: between` leaves one row a"
+              + " plant; set this to robust");
+    }
+    return new Estimation(
+        effects.plants(),
+        effects.time(),
+        effects.components(),
+        scaled,
+        errors,
+        confidence(section));
   }
 
   private static void checkColumns(YamlSection section, StandardErrors kind, Declared declared) {
@@ -214,12 +223,13 @@ final class StudyBinder {
     return number.orElse(USUAL_CONFIDENCE);
   }
 
-  private static <T> Optional<T> choice(
-      YamlSection section, String key, T[] values, Function<T, String> word, List<String> later) {
+  /** One of the values of a setting, by its word. */
+  static <T> Optional<T> choice(
+      YamlSection section, String key, T[] values, Function<T, String> word) {
     List<String> words = Arrays.stream(values).map(word).toList();
     return section
         .get(key)
-        .flatMap(value -> value.word(words, later))
+        .flatMap(value -> value.word(words, List.of()))
         .map(written -> values[words.indexOf(written)]);
   }
 

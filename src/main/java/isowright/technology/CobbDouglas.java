@@ -160,6 +160,13 @@ public final class CobbDouglas implements Technology {
     }
 
     @Override
+    public int[] firstOrder(int inputs) {
+      int[] places = new int[inputs];
+      Arrays.setAll(places, i -> i);
+      return places;
+    }
+
+    @Override
     public Technology technology(
         List<String> inputs, double[] base, double constant, double[] coefficients) {
       return new CobbDouglas(inputs, base, constant, coefficients);

@@ -21,6 +21,14 @@ public non-sealed interface LinearForm extends Form {
    */
   void regressors(double[][] z, int rows, double[][] into, int offset);
 
+  /**
+   * For each input the coefficient of its own log, by index: what a change of technology that works
+   * through that input adds to. Empty for a form that has no such terms.
+   */
+  default int[] firstOrder(int inputs) {
+    return new int[0];
+  }
+
   /** The technology with these coefficients (shape k) and constant. */
   Technology technology(List<String> inputs, double[] base, double constant, double[] coefficients);
 

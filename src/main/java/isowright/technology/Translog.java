@@ -194,6 +194,13 @@ public final class Translog implements Technology {
     }
 
     @Override
+    public int[] firstOrder(int inputs) {
+      int[] places = new int[inputs];
+      Arrays.setAll(places, i -> i);
+      return places;
+    }
+
+    @Override
     public Technology technology(
         List<String> inputs, double[] base, double constant, double[] coefficients) {
       return new Translog(inputs, base, constant, coefficients);

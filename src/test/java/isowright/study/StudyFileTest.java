@@ -11,6 +11,7 @@ import isowright.records.Keep;
 import isowright.records.NumberFormat;
 import isowright.records.Roles.Control;
 import isowright.records.Roles.Deflator;
+import isowright.regression.VarianceComponents.Method;
 import isowright.study.Study.Curve;
 import isowright.study.Study.Given;
 import isowright.study.Study.LeastCostQuestion;
@@ -69,7 +70,12 @@ class StudyFileTest {
     assertThat(study.estimation())
         .isEqualTo(
             new Study.Estimation(
-                PlantEffects.WITHIN, Time.TREND, false, Optional.of(StandardErrors.HC3), 0.9));
+                PlantEffects.WITHIN,
+                Time.TREND,
+                Method.SWAMY_ARORA,
+                false,
+                Optional.of(StandardErrors.HC3),
+                0.9));
     assertThat(study.questions()).isEqualTo(new Study.Questions(1.1, 0.5));
     assertThat(study.filing())
         .contains(
@@ -135,12 +141,38 @@ class StudyFileTest {
     assertThat(logOutput(given, 7, 100)).isCloseTo(Math.log(7), within(1e-12));
   }
 
+  /** Two-way names plant effects itself; every other word is carried as it is written. */
+  @Test
+  void plantsAndTime() {
+    Study.Estimation twoWay =
+        StudyTexts.read(
+                folder,
+                StudyTexts.with(
+                    StudyTexts.WHOLE, "plant-effects: within\n  time: trend", "time: two-way"))
+            .estimation();
+    assertThat(twoWay.plantEffects()).isEqualTo(PlantEffects.WITHIN);
+    assertThat(twoWay.time()).isEqualTo(Time.TWO_WAY);
+    Study.Estimation random =
+        StudyTexts.read(
+                folder,
+                StudyTexts.with(
+                    StudyTexts.WHOLE,
+                    "plant-effects: within\n  time: trend",
+                    "plant-effects: random\n  time: biased-trend\n  variance-components:"
+                        + " wallace-hussain"))
+            .estimation();
+    assertThat(random.plantEffects()).isEqualTo(PlantEffects.RANDOM);
+    assertThat(random.time()).isEqualTo(Time.BIASED_TREND);
+    assertThat(random.components()).isEqualTo(Method.WALLACE_HUSSAIN);
+  }
+
   @Test
   void defaults() {
     Study study = StudyTexts.read(folder, StudyTexts.SHORT);
     assertThat(study.estimation())
         .isEqualTo(
-            new Study.Estimation(PlantEffects.NONE, Time.NONE, true, Optional.empty(), 0.95));
+            new Study.Estimation(
+                PlantEffects.NONE, Time.NONE, Method.SWAMY_ARORA, true, Optional.empty(), 0.95));
     assertThat(study.questions()).isEqualTo(new Study.Questions(1, 1));
     assertThat(study.leastCost()).isEmpty();
     assertThat(study.filing()).isEmpty();

@@ -85,6 +85,29 @@ class StudyMistakesTest {
     assertThat(table()).hasSizeGreaterThan(160);
   }
 
+  /** A form that cannot be fitted so beside one that can is no mistake; alone it is. */
+  @Test
+  void noFormCanBeFittedSo() {
+    String text =
+        """
+        title: Curved
+        records: {file: plants.csv, plant: plant, period: year}
+        output: {column: tonnes}
+        inputs:
+          labour: {quantity: hours}
+          machines: {quantity: machine_hours}
+        technologies: [ces]
+        estimation: {plant-effects: random, time: biased-trend}
+        """;
+    assertThat(StudyTexts.mistakes(folder, text))
+        .extracting(Mistake::line, Mistake::key)
+        .containsExactly(tuple(8, "estimation.plant-effects"), tuple(8, "estimation.time"));
+    assertThat(StudyTexts.mistakes(folder, text).get(0).message())
+        .contains("linear in their parameters", "(ces)", "add cobb-douglas or translog");
+    assertThat(StudyTexts.read(folder, text.replace("[ces]", "[ces, translog]")).estimation())
+        .isNotNull();
+  }
+
   @Test
   void neitherRecordsNorGiven() {
     assertThat(StudyTexts.mistakes(folder, "title: Nothing\n"))
