@@ -141,13 +141,7 @@ final class ProfiledModel implements NonlinearModel {
       }
       double[] value = new double[size];
       double[][] z = problem.rows().logInputs(from, to);
-      form.evaluate(
-          z,
-          size,
-          inner(all),
-          curvatures,
-          value,
-          derivatives(into, size));
+      form.evaluate(z, size, inner(all), curvatures, value, derivatives(into, size));
       int rest = innerOffset() + inner;
       for (int k = 0; k < held.length; k++) {
         if (Double.isNaN(held[k])) {

@@ -87,16 +87,14 @@ public record TechnicalChange(String unit, List<Rate> rates, List<Bias> biases) 
       return Optional.empty();
     }
     Reckoning reckoning = new Reckoning(fit);
-    List<Rate> rates =
-        time.byPeriod() ? reckoning.betweenPeriods() : reckoning.alongTrend();
+    List<Rate> rates = time.byPeriod() ? reckoning.betweenPeriods() : reckoning.alongTrend();
     List<Bias> biases = time == Time.BIASED_TREND ? reckoning.biases() : List.of();
     return Optional.of(new TechnicalChange(unit(fit.panel()), rates, biases));
   }
 
   private static String unit(Panel panel) {
     boolean dates = panel.periodNumbers().stream().anyMatch(n -> n != Math.rint(n));
-    boolean years =
-        panel.periodNumbers().stream().allMatch(n -> n >= FIRST_YEAR && n <= LAST_YEAR);
+    boolean years = panel.periodNumbers().stream().allMatch(n -> n >= FIRST_YEAR && n <= LAST_YEAR);
     return dates || years ? "year" : "period";
   }
 
@@ -164,8 +162,7 @@ public record TechnicalChange(String unit, List<Rate> rates, List<Bias> biases) 
       for (int k = 0; k < weights.length; k++) {
         value += weights[k] * numbers.parameters()[k];
       }
-      Estimate rate =
-          delta.estimate(value, error(weights), DeltaMethod.Scale.LINEAR);
+      Estimate rate = delta.estimate(value, error(weights), DeltaMethod.Scale.LINEAR);
       return new Rate(
           place,
           new Estimate(
@@ -224,8 +221,7 @@ public record TechnicalChange(String unit, List<Rate> rates, List<Bias> biases) 
           for (int k = 0; k < slopes.length; k++) {
             weights[k] += byElasticity * slopes[k][j];
           }
-          weights[numbers.index(panel.inputs().get(j) + "*trend")] +=
-              byTrend + byElasticity * t;
+          weights[numbers.index(panel.inputs().get(j) + "*trend")] += byTrend + byElasticity * t;
         }
         biases.add(
             new Bias(

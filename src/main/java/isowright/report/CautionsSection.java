@@ -112,10 +112,22 @@ final class CautionsSection {
   }
 
   private static String effects(Material material) {
-    boolean within =
+    List<String> words =
         material.findings().fits().stream()
-            .anyMatch(fit -> fit.how().plantEffects().equals("within"));
-    return within
+            .map(fit -> fit.how().plantEffects())
+            .distinct()
+            .toList();
+    if (words.contains("random")) {
+      return " Random effects assume that lasting differences between plants have nothing to do with"
+          + " inputs; the tests say whether the records speak against it.";
+    }
+    if (words.contains("between")) {
+      return " The regression between plants keeps what lasts and nothing else, so the bias from lasting"
+          + " differences is at its greatest.";
+    }
+    boolean removed =
+        words.contains("within") || words.contains("differences") || words.contains("mundlak");
+    return removed
         ? " Plant effects remove the part that lasts; what changes from period to period remains."
         : " No plant effects were removed, so that lasting differences between plants remain in it.";
   }

@@ -47,6 +47,7 @@ final class FitJson {
     curvature(file, fit.curvature());
     tests(file, fit.tests());
     file.numbersByName("plantLevels", fit.plantLevels());
+    PanelJson.write(file, fit.panel());
     file.number("smearing", fit.smearing().orElse(Double.NaN));
     rows(file, fit);
     file.remarks("remarks", fit.remarks());

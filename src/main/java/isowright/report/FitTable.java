@@ -9,6 +9,8 @@ import isowright.study.FitFindings.Fitted;
 import isowright.study.FitFindings.How;
 import isowright.study.FitFindings.Parameter;
 import isowright.study.FitFindings.Summary;
+import isowright.study.PanelFindings;
+import isowright.study.PanelFindings.Components;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.LinkedHashSet;
@@ -33,15 +35,15 @@ final class FitTable {
     for (Fitted fit : fits) {
       columns.add(Column.ofNumbers(Terms.technology(fit.technology()), Terms.state(fit.state())));
     }
+    List<Group> groups = new ArrayList<>();
+    groups.add(new Group(Optional.of("Parameters"), parameters(fits)));
+    groups.add(new Group(Optional.of("Fit"), statistics(fits)));
+    if (fits.stream().anyMatch(fit -> fit.panel().components().isPresent())) {
+      groups.add(new Group(Optional.of("Random effects"), components(fits)));
+    }
+    groups.add(new Group(Optional.of("How it was obtained"), how(fits)));
     return new Table(
-        "Technologies fitted to the records",
-        "Parameter",
-        columns,
-        List.of(
-            new Group(Optional.of("Parameters"), parameters(fits)),
-            new Group(Optional.of("Fit"), statistics(fits)),
-            new Group(Optional.of("How it was obtained"), how(fits))),
-        notes(fits));
+        "Technologies fitted to the records", "Parameter", columns, groups, notes(fits));
   }
 
   private static List<Row> parameters(List<Fitted> fits) {
@@ -62,12 +64,18 @@ final class FitTable {
     List<String> first = new ArrayList<>();
     List<String> last = new ArrayList<>();
     for (String name : names) {
-      boolean aside =
-          name.startsWith("control:") || name.startsWith("period:") || name.equals("trend");
-      (aside ? last : first).add(name);
+      if (!elsewhere(name)) {
+        boolean aside = name.startsWith("control:") || name.endsWith("trend");
+        (aside ? last : first).add(name);
+      }
     }
     first.addAll(last);
     return first;
+  }
+
+  /** Effects of periods and plant means are many and stand in the table of intervals only. */
+  private static boolean elsewhere(String name) {
+    return name.startsWith("period:") || name.startsWith("mean:");
   }
 
   private static Cell parameter(Fitted fit, String name) {
@@ -108,6 +116,36 @@ final class FitTable {
     return all;
   }
 
+  private static List<Row> components(List<Fitted> fits) {
+    Map<String, Function<Components, String>> rows = new LinkedHashMap<>();
+    rows.put(
+        "Share θ of a plant’s mean taken off",
+        c ->
+            c.leastShare() == c.mostShare()
+                ? Numbers.significant(c.mostShare(), 4)
+                : Numbers.significant(c.leastShare(), 4)
+                    + " to "
+                    + Numbers.significant(c.mostShare(), 4));
+    rows.put("Variance between plants, σ²_u", c -> Numbers.significant(c.plant(), 4));
+    rows.put("Variance of a row’s error, σ²_e", c -> Numbers.significant(c.row(), 4));
+    rows.put("Variances after", c -> Terms.components(c.method()));
+    List<Row> all = new ArrayList<>();
+    rows.forEach(
+        (name, print) ->
+            all.add(
+                new Row(
+                    Text.of(name),
+                    fits.stream()
+                        .map(
+                            fit ->
+                                fit.panel()
+                                    .components()
+                                    .map(c -> Cell.of(print.apply(c)))
+                                    .orElse(Cell.none()))
+                        .toList())));
+    return all;
+  }
+
   private static List<Row> how(List<Fitted> fits) {
     Map<String, Function<How, String>> rows = new LinkedHashMap<>();
     rows.put("Rows", h -> Numbers.count(h.rows()));
@@ -116,6 +154,12 @@ final class FitTable {
     rows.put("Time", How::time);
     rows.put("Standard errors", How::standardErrors);
     List<Row> all = new ArrayList<>();
+    if (fits.stream().anyMatch(fit -> !fit.panel().observed().equals("rows"))) {
+      all.add(
+          new Row(
+              Text.of("Observations"),
+              fits.stream().map(fit -> Cell.of(observed(fit.panel()))).toList()));
+    }
     rows.forEach(
         (name, print) ->
             all.add(
@@ -123,6 +167,10 @@ final class FitTable {
                     Text.of(name),
                     fits.stream().map(fit -> Cell.of(print.apply(fit.how()))).toList())));
     return all;
+  }
+
+  private static String observed(PanelFindings panel) {
+    return Numbers.count(panel.observations()) + " " + panel.observed().replace('-', ' ');
   }
 
   private static List<Text> notes(List<Fitted> fits) {
@@ -145,6 +193,12 @@ final class FitTable {
                   + " by which inputs are divided."));
     }
     notes.add(Text.of("AIC and BIC count the error variance and every plant effect."));
+    boolean more =
+        fits.stream().anyMatch(f -> f.parameters().stream().anyMatch(p -> elsewhere(p.name())));
+    if (more) {
+      notes.add(
+          Text.of("Effects of periods and plant means stand in the table of parameters below."));
+    }
     return notes;
   }
 

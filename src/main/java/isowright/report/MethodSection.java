@@ -167,6 +167,7 @@ final class MethodSection {
                   + " inadmissible optimum is seen; the interval of the elasticity of substitution"
                   + " comes from the profile of the sum of squares."));
     }
+    points.addAll(PanelMethod.points(material, this::cite));
     if (with("clustered")) {
       points.add(
           Text.of(

@@ -10,8 +10,8 @@ import java.util.List;
 /**
  * What does an expert report of these findings say, and in what order? One section a file, in the
  * order in which an expert report is read: the answer, the records, what they look like, the
- * technologies fitted, tests, elasticities, regularity, least-cost plans, filed costs, sensitivity,
- * cautions, method, run record.
+ * technologies fitted, tests, elasticities, regularity, technical change, least-cost plans, filed
+ * costs, sensitivity, cautions, method, run record.
  *
  * <p>Every figure stands in the findings already; nothing is computed here. A section about which
  * the findings have nothing is left out, save where its absence must be said.
@@ -37,6 +37,7 @@ public final class ReportContent {
     }
     sections.add(ElasticitiesSection.of(material));
     sections.add(RegularitySection.of(material));
+    ChangeSection.of(material).ifPresent(sections::add);
     ExpectationsSection.of(material).ifPresent(sections::add);
     if (!findings.plans().isEmpty()) {
       sections.add(PlansSection.of(material));

@@ -7,16 +7,38 @@ enum Source {
       "Allen, R. G. D. (1938)",
       "Mathematical Analysis for Economists",
       "London: Macmillan"),
+  AMEMIYA(
+      "Amemiya 1971",
+      "Amemiya, T. (1971)",
+      "The Estimation of the Variances in a Variance-Components Model",
+      "International Economic Review 12, 1–13"),
   ARROW(
       "Arrow et al. 1961",
       "Arrow, K. J., Chenery, H. B., Minhas, B. S. and Solow, R. M. (1961)",
       "Capital-Labor Substitution and Economic Efficiency",
       "Review of Economics and Statistics 43, 225–250"),
+  BALTAGI_CHANG(
+      "Baltagi and Chang 1994",
+      "Baltagi, B. H. and Chang, Y.-J. (1994)",
+      "Incomplete Panels: A Comparative Study of Alternative Estimators for the"
+          + " Unbalanced One-Way Error Component Regression Model",
+      "Journal of Econometrics 62, 67–89"),
+  BALTAGI_LI(
+      "Baltagi and Li 1990",
+      "Baltagi, B. H. and Li, Q. (1990)",
+      "A Lagrange Multiplier Test for the Error Components Model with Incomplete Panels",
+      "Econometric Reviews 9, 103–107"),
   BLACKORBY(
       "Blackorby and Russell 1989",
       "Blackorby, C. and Russell, R. R. (1989)",
       "Will the Real Elasticity of Substitution Please Stand Up?",
       "American Economic Review 79, 882–888"),
+  BREUSCH(
+      "Breusch and Pagan 1980",
+      "Breusch, T. S. and Pagan, A. R. (1980)",
+      "The Lagrange Multiplier Test and Its Applications to Model Specification in"
+          + " Econometrics",
+      "Review of Economic Studies 47, 239–253"),
   CAMERON(
       "Cameron and Miller 2015",
       "Cameron, A. C. and Miller, D. L. (2015)",
@@ -27,6 +49,11 @@ enum Source {
       "Cameron, A. C., Gelbach, J. B. and Miller, D. L. (2011)",
       "Robust Inference with Multiway Clustering",
       "Journal of Business and Economic Statistics 29, 238–249"),
+  CHOW(
+      "Chow 1960",
+      "Chow, G. C. (1960)",
+      "Tests of Equality between Sets of Coefficients in Two Linear Regressions",
+      "Econometrica 28, 591–605"),
   CHRISTENSEN(
       "Christensen, Jorgenson and Lau 1973",
       "Christensen, L. R., Jorgenson, D. W. and Lau, L. J. (1973)",
@@ -62,6 +89,11 @@ enum Source {
       "JCGM (2008)",
       "Evaluation of Measurement Data: Guide to the Expression of Uncertainty in Measurement",
       "JCGM 100:2008"),
+  HAUSMAN(
+      "Hausman 1978",
+      "Hausman, J. A. (1978)",
+      "Specification Tests in Econometrics",
+      "Econometrica 46, 1251–1271"),
   HICKS("Hicks 1932", "Hicks, J. R. (1932)", "The Theory of Wages", "London: Macmillan"),
   KLUMP(
       "Klump and de La Grandville 2000",
@@ -90,6 +122,11 @@ enum Source {
       "Marschak, J. and Andrews, W. H. (1944)",
       "Random Simultaneous Equations and the Theory of Production",
       "Econometrica 12, 143–205"),
+  MUNDLAK(
+      "Mundlak 1978",
+      "Mundlak, Y. (1978)",
+      "On the Pooling of Time Series and Cross Section Data",
+      "Econometrica 46, 69–85"),
   NEWEY(
       "Newey and West 1987",
       "Newey, W. K. and West, K. D. (1987)",
@@ -106,11 +143,27 @@ enum Source {
       "Shephard, R. W. (1953)",
       "Cost and Production Functions",
       "Princeton: Princeton University Press"),
+  SWAMY(
+      "Swamy and Arora 1972",
+      "Swamy, P. A. V. B. and Arora, S. S. (1972)",
+      "The Exact Finite Sample Properties of the Estimators of Coefficients in the"
+          + " Error Components Regression Models",
+      "Econometrica 40, 261–275"),
   UZAWA(
       "Uzawa 1962",
       "Uzawa, H. (1962)",
       "Production Functions with Constant Elasticities of Substitution",
-      "Review of Economic Studies 29, 291–299");
+      "Review of Economic Studies 29, 291–299"),
+  WALLACE(
+      "Wallace and Hussain 1969",
+      "Wallace, T. D. and Hussain, A. (1969)",
+      "The Use of Error Components Models in Combining Cross Section with Time Series Data",
+      "Econometrica 37, 55–72"),
+  WOOLDRIDGE(
+      "Wooldridge 2002",
+      "Wooldridge, J. M. (2002)",
+      "Econometric Analysis of Cross Section and Panel Data",
+      "Cambridge, Massachusetts: MIT Press");
 
   private final String cited;
   private final String authors;

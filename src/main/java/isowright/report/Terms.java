@@ -26,6 +26,7 @@ final class Terms {
       return switch (name.substring(0, colon)) {
         case "share" -> "Share δ of " + rest;
         case "control" -> "Control: " + rest;
+        case "mean" -> "Plant mean of " + parameter(rest).toLowerCase(java.util.Locale.ROOT);
         case "period" -> "Period " + rest;
         default -> name;
       };
@@ -33,6 +34,7 @@ final class Terms {
     return switch (name) {
       case "constant" -> "Constant, ln A";
       case "trend" -> "Trend per period, τ";
+      case "trend*trend" -> "Trend squared, τ₂ (of ½ t²)";
       case "rho" -> "Curvature ρ";
       case "scale" -> "Scale ν";
       default -> product(name);
@@ -46,6 +48,9 @@ final class Terms {
     }
     String first = name.substring(0, star);
     String second = name.substring(star + 1);
+    if (second.equals("trend")) {
+      return first + " × t";
+    }
     return first.equals(second) ? first + " squared" : first + " × " + second;
   }
 
@@ -119,6 +124,11 @@ final class Terms {
     return switch (word) {
       case "none" -> "one constant for all plants";
       case "within" -> "a constant for each plant, removed by taking deviations from plant means";
+      case "between" -> "the means of plants, one row a plant";
+      case "random" -> "plants as random draws, unrelated to inputs";
+      case "differences" ->
+          "a constant for each plant, removed by differences of successive periods";
+      case "mundlak" -> "plants as random draws around what their mean inputs say";
       default -> word;
     };
   }
@@ -128,7 +138,20 @@ final class Terms {
     return switch (word) {
       case "none" -> "no change over time";
       case "trend" -> "a linear trend over the periods";
+      case "quadratic-trend" -> "a trend with its square over the periods";
+      case "biased-trend" -> "a trend with its square that also works through each input";
+      case "two-way" -> "a constant for each period but the first, beside one for each plant";
       case "period-effects" -> "a constant for each period but the first";
+      default -> word;
+    };
+  }
+
+  /** After whom variances of random effects were estimated. */
+  static String components(String word) {
+    return switch (word) {
+      case "swamy-arora" -> "Swamy and Arora";
+      case "wallace-hussain" -> "Wallace and Hussain";
+      case "amemiya" -> "Amemiya";
       default -> word;
     };
   }
@@ -160,6 +183,8 @@ final class Terms {
       case "unit-substitution" -> "Unit elasticity of substitution";
       case "cobb-douglas-in-translog" -> "Cobb-Douglas within translog";
       case "plant-effects" -> "Plant effects";
+      case "plant-variance" -> "Variance between plants";
+      case "random-against-within" -> "Random effects against within";
       default -> Phrases.sentence(name.replace('-', ' '));
     };
   }

@@ -31,6 +31,7 @@ public final class FitFindings {
    * @param tests the tests
    * @param plantLevels log output relative to the typical plant, by plant; empty without plant
    *     effects
+   * @param panel what was found about plants and time beside the parameters
    * @param smearing mean of exp(residual), by which exp(predicted logs) is multiplied
    * @param points fitted value and residual of each row
    * @param influence the most influential rows
@@ -51,6 +52,7 @@ public final class FitFindings {
       Optional<Curvature> curvature,
       List<Tested> tests,
       Map<String, Double> plantLevels,
+      PanelFindings panel,
       Optional<Double> smearing,
       List<Point> points,
       List<Influential> influence,
@@ -64,8 +66,9 @@ public final class FitFindings {
   /**
    * How a fit was obtained.
    *
-   * @param plantEffects none or within
-   * @param time none, trend or period-effects
+   * @param plantEffects what was done about lasting differences between plants, as in the study
+   *     file
+   * @param time what was done about change over time, as in the study file
    * @param standardErrors the kind of covariance
    * @param covarianceWords the estimator, factor and degrees of freedom in words
    * @param degreesOfFreedom of the t distribution behind intervals and p-values
@@ -87,7 +90,9 @@ public final class FitFindings {
    * A parameter.
    *
    * @param name {@code constant}, an input's name, {@code labour*machines}, {@code trend}, {@code
-   *     share:labour}, {@code rho}, {@code scale}, {@code control:COLUMN}, {@code period:P}
+   *     trend*trend}, {@code labour*trend}, {@code share:labour}, {@code rho}, {@code scale},
+   *     {@code control:COLUMN}, {@code period:P}, and {@code mean:} before any of them for a plant
+   *     mean
    * @param figure value, standard error and interval
    * @param p two-sided p-value of the null that it is zero; NaN where there is none
    */

@@ -4,6 +4,7 @@ import isowright.estimation.CurvatureProfile;
 import isowright.estimation.EstimatedTechnology;
 import isowright.estimation.Estimation;
 import isowright.estimation.Fit;
+import isowright.estimation.RowsUsed;
 import isowright.estimation.Solution;
 import isowright.estimation.Specification;
 import isowright.inference.DeltaMethod;
@@ -96,6 +97,7 @@ final class FitStage {
         fit.profile().map(profile -> curvature(fit, profile)),
         List.of(),
         Map.of(),
+        PanelFindings.of(panel.rows()),
         Optional.empty(),
         List.of(),
         List.of(),
@@ -139,6 +141,7 @@ final class FitStage {
             .map(FitStage::tested)
             .toList(),
         plantLevels(fit),
+        new PanelStage(fit).findings(),
         Optional.of(numbers.smearing()),
         points(numbers),
         influential(numbers),
@@ -232,7 +235,7 @@ final class FitStage {
   }
 
   private Map<String, Double> plantLevels(Fit fit) {
-    if (fit.specification().plantEffects() != Specification.PlantEffects.WITHIN) {
+    if (fit.specification().plantEffects() == Specification.PlantEffects.NONE) {
       return Map.of();
     }
     double[] levels = fit.numbers().levels().relative();
@@ -262,15 +265,19 @@ final class FitStage {
   }
 
   private List<FitFindings.Influential> influential(Solution numbers) {
+    RowsUsed used = numbers.treatment().rows();
     return Influence.most(numbers.design(), numbers.linear(), INFLUENTIAL).stream()
         .map(
-            row ->
-                new FitFindings.Influential(
-                    panel.fileRows().get(row.row()),
-                    panel.plants().get(panel.plantOf(row.row())),
-                    panel.periods().get(panel.rowPeriods().get(row.row())),
-                    row.leverage(),
-                    row.cooksDistance()))
+            found -> {
+              int row = used.panelRow(found.row());
+              String period = panel.periods().get(panel.rowPeriods().get(row));
+              return new FitFindings.Influential(
+                  panel.fileRows().get(row),
+                  panel.plants().get(panel.plantOf(row)),
+                  used.kind() == RowsUsed.Kind.PLANT_MEANS ? "mean of its periods" : period,
+                  found.leverage(),
+                  found.cooksDistance());
+            })
         .toList();
   }
 
@@ -279,6 +286,7 @@ final class FitStage {
     List<Said> remarks = new ArrayList<>();
     fit.reasons().forEach(reason -> remarks.add(Said.of("warning", fit.state().word(), reason)));
     CovarianceWords.few(fit.numbers().covarianceSource()).ifPresent(remarks::add);
+    remarks.addAll(new PanelStage(fit).remarks());
     if (regular.both() < regular.rows()) {
       remarks.add(Said.of("warning", "irregular-rows", RegularityFindings.words(regular)));
     }

@@ -12,10 +12,7 @@ import java.util.Optional;
  * @param change technical change, where anything about time was estimated
  */
 public record PanelFindings(
-    int observations,
-    String observed,
-    Optional<Components> components,
-    Optional<Change> change) {
+    int observations, String observed, Optional<Components> components, Optional<Change> change) {
 
   /** Every row used as it is, and nothing about plants or time. */
   public static PanelFindings of(int rows) {

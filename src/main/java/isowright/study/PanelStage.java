@@ -29,7 +29,10 @@ final class PanelStage {
   PanelFindings findings() {
     RowsUsed used = fit.numbers().treatment().rows();
     return new PanelFindings(
-        used.count(), observed(used.kind()), components(), TechnicalChange.of(fit).map(this::change));
+        used.count(),
+        observed(used.kind()),
+        components(),
+        TechnicalChange.of(fit).map(this::change));
   }
 
   private static String observed(RowsUsed.Kind kind) {
@@ -130,7 +133,9 @@ final class PanelStage {
             : " It uses " + String.join(", ", used) + ": the share in cost rises at a given mix.")
         + (saved.isEmpty()
             ? ""
-            : " It saves " + String.join(", ", saved) + ": the share in cost falls at a given mix.");
+            : " It saves "
+                + String.join(", ", saved)
+                + ": the share in cost falls at a given mix.");
   }
 
   /** What must be said of the fit because of what was done about plants and time. */
@@ -138,7 +143,10 @@ final class PanelStage {
     List<Said> remarks = new ArrayList<>();
     Solution numbers = fit.numbers();
     Treatment treatment = numbers.treatment();
-    treatment.components().filter(VarianceComponents::truncated).ifPresent(c -> remarks.add(zero()));
+    treatment
+        .components()
+        .filter(VarianceComponents::truncated)
+        .ifPresent(c -> remarks.add(zero()));
     if (!treatment.leftOut().isEmpty()) {
       remarks.add(
           Said.of(

@@ -1,13 +1,17 @@
 package isowright.study;
 
 import isowright.estimation.Fit;
+import isowright.estimation.Productivity;
+import isowright.estimation.Specification;
 import isowright.records.Column;
 import isowright.records.Panel;
 import isowright.technology.Regularity;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.stream.IntStream;
 
 /** At how many rows of the records a fitted technology is regular. */
 final class RegularityFindings {
@@ -17,15 +21,46 @@ final class RegularityFindings {
   static FitFindings.Regular of(Fit fit) {
     Panel panel = fit.panel();
     double[][] logs = panel.logQuantities().stream().map(Column::toArray).toArray(double[][]::new);
-    Regularity.Count count = Regularity.count(fit.numbers().technology(), logs, panel.rows());
+    if (fit.specification().time() == Specification.Time.BIASED_TREND) {
+      return byPeriod(fit, logs);
+    }
+    return named(panel, List.of(Regularity.count(fit.numbers().technology(), logs, panel.rows())));
+  }
+
+  /** Where the technology itself changes with time, each row is examined at its own period. */
+  private static FitFindings.Regular byPeriod(Fit fit, double[][] logs) {
+    Panel panel = fit.panel();
+    int[] periods = panel.rowPeriods().toArray();
+    List<Regularity.Count> counts = new ArrayList<>();
+    for (int p = 0; p < panel.periods().size(); p++) {
+      int period = p;
+      int[] rows = IntStream.range(0, periods.length).filter(r -> periods[r] == period).toArray();
+      double[][] some =
+          Arrays.stream(logs)
+              .map(column -> Arrays.stream(rows).mapToDouble(r -> column[r]).toArray())
+              .toArray(double[][]::new);
+      counts.add(
+          Regularity.count(
+              fit.at(period, new Productivity.Typical()).technology(), some, rows.length));
+    }
+    return named(panel, counts);
+  }
+
+  private static FitFindings.Regular named(Panel panel, List<Regularity.Count> counts) {
     Map<String, Integer> named = new LinkedHashMap<>();
-    for (int i = 0; i < logs.length; i++) {
-      if (count.nonMonotoneBy()[i] > 0) {
-        named.put(panel.inputs().get(i), count.nonMonotoneBy()[i]);
+    for (int i = 0; i < panel.inputs().size(); i++) {
+      int input = i;
+      int rows = counts.stream().mapToInt(count -> count.nonMonotoneBy()[input]).sum();
+      if (rows > 0) {
+        named.put(panel.inputs().get(i), rows);
       }
     }
     return new FitFindings.Regular(
-        count.rows(), count.monotone(), count.quasiConcave(), count.both(), named);
+        counts.stream().mapToInt(Regularity.Count::rows).sum(),
+        counts.stream().mapToInt(Regularity.Count::monotone).sum(),
+        counts.stream().mapToInt(Regularity.Count::quasiConcave).sum(),
+        counts.stream().mapToInt(Regularity.Count::both).sum(),
+        named);
   }
 
   /** What irregular rows mean. */

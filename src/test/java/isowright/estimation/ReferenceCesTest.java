@@ -50,7 +50,9 @@ class ReferenceCesTest {
   }
 
   @ParameterizedTest
-  @EnumSource(Specification.PlantEffects.class)
+  @EnumSource(
+      value = Specification.PlantEffects.class,
+      names = {"NONE", "WITHIN"})
   void valuesAndClassicalErrorsAgree(Specification.PlantEffects effects)
       throws RecordsRefused, IOException {
     Fit fit =

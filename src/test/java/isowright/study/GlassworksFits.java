@@ -330,6 +330,7 @@ final class GlassworksFits {
           curvature,
           tests,
           Map.of(),
+          PanelFindings.of(120),
           points.isEmpty() ? Optional.empty() : Optional.of(1.0064),
           points,
           influence,

@@ -1,0 +1,104 @@
+package isowright.report;
+
+import isowright.study.FitFindings.Fitted;
+import isowright.study.FitFindings.Tested;
+import java.util.ArrayList;
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Set;
+
+/** How plants and time were treated, for the method section. */
+final class PanelMethod {
+
+  private PanelMethod() {}
+
+  /** Cites sources, which then stand in the list of references. */
+  interface Citing {
+    String cite(Source... sources);
+  }
+
+  static List<Text> points(Material material, Citing citing) {
+    Set<String> words = new LinkedHashSet<>();
+    Set<String> tests = new LinkedHashSet<>();
+    for (Fitted fit : material.findings().fits()) {
+      words.add(fit.how().plantEffects());
+      words.add(fit.how().time());
+      fit.panel().components().ifPresent(c -> words.add(c.method()));
+      fit.tests().stream().map(Tested::name).forEach(tests::add);
+    }
+    List<Text> points = new ArrayList<>();
+    for (String word : words) {
+      String point = point(word, citing);
+      if (!point.isEmpty()) {
+        points.add(Text.of(point));
+      }
+    }
+    for (String test : tests) {
+      String point = test(test, citing);
+      if (!point.isEmpty()) {
+        points.add(Text.of(point));
+      }
+    }
+    return points;
+  }
+
+  private static String point(String word, Citing citing) {
+    return switch (word) {
+      case "within" -> "Plant effects by deviations from plant means.";
+      case "two-way" ->
+          "Plant effects by deviations from plant means, period effects as a constant for each period"
+              + " but the first; exact for plants of unequal length too.";
+      case "between" -> "Least squares on the means of plants, each plant counting once.";
+      case "differences" ->
+          "Least squares on differences of successive periods; none is taken across a gap.";
+      case "random" ->
+          "Random effects by generalised least squares: a share θ = 1 − √(σ²_e/(σ²_e + T σ²_u)) of a"
+              + " plant’s mean is taken off its rows. A plant’s level is its best linear prediction.";
+      case "mundlak" ->
+          "Random effects with plant means of all columns added, which makes slopes those within plants "
+              + citing.cite(Source.MUNDLAK)
+              + "; the typical plant has mean plant means.";
+      case "swamy-arora" ->
+          "Variances of random effects from the regressions within and between plants "
+              + citing.cite(Source.SWAMY, Source.BALTAGI_CHANG)
+              + ".";
+      case "wallace-hussain" ->
+          "Variances of random effects from the residuals of ordinary least squares "
+              + citing.cite(Source.WALLACE, Source.BALTAGI_CHANG)
+              + ".";
+      case "amemiya" ->
+          "Variances of random effects from the residuals within plants "
+              + citing.cite(Source.AMEMIYA, Source.BALTAGI_CHANG)
+              + ".";
+      case "biased-trend" ->
+          "A biased trend adds τ t + ½ τ₂ t² + Σ τ_i z_i t; its bias is what it does to shares in cost at"
+              + " a given mix.";
+      default -> "";
+    };
+  }
+
+  private static String test(String name, Citing citing) {
+    return switch (name) {
+      case "plant-variance" ->
+          "Variance between plants by Lagrange multiplier "
+              + citing.cite(Source.BREUSCH, Source.BALTAGI_LI)
+              + ".";
+      case "random-against-within" ->
+          "Random effects against within by the difference of their slopes, with classical covariances"
+              + " of both "
+              + citing.cite(Source.HAUSMAN)
+              + ".";
+      case "plant-means" ->
+          "The same question by plant means added to the regression, with the covariance of the fit "
+              + citing.cite(Source.MUNDLAK)
+              + ".";
+      case "poolability" ->
+          "Poolability by F against one regression a plant " + citing.cite(Source.CHOW) + ".";
+      case "serial-correlation" ->
+          "Serial correlation by the lag of residuals of first differences, which is −½ without it "
+              + citing.cite(Source.WOOLDRIDGE)
+              + ".";
+      default -> "";
+    };
+  }
+}
