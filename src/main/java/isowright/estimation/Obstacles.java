@@ -3,6 +3,7 @@ package isowright.estimation;
 import isowright.estimation.Specification.PlantEffects;
 import isowright.estimation.Specification.Time;
 import isowright.records.Panel;
+import isowright.records.PeriodSteps;
 import isowright.technology.Form;
 import isowright.technology.LinearForm;
 import java.util.ArrayList;
@@ -120,14 +121,18 @@ final class Obstacles {
 
   private void successive() {
     PeriodSteps steps = PeriodSteps.of(panel);
-    if (steps.count() == 0) {
-      found.add(
-          "Differences need a plant with rows in two successive periods; no row comes one step ("
-              + steps.words()
-              + ", the least distance between periods of the records) after another row of its"
-              + " plant, and no difference is taken across a gap. Set plant-effects to within, or"
-              + " add the missing periods.");
+    for (int p = 0; p < panel.plants().size(); p++) {
+      for (int row = panel.plantStart(p) + 1; row < panel.plantEnd(p); row++) {
+        if (steps.before(row, 1) == row - 1) {
+          return;
+        }
+      }
     }
+    found.add(
+        "Differences need a plant with rows in two successive periods; no row comes one step (the"
+            + " least distance between periods of the records) after another row of its plant, and"
+            + " no difference is taken across a gap. Set plant-effects to within, or add the missing"
+            + " periods.");
   }
 
   private static String needs(PlantEffects effects) {

@@ -1,6 +1,7 @@
 package isowright.estimation;
 
 import isowright.records.Panel;
+import isowright.records.PeriodSteps;
 import isowright.regression.Collinearity;
 import isowright.regression.Design;
 import isowright.regression.Differences;
@@ -57,7 +58,8 @@ record PlantTreatment(Design design, Treatment outcome, List<String> lacking) {
   }
 
   private static PlantTreatment differences(Panel panel, Design levels) {
-    Differences differences = Effects.differences(levels, PeriodSteps.of(panel)::follows);
+    PeriodSteps steps = PeriodSteps.of(panel);
+    Differences differences = Effects.differences(levels, row -> steps.before(row, 1) == row - 1);
     int[] ends = IntStream.range(0, differences.rows()).map(differences::end).toArray();
     return new PlantTreatment(
         differences,

@@ -1,6 +1,7 @@
 package isowright.inference;
 
 import isowright.estimation.Estimation;
+import isowright.estimation.Estimator;
 import isowright.estimation.Fit;
 import isowright.estimation.Solution;
 import isowright.estimation.Specification;
@@ -62,6 +63,9 @@ final class PanelHypotheses {
 
   /** The tests of a usable fit. */
   static List<Verdict> of(Fit fit) {
+    if (!(fit.specification().estimator() instanceof Estimator.LeastSquares)) {
+      return List.of(); // the sums of squares of other principles do not compare
+    }
     PanelHypotheses hypotheses = new PanelHypotheses(fit);
     List<Verdict> verdicts = new ArrayList<>();
     boolean linear = fit.specification().form() instanceof LinearForm;

@@ -116,12 +116,20 @@ public record Study(
         boolean scaled,
         Optional<Specification.StandardErrors> standardErrors,
         double confidence) {
-      this(plantEffects, time, scaled, standardErrors, confidence, List.of());
+      this(
+          plantEffects,
+          time,
+          VarianceComponents.Method.SWAMY_ARORA,
+          scaled,
+          standardErrors,
+          confidence,
+          List.of());
     }
 
     /** The same by these principles. */
     Estimation by(List<Estimator> principles) {
-      return new Estimation(plantEffects, time, scaled, standardErrors, confidence, principles);
+      return new Estimation(
+          plantEffects, time, components, scaled, standardErrors, confidence, principles);
     }
 
     /** The principle that the technologies rest on. */

@@ -3,7 +3,6 @@ package isowright.study;
 import isowright.estimation.Specification.PlantEffects;
 import isowright.estimation.Specification.StandardErrors;
 import isowright.estimation.Specification.Time;
-import isowright.regression.VarianceComponents;
 import isowright.study.Study.Estimation;
 import isowright.study.Study.Filing;
 import isowright.study.Study.Given;
@@ -158,13 +157,7 @@ final class StudyBinder {
   private static Estimation estimation(
       Optional<YamlSection> written, Declared declared, List<String> technologies) {
     if (written.isEmpty()) {
-      return new Estimation(
-          PlantEffects.NONE,
-          Time.NONE,
-          VarianceComponents.Method.SWAMY_ARORA,
-          true,
-          Optional.empty(),
-          USUAL_CONFIDENCE);
+      return new Estimation(PlantEffects.NONE, Time.NONE, true, Optional.empty(), USUAL_CONFIDENCE);
     }
     YamlSection section = written.get();
     section.allow("`estimation`", ESTIMATION_KEYS, ESTIMATION_LATER);
@@ -193,7 +186,8 @@ final class StudyBinder {
         effects.components(),
         scaled,
         errors,
-        confidence(section));
+        confidence(section),
+        List.of());
   }
 
   private static void checkColumns(YamlSection section, StandardErrors kind, Declared declared) {

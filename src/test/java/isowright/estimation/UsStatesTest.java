@@ -131,13 +131,8 @@ class UsStatesTest {
     return Estimation.fit(
         panel,
         new Specification(
-            Form.named("cobb-douglas"),
-            effects,
-            time,
-            false,
-            StandardErrors.CLASSICAL,
-            0.95,
-            method));
+                Form.named("cobb-douglas"), effects, time, false, StandardErrors.CLASSICAL, 0.95)
+            .with(method));
   }
 
   @ParameterizedTest(name = "{0}")

@@ -11,7 +11,7 @@ import isowright.records.Keep;
 import isowright.records.NumberFormat;
 import isowright.records.Roles.Control;
 import isowright.records.Roles.Deflator;
-import isowright.regression.VarianceComponents.Method;
+import isowright.regression.VarianceComponents;
 import isowright.study.Study.Curve;
 import isowright.study.Study.Given;
 import isowright.study.Study.LeastCostQuestion;
@@ -70,12 +70,7 @@ class StudyFileTest {
     assertThat(study.estimation())
         .isEqualTo(
             new Study.Estimation(
-                PlantEffects.WITHIN,
-                Time.TREND,
-                Method.SWAMY_ARORA,
-                false,
-                Optional.of(StandardErrors.HC3),
-                0.9));
+                PlantEffects.WITHIN, Time.TREND, false, Optional.of(StandardErrors.HC3), 0.9));
     assertThat(study.questions()).isEqualTo(new Study.Questions(1.1, 0.5));
     assertThat(study.filing())
         .contains(
@@ -163,7 +158,7 @@ class StudyFileTest {
             .estimation();
     assertThat(random.plantEffects()).isEqualTo(PlantEffects.RANDOM);
     assertThat(random.time()).isEqualTo(Time.BIASED_TREND);
-    assertThat(random.components()).isEqualTo(Method.WALLACE_HUSSAIN);
+    assertThat(random.components()).isEqualTo(VarianceComponents.Method.WALLACE_HUSSAIN);
   }
 
   @Test
@@ -171,8 +166,7 @@ class StudyFileTest {
     Study study = StudyTexts.read(folder, StudyTexts.SHORT);
     assertThat(study.estimation())
         .isEqualTo(
-            new Study.Estimation(
-                PlantEffects.NONE, Time.NONE, Method.SWAMY_ARORA, true, Optional.empty(), 0.95));
+            new Study.Estimation(PlantEffects.NONE, Time.NONE, true, Optional.empty(), 0.95));
     assertThat(study.questions()).isEqualTo(new Study.Questions(1, 1));
     assertThat(study.leastCost()).isEmpty();
     assertThat(study.filing()).isEmpty();
