@@ -91,8 +91,7 @@ final class CostTable {
     List<Point> best = new ArrayList<>();
     List<Point> run = new ArrayList<>();
     for (int k = 0; k < FIRST; k++) {
-      double output =
-          k == FIRST - 1 ? top : top * Math.pow(10, DECADES * (k / (FIRST - 1.0) - 1));
+      double output = k == FIRST - 1 ? top : top * Math.pow(10, DECADES * (k / (FIRST - 1.0) - 1));
       Plan plan = plan(output);
       if (plan.answered()) {
         run.add(point(output, plan));

@@ -13,10 +13,10 @@ import java.util.PriorityQueue;
  *
  * <p>Where every plant's cost is convex, marginal costs are equal in all plants that run below
  * capacity, and that is the answer. With increasing returns or running costs equal marginal costs
- * mark a maximum as well as a minimum, so the best split is found by branch and bound: each
- * plant's cost is bounded from below by the convex hull of what is known of it ({@link CostTable}),
- * the split that is cheapest by the hulls bounds the cost, and the part is divided at the plant
- * that this split leaves in the middle of an edge of its hull: to run or not, to make less or more.
+ * mark a maximum as well as a minimum, so the best split is found by branch and bound: each plant's
+ * cost is bounded from below by the convex hull of what is known of it ({@link CostTable}), the
+ * split that is cheapest by the hulls bounds the cost, and the part is divided at the plant that
+ * this split leaves in the middle of an edge of its hull: to run or not, to make less or more.
  * Every split met is improved by Newton's method and the best kept. What is left between it and the
  * bound is the gap of the proof.
  *
@@ -196,8 +196,7 @@ public final class PlantSplit {
         double cost = tables.get(p).at(outputs[p]).cost();
         List<Range> alone = List.of(range);
         SplitBound hull =
-            SplitBound.of(
-                List.of(plants.get(p)), List.of(tables.get(p)), alone, outputs[p]);
+            SplitBound.of(List.of(plants.get(p)), List.of(tables.get(p)), alone, outputs[p]);
         double over = cost + plants.get(p).runningCost() - hull.cost();
         if (over > most) {
           most = over;

@@ -109,8 +109,7 @@ final class SplitPolish {
       for (int p = 0; p < n; p++) {
         if (!held[p]) {
           double wanted = (lambda - marginal[p]) / slope[p];
-          double allowed =
-              Math.min(Math.max(wanted, low[p] - outputs[p]), high[p] - outputs[p]);
+          double allowed = Math.min(Math.max(wanted, low[p] - outputs[p]), high[p] - outputs[p]);
           step[p] = allowed;
           if (allowed != wanted) {
             held[p] = true;

@@ -28,8 +28,7 @@ class PlantSplitTest {
   private static PlantOption power(
       String name, double price, double scale, double capacity, double running) {
     Technology technology = CobbDouglas.of(LK, Math.log(2) * scale, scale / 2, scale / 2);
-    return new PlantOption(
-        name, technology, Question.of(1, price, price), capacity, running);
+    return new PlantOption(name, technology, Question.of(1, price, price), capacity, running);
   }
 
   /**
@@ -39,8 +38,7 @@ class PlantSplitTest {
    */
   @Test
   void twoPlants() {
-    List<PlantOption> plants =
-        List.of(quadratic("x", 17, OPEN, 0), quadratic("y", 25, OPEN, 0));
+    List<PlantOption> plants = List.of(quadratic("x", 17, OPEN, 0), quadratic("y", 25, OPEN, 0));
     SplitOutcome split = PlantSplit.of(plants, 42);
     assertThat(split.shares().get(0).output()).isCloseTo(25, within(1e-8));
     assertThat(split.shares().get(1).output()).isCloseTo(17, within(1e-8));
@@ -144,9 +142,7 @@ class PlantSplitTest {
       double best = OPEN;
       for (int a = 0; a <= steps; a++) {
         for (int b = 0; a + b <= steps; b++) {
-          double[] q = {
-            target * a / steps, target * b / steps, target * (steps - a - b) / steps
-          };
+          double[] q = {target * a / steps, target * b / steps, target * (steps - a - b) / steps};
           double cost = 0;
           for (int p = 0; p < 3; p++) {
             cost +=
