@@ -110,7 +110,7 @@ public final class PlantSplit {
       if (settled(bound.cost())) {
         break;
       }
-      meet(bound, ranges);
+      meet(bound);
       SplitBound tighter = SplitBound.of(plants, tables, ranges, target);
       boolean better = tighter.cost() > bound.cost() * (1 + PROVED / 10);
       bound = tighter;
@@ -122,7 +122,7 @@ public final class PlantSplit {
   }
 
   /** Examines the split of a bound and the one that Newton's method makes of it. */
-  private void meet(SplitBound bound, List<Range> ranges) {
+  private void meet(SplitBound bound) {
     double[] outputs = bound.outputs().clone();
     double[] low = new double[n];
     double[] high = new double[n];
