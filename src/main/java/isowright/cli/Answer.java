@@ -1,6 +1,7 @@
 package isowright.cli;
 
 import isowright.report.Numbers;
+import isowright.study.CostFindings;
 import isowright.study.Figure;
 import isowright.study.Findings;
 import isowright.study.Findings.Said;
@@ -30,11 +31,12 @@ final class Answer {
   void print(Findings findings, Path folder) {
     out.println(findings.run().title());
     findings.records().ifPresent(this::records);
-    if (!findings.fits().isEmpty()) {
+    if (!findings.fits().isEmpty() || !findings.costs().fits().isEmpty()) {
       out.println("Intervals at " + Numbers.level(findings.confidence()) + ".");
     }
     findings.fits().forEach(this::fit);
     findings.given().forEach(this::given);
+    findings.costs().fits().forEach(this::cost);
     plans(findings);
     reviews(findings);
     out.println();
@@ -60,6 +62,18 @@ final class Answer {
     out.println(fit.technology() + ": " + fit.state());
     fit.returnsToScale().ifPresent(f -> line("returns to scale", Numbers.valueAndInterval(f)));
     substitution(fit.substitution());
+    fit.regularity()
+        .ifPresent(r -> line("regular", "at " + r.both() + " of " + r.rows() + " rows"));
+  }
+
+  private void cost(CostFindings.Fitted fit) {
+    out.println();
+    out.println(fit.technology() + ": " + fit.state());
+    fit.at()
+        .flatMap(CostFindings.AtMean::scaleEconomies)
+        .ifPresent(f -> line("scale economies", Numbers.valueAndInterval(f)));
+    fit.efficient()
+        .ifPresent(e -> line("efficient scale", Numbers.valueAndInterval(e.output())));
     fit.regularity()
         .ifPresent(r -> line("regular", "at " + r.both() + " of " + r.rows() + " rows"));
   }
@@ -167,7 +181,11 @@ final class Answer {
     Stream<Said> given = findings.given().stream().flatMap(g -> g.remarks().stream());
     Stream<Said> plans = findings.plans().stream().flatMap(p -> p.remarks().stream());
     Stream<Said> reviews = findings.reviews().stream().flatMap(r -> r.remarks().stream());
-    return Stream.of(findings.remarks().stream(), records, fits, given, plans, reviews)
+    Stream<Said> costs =
+        Stream.concat(
+            findings.costs().remarks().stream(),
+            findings.costs().fits().stream().flatMap(f -> f.remarks().stream()));
+    return Stream.of(findings.remarks().stream(), records, fits, given, costs, plans, reviews)
         .flatMap(said -> said)
         .map(Said::severity)
         .toList();

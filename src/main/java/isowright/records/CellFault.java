@@ -190,13 +190,17 @@ record CellFault(String code, String rule, String remedy) {
       case OUTPUT ->
           new CellFault(
               "output-not-positive",
-              "output must be positive",
+              slot.role() + " must be positive",
               "Correct it, leave the cell blank so that the row is set aside, or set the row aside through records.keep.");
       case LOGGED_CONTROL ->
           new CellFault(
               "control-not-positive",
-              "a control that enters in logs must be positive",
-              "Correct it, leave the cell blank so that the row is set aside, or declare the control without log: true.");
+              slot.role().startsWith("control")
+                  ? "a control that enters in logs must be positive"
+                  : slot.role() + " enters in logs and must be positive",
+              slot.role().startsWith("control")
+                  ? "Correct it, leave the cell blank so that the row is set aside, or declare the control without log: true."
+                  : "Correct it, leave the cell blank so that the row is set aside, or set the row aside through records.keep.");
       case DEFLATOR ->
           new CellFault(
               "deflator-not-positive",

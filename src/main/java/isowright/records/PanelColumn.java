@@ -47,7 +47,12 @@ record PanelColumn(
     List<PanelColumn> all = new ArrayList<>();
     all.add(
         new PanelColumn(
-            panel.output(), Kind.OUTPUT, "output", roles.outputUnit().orElse(""), -1, false));
+            panel.output(),
+            Kind.OUTPUT,
+            roles.explained(),
+            roles.outputUnit().orElse(""),
+            -1,
+            false));
     for (int i = 0; i < roles.inputs().size(); i++) {
       int input = i;
       Roles.Input declared = roles.inputs().get(i);
@@ -81,7 +86,7 @@ record PanelColumn(
           new PanelColumn(
               panel.controls().get(k),
               Kind.CONTROL,
-              logged ? "control, in logs" : "control",
+              roles.controls().get(k).role(),
               "",
               -1,
               logged));

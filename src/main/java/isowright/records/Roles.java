@@ -16,6 +16,8 @@ import java.util.Optional;
  * @param filedCost the column of filed cost
  * @param further numeric columns that are neither input nor control but that an estimator looks at,
  *     such as what shifts an input
+ * @param explained what the first column is called in messages: output, or cost where the records
+ *     are of costs and prices, which then stand among the controls
  */
 public record Roles(
     Optional<String> plant,
@@ -26,7 +28,11 @@ public record Roles(
     List<Control> controls,
     Optional<Deflator> deflator,
     Optional<String> filedCost,
-    List<String> further) {
+    List<String> further,
+    String explained) {
+
+  /** What the column that is explained is called, where the records are those of production. */
+  public static final String OUTPUT = "output";
 
   /** Copies the lists. */
   public Roles {
@@ -45,13 +51,55 @@ public record Roles(
       List<Control> controls,
       Optional<Deflator> deflator,
       Optional<String> filedCost) {
-    this(plant, period, output, outputUnit, inputs, controls, deflator, filedCost, List.of());
+    this(
+        plant,
+        period,
+        output,
+        outputUnit,
+        inputs,
+        controls,
+        deflator,
+        filedCost,
+        List.of(),
+        OUTPUT);
+  }
+
+  /**
+   * Records of costs: what explains cost (prices, outputs, fixed inputs, whatever else) stands among
+   * the controls, each with its role in words, and shares or spending among the further columns.
+   */
+  public static Roles ofCosts(
+      Optional<String> plant,
+      Optional<String> period,
+      String cost,
+      List<Control> arguments,
+      List<String> further) {
+    return new Roles(
+        plant,
+        period,
+        cost,
+        Optional.empty(),
+        List.of(),
+        arguments,
+        Optional.empty(),
+        Optional.empty(),
+        further,
+        "cost");
   }
 
   /** The same with these further columns. */
   public Roles withFurther(List<String> columns) {
     return new Roles(
-        plant, period, output, outputUnit, inputs, controls, deflator, filedCost, columns);
+        plant,
+        period,
+        output,
+        outputUnit,
+        inputs,
+        controls,
+        deflator,
+        filedCost,
+        columns,
+        explained);
   }
 
   /**
@@ -76,8 +124,15 @@ public record Roles(
    *
    * @param column its column
    * @param log whether it enters in natural logs
+   * @param role what it is, in words, such as {@code price of labour}
    */
-  public record Control(String column, boolean log) {}
+  public record Control(String column, boolean log, String role) {
+
+    /** A control that is no more than that. */
+    public Control(String column, boolean log) {
+      this(column, log, log ? "control, in logs" : "control");
+    }
+  }
 
   /**
    * A deflator.

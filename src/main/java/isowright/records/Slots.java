@@ -26,7 +26,7 @@ final class Slots {
   Slots(Roles roles) {
     plant = roles.plant().map(c -> add(c, Kind.PLANT, "plant")).orElse(OptionalInt.empty());
     period = roles.period().map(c -> add(c, Kind.PERIOD, "period")).orElse(OptionalInt.empty());
-    output = add(roles.output(), Kind.OUTPUT, "output").getAsInt();
+    output = add(roles.output(), Kind.OUTPUT, roles.explained()).getAsInt();
     int n = roles.inputs().size();
     quantities = new int[n];
     prices = new OptionalInt[n];
@@ -47,8 +47,7 @@ final class Slots {
     for (int k = 0; k < controls.length; k++) {
       Roles.Control control = roles.controls().get(k);
       Kind kind = control.log() ? Kind.LOGGED_CONTROL : Kind.CONTROL;
-      String role = control.log() ? "control, in logs" : "control";
-      controls[k] = add(control.column(), kind, role).getAsInt();
+      controls[k] = add(control.column(), kind, control.role()).getAsInt();
     }
     deflator =
         roles

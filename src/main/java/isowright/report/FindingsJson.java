@@ -39,6 +39,7 @@ public final class FindingsJson {
     file.list("leastCost", findings.plans(), false, plan -> PlanJson.write(file, plan));
     file.list("filing", findings.reviews(), false, review -> PlanJson.write(file, review));
     SpecificationJson.write(file, findings.specification());
+    CostJson.write(file, findings.costs());
     file.remarks("remarks", findings.remarks());
   }
 

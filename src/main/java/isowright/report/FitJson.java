@@ -36,7 +36,7 @@ final class FitJson {
     file.text("state", fit.state());
     file.text("covarianceWords", fit.how().covarianceWords());
     file.number("degreesOfFreedom", fit.how().degreesOfFreedom());
-    parameters(file, fit);
+    parameters(file, fit.parameters());
     file.matrix("covariance", fit.covariance());
     summary(file, fit.summary());
     file.figures("outputElasticity", fit.outputElasticity());
@@ -53,10 +53,10 @@ final class FitJson {
     file.remarks("remarks", fit.remarks());
   }
 
-  private static void parameters(JsonFile file, Fitted fit) throws IOException {
+  static void parameters(JsonFile file, List<Parameter> parameters) throws IOException {
     file.list(
         "parameters",
-        fit.parameters(),
+        parameters,
         true,
         (Parameter parameter) -> {
           file.text("name", parameter.name());
@@ -64,7 +64,7 @@ final class FitJson {
           file.number("p", parameter.p());
         });
     List<String> without =
-        fit.parameters().stream()
+        parameters.stream()
             .filter(parameter -> !Double.isFinite(parameter.p()))
             .map(Parameter::name)
             .toList();
@@ -95,7 +95,7 @@ final class FitJson {
         });
   }
 
-  private static void pairs(JsonFile file, String key, List<Pair> pairs) throws IOException {
+  static void pairs(JsonFile file, String key, List<Pair> pairs) throws IOException {
     file.list(
         key,
         pairs,
@@ -158,7 +158,7 @@ final class FitJson {
         });
   }
 
-  private static void tests(JsonFile file, List<Tested> tests) throws IOException {
+  static void tests(JsonFile file, List<Tested> tests) throws IOException {
     file.list(
         "tests",
         tests,

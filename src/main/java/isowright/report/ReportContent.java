@@ -31,13 +31,18 @@ public final class ReportContent {
     if (findings.records().isPresent()) {
       sections.add(DescriptionSection.of(material));
     }
-    sections.add(FitsSection.of(material));
+    if (!CostsSection.alone(findings)) {
+      sections.add(FitsSection.of(material));
+    }
     if (findings.fits().stream().anyMatch(fit -> !fit.tests().isEmpty())) {
       sections.add(TestsSection.of(material));
     }
-    sections.add(ElasticitiesSection.of(material));
-    sections.add(RegularitySection.of(material));
+    if (!CostsSection.alone(findings)) {
+      sections.add(ElasticitiesSection.of(material));
+      sections.add(RegularitySection.of(material));
+    }
     ChangeSection.of(material).ifPresent(sections::add);
+    CostsSection.of(material).ifPresent(sections::add);
     ExpectationsSection.of(material).ifPresent(sections::add);
     if (!findings.plans().isEmpty()) {
       sections.add(PlansSection.of(material));
@@ -45,7 +50,9 @@ public final class ReportContent {
     if (!findings.reviews().isEmpty()) {
       sections.add(FilingSection.of(material));
     }
-    sections.add(SensitivitySection.of(material));
+    if (!CostsSection.alone(findings)) {
+      sections.add(SensitivitySection.of(material));
+    }
     DecisionsSection.of(material).ifPresent(sections::add);
     sections.add(CautionsSection.of(material));
     sections.add(MethodSection.of(material));

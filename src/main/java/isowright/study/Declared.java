@@ -16,6 +16,7 @@ import java.util.Optional;
  * @param unpriced the inputs with neither a price nor a spending column
  * @param outputUnit the unit of output
  * @param money currency and base
+ * @param costs the cost side; absent where not declared, or not without a mistake
  */
 record Declared(
     boolean present,
@@ -26,7 +27,8 @@ record Declared(
     List<Optional<String>> units,
     List<String> unpriced,
     Optional<String> outputUnit,
-    Study.Money money) {
+    Study.Money money,
+    Optional<Costs> costs) {
 
   Declared {
     inputs = List.copyOf(inputs);
@@ -38,12 +40,14 @@ record Declared(
   Declared withFurther(List<String> columns) {
     Optional<Study.Records> more =
         records.map(r -> new Study.Records(r.source(), r.roles().withFurther(columns), r.keep()));
-    return new Declared(present, more, plant, period, inputs, units, unpriced, outputUnit, money);
+    return new Declared(
+        present, more, plant, period, inputs, units, unpriced, outputUnit, money, costs);
   }
 
   /** The same with inputs whose names come from given technologies. */
   Declared withInputs(List<String> names) {
     List<Optional<String>> none = names.stream().map(name -> Optional.<String>empty()).toList();
-    return new Declared(present, records, plant, period, names, none, unpriced, outputUnit, money);
+    return new Declared(
+        present, records, plant, period, names, none, unpriced, outputUnit, money, costs);
   }
 }

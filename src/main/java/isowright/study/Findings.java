@@ -24,6 +24,7 @@ import java.util.Optional;
  *     technology
  * @param reviews filed costs held against least cost
  * @param specification results beside what was laid down before fitting
+ * @param costs what was found of the cost side
  * @param remarks what must be said of the whole study
  */
 public record Findings(
@@ -36,6 +37,7 @@ public record Findings(
     List<Planned> plans,
     List<Reviewed> reviews,
     SpecificationFindings specification,
+    CostFindings costs,
     List<Said> remarks) {
 
   /** Findings of a study that laid nothing down beforehand. */
@@ -59,6 +61,7 @@ public record Findings(
         plans,
         reviews,
         SpecificationFindings.NONE,
+        CostFindings.NONE,
         remarks);
   }
 

@@ -63,6 +63,15 @@ public final class Pipeline {
       fitted.addAll(fits.parallelStream().map(stage::findings).toList());
     }
 
+    Optional<Reading> costReading =
+        study.costs().isPresent()
+            ? Optional.of(RecordsStage.read(study.costs().get().records()))
+            : Optional.empty();
+    CostFindings costs = CostFindings.NONE;
+    if (costReading.isPresent()) {
+      costs = new CostStage(study, study.costs().orElseThrow(), costReading.get().panel()).findings();
+    }
+
     progress.stage("answering least-cost questions", 3, STAGES);
     List<Candidate> candidates = new ArrayList<>();
     fits.forEach(fit -> candidates.add(Candidate.fitted(fit)));
@@ -76,7 +85,9 @@ public final class Pipeline {
           new ReviewStage(study, study.filing().get(), panel.get(), candidates).reviews());
     }
     Optional<Findings.Records> records =
-        reading.map(r -> RecordsStage.describe(study.records().orElseThrow(), r));
+        reading
+            .map(r -> RecordsStage.describe(study.records().orElseThrow(), r))
+            .or(() -> describe(study, costReading));
     return new Findings(
         Settings.run(study),
         Settings.units(study),
@@ -89,7 +100,12 @@ public final class Pipeline {
         new SpecificationFindings(
             ExpectationStage.held(study.protocol().expectations(), fitted),
             study.protocol().decisions()),
+        costs,
         remarks(fitted, plans));
+  }
+
+  private static Optional<Findings.Records> describe(Study study, Optional<Reading> costs) {
+    return costs.map(r -> RecordsStage.describe(study.costs().orElseThrow().records(), r));
   }
 
   private static void refuseIfNothingWasEstimated(List<Fit> fits) throws Unfit {

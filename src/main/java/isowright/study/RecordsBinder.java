@@ -56,6 +56,7 @@ final class RecordsBinder {
     List<Control> controls = controls();
     Optional<YamlSection> money = root.section("money");
     Optional<Deflator> deflator = deflator(money);
+    Optional<Costs> costs = new CostsBinder(root, source, keep, plant, period, controls).bind();
     Optional<Study.Records> bound = Optional.empty();
     if (source.isPresent() && output.isPresent() && inputs.size() >= 2) {
       Roles roles =
@@ -74,7 +75,8 @@ final class RecordsBinder {
             .map(Input::name)
             .toList(),
         outputUnit,
-        new Study.Money(currency(money), deflator.map(Deflator::base)));
+        new Study.Money(currency(money), deflator.map(Deflator::base)),
+        costs);
   }
 
   private Optional<Source> source() {
@@ -211,14 +213,19 @@ final class RecordsBinder {
           .ifPresent(section -> withoutRecords(section, "column"));
     } else if (output.isPresent()) {
       output.get().need("column", remedy);
-    } else if (!root.has("output")) {
+    } else if (!root.has("output") && !costsAlone()) {
       root.lacks("output", "`records` are given, so name " + remedy);
     }
   }
 
+  /** Whether the study is of costs and prices alone, without quantities of inputs. */
+  private boolean costsAlone() {
+    return root.has("costs") && !root.has("inputs") && !root.has("output");
+  }
+
   private List<Input> inputs() {
     if (!root.has("inputs")) {
-      if (present) {
+      if (present && !costsAlone()) {
         root.lacks("inputs", "`records` are given, so name two inputs or more");
       }
       return List.of();

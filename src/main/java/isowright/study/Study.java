@@ -33,6 +33,7 @@ import java.util.Optional;
  * @param leastCost the least-cost questions
  * @param filing the filed costs to be reviewed
  * @param protocol what was laid down before fitting
+ * @param costs the cost side; absent where none is asked
  */
 public record Study(
     Path file,
@@ -49,7 +50,8 @@ public record Study(
     Questions questions,
     List<LeastCostQuestion> leastCost,
     Optional<Filing> filing,
-    Protocol protocol) {
+    Protocol protocol,
+    Optional<Costs> costs) {
 
   /** Copies the lists. */
   public Study {

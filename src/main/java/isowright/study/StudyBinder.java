@@ -40,8 +40,9 @@ final class StudyBinder {
           "least-cost",
           "filing",
           "expect",
-          "decisions");
-  private static final List<String> LATER = List.of("matrix", "capital", "owner", "costs");
+          "decisions",
+          "costs");
+  private static final List<String> LATER = List.of("matrix", "capital", "owner");
 
   private static final List<String> ESTIMATION_KEYS =
       List.of(
@@ -108,7 +109,8 @@ final class StudyBinder {
             questions,
             leastCost,
             filing,
-            protocol));
+            protocol,
+            declared.costs()));
   }
 
   private static void needRecordsOrGiven(YamlSection root, Declared declared) {
@@ -123,7 +125,7 @@ final class StudyBinder {
   private static List<String> technologies(YamlSection root, Declared declared) {
     Optional<YamlValue> value = root.get("technologies");
     if (value.isEmpty()) {
-      if (declared.present() && !root.has("given")) {
+      if (declared.present() && !root.has("given") && !root.has("costs")) {
         root.lacks(
             "technologies",
             "the forms to be fitted, such as `technologies: ["

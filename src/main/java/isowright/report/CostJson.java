@@ -1,0 +1,101 @@
+package isowright.report;
+
+import isowright.study.CostFindings;
+import isowright.study.CostFindings.AtMean;
+import isowright.study.CostFindings.Fitted;
+import java.io.IOException;
+
+/** Cost functions, as they stand in the findings file under {@code costs}. */
+final class CostJson {
+
+  private CostJson() {}
+
+  /** Writes nothing where no cost side was asked for. */
+  static void write(JsonFile file, CostFindings costs) throws IOException {
+    if (costs.fits().isEmpty() && costs.remarks().isEmpty()) {
+      return;
+    }
+    file.object(
+        "costs",
+        () -> {
+          file.list("fits", costs.fits(), false, fit -> fit(file, fit));
+          file.list(
+              "sides",
+              costs.sides(),
+              false,
+              side -> {
+                file.text("name", side.name());
+                file.figures("production", side.production());
+                file.figures("cost", side.cost());
+              });
+          file.remarks("remarks", costs.remarks());
+        });
+  }
+
+  private static void fit(JsonFile file, Fitted fit) throws IOException {
+    file.text("technology", fit.technology());
+    file.text("equations", fit.how().equations());
+    file.texts("restrictions", fit.how().restrictions());
+    file.text("plantEffects", fit.how().plantEffects());
+    file.text("covarianceWords", fit.how().covarianceWords());
+    file.number("degreesOfFreedom", fit.how().degreesOfFreedom());
+    file.numbersByName("scaling", fit.how().base());
+    file.whole("rows", fit.how().rows());
+    file.whole("plants", fit.how().plants());
+    file.truth("converged", fit.usable());
+    file.text("state", fit.state());
+    file.number("logLikelihood", fit.how().logLikelihood());
+    file.whole("iterations", fit.how().iterations());
+    FitJson.parameters(file, fit.parameters());
+    file.matrix("covariance", fit.covariance());
+    if (fit.at().isPresent()) {
+      atMean(file, fit.at().get());
+    }
+    if (fit.efficient().isPresent()) {
+      file.object(
+          "efficientScale",
+          () -> {
+            file.figure("output", fit.efficient().map(CostFindings.Efficient::output));
+            file.number("shareBelow", fit.efficient().get().below());
+          });
+    }
+    if (fit.regularity().isPresent()) {
+      CostFindings.Regular regular = fit.regularity().get();
+      file.line(
+          "regularity",
+          () -> {
+            file.whole("rows", regular.rows());
+            file.whole("monotone", regular.monotone());
+            file.whole("concave", regular.concave());
+            file.whole("both", regular.both());
+          });
+    }
+    file.list(
+        "scale",
+        fit.scale(),
+        true,
+        row -> {
+          file.whole("row", row.row());
+          file.text("plant", row.plant());
+          file.text("period", row.period());
+          file.number("output", row.output());
+          file.uncertain("scale economies of row " + row.row(), row.economies());
+        });
+    FitJson.tests(file, fit.tests());
+    file.remarks("remarks", fit.remarks());
+  }
+
+  private static void atMean(JsonFile file, AtMean at) throws IOException {
+    file.figures("shares", at.shares());
+    file.figures("costElasticity", at.costElasticity());
+    if (at.scaleEconomies().isPresent()) {
+      file.figure("scaleEconomies", at.scaleEconomies());
+    }
+    if (at.technicalChange().isPresent()) {
+      file.figure("technicalChange", at.technicalChange());
+    }
+    FitJson.pairs(file, "substitution", at.substitution());
+    FitJson.pairs(file, "demandElasticity", at.demand());
+    file.figures("bias", at.bias());
+  }
+}

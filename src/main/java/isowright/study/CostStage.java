@@ -1,0 +1,246 @@
+package isowright.study;
+
+import isowright.cost.CostForm;
+import isowright.estimation.CostData;
+import isowright.estimation.CostEstimation;
+import isowright.estimation.CostFit;
+import isowright.estimation.CostSpecification;
+import isowright.estimation.CostSpecification.Equations;
+import isowright.estimation.Specification.PlantEffects;
+import isowright.estimation.Specification.StandardErrors;
+import isowright.estimation.Specification.Time;
+import isowright.estimation.Unfit;
+import isowright.inference.CostHypotheses;
+import isowright.records.Panel;
+import isowright.regression.Collinearity;
+import isowright.study.Findings.Said;
+import isowright.study.FitFindings.Tested;
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+import java.util.Optional;
+
+/** Fits the cost functions of a study and says what was found of them. */
+final class CostStage {
+
+  /**
+   * Estimates that differ by more than this between choices of the share equation left out differ
+   * for want of shares that add up, not for rounding.
+   */
+  private static final double LEFT_OUT = 1e-6;
+
+  private final Study study;
+  private final Costs asked;
+  private final Panel panel;
+  private final CostData data;
+  private final List<Said> records = new ArrayList<>();
+
+  CostStage(Study study, Costs asked, Panel panel) throws Unfit {
+    this.study = study;
+    this.asked = asked;
+    this.panel = panel;
+    CostRecords made =
+        new CostRecords(
+            asked, panel, study.estimation().time() == Time.TREND, study.estimation().scaled());
+    this.data = made.data();
+    refuse(made);
+    records.addAll(made.addingUp(data));
+  }
+
+  private void refuse(CostRecords made) throws Unfit {
+    List<String> reasons = new ArrayList<>();
+    List<Integer> missing = made.withoutShare(data);
+    if (!missing.isEmpty()) {
+      reasons.add(
+          "costs: the share or the spending of an input is not known in "
+              + missing.size()
+              + " of "
+              + data.rows()
+              + " rows (first in row "
+              + missing.get(0)
+              + "): enter it, set these rows aside, or fit the cost equation alone (system: false).");
+    }
+    List<String> still = made.withoutVariation(data);
+    String last = data.arguments().inputs().get(data.arguments().inputs().size() - 1);
+    for (String input : still) {
+      reasons.add(
+          "costs: the price of "
+              + input
+              + " over that of "
+              + last
+              + " is the same in every row, so that nothing can be learnt of their substitution: give"
+              + " records in which they move apart, or leave one of them out.");
+    }
+    if (!reasons.isEmpty()) {
+      throw new Unfit(reasons);
+    }
+  }
+
+  CostFindings findings() {
+    List<CostFindings.Fitted> fitted = new ArrayList<>();
+    for (CostForm form : asked.forms()) {
+      fitted.add(fitted(form));
+    }
+    return new CostFindings(fitted, records, List.of());
+  }
+
+  private CostSpecification specification(CostForm form) {
+    boolean clustered =
+        study
+            .estimation()
+            .standardErrors()
+            .map(kind -> kind == StandardErrors.CLUSTERED)
+            .orElse(panel.plants().size() < panel.rows());
+    return new CostSpecification(
+        form,
+        asked.equations(),
+        true,
+        asked.restrictions(),
+        study.estimation().plantEffects() == PlantEffects.WITHIN,
+        clustered,
+        data.arguments().inputs().size() - 1,
+        study.estimation().confidence());
+  }
+
+  private CostFindings.Fitted fitted(CostForm form) {
+    CostFit fit = CostEstimation.fit(data, specification(form));
+    List<Said> remarks = new ArrayList<>();
+    String state = state(fit, remarks);
+    if (!state.equals("estimated")) {
+      return new CostFindings.Fitted(
+          form.word(),
+          how(fit),
+          state,
+          List.of(),
+          new double[0][],
+          Optional.empty(),
+          List.of(),
+          Optional.empty(),
+          Optional.empty(),
+          List.of(),
+          remarks);
+    }
+    CostFigures figures = new CostFigures(data, fit);
+    CostFindings.Regular regular = figures.regularity();
+    remark(fit, regular, remarks);
+    return new CostFindings.Fitted(
+        form.word(),
+        how(fit),
+        state,
+        figures.parameters(),
+        fit.covariance(),
+        Optional.of(figures.atMean()),
+        figures.scale(panel),
+        figures.efficient(),
+        Optional.of(regular),
+        CostHypotheses.of(data, fit).stream().map(CostStage::tested).toList(),
+        remarks);
+  }
+
+  private static Tested tested(isowright.inference.Verdict verdict) {
+    return new Tested(
+        verdict.name(),
+        verdict.nullHypothesis(),
+        verdict.statistic(),
+        verdict.law().name(),
+        verdict.law().degreesOfFreedom(),
+        verdict.p(),
+        verdict.sentence());
+  }
+
+  private static String state(CostFit fit, List<Said> remarks) {
+    if (!fit.collinearities().isEmpty()) {
+      for (Collinearity collinearity : fit.collinearities()) {
+        remarks.add(
+            Said.of(
+                "error",
+                "rank-deficient",
+                "The records cannot tell "
+                    + collinearity.words()
+                    + "; ask for a form with fewer terms, or give records in which they move"
+                    + " apart."));
+      }
+      return "rank-deficient";
+    }
+    if (!fit.system().converged()) {
+      remarks.add(
+          Said.of(
+              "error",
+              "not-converged",
+              "The equations did not settle after "
+                  + fit.system().iterations()
+                  + " renewals: the errors of one equation may be determined by the others. Check the"
+                  + " shares, or fit fewer equations."));
+      return "not-converged";
+    }
+    return "estimated";
+  }
+
+  private void remark(CostFit fit, CostFindings.Regular regular, List<Said> remarks) {
+    double dependence = CostEstimation.dependenceOnLeftOut(data, fit);
+    if (dependence > LEFT_OUT) {
+      remarks.add(
+          Said.of(
+              "warning",
+              "depends-on-share-left-out",
+              String.format(
+                  Locale.ROOT,
+                  "Estimates depend on which share equation is left out, by up to %.2g: where shares"
+                      + " add up to one they would not. Correct the shares that do not add up.",
+                  dependence)));
+    }
+    if (regular.both() < regular.rows()) {
+      remarks.add(
+          Said.of(
+              "warning",
+              "irregular-rows",
+              String.format(
+                  Locale.ROOT,
+                  "Not a cost function at %d of %d rows (rising in prices and outputs at %d, concave"
+                      + " in prices at %d): elasticities and plans there are no economics.",
+                  regular.rows() - regular.both(),
+                  regular.rows(),
+                  regular.monotone(),
+                  regular.concave())));
+    }
+    if (fit.specification().clustered() && panel.plants().size() < FEW_CLUSTERS) {
+      remarks.add(
+          Said.of(
+              "warning",
+              "few-clusters",
+              "Standard errors are clustered over only "
+                  + panel.plants().size()
+                  + " plants; below about "
+                  + FEW_CLUSTERS
+                  + " such intervals tend to be too narrow."));
+    }
+  }
+
+  /** Below this many clusters, intervals are known to be too narrow (Cameron and Miller 2015). */
+  private static final int FEW_CLUSTERS = 30;
+
+  private CostFindings.How how(CostFit fit) {
+    Map<String, Double> base = new LinkedHashMap<>();
+    if (study.estimation().scaled()) {
+      double[] values = data.arguments().base();
+      for (int k = 0; k < values.length; k++) {
+        base.put(data.arguments().names().get(k), values[k]);
+      }
+    }
+    CostSpecification how = fit.specification();
+    boolean within = how.plantEffects() && how.equations() != Equations.SHARES;
+    return new CostFindings.How(
+        how.equations().word(),
+        how.restrictions().stream().map(CostSpecification.Restriction::word).toList(),
+        within ? PlantEffects.WITHIN.word() : PlantEffects.NONE.word(),
+        fit.covarianceWords().replace("by group", "by plant"),
+        fit.degreesOfFreedom(),
+        base,
+        data.rows(),
+        panel.plants().size(),
+        fit.system().logLikelihood(),
+        fit.system().iterations());
+  }
+}
