@@ -72,8 +72,7 @@ final class Answer {
     fit.at()
         .flatMap(CostFindings.AtMean::scaleEconomies)
         .ifPresent(f -> line("scale economies", Numbers.valueAndInterval(f)));
-    fit.efficient()
-        .ifPresent(e -> line("efficient scale", Numbers.valueAndInterval(e.output())));
+    fit.efficient().ifPresent(e -> line("efficient scale", Numbers.valueAndInterval(e.output())));
     fit.regularity()
         .ifPresent(r -> line("regular", "at " + r.both() + " of " + r.rows() + " rows"));
   }

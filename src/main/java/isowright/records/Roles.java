@@ -65,8 +65,9 @@ public record Roles(
   }
 
   /**
-   * Records of costs: what explains cost (prices, outputs, fixed inputs, whatever else) stands among
-   * the controls, each with its role in words, and shares or spending among the further columns.
+   * Records of costs: what explains cost (prices, outputs, fixed inputs, whatever else) stands
+   * among the controls, each with its role in words, and shares or spending among the further
+   * columns.
    */
   public static Roles ofCosts(
       Optional<String> plant,

@@ -26,7 +26,10 @@ import java.util.Optional;
 import java.util.Set;
 import java.util.function.Function;
 
-/** The cost side: cost functions, what they say of scale and substitution, and whether to trust them. */
+/**
+ * The cost side: cost functions, what they say of scale and substitution, and whether to trust
+ * them.
+ */
 final class CostsSection {
 
   static final String ID = "costs";
@@ -153,15 +156,13 @@ final class CostsSection {
     for (String name : names) {
       rows.add(
           new Row(
-              Text.of(parameter(name)),
-              fits.stream().map(fit -> parameter(fit, name)).toList()));
+              Text.of(parameter(name)), fits.stream().map(fit -> parameter(fit, name)).toList()));
     }
     List<Row> how = new ArrayList<>();
     how.add(row("Equations", fits, fit -> Cell.of(equations(fit.how().equations()))));
     how.add(row("Rows", fits, fit -> Cell.of(Numbers.count(fit.how().rows()))));
     how.add(
-        row(
-            "Log-likelihood", fits, fit -> Cell.of(Numbers.fixed(fit.how().logLikelihood(), 2))));
+        row("Log-likelihood", fits, fit -> Cell.of(Numbers.fixed(fit.how().logLikelihood(), 2))));
     List<Text> notes = new ArrayList<>();
     fits.stream()
         .map(fit -> fit.how().covarianceWords())
@@ -188,8 +189,7 @@ final class CostsSection {
         .map(
             figure ->
                 figure.uncertainty().isPresent()
-                    ? Cell.of(
-                        Numbers.value(figure), "(" + Numbers.standardError(figure) + ")")
+                    ? Cell.of(Numbers.value(figure), "(" + Numbers.standardError(figure) + ")")
                     : Cell.of(Numbers.amount(figure.value())))
         .findFirst()
         .orElse(Cell.none());
@@ -202,7 +202,8 @@ final class CostsSection {
   private static Table figures(List<Fitted> fits) {
     List<Group> groups = new ArrayList<>();
     groups.add(named("Share in cost", fits, AtMean::shares));
-    groups.add(named("Per cent more cost for a per cent more output", fits, AtMean::costElasticity));
+    groups.add(
+        named("Per cent more cost for a per cent more output", fits, AtMean::costElasticity));
     List<Row> scale = new ArrayList<>();
     scale.add(
         row(
@@ -215,8 +216,10 @@ final class CostsSection {
             fits,
             fit -> Cells.figure(fit.at().flatMap(AtMean::technicalChange))));
     groups.add(new Group(Optional.of("Scale and time"), scale));
-    groups.add(pairs("Allen-Uzawa elasticity of substitution", "allen", fits, AtMean::substitution));
-    groups.add(pairs("Morishima elasticity of substitution", "morishima", fits, AtMean::substitution));
+    groups.add(
+        pairs("Allen-Uzawa elasticity of substitution", "allen", fits, AtMean::substitution));
+    groups.add(
+        pairs("Morishima elasticity of substitution", "morishima", fits, AtMean::substitution));
     groups.add(pairs("Price elasticity of demand", "demand", fits, AtMean::demand));
     return new Table(
         "What the cost functions say, at the mean of the records",

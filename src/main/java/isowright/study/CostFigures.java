@@ -71,10 +71,10 @@ final class CostFigures {
       Figure figure =
           error == 0
               ? Figure.exact(value)
-              : FitStage.figure(
-                  propagation.estimate(value, error, DeltaMethod.Scale.LINEAR));
+              : FitStage.figure(propagation.estimate(value, error, DeltaMethod.Scale.LINEAR));
       parameters.add(
-          new Parameter(fit.names().get(k), figure, error == 0 ? Double.NaN : law.p(value / error)));
+          new Parameter(
+              fit.names().get(k), figure, error == 0 ? Double.NaN : law.p(value / error)));
     }
     return parameters;
   }
@@ -154,8 +154,7 @@ final class CostFigures {
       for (int j = 0; j < n; j++) {
         if (i != j) {
           pairs.add(
-              new Pair(
-                  inputs.get(i), inputs.get(j), "morishima", figures.get(n * n + i * n + j)));
+              new Pair(inputs.get(i), inputs.get(j), "morishima", figures.get(n * n + i * n + j)));
         }
       }
     }
@@ -177,8 +176,7 @@ final class CostFigures {
   /** Scale economies of every row, thinned where there are many. */
   List<RowScale> scale(Panel panel) {
     List<String> outputs = data.arguments().outputs();
-    boolean known =
-        !outputs.isEmpty() && fit.function().parameterNames().contains(outputs.get(0));
+    boolean known = !outputs.isEmpty() && fit.function().parameterNames().contains(outputs.get(0));
     if (!known) {
       return List.of();
     }
@@ -210,8 +208,8 @@ final class CostFigures {
   }
 
   /**
-   * The output at which the elasticity of cost in output is one, other arguments at their means: the
-   * least of average cost where that elasticity rises with output. For one output.
+   * The output at which the elasticity of cost in output is one, other arguments at their means:
+   * the least of average cost where that elasticity rises with output. For one output.
    */
   Optional<Efficient> efficient() {
     CostArguments arguments = data.arguments();

@@ -128,7 +128,8 @@ final class CostRecords {
             plant,
             sum(data, worst));
     return List.of(
-        new Said("warning", "shares-not-one", message, rows.subList(0, Math.min(NAMED, rows.size()))));
+        new Said(
+            "warning", "shares-not-one", message, rows.subList(0, Math.min(NAMED, rows.size()))));
   }
 
   private static double sum(CostData data, int row) {

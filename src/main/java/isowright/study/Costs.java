@@ -7,8 +7,8 @@ import java.util.List;
 import java.util.Optional;
 
 /**
- * What a study asks of the cost side: cost functions fitted to filed or recorded costs at the prices
- * paid.
+ * What a study asks of the cost side: cost functions fitted to filed or recorded costs at the
+ * prices paid.
  *
  * @param records the records with the roles of their columns: cost is explained; prices, outputs,
  *     fixed inputs and controls explain it, in this order

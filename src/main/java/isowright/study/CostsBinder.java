@@ -118,7 +118,8 @@ final class CostsBinder {
     }
     if (total && section.has("fixed-inputs")) {
       section.refuse(
-          "fixed-inputs", "inputs are fixed where cost is `variable`; write that in place of `total`");
+          "fixed-inputs",
+          "inputs are fixed where cost is `variable`; write that in place of `total`");
     }
     return column(section, total ? "total" : "variable");
   }
@@ -243,8 +244,7 @@ final class CostsBinder {
   private static List<Restriction> restrictions(YamlSection section) {
     List<String> words = Arrays.stream(Restriction.values()).map(Restriction::word).toList();
     List<Restriction> imposed = new ArrayList<>();
-    for (YamlValue item :
-        section.get("restrict").flatMap(YamlValue::list).orElse(List.of())) {
+    for (YamlValue item : section.get("restrict").flatMap(YamlValue::list).orElse(List.of())) {
       item.word(words, List.of())
           .ifPresent(word -> imposed.add(Restriction.values()[words.indexOf(word)]));
     }
@@ -257,7 +257,9 @@ final class CostsBinder {
     inputs.forEach(i -> arguments.add(new Control(i.price(), true, "price of " + i.name())));
     outputs.forEach(q -> arguments.add(new Control(q.column(), true, "output " + q.name())));
     fixed.forEach(
-        q -> arguments.add(new Control(q.column(), true, "quantity of the fixed input " + q.name())));
+        q ->
+            arguments.add(
+                new Control(q.column(), true, "quantity of the fixed input " + q.name())));
     arguments.addAll(controls);
     return arguments;
   }

@@ -69,7 +69,8 @@ public final class Pipeline {
             : Optional.empty();
     CostFindings costs = CostFindings.NONE;
     if (costReading.isPresent()) {
-      costs = new CostStage(study, study.costs().orElseThrow(), costReading.get().panel()).findings();
+      costs =
+          new CostStage(study, study.costs().orElseThrow(), costReading.get().panel()).findings();
     }
 
     progress.stage("answering least-cost questions", 3, STAGES);

@@ -89,6 +89,7 @@ final class StudyBinder {
     List<String> names = new ArrayList<>(fitted);
     names.addAll(givenBinder.names());
     Estimation estimation = estimation(root.section("estimation"), declared, fitted);
+    checkCosts(root, declared, estimation);
     Questions questions = questions(root.section("questions"));
     var leastCost = new PlanBinder(declared, names).bind(root);
     Optional<Filing> filing = filing(root, declared);
@@ -227,6 +228,27 @@ final class StudyBinder {
         .get(key)
         .flatMap(value -> value.word(words, List.of()))
         .map(written -> values[words.indexOf(written)]);
+  }
+
+  /** Cost functions know fewer treatments of plants and time than production functions. */
+  private static void checkCosts(YamlSection root, Declared declared, Estimation estimation) {
+    if (declared.costs().isEmpty()) {
+      return;
+    }
+    root.section("estimation")
+        .ifPresent(
+            section -> {
+              if (estimation.time() != Time.NONE && estimation.time() != Time.TREND) {
+                section.refuse(
+                    "time", "cost functions are fitted with `none` or `trend`; write one of them");
+              }
+              if (estimation.plantEffects() != PlantEffects.NONE
+                  && estimation.plantEffects() != PlantEffects.WITHIN) {
+                section.refuse(
+                    "plant-effects",
+                    "cost functions are fitted with `none` or `within`; write one of them");
+              }
+            });
   }
 
   private static Questions questions(Optional<YamlSection> written) {

@@ -25,17 +25,18 @@ class PeriodStepsTest {
     Files.writeString(file, text);
     Roles roles =
         new Roles(
-            Optional.of("plant"),
-            Optional.of("period"),
-            "q",
-            Optional.empty(),
-            List.of(
-                new Roles.Input("a", "a", Optional.empty(), Optional.empty(), Optional.empty()),
-                new Roles.Input("b", "b", Optional.empty(), Optional.empty(), Optional.empty())),
-            List.of(),
-            Optional.empty(),
-            Optional.empty(),
-            List.of("shift"));
+                Optional.of("plant"),
+                Optional.of("period"),
+                "q",
+                Optional.empty(),
+                List.of(
+                    new Roles.Input("a", "a", Optional.empty(), Optional.empty(), Optional.empty()),
+                    new Roles.Input(
+                        "b", "b", Optional.empty(), Optional.empty(), Optional.empty())),
+                List.of(),
+                Optional.empty(),
+                Optional.empty())
+            .withFurther(List.of("shift"));
     return RecordsReader.read(new Source(file, Optional.empty(), Optional.empty()), roles, Keep.ALL)
         .panel();
   }
