@@ -6,6 +6,8 @@ import isowright.estimation.Solution;
 import isowright.estimation.Specification;
 import isowright.technology.LinearForm;
 import isowright.technology.NonlinearForm;
+import java.math.BigDecimal;
+import java.math.RoundingMode;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
@@ -129,20 +131,44 @@ public final class Hypotheses {
     return numbers.covarianceSource().degreesOfFreedom();
   }
 
-  /** A verdict in words that cannot contradict its p-value. */
+  /** A verdict in words at the level of common practice. */
   static String sentence(String null0, double p) {
-    String claim = "that " + null0;
+    return sentence(null0, p, Verdict.LEVEL);
+  }
+
+  /** A verdict in words that cannot contradict its p-value. */
+  static String sentence(String null0, double p, double level) {
+    String claim = "the claim that " + null0;
     if (Double.isNaN(p)) {
-      return "The test " + claim + " could not be made: the covariance is singular.";
+      return "The test of " + claim + " could not be made: the covariance is singular.";
     }
-    String chance = p < 0.001 ? "p < 0.001" : String.format(Locale.ROOT, "p = %.3f", p);
-    return p < Verdict.LEVEL
-        ? "The records speak against the claim " + claim + " (" + chance + ")."
-        : "The records do not speak against the claim "
+    String at = "At the " + percent(level) + " level the records ";
+    return p < level
+        ? at + "speak against " + claim + " (" + chance(p, level) + ")."
+        : at
+            + "do not speak against "
             + claim
             + " ("
-            + chance
+            + chance(p, level)
             + "); that is not proof of it.";
+  }
+
+  private static String percent(double level) {
+    return BigDecimal.valueOf(level).movePointRight(2).stripTrailingZeros().toPlainString() + " %";
+  }
+
+  /** Three decimals, or as many as keep p on its side of the level. */
+  private static String chance(double p, double level) {
+    if (p < 0.001 && level >= 0.001) {
+      return "p < 0.001";
+    }
+    BigDecimal exact = new BigDecimal(p);
+    BigDecimal shown = exact.setScale(3, RoundingMode.HALF_EVEN);
+    while (shown.compareTo(exact) != 0
+        && (shown.signum() == 0 || (shown.doubleValue() < level) != (p < level))) {
+      shown = exact.setScale(shown.scale() + 1, RoundingMode.HALF_EVEN);
+    }
+    return "p = " + shown.toPlainString();
   }
 
   private static String plain(double value) {

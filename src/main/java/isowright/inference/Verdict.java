@@ -28,6 +28,21 @@ public record Verdict(
     return new Verdict(name, nullHypothesis, statistic, law, p, sentence + " " + note);
   }
 
+  /**
+   * The level of significance that belongs to a confidence: 0.05 to 0.95, without the rounding
+   * error of the difference, which would reject at p = 0.05.
+   */
+  public static double level(double confidence) {
+    return Math.rint((1 - confidence) * 1e9) / 1e9;
+  }
+
+  /** The verdict in words at the level that belongs to a confidence. */
+  public String sentence(double confidence) {
+    String common = Hypotheses.sentence(nullHypothesis, p);
+    String noted = sentence.startsWith(common) ? sentence.substring(common.length()) : "";
+    return Hypotheses.sentence(nullHypothesis, p, level(confidence)) + noted;
+  }
+
   /** Whether the null is rejected at {@link #LEVEL}. */
   public boolean rejects() {
     return p < LEVEL;

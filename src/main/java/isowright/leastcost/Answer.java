@@ -178,8 +178,8 @@ final class Answer {
         Math.abs(value) <= NOTHING * question.price(i)
             ? ", as it would be without"
             : value >= 0
-                ? " (one more unit would save " + Wording.number(value) + ")"
-                : " (one unit less would save " + Wording.number(-value) + ")";
+                ? " (one more unit would save about " + Wording.brief(value) + ")"
+                : " (one unit less would save about " + Wording.brief(-value) + ")";
     return name(i) + place + Wording.number(mix[i]) + worth;
   }
 

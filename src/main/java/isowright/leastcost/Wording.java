@@ -24,6 +24,11 @@ final class Wording {
     return size >= 1e-4 && size < 1e12 ? rounded.toPlainString() : rounded.toString();
   }
 
+  /** A number with three significant digits, for what carries no interval. */
+  static String brief(double value) {
+    return number(new BigDecimal(value).round(new MathContext(3)).doubleValue());
+  }
+
   /** A mix such as {@code labour 120, machines 33.5}. */
   static String mix(List<String> inputs, double[] logMix) {
     StringBuilder text = new StringBuilder();

@@ -33,7 +33,7 @@ final class BriefSection {
     for (String question : material.questions()) {
       List<Planned> plans = material.plans(question);
       Planned first = plans.get(0);
-      blocks.add(asked(material, first, first.prices().equals(before)));
+      blocks.add(asked(material, plans, first.prices().equals(before)));
       blocks.add(new Answers(plans.stream().map(plan -> answer(material, plan)).toList()));
       before = first.prices();
     }
@@ -77,13 +77,9 @@ final class BriefSection {
                 + " interval.");
   }
 
-  private static Paragraph asked(Material material, Planned plan, boolean samePrices) {
-    List<String> prices = new ArrayList<>();
-    plan.prices()
-        .forEach(
-            (input, price) ->
-                prices.add(
-                    input + " " + Numbers.unit(Numbers.amount(price), material.moneyPer(input))));
+  private static Paragraph asked(Material material, List<Planned> plans, boolean samePrices) {
+    Planned plan = plans.get(0);
+    List<String> limits = PlansSection.limits(plans);
     return new Paragraph(
         Text.strong(plan.question() + ". ")
             .then(
@@ -94,7 +90,8 @@ final class BriefSection {
                     + " at least cost"
                     + (samePrices ? " at the same prices" : "")
                     + "? "
-                    + (samePrices ? "" : "Prices: " + Phrases.list(prices) + ". ")
+                    + (samePrices ? "" : "Prices, " + PlansSection.prices(material, plan) + ". ")
+                    + (limits.isEmpty() ? "" : "Limits: " + Phrases.list(limits) + ". ")
                     + "Productivity: "
                     + plan.productivity()
                     + "."));

@@ -79,7 +79,9 @@ final class FitsSection {
                 List.of(
                     Numbers.value(parameter.figure()),
                     Numbers.interval(parameter.figure()),
-                    Double.isNaN(parameter.p()) ? "—" : Numbers.p(parameter.p()))));
+                    Double.isNaN(parameter.p())
+                        ? "—"
+                        : Numbers.p(parameter.p(), Phrases.level(material.confidence())))));
       }
       groups.add(new Group(Optional.of(Terms.technology(fit.technology())), rows));
     }

@@ -243,7 +243,7 @@ final class HtmlBlocks implements Document.Reader, Text.Reader {
     out.element("p", chart.caption());
     out.close("figcaption").line();
     out.open("div", "class", "picture");
-    out.trusted(InlineDrawing.of(chart.svg().get(), id + "-"));
+    out.trusted(InlineDrawing.of(chart.figure().get(), id + "-"));
     out.close("div").line();
     out.open("details");
     out.element("summary", "The data and a description of figure " + drawings);

@@ -71,7 +71,7 @@ record Material(Findings findings, List<Chart> charts) {
 
   /** The level of significance that belongs to the intervals: "5 %". */
   String significance() {
-    return Numbers.level(Math.rint((1 - confidence()) * 1e6) / 1e6);
+    return Numbers.level(Phrases.level(confidence()));
   }
 
   /** The fits that later stages may use. */

@@ -100,7 +100,7 @@ public final class Numbers {
     }
     int whole = wholeDigits(value);
     if (value == 0 || whole > LONGEST_WHOLE || whole <= -DEEPEST_PLACE) {
-      return value == 0 ? "0" : scientific(value, EXACT_DIGITS);
+      return value == 0 ? "0" : powerOfTen(round(value, EXACT_DIGITS).stripTrailingZeros());
     }
     BigDecimal rounded =
         BigDecimal.valueOf(value)
@@ -195,26 +195,31 @@ public final class Numbers {
 
   /**
    * A p-value as a phrase: "p = 0.184", "p &lt; 0.001". Three significant digits; more where
-   * rounding would put it on a level that it is not on, so that "p = 0.0500" never stands beside a
-   * rejection at 5 %.
+   * rounding would carry it over the level of significance or onto it, so that "p = 0.0500" never
+   * stands beside a rejection at 5 %.
    */
-  public static String p(double p) {
+  public static String p(double p, double level) {
     if (Double.isNaN(p)) {
       return "p " + NOT_AVAILABLE;
     }
-    if (p < 0.001) {
+    if (p < 0.001 && level >= 0.001) {
       return "p" + BOUND + "<" + BOUND + "0.001";
     }
     if (p > 0.999) {
       return "p" + BOUND + ">" + BOUND + "0.999";
     }
-    int digits = 3;
-    BigDecimal rounded = round(p, digits);
-    while (onLevel(rounded) && rounded.doubleValue() != p && digits < 15) {
-      digits++;
-      rounded = round(p, digits);
+    if (p <= 0) {
+      return "p" + BOUND + "=" + BOUND + "0";
     }
-    return "p" + BOUND + "=" + BOUND + plain(rounded);
+    BigDecimal exact = BigDecimal.valueOf(p);
+    BigDecimal mark = BigDecimal.valueOf(level);
+    int digits = 3;
+    BigDecimal shown = round(p, digits);
+    while (shown.compareTo(mark) != exact.compareTo(mark)) {
+      digits++;
+      shown = round(p, digits);
+    }
+    return "p" + BOUND + "=" + BOUND + plain(shown);
   }
 
   /** A number and its unit, kept on one line; the number alone where there is no unit. */
@@ -231,10 +236,10 @@ public final class Numbers {
 
   /** A number rounded to a decimal place, given as a power of ten. */
   static String atPlace(double value, int place) {
-    if (value != 0
-        && (wholeDigits(value) > LONGEST_WHOLE || place < -DEEPEST_PLACE - EXACT_DIGITS)) {
-      int digits = Math.max(1, wholeDigits(value) - place);
-      return scientific(value, Math.min(digits, EXACT_DIGITS));
+    int whole = value == 0 ? 0 : wholeDigits(value);
+    boolean small = whole <= -DEEPEST_PLACE && place < -DEEPEST_PLACE;
+    if (small || whole > LONGEST_WHOLE) {
+      return scientific(value, Math.max(1, whole - place));
     }
     return plain(BigDecimal.valueOf(value).setScale(-place, RoundingMode.HALF_EVEN));
   }
@@ -287,13 +292,8 @@ public final class Numbers {
         return atPlace(value, at);
       }
     }
-    return scientific(value, UNCERTAINTY_DIGITS);
-  }
-
-  private static boolean onLevel(BigDecimal rounded) {
-    BigDecimal hundredfold = rounded.movePointRight(2);
-    return hundredfold.compareTo(BigDecimal.TEN) <= 0
-        && hundredfold.stripTrailingZeros().scale() <= 0;
+    boolean besideOne = Math.abs(value) > 0.5;
+    return besideOne ? plain(BigDecimal.valueOf(value)) : scientific(value, UNCERTAINTY_DIGITS);
   }
 
   /** The number of digits before the decimal point; 0 or less for numbers below one. */
@@ -303,10 +303,13 @@ public final class Numbers {
   }
 
   private static String scientific(double value, int digits) {
-    BigDecimal rounded =
-        BigDecimal.valueOf(value).round(new MathContext(digits, RoundingMode.HALF_EVEN));
-    int exponent = rounded.precision() - rounded.scale() - 1;
-    StringBuilder text = new StringBuilder(plain(rounded.movePointLeft(exponent)));
+    return powerOfTen(round(value, digits));
+  }
+
+  /** A number with all its digits, as a number between one and ten and a power of ten. */
+  private static String powerOfTen(BigDecimal number) {
+    int exponent = number.precision() - number.scale() - 1;
+    StringBuilder text = new StringBuilder(plain(number.scaleByPowerOfTen(-exponent)));
     text.append(BOUND).append('×').append(BOUND).append("10");
     if (exponent < 0) {
       text.append('⁻');

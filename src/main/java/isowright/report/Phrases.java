@@ -142,9 +142,17 @@ public final class Phrases {
     };
   }
 
+  /**
+   * The level of significance that belongs to a confidence: 0.05 to 0.95, without the rounding
+   * error of the difference, by which p = 0.05 would count as rejected.
+   */
+  public static double level(double confidence) {
+    return Math.rint((1 - confidence) * 1e9) / 1e9;
+  }
+
   /** Whether a null is rejected at the level that belongs to a confidence. */
   public static boolean rejected(double p, double confidence) {
-    return p < 1 - confidence;
+    return p < level(confidence);
   }
 
   /** The outcome of a test at the level that belongs to a confidence. */

@@ -70,23 +70,32 @@ final class PlansSection {
     List<Entry> entries = new ArrayList<>();
     entries.add(
         Entry.of("Target", Numbers.unit(Numbers.amount(first.target()), material.outputUnit())));
-    List<String> prices = new ArrayList<>();
-    first
-        .prices()
-        .forEach(
-            (input, price) ->
-                prices.add(
-                    input + " " + Numbers.unit(Numbers.amount(price), material.moneyPer(input))));
-    entries.add(Entry.of("Prices", String.join("; ", prices)));
+    entries.add(Entry.of("Prices", Phrases.sentence(prices(material, first))));
     entries.add(Entry.of("Productivity", first.productivity()));
-    List<String> limits = new ArrayList<>();
-    plans.stream()
+    List<String> limits = limits(plans);
+    entries.add(Entry.of("Limits", limits.isEmpty() ? "none" : String.join("; ", limits)));
+    return new Definitions(entries);
+  }
+
+  /** "in EUR of 2020: labour 34 per h, machines 74 per h and energy 10.5 per GJ". */
+  static String prices(Material material, Planned plan) {
+    List<String> prices = new ArrayList<>();
+    plan.prices()
+        .forEach(
+            (input, price) -> {
+              String unit = material.unit(input).isEmpty() ? "unit" : material.unit(input);
+              prices.add(input + " " + Numbers.unit(Numbers.amount(price), "per " + unit));
+            });
+    return "in " + material.money() + ": " + Phrases.list(prices);
+  }
+
+  /** "machines held at 42,000 h", of all technologies, each once. */
+  static List<String> limits(List<Planned> plans) {
+    return plans.stream()
         .flatMap(plan -> plan.limits().entrySet().stream())
         .map(limit -> limit.getKey() + " " + limit.getValue())
         .distinct()
-        .forEach(limits::add);
-    entries.add(Entry.of("Limits", limits.isEmpty() ? "none" : String.join("; ", limits)));
-    return new Definitions(entries);
+        .toList();
   }
 
   private static void status(Planned plan, List<Block> blocks) {

@@ -56,7 +56,7 @@ final class TestsSection {
     return List.of(
         Cell.of(test.nullHypothesis()),
         Cell.of(Phrases.statistic(test)),
-        Cell.of(Numbers.p(test.p())),
+        Cell.of(Numbers.p(test.p(), Phrases.level(material.confidence()))),
         Cell.of(Phrases.outcome(test, material.confidence())),
         Cell.of(test.verdict()));
   }

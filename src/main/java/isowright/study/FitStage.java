@@ -138,7 +138,7 @@ final class FitStage {
         fit.profile().map(profile -> curvature(fit, profile)),
         Hypotheses.of(fit, study.questions().returnsToScale(), study.questions().substitution())
             .stream()
-            .map(FitStage::tested)
+            .map(verdict -> tested(verdict, fit.specification().confidence()))
             .toList(),
         plantLevels(fit),
         new PanelStage(fit).findings(),
@@ -223,7 +223,7 @@ final class FitStage {
         profile.threshold());
   }
 
-  private static FitFindings.Tested tested(Verdict verdict) {
+  private static FitFindings.Tested tested(Verdict verdict, double confidence) {
     return new FitFindings.Tested(
         verdict.name(),
         verdict.nullHypothesis(),
@@ -231,7 +231,7 @@ final class FitStage {
         verdict.law().name(),
         verdict.law().degreesOfFreedom(),
         verdict.p(),
-        verdict.sentence());
+        verdict.sentence(confidence));
   }
 
   private Map<String, Double> plantLevels(Fit fit) {

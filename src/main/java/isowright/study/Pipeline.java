@@ -87,7 +87,8 @@ public final class Pipeline {
     }
     Optional<Findings.Records> records =
         reading
-            .map(r -> RecordsStage.describe(study.records().orElseThrow(), r))
+            .map(
+                r -> RecordsStage.describe(study.records().orElseThrow(), r, study.money().words()))
             .or(() -> describe(study, costReading));
     return new Findings(
         Settings.run(study),
@@ -106,7 +107,9 @@ public final class Pipeline {
   }
 
   private static Optional<Findings.Records> describe(Study study, Optional<Reading> costs) {
-    return costs.map(r -> RecordsStage.describe(study.costs().orElseThrow().records(), r));
+    return costs.map(
+        r ->
+            RecordsStage.describe(study.costs().orElseThrow().records(), r, study.money().words()));
   }
 
   private static void refuseIfNothingWasEstimated(List<Fit> fits) throws Unfit {

@@ -13,6 +13,8 @@ import isowright.study.Findings.Said;
 import isowright.study.PlanFindings.CurvePoint;
 import isowright.study.PlanFindings.Planned;
 import isowright.technology.Technology;
+import java.text.DecimalFormat;
+import java.text.DecimalFormatSymbols;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -204,16 +206,32 @@ final class PlanStage {
       Study.Limit limit = asked.limits().get(input);
       Double held = asked.hold().get(input);
       if (held != null) {
-        words.put(input, String.format(Locale.ROOT, "held at %,.6g", held));
+        words.put(input, "held at " + quantity(input, held));
       } else if (limit != null) {
-        words.put(
-            input,
-            Double.isInfinite(limit.high())
-                ? String.format(Locale.ROOT, "at least %,.6g", limit.low())
-                : String.format(Locale.ROOT, "%,.6g to %,.6g", limit.low(), limit.high()));
+        words.put(input, within(input, limit));
       }
     }
     return words;
+  }
+
+  private String within(String input, Study.Limit limit) {
+    if (Double.isInfinite(limit.high())) {
+      return "at least " + quantity(input, limit.low());
+    }
+    return limit.low() <= 0
+        ? "at most " + quantity(input, limit.high())
+        : "at least "
+            + quantity(input, limit.low())
+            + " and at most "
+            + quantity(input, limit.high());
+  }
+
+  /** A quantity as stated, thousands set off, with its unit: "42,000 h". */
+  private String quantity(String input, double value) {
+    int at = study.inputs().indexOf(input);
+    DecimalFormatSymbols plain = DecimalFormatSymbols.getInstance(Locale.ROOT);
+    String number = new DecimalFormat("#,##0.######", plain).format(value);
+    return study.inputUnits().get(at).map(unit -> number + " " + unit).orElse(number);
   }
 
   private Map<String, Double> named(double[] values) {

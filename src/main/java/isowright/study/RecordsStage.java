@@ -10,9 +10,13 @@ import isowright.records.Remark;
 import isowright.study.Findings.Said;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 
 /** Reads the records of a study and describes them. */
 final class RecordsStage {
+
+  private static final Pattern MONEY = Pattern.compile("^money(?: of \\S+)?");
 
   private RecordsStage() {}
 
@@ -20,7 +24,12 @@ final class RecordsStage {
     return RecordsReader.read(asked.source(), asked.roles(), asked.keep());
   }
 
-  static Findings.Records describe(Study.Records asked, Reading reading) {
+  /**
+   * What the records are.
+   *
+   * @param money how money is printed, such as "EUR of 2020"
+   */
+  static Findings.Records describe(Study.Records asked, Reading reading, String money) {
     Panel panel = reading.panel();
     List<Remark> remarks = new ArrayList<>(reading.remarks());
     remarks.addAll(PanelAudit.of(panel));
@@ -34,18 +43,24 @@ final class RecordsStage {
         panel.periods().get(0),
         panel.periods().get(panel.periods().size() - 1),
         reading.facts(),
-        PanelAudit.describe(panel).stream().map(RecordsStage::described).toList(),
+        PanelAudit.describe(panel).stream().map(column -> described(column, money)).toList(),
         reading.setAside().stream()
             .map(set -> new Findings.SetAside(set.reason(), set.count(), set.rows()))
             .toList(),
         remarks.stream().map(RecordsStage::said).toList());
   }
 
-  private static Findings.Described described(Description column) {
+  /** The records know no currency: what they call money of some period is that of the study. */
+  private static String unit(String unit, String money) {
+    Matcher stated = MONEY.matcher(unit);
+    return stated.find() ? money + unit.substring(stated.end()) : unit;
+  }
+
+  private static Findings.Described described(Description column, String money) {
     return new Findings.Described(
         column.column(),
         column.role(),
-        column.unit(),
+        unit(column.unit(), money),
         column.count(),
         column.mean(),
         column.standardDeviation(),
