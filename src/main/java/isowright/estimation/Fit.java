@@ -7,6 +7,7 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.function.Function;
 
 /**
  * A technology form fitted to a panel, or the reason why it could not be.
@@ -81,33 +82,47 @@ public record Fit(
    */
   public EstimatedTechnology at(int period, Productivity productivity) {
     Solution numbers = numbers();
-    boolean ownConstant =
-        !(productivity instanceof Productivity.Typical) || !specification.plantEffects().constant();
-    double[][] toTechnology = toTechnology(period, !ownConstant);
-    double[] own = numbers.technology().parameters();
-    double[] all = numbers.parameters();
-    double[] moved = own.clone();
-    double shift = 0;
-    for (int j = own.length; j < all.length; j++) {
-      shift += toTechnology[0][j] * all[j];
-      for (int k = 1; k < own.length; k++) {
-        moved[k] += toTechnology[k][j] * all[j];
-      }
-    }
+    boolean levels = levelsGiveTheConstant(productivity);
+    Technology technology = technologies(period, !levels).apply(numbers.parameters());
     double[][] covariance = numbers.covariance();
-    if (ownConstant) {
+    if (levels) {
       double[] weights = numbers.levels().weights(productivity);
-      shift += numbers.levels().shift(weights);
+      technology = technology.shifted(numbers.levels().shift(weights));
       covariance = numbers.levels().covariance(weights);
     }
-    Technology technology =
-        specification.time() == Specification.Time.BIASED_TREND
-            ? numbers.technology().withParameters(moved)
-            : numbers.technology();
     return new EstimatedTechnology(
-        technology.shifted(shift),
-        Matrices.sandwich(toTechnology, covariance),
+        technology,
+        Matrices.sandwich(toTechnology(period, !levels), covariance),
         numbers.covarianceSource().degreesOfFreedom());
+  }
+
+  /** Whether the constant is a mean of plants' levels rather than a parameter of the fit. */
+  boolean levelsGiveTheConstant(Productivity productivity) {
+    return !(productivity instanceof Productivity.Typical)
+        || !specification.plantEffects().constant();
+  }
+
+  /**
+   * The technology at a period, controls at their means, that reported parameters (in the order of
+   * {@link Solution#parameters()}: the estimate, or a refit) describe.
+   *
+   * @param plantMeans as in {@link #toTechnology}
+   */
+  Function<double[], Technology> technologies(int period, boolean plantMeans) {
+    Technology first = numbers().technology();
+    double[] own = first.parameters();
+    double[][] to = toTechnology(period, plantMeans);
+    return reported -> {
+      double[] moved = Arrays.copyOf(reported, own.length);
+      double shift = 0;
+      for (int j = own.length; j < reported.length; j++) {
+        shift += to[0][j] * reported[j];
+        for (int k = 1; k < own.length; k++) {
+          moved[k] += to[k][j] * reported[j];
+        }
+      }
+      return (Arrays.equals(moved, own) ? first : first.withParameters(moved)).shifted(shift);
+    };
   }
 
   /**

@@ -1,0 +1,44 @@
+package isowright.estimation;
+
+import isowright.technology.Technology;
+import java.util.Optional;
+
+/**
+ * One technology estimated again and again: to plants drawn anew, without each plant, without each
+ * period. Each is at the period and productivity of the estimate that it belongs to.
+ *
+ * @param drawn from plants drawn with replacement, one a draw; none where no resampling was asked
+ * @param withoutPlants without plant i, in the order of the panel; none where it was not worked out
+ * @param withoutPeriods without period i, in the order of the panel; none where it was not
+ */
+public record Replicas(
+    Technologies drawn, Technologies withoutPlants, Technologies withoutPeriods) {
+
+  /** No refits. */
+  public static final Replicas NONE =
+      new Replicas(Technologies.NONE, Technologies.NONE, Technologies.NONE);
+
+  /** Technologies by number, made when they are asked for. */
+  public interface Technologies {
+
+    /** None. */
+    Technologies NONE =
+        new Technologies() {
+          @Override
+          public int count() {
+            return 0;
+          }
+
+          @Override
+          public Optional<Technology> get(int i) {
+            return Optional.empty();
+          }
+        };
+
+    /** How many there are, those without an estimate included. */
+    int count();
+
+    /** Technology i; empty where it could not be estimated. */
+    Optional<Technology> get(int i);
+  }
+}
