@@ -23,7 +23,11 @@ public final class Estimation {
 
   /** Fits the specification's form to the panel. */
   public static Fit fit(Panel panel, Specification specification) {
-    double[] base = base(panel, specification);
+    return fit(panel, specification, base(panel, specification));
+  }
+
+  /** The same with inputs divided by a base of one's own, shape n. */
+  static Fit fit(Panel panel, Specification specification, double[] base) {
     List<String> obstacles = Obstacles.of(panel, specification);
     if (!obstacles.isEmpty()) {
       return without(panel, specification, base, Fit.State.REFUSED, obstacles);

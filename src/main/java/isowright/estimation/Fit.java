@@ -83,17 +83,24 @@ public record Fit(
   public EstimatedTechnology at(int period, Productivity productivity) {
     Solution numbers = numbers();
     boolean levels = levelsGiveTheConstant(productivity);
-    Technology technology = technologies(period, !levels).apply(numbers.parameters());
-    double[][] covariance = numbers.covariance();
-    if (levels) {
-      double[] weights = numbers.levels().weights(productivity);
-      technology = technology.shifted(numbers.levels().shift(weights));
-      covariance = numbers.levels().covariance(weights);
-    }
+    double[][] covariance =
+        levels
+            ? numbers.levels().covariance(numbers.levels().weights(productivity))
+            : numbers.covariance();
     return new EstimatedTechnology(
-        technology,
+        technology(period, productivity),
         Matrices.sandwich(toTechnology(period, !levels), covariance),
         numbers.covarianceSource().degreesOfFreedom());
+  }
+
+  /** The technology of {@link #at} alone. */
+  Technology technology(int period, Productivity productivity) {
+    Solution numbers = numbers();
+    boolean levels = levelsGiveTheConstant(productivity);
+    Technology technology = technologies(period, !levels).apply(numbers.parameters());
+    return levels
+        ? technology.shifted(numbers.levels().shift(numbers.levels().weights(productivity)))
+        : technology;
   }
 
   /** Whether the constant is a mean of plants' levels rather than a parameter of the fit. */

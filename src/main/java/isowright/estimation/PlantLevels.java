@@ -142,6 +142,11 @@ public final class PlantLevels {
     return constant ? sum : sum - typical();
   }
 
+  /** s² Σ ω_i² λ_i / T_i: how a constant of these weights varies although θ is known. */
+  double ownVariance(double[] weights) {
+    return rowVariance * means.unitVariance(weights, shrinkage);
+  }
+
   /** The covariance of the reported parameters with c_ω in the place of the constant. */
   double[][] covariance(double[] weights) {
     int columns = covariance.length;
@@ -167,8 +172,8 @@ public final class PlantLevels {
     return Matrices.sandwich(toReported, free);
   }
 
-  /** d. */
-  private double[] direction(double[] weights) {
+  /** d, by the columns of the regression: ∂c_ω/∂θ. */
+  double[] direction(double[] weights) {
     double[] shrunk = new double[weights.length];
     Arrays.setAll(shrunk, g -> weights[g] * shrinkage[g]);
     double[] d = means.regressors(shrunk);
@@ -196,5 +201,18 @@ public final class PlantLevels {
       weights[order[below + 1]] = position - below;
     }
     return weights;
+  }
+
+  /** The upper quartile of levels by the same rule; NaN of none. */
+  static double upperQuartile(double[] levels) {
+    if (levels.length == 0) {
+      return Double.NaN;
+    }
+    double[] sorted = levels.clone();
+    Arrays.sort(sorted);
+    double position = 0.75 * (sorted.length - 1);
+    int below = (int) Math.floor(position);
+    int above = Math.min(below + 1, sorted.length - 1);
+    return sorted[below] + (position - below) * (sorted[above] - sorted[below]);
   }
 }

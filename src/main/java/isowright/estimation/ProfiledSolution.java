@@ -114,7 +114,8 @@ final class ProfiledSolution {
         linear,
         LeastSquares.residuals(design, linear),
         levels,
-        Treatment.none(raw));
+        Treatment.none(raw),
+        all);
   }
 
   private List<String> names(Technology technology) {

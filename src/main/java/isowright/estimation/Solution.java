@@ -23,6 +23,8 @@ import java.util.List;
  * @param residuals residuals in ln Q, by row of the panel
  * @param levels what is needed to move to another plant's productivity
  * @param treatment what was done about plants
+ * @param searched the parameters as a search found them, a start for refits; empty where none was
+ *     searched for
  */
 public record Solution(
     Technology technology,
@@ -35,7 +37,36 @@ public record Solution(
     LinearFit linear,
     double[] residuals,
     PlantLevels levels,
-    Treatment treatment) {
+    Treatment treatment,
+    double[] searched) {
+
+  /** Without a search. */
+  public Solution(
+      Technology technology,
+      List<String> names,
+      double[] parameters,
+      double[][] covariance,
+      Covariance covarianceSource,
+      FitStatistics statistics,
+      Design design,
+      LinearFit linear,
+      double[] residuals,
+      PlantLevels levels,
+      Treatment treatment) {
+    this(
+        technology,
+        names,
+        parameters,
+        covariance,
+        covarianceSource,
+        statistics,
+        design,
+        linear,
+        residuals,
+        levels,
+        treatment,
+        new double[0]);
+  }
 
   /** The mean of exp(residual), by which exp(predicted ln Q) is multiplied (Duan 1983). */
   public double smearing() {

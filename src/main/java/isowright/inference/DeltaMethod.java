@@ -14,7 +14,7 @@ import java.util.function.ToDoubleFunction;
  * standard error is NaN and the interval with it. Tested in {@code DeltaMethodTest} and, for
  * coverage, in {@code CoverageTest}.
  */
-public final class DeltaMethod {
+public final class DeltaMethod implements Intervals {
 
   private final Propagation<Technology> propagation;
 
@@ -46,12 +46,17 @@ public final class DeltaMethod {
     return estimates(t -> new double[] {function.applyAsDouble(t)}, scale).get(0);
   }
 
-  /** Several functions at once, which share the work of evaluating them. */
+  @Override
   public List<Estimate> estimates(Function<Technology, double[]> functions, Scale scale) {
     return propagation.estimates(functions, scale);
   }
 
-  /** An estimate from a value and its standard error. */
+  /** The gradients of functions in the parameters of the technology; [function][parameter]. */
+  double[][] gradients(Function<Technology, double[]> functions) {
+    return propagation.gradients(functions);
+  }
+
+  @Override
   public Estimate estimate(double value, double standardError, Scale scale) {
     return propagation.estimate(value, standardError, scale);
   }

@@ -1,5 +1,7 @@
 package isowright.inference;
 
+import java.util.Optional;
+
 /**
  * An estimated number with its uncertainty.
  *
@@ -9,9 +11,18 @@ package isowright.inference;
  * @param high the upper end of the interval
  * @param level the confidence level of the interval, such as 0.95
  * @param method how the interval was obtained
+ * @param resampled what resampling found; absent where there was none
+ * @param leftOut how the number moves without a plant or a period
  */
 public record Estimate(
-    double value, double standardError, double low, double high, double level, Method method) {
+    double value,
+    double standardError,
+    double low,
+    double high,
+    double level,
+    Method method,
+    Optional<Resampled> resampled,
+    LeftOut leftOut) {
 
   /** How an interval was obtained. */
   public enum Method {
@@ -32,5 +43,16 @@ public record Estimate(
     public String word() {
       return word;
     }
+  }
+
+  /** Without refits. */
+  public Estimate(
+      double value, double standardError, double low, double high, double level, Method method) {
+    this(value, standardError, low, high, level, method, Optional.empty(), LeftOut.NOTHING);
+  }
+
+  /** The same, with how it moves without a plant or a period. */
+  public Estimate with(LeftOut moves) {
+    return new Estimate(value, standardError, low, high, level, method, resampled, moves);
   }
 }

@@ -105,6 +105,11 @@ public final class Propagation<T> {
     return Math.max(variance, 0) + 0 * variance;
   }
 
+  /** The gradients of functions in the parameters; [function][parameter]. */
+  double[][] gradients(Function<T, double[]> functions) {
+    return gradients(functions, functions.apply(build.apply(centre.clone())).length);
+  }
+
   private double[][] gradients(Function<T, double[]> functions, int count) {
     double[][] gradients = new double[count][steps.length];
     for (int k = 0; k < steps.length; k++) {

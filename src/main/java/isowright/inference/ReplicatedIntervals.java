@@ -1,0 +1,238 @@
+package isowright.inference;
+
+import isowright.estimation.EstimatedTechnology;
+import isowright.estimation.Replicas;
+import isowright.estimation.Replicas.Technologies;
+import isowright.inference.LeftOut.Most;
+import isowright.inference.Resampled.Interval;
+import isowright.technology.Technology;
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import java.util.Optional;
+import java.util.function.Function;
+import java.util.stream.IntStream;
+
+/**
+ * Numbers computed from a technology and from its refits: how they scatter over plants drawn anew,
+ * and how they move without a plant or a period.
+ *
+ * <p>Where plants were drawn, the standard error is the standard deviation over draws and the
+ * interval the percentile interval; bias-corrected ones stand beside it ({@link Resampled}). Else
+ * both are those of the {@link DeltaMethod}. A figure that no parameter moves stays as it is.
+ *
+ * <p>Leaving out is exact for every plant where there are at most {@link #EXACT} of them; of more,
+ * those {@link #SCREENED} are refitted of which the gradient of the figure says that they move it
+ * most (a move by one of so many plants is small, so the gradient is right to a small part of it).
+ * Tested in {@code ReplicatedIntervalsTest}.
+ */
+public final class ReplicatedIntervals implements Intervals {
+
+  /** Up to so many plants or periods every one is left out for every figure. */
+  public static final int EXACT = 200;
+
+  /** Of more, so many are. */
+  public static final int SCREENED = 20;
+
+  /** A standard error below this part of the value is rounding of a figure that nothing moves. */
+  private static final double ROUNDING = 1e-9;
+
+  private final Technology technology;
+  private final Replicas replicas;
+  private final DeltaMethod delta;
+  private final double level;
+
+  ReplicatedIntervals(EstimatedTechnology estimated, DeltaMethod delta, double level) {
+    this.technology = estimated.technology();
+    this.replicas = estimated.replicas();
+    this.delta = delta;
+    this.level = level;
+  }
+
+  static boolean any(Replicas replicas) {
+    return replicas.drawn().count() > 0
+        || replicas.withoutPlants().count() > 0
+        || replicas.withoutPeriods().count() > 0;
+  }
+
+  @Override
+  public Estimate estimate(double value, double standardError, DeltaMethod.Scale scale) {
+    return delta.estimate(value, standardError, scale);
+  }
+
+  @Override
+  public List<Estimate> estimates(
+      Function<Technology, double[]> functions, DeltaMethod.Scale scale) {
+    List<Estimate> analytic = delta.estimates(functions, scale);
+    double[][] drawn = values(replicas.drawn(), functions, analytic.size());
+    Moves plants = moves(replicas.withoutPlants(), functions, analytic);
+    Moves periods = moves(replicas.withoutPeriods(), functions, analytic);
+    List<Estimate> all = new ArrayList<>();
+    for (int f = 0; f < analytic.size(); f++) {
+      Estimate own = analytic.get(f);
+      if (own.standardError() <= ROUNDING * Math.abs(own.value())) {
+        all.add(own);
+        continue;
+      }
+      LeftOut leftOut = new LeftOut(plants.most(f, own.value()), periods.most(f, own.value()));
+      all.add(
+          drawn.length == 0
+              ? own.with(leftOut)
+              : resampled(own, drawn, f, plants.acceleration(f)).with(leftOut));
+    }
+    return all;
+  }
+
+  private Estimate resampled(Estimate own, double[][] drawn, int f, double acceleration) {
+    double[] had = Arrays.stream(drawn).mapToDouble(v -> v[f]).filter(Double::isFinite).toArray();
+    int failed = drawn.length - had.length;
+    Interval analytic = new Interval(own.low(), own.high());
+    double mean = Arrays.stream(had).sum() / had.length;
+    if (failed > Resampled.MOST_FAILED * drawn.length || !Double.isFinite(own.value())) {
+      return estimate(
+          own,
+          new Resampled(
+              drawn.length,
+              failed,
+              mean,
+              Double.NaN,
+              Interval.NONE,
+              Interval.NONE,
+              Interval.NONE,
+              own.standardError(),
+              analytic));
+    }
+    double squares = 0;
+    for (double value : had) {
+      squares += (value - mean) * (value - mean);
+    }
+    BootstrapIntervals intervals = new BootstrapIntervals(had, own.value(), level);
+    return estimate(
+        own,
+        new Resampled(
+            drawn.length,
+            failed,
+            mean,
+            Math.sqrt(squares / (had.length - 1)),
+            intervals.percentile(),
+            intervals.corrected(),
+            Double.isNaN(acceleration) ? Interval.NONE : intervals.accelerated(acceleration),
+            own.standardError(),
+            analytic));
+  }
+
+  private Estimate estimate(Estimate own, Resampled resampled) {
+    return new Estimate(
+        own.value(),
+        resampled.standardError(),
+        resampled.percentile().low(),
+        resampled.percentile().high(),
+        level,
+        Estimate.Method.RESAMPLING,
+        Optional.of(resampled),
+        LeftOut.NOTHING);
+  }
+
+  /** The functions of every technology, NaN where there is none; [i][f]. */
+  private static double[][] values(
+      Technologies technologies, Function<Technology, double[]> functions, int count) {
+    return IntStream.range(0, technologies.count())
+        .parallel()
+        .mapToObj(i -> technologies.get(i).map(functions).orElseGet(() -> missing(count)))
+        .toArray(double[][]::new);
+  }
+
+  private static double[] missing(int count) {
+    double[] missing = new double[count];
+    Arrays.fill(missing, Double.NaN);
+    return missing;
+  }
+
+  private Moves moves(
+      Technologies without, Function<Technology, double[]> functions, List<Estimate> analytic) {
+    int count = without.count();
+    if (count <= EXACT) {
+      boolean[] exact = new boolean[count];
+      Arrays.fill(exact, true);
+      return new Moves(values(without, functions, analytic.size()), exact);
+    }
+    double[][] near = linear(without, functions, analytic);
+    boolean[] exact = new boolean[count];
+    for (int f = 0; f < analytic.size(); f++) {
+      int figure = f;
+      double centre = analytic.get(f).value();
+      IntStream.range(0, count)
+          .boxed()
+          .filter(i -> !Double.isNaN(near[i][figure]))
+          .sorted(
+              (i, j) ->
+                  Double.compare(size(near[j][figure], centre), size(near[i][figure], centre)))
+          .limit(SCREENED)
+          .forEach(i -> exact[i] = true);
+    }
+    IntStream.range(0, count)
+        .parallel()
+        .filter(i -> exact[i])
+        .forEach(
+            i -> near[i] = without.get(i).map(functions).orElseGet(() -> missing(analytic.size())));
+    return new Moves(near, exact);
+  }
+
+  private static double size(double value, double centre) {
+    return Math.abs(value - centre);
+  }
+
+  /** The functions without each plant by their gradients. */
+  private double[][] linear(
+      Technologies without, Function<Technology, double[]> functions, List<Estimate> analytic) {
+    double[][] gradients = delta.gradients(functions);
+    double[] centre = technology.parameters();
+    return IntStream.range(0, without.count())
+        .parallel()
+        .mapToObj(
+            i ->
+                without
+                    .get(i)
+                    .map(t -> linear(t.parameters(), centre, gradients, analytic))
+                    .orElseGet(() -> missing(analytic.size())))
+        .toArray(double[][]::new);
+  }
+
+  private static double[] linear(
+      double[] parameters, double[] centre, double[][] gradients, List<Estimate> analytic) {
+    double[] values = new double[analytic.size()];
+    for (int f = 0; f < values.length; f++) {
+      values[f] = analytic.get(f).value();
+      for (int k = 0; k < centre.length; k++) {
+        values[f] += gradients[f][k] * (parameters[k] - centre[k]);
+      }
+    }
+    return values;
+  }
+
+  /** The figures without each plant or period, and which of them were refitted. */
+  private record Moves(double[][] values, boolean[] exact) {
+
+    Optional<Most> most(int f, double centre) {
+      int most = -1;
+      int lost = 0;
+      for (int i = 0; i < values.length; i++) {
+        boolean had = Double.isFinite(values[i][f]);
+        lost += had ? 0 : 1;
+        boolean further = most < 0 || size(values[i][f], centre) > size(values[most][f], centre);
+        if (had && exact[i] && further) {
+          most = i;
+        }
+      }
+      return most < 0 || Double.isNaN(centre)
+          ? Optional.empty()
+          : Optional.of(new Most(most, values[most][f], lost));
+    }
+
+    double acceleration(int f) {
+      return values.length < 3
+          ? Double.NaN
+          : BootstrapIntervals.acceleration(Arrays.stream(values).mapToDouble(v -> v[f]).toArray());
+    }
+  }
+}
