@@ -26,7 +26,8 @@ final class PanelRefitting implements Refitting {
   public RefittedParameters drawn(int draws, long seed) {
     int plants = panel.plants().size();
     return each(
-        draws, d -> refit(SelectedPanel.counted(panel, ClusterBootstrap.counts(plants, d, seed)), false));
+        draws,
+        d -> refit(SelectedPanel.counted(panel, ClusterBootstrap.counts(plants, d, seed)), false));
   }
 
   @Override

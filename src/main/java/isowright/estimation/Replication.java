@@ -119,9 +119,7 @@ public final class Replication {
         technologies(
             ranked(productivity, withoutPlants),
             (p, reported) ->
-                levels
-                    ? withoutPlant(rows, p, reported, productivity)
-                    : Optional.of(reported[0]),
+                levels ? withoutPlant(rows, p, reported, productivity) : Optional.of(reported[0]),
             build);
     Technologies periods =
         technologies(
@@ -152,8 +150,7 @@ public final class Replication {
     double own = ownDeviation(productivity);
     return technologies(
         drawn,
-        (i, reported) ->
-            Optional.of(level.applyAsDouble(reported) + own * noise(i, productivity)),
+        (i, reported) -> Optional.of(level.applyAsDouble(reported) + own * noise(i, productivity)),
         build);
   }
 

@@ -8,7 +8,8 @@ import java.util.stream.IntStream;
 
 /**
  * Plants' levels under any reported parameters, row by row: the mean of ln Q less what technology
- * (without its constant) and circumstances explain. For fits by least squares, pooled or within plants.
+ * (without its constant) and circumstances explain. For fits by least squares, pooled or within
+ * plants.
  */
 final class RowLevels {
 

@@ -95,6 +95,10 @@ class ReplicationTest {
     "cobb-douglas, WITHIN, PERIOD_EFFECTS",
     "translog, WITHIN, TREND",
     "translog, NONE, PERIOD_EFFECTS",
+    "cobb-douglas, WITHIN, TWO_WAY",
+    "cobb-douglas, WITHIN, BIASED_TREND",
+    "cobb-douglas, RANDOM, TREND",
+    "cobb-douglas, DIFFERENCES, QUADRATIC_TREND",
     "ces, NONE, TREND",
     "ces, WITHIN, TREND",
     "ces, WITHIN, PERIOD_EFFECTS"
@@ -124,7 +128,7 @@ class ReplicationTest {
         }
       }
     }
-    boolean struck = time == Time.PERIOD_EFFECTS;
+    boolean struck = time.byPeriod();
     for (int t = 0; t < PERIODS; t++) {
       int out = t;
       Panel left = SelectedPanel.kept(panel, row -> panel.rowPeriods().get(row) != out);
@@ -167,7 +171,9 @@ class ReplicationTest {
     "translog, WITHIN",
     "ces, NONE",
     "ces, WITHIN",
-    "cobb-douglas, WITHIN"
+    "cobb-douglas, WITHIN",
+    "cobb-douglas, RANDOM",
+    "translog, MUNDLAK"
   })
   void aDrawIsAFitToThePlantsDrawn(String form, PlantEffects effects) {
     Panel panel = panel(2);
@@ -193,7 +199,7 @@ class ReplicationTest {
       expected.logGradient(logs, theirs);
       double tolerance = form.equals("ces") ? SEARCHED : LINEAR;
       assertThat(mine).containsExactly(theirs, within(tolerance));
-      if (effects == PlantEffects.NONE) {
+      if (effects.constant() && effects != PlantEffects.MUNDLAK) {
         Technology same = again.at(4, new Productivity.Typical()).technology();
         assertThat(actual.logOutput(logs)).isCloseTo(same.logOutput(logs), within(tolerance));
       }
