@@ -323,7 +323,7 @@ final class CostsSection {
                 Text.of(test.nullHypothesis()),
                 List.of(
                     Cell.of(Phrases.statistic(test)),
-                    Cell.of(Numbers.p(test.p())),
+                    Cell.of(Numbers.p(test.p(), Phrases.level(material.confidence()))),
                     Cell.of(Phrases.outcome(test, material.confidence())))));
       }
       if (!rows.isEmpty()) {

@@ -193,6 +193,11 @@ public final class Numbers {
         : fixed(value, 1);
   }
 
+  /** A p-value as a phrase, at the level of common practice, 5 %. */
+  public static String p(double p) {
+    return p(p, 0.05);
+  }
+
   /**
    * A p-value as a phrase: "p = 0.184", "p &lt; 0.001". Three significant digits; more where
    * rounding would carry it over the level of significance or onto it, so that "p = 0.0500" never
