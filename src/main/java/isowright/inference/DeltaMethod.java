@@ -60,4 +60,23 @@ public final class DeltaMethod implements Intervals {
   public Estimate estimate(double value, double standardError, Scale scale) {
     return propagation.estimate(value, standardError, scale);
   }
+
+  /**
+   * √(∇g′ V ∇g) where the gradient is known in closed form.
+   *
+   * @param gradient ∇g in the technology's parameters, shape p
+   */
+  public double standardError(double[] gradient) {
+    return propagation.standardError(gradient);
+  }
+
+  /**
+   * The quantile of the sampling distribution on which the intervals rest: value + t se, or value ·
+   * exp(t se / value) for a positive quantity, t the quantile of Student's law.
+   *
+   * @param probability between 0 and 1
+   */
+  public double quantile(double value, double standardError, Scale scale, double probability) {
+    return propagation.quantile(value, standardError, scale, probability);
+  }
 }

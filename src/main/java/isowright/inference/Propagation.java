@@ -3,6 +3,7 @@ package isowright.inference;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.function.Function;
+import org.apache.commons.statistics.distribution.ContinuousDistribution;
 import org.apache.commons.statistics.distribution.NormalDistribution;
 import org.apache.commons.statistics.distribution.TDistribution;
 
@@ -33,6 +34,7 @@ public final class Propagation<T> {
   private final double[][] covariance;
   private final Function<double[], T> build;
   private final double[] steps;
+  private final double degreesOfFreedom;
   private final double quantile;
   private final double level;
 
@@ -55,11 +57,8 @@ public final class Propagation<T> {
     this.covariance = covariance;
     this.build = build;
     this.level = level;
-    double tail = (1 - level) / 2;
-    this.quantile =
-        Double.isInfinite(degreesOfFreedom)
-            ? NormalDistribution.of(0, 1).inverseSurvivalProbability(tail)
-            : TDistribution.of(degreesOfFreedom).inverseSurvivalProbability(tail);
+    this.degreesOfFreedom = degreesOfFreedom;
+    this.quantile = student(1 - (1 - level) / 2);
     this.steps = new double[covariance.length];
     for (int k = 0; k < steps.length; k++) {
       steps[k] = STEP * Math.sqrt(Math.max(covariance[k][k], 0));
@@ -90,6 +89,29 @@ public final class Propagation<T> {
       high = value + quantile * standardError;
     }
     return new Estimate(value, standardError, low, high, level, Estimate.Method.DELTA);
+  }
+
+  /** √(∇g′ V ∇g) for a gradient known in closed form, shape p. */
+  double standardError(double[] gradient) {
+    return Math.sqrt(variance(gradient));
+  }
+
+  /** The quantile of the sampling distribution on which the intervals rest. */
+  double quantile(double value, double standardError, DeltaMethod.Scale scale, double probability) {
+    double t = standardError == 0 ? 0 : student(probability);
+    return scale == DeltaMethod.Scale.LOG && value > 0
+        ? value * Math.exp(t * standardError / value)
+        : value + t * standardError;
+  }
+
+  private double student(double probability) {
+    ContinuousDistribution law =
+        Double.isInfinite(degreesOfFreedom)
+            ? NormalDistribution.of(0, 1)
+            : TDistribution.of(degreesOfFreedom);
+    return probability > 0.5
+        ? law.inverseSurvivalProbability(1 - probability)
+        : law.inverseCumulativeProbability(probability);
   }
 
   /** ∇g′ V ∇g; NaN where the covariance holds one, whatever the gradient. */

@@ -211,6 +211,11 @@ record CellFault(String code, String rule, String remedy) {
               "spending-not-positive",
               "spending must not be negative, and must be positive where the price is worked out from it",
               "Correct it, or leave the cell blank; the row's price is then unknown.");
+      case AMOUNT ->
+          new CellFault(
+              "amount-negative",
+              "an amount must not be negative",
+              "Correct it, or leave the cell blank; the amount is then unknown.");
       case FILED_COST ->
           new CellFault(
               "filed-cost-not-positive",

@@ -29,8 +29,9 @@ import java.util.Optional;
  * @param spending money spent on each input; absent where not declared
  * @param controls each control as it enters (logged where declared)
  * @param filedCost filed cost
- * @param further columns that only an estimator looks at, in the order of the roles; NaN where
- *     blank
+ * @param further further columns that only a later stage looks at, in the order of the roles,
+ *     prices in the money of the base; NaN where blank
+ * @param moneyFactor what the money of each row was multiplied by; absent without a deflator
  */
 public record Panel(
     Roles roles,
@@ -48,7 +49,8 @@ public record Panel(
     List<Optional<Column>> spending,
     List<Column> controls,
     Optional<Column> filedCost,
-    List<Column> further) {
+    List<Column> further,
+    Optional<Column> moneyFactor) {
 
   /** Copies the lists. */
   public Panel {
@@ -63,7 +65,7 @@ public record Panel(
     further = List.copyOf(further);
   }
 
-  /** A panel without further columns. */
+  /** A panel without further columns, whose money is as it was written. */
   public Panel(
       Roles roles,
       List<String> plants,
@@ -96,7 +98,30 @@ public record Panel(
         spending,
         controls,
         filedCost,
-        List.of());
+        List.of(),
+        Optional.empty());
+  }
+
+  /** The same records at other prices. */
+  public Panel withPrices(List<Optional<Column>> otherPrices) {
+    return new Panel(
+        roles,
+        plants,
+        plantStarts,
+        periods,
+        periodNumbers,
+        rowPeriods,
+        fileRows,
+        output,
+        logOutput,
+        quantities,
+        logQuantities,
+        otherPrices,
+        spending,
+        controls,
+        filedCost,
+        further,
+        moneyFactor);
   }
 
   /** The number of rows, N. */

@@ -171,7 +171,10 @@ final class PanelAssembly {
         spending,
         controls(),
         money(slots.filedCost(), factor),
-        further());
+        further(factor),
+        factor.length == 0
+            ? Optional.empty()
+            : Optional.of(Column.takingOver("money factor", factor)));
   }
 
   private double[] gather(int slot) {
@@ -224,10 +227,12 @@ final class PanelAssembly {
     return controls;
   }
 
-  private List<Column> further() {
+  private List<Column> further(double[] factor) {
     List<Column> further = new ArrayList<>();
     for (int k = 0; k < roles.further().size(); k++) {
-      further.add(column(slots.further(k)));
+      int slot = slots.further(k);
+      boolean price = roles.further().get(k).measure() == Roles.Measure.PRICE;
+      further.add(price ? money(OptionalInt.of(slot), factor).orElseThrow() : column(slot));
     }
     return further;
   }

@@ -3,6 +3,7 @@ package isowright.records;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.Stream;
 
 /**
  * Says what is doubtful in a panel before anything is fitted to it. Fit statistics cannot see a
@@ -48,9 +49,13 @@ public final class PanelAudit {
     return List.copyOf(remarks.all());
   }
 
-  /** Describes every column: output, each input with its money, controls, filed cost. */
+  /**
+   * Describes every column: output, each input with its money, controls, filed cost, further ones.
+   */
   public static List<Description> describe(Panel panel) {
-    return PanelColumn.of(panel).stream().map(column -> describe(panel, column)).toList();
+    return Stream.concat(PanelColumn.of(panel).stream(), PanelColumn.ofPrices(panel).stream())
+        .map(column -> describe(panel, column))
+        .toList();
   }
 
   private static Description describe(Panel panel, PanelColumn described) {

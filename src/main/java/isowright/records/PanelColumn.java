@@ -3,6 +3,7 @@ package isowright.records;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.Set;
 
 /**
  * A column of a panel with what it is.
@@ -94,8 +95,25 @@ record PanelColumn(
     Optional<Column> filed = panel.filedCost();
     filed.ifPresent(
         c -> all.add(new PanelColumn(c, Kind.FILED_COST, "filed cost", money, -1, false)));
-    for (Column column : panel.further()) {
-      all.add(new PanelColumn(column, Kind.FURTHER, "instrument or proxy", "", -1, false));
+    all.addAll(further(panel, Set.of(Roles.Measure.NUMBER)));
+    return all;
+  }
+
+  /**
+   * The columns from which a price follows: described like the others, but not held against them.
+   */
+  static List<PanelColumn> ofPrices(Panel panel) {
+    return further(panel, Set.of(Roles.Measure.PRICE, Roles.Measure.AMOUNT, Roles.Measure.RATE));
+  }
+
+  private static List<PanelColumn> further(Panel panel, Set<Roles.Measure> measures) {
+    List<PanelColumn> all = new ArrayList<>();
+    for (int k = 0; k < panel.further().size(); k++) {
+      Roles.Further declared = panel.roles().further().get(k);
+      if (measures.contains(declared.measure())) {
+        Column column = panel.further().get(k);
+        all.add(new PanelColumn(column, Kind.FURTHER, declared.role(), "", -1, false));
+      }
     }
     return all;
   }

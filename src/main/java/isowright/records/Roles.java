@@ -1,5 +1,6 @@
 package isowright.records;
 
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 
@@ -14,8 +15,8 @@ import java.util.Optional;
  * @param controls what else moves output
  * @param deflator the column by which money is divided, and the period whose money is used
  * @param filedCost the column of filed cost
- * @param further numeric columns that are neither input nor control but that an estimator looks at,
- *     such as what shifts an input
+ * @param further numeric columns that are neither input nor control but that a later stage looks
+ *     at, such as what shifts an input, or the price of an asset
  * @param explained what the first column is called in messages: output, or cost where the records
  *     are of costs and prices, which then stand among the controls
  */
@@ -28,7 +29,7 @@ public record Roles(
     List<Control> controls,
     Optional<Deflator> deflator,
     Optional<String> filedCost,
-    List<String> further,
+    List<Further> further,
     String explained) {
 
   /** What the column that is explained is called, where the records are those of production. */
@@ -84,12 +85,25 @@ public record Roles(
         arguments,
         Optional.empty(),
         Optional.empty(),
-        further,
+        columnsOfNumbers(further),
         "cost");
   }
 
-  /** The same with these further columns. */
+  /** The same with these columns, which an estimator uses, beside its further ones. */
   public Roles withFurther(List<String> columns) {
+    List<Further> all = new ArrayList<>(further);
+    all.addAll(columnsOfNumbers(columns));
+    return withAllFurther(all);
+  }
+
+  private static List<Further> columnsOfNumbers(List<String> columns) {
+    return columns.stream()
+        .map(column -> new Further(column, "instrument or proxy", Measure.NUMBER))
+        .toList();
+  }
+
+  /** The same with these further columns and no others. */
+  public Roles withAllFurther(List<Further> all) {
     return new Roles(
         plant,
         period,
@@ -99,8 +113,29 @@ public record Roles(
         controls,
         deflator,
         filedCost,
-        columns,
+        all,
         explained);
+  }
+
+  /**
+   * A further column of numbers; a blank cell leaves the value unknown and the row in use.
+   *
+   * @param column its column
+   * @param role what it is, in words
+   * @param measure what its cells must be
+   */
+  public record Further(String column, String role, Measure measure) {}
+
+  /** What the cells of a further column must be. */
+  public enum Measure {
+    /** Money for a unit of something, positive; deflated where a deflator is declared. */
+    PRICE,
+    /** An amount, not negative. */
+    AMOUNT,
+    /** A rate: any number, which may well be the same in every row. */
+    RATE,
+    /** Any number that an estimator uses, and that is audited like an input. */
+    NUMBER
   }
 
   /**

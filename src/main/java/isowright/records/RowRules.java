@@ -6,6 +6,7 @@ import isowright.records.Row.Found;
 import isowright.records.SetAsideTally.Reason;
 import isowright.records.Slot.Kind;
 import java.util.List;
+import java.util.Set;
 import java.util.function.Predicate;
 import java.util.stream.IntStream;
 import org.jspecify.annotations.Nullable;
@@ -21,6 +22,9 @@ import org.jspecify.annotations.Nullable;
  * is an error.
  */
 final class RowRules {
+
+  /** Numbers that may be negative, or whose sign is judged elsewhere. */
+  private static final Set<Kind> ANY_SIGN = Set.of(Kind.CONTROL, Kind.QUANTITY, Kind.FURTHER);
 
   /** No such column is declared. */
   private static final int NONE = -1;
@@ -55,8 +59,7 @@ final class RowRules {
     this.kinds = slots.kinds();
     this.needed = where(Kind::neededInEveryRow);
     this.quantities = where(k -> k == Kind.QUANTITY);
-    this.positive =
-        where(k -> k.numeric() && k != Kind.CONTROL && k != Kind.QUANTITY && k != Kind.FURTHER);
+    this.positive = where(k -> k.numeric() && !ANY_SIGN.contains(k));
     this.givesPrice = new boolean[kinds.length];
     this.period = slots.period().orElse(NONE);
     this.plant = slots.plant().orElse(NONE);
@@ -175,7 +178,9 @@ final class RowRules {
   }
 
   private boolean inRange(double value, int slot) {
-    return value > 0 || (value == 0 && kinds[slot] == Kind.SPENDING && !givesPrice[slot]);
+    return value > 0
+        || (value == 0
+            && (kinds[slot] == Kind.AMOUNT || (kinds[slot] == Kind.SPENDING && !givesPrice[slot])));
   }
 
   private void complainOfValue(Row row, int slot) {

@@ -31,6 +31,8 @@ record Slot(String heading, Kind kind, String role) {
     DEFLATOR,
     /** A positive number; blank leaves the filed cost unknown. */
     FILED_COST,
+    /** A number, not negative; blank leaves the amount unknown. */
+    AMOUNT,
     /** A number; blank leaves it unknown. */
     FURTHER;
 
@@ -43,7 +45,7 @@ record Slot(String heading, Kind kind, String role) {
     boolean neededInEveryRow() {
       return switch (this) {
         case PLANT, PERIOD, OUTPUT, QUANTITY, CONTROL, LOGGED_CONTROL -> true;
-        case PRICE, SPENDING, DEFLATOR, FILED_COST, FURTHER -> false;
+        case PRICE, SPENDING, DEFLATOR, FILED_COST, AMOUNT, FURTHER -> false;
       };
     }
   }

@@ -61,7 +61,7 @@ final class Slots {
             .orElse(OptionalInt.empty());
     further =
         roles.further().stream()
-            .mapToInt(c -> add(c, Kind.FURTHER, "further column").getAsInt())
+            .mapToInt(f -> add(f.column(), kind(f.measure()), f.role()).getAsInt())
             .toArray();
   }
 
@@ -139,5 +139,13 @@ final class Slots {
 
   int further(int k) {
     return further[k];
+  }
+
+  private static Kind kind(Roles.Measure measure) {
+    return switch (measure) {
+      case PRICE -> Kind.PRICE;
+      case AMOUNT -> Kind.AMOUNT;
+      case RATE, NUMBER -> Kind.FURTHER;
+    };
   }
 }

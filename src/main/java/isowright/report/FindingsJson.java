@@ -38,6 +38,7 @@ public final class FindingsJson {
     file.list("given", findings.given(), false, given -> FitJson.write(file, given));
     file.list("leastCost", findings.plans(), false, plan -> PlanJson.write(file, plan));
     file.list("filing", findings.reviews(), false, review -> PlanJson.write(file, review));
+    ReviewJson.write(file, findings.review());
     SpecificationJson.write(file, findings.specification());
     CostJson.write(file, findings.costs());
     file.remarks("remarks", findings.remarks());

@@ -1,5 +1,6 @@
 package isowright.report;
 
+import isowright.study.PlanFindings.Detail;
 import isowright.study.PlanFindings.Planned;
 import isowright.study.PlanFindings.Reviewed;
 import java.io.IOException;
@@ -55,7 +56,13 @@ final class PlanJson {
           file.number("unreconciled", review.unreconciled());
           file.figure("technical", review.technical());
           file.figure("mix", review.mix());
+          if (review.detail().isPresent()) {
+            file.figure("remainder", review.detail().map(Detail::remainder));
+          }
         });
+    if (review.detail().isPresent()) {
+      ReviewJson.detail(file, review.detail().get());
+    }
     file.text("status", review.status());
     file.remarks("remarks", review.remarks());
   }

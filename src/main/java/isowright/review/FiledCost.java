@@ -25,6 +25,13 @@ import java.util.OptionalDouble;
  * does not explain may be quality, location, age of plant, errors of record, or the technology's
  * own error.
  *
+ * <p>Where no multiple of the mix yields Q the gap is not split: the remainder is Σ w x − C(w, Q).
+ *
+ * <p><b>Limits of the split</b> (Kopp and Diewert 1982): it is made at the recorded output, by
+ * shrinking inputs. For a homothetic technology any other radial direction gives the same ratios;
+ * for one that is not (a translog without restrictions, say) it would give others, and {@link
+ * Gap#splitDependsOnDirection} says so. The gap itself does not depend on it.
+ *
  * <p>Sources: Farrell, M. J. (1957), The Measurement of Productive Efficiency, <i>Journal of the
  * Royal Statistical Society</i> A 120, 253–290; Kopp, R. J. and Diewert, W. E. (1982), The
  * Decomposition of Frontier Cost Function Deviations into Measures of Technical and Allocative
@@ -66,6 +73,19 @@ public final class FiledCost {
    *     number
    */
   public Gap gap(double[] mix, Question question, double filed) {
+    return measured(mix, question, filed).gap();
+  }
+
+  /**
+   * A gap with the plan behind it.
+   *
+   * @param gap the gap
+   * @param plan the least-cost plan
+   */
+  record Measured(Gap gap, Plan plan) {}
+
+  /** The gap and the least-cost plan from which it follows. */
+  Measured measured(double[] mix, Question question, double filed) {
     require(mix, question, filed);
     double atPrices = 0;
     for (int i = 0; i < mix.length; i++) {
@@ -77,18 +97,30 @@ public final class FiledCost {
     double contraction = theta.orElse(Double.NaN);
     double technical = atPrices - contraction * atPrices;
     double inMix = contraction * atPrices - plan.cost();
-    double gap = theta.isPresent() ? unreconciled + technical + inMix : filed - plan.cost();
-    return new Gap(
-        filed,
-        atPrices,
-        plan.cost(),
-        gap,
-        unreconciled,
-        technical,
-        inMix,
-        contraction,
-        plan.status(),
-        reason(plan, theta));
+    boolean split = theta.isPresent();
+    double remainder = split ? 0 : atPrices - plan.cost();
+    Gap gap =
+        new Gap(
+            filed,
+            atPrices,
+            plan.cost(),
+            split ? unreconciled + technical + inMix : unreconciled + remainder,
+            unreconciled,
+            technical,
+            inMix,
+            plan.answered() ? remainder : Double.NaN,
+            contraction,
+            mixRatioAtOwnOutput(mix, question, atPrices, plan),
+            plan.status(),
+            reason(plan, theta));
+    return new Measured(gap, plan);
+  }
+
+  private double mixRatioAtOwnOutput(double[] mix, Question question, double atPrices, Plan near) {
+    double own = reference.output(mix);
+    return near.answered() && own > 0 && Double.isFinite(own)
+        ? leastCost.plan(question.at(own), near).cost() / atPrices
+        : Double.NaN;
   }
 
   private void require(double[] mix, Question question, double filed) {

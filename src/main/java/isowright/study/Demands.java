@@ -4,11 +4,17 @@ import isowright.records.Column;
 import isowright.records.Nearest;
 import isowright.records.Panel;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.Collectors;
+import java.util.stream.Stream;
 
 /** Checks what a study asks of its records: plants, periods and prices that they do not hold. */
 final class Demands {
+
+  /** So many rows are named. */
+  private static final int NAMED = 10;
 
   private final Study study;
   private final Optional<Panel> panel;
@@ -84,6 +90,7 @@ final class Demands {
   private void filing(Study.Filing filing) {
     filing.firstPeriod().ifPresent(period -> period("filing.periods", period));
     filing.lastPeriod().ifPresent(period -> period("filing.periods", period));
+    panel.ifPresent(p -> unfiled(filing, p));
     for (int i = 0; i < study.inputs().size(); i++) {
       if (!priced(i)) {
         mistake(
@@ -92,6 +99,38 @@ final class Demands {
                 + study.inputs().get(i)
                 + "; name a price or spending column under inputs");
       }
+    }
+  }
+
+  /** Rows of the periods reviewed that hold no filed cost. */
+  private void unfiled(Study.Filing filing, Panel records) {
+    boolean known =
+        Stream.of(filing.firstPeriod(), filing.lastPeriod())
+            .flatMap(Optional::stream)
+            .allMatch(records.periods()::contains);
+    if (filing.cost().isEmpty() || records.filedCost().isEmpty() || !known) {
+      return;
+    }
+    Column cost = records.filedCost().get();
+    List<Integer> rows =
+        Arrays.stream(ReviewStage.periods(filing, records))
+            .flatMap(period -> Arrays.stream(FilingRows.of(records, period)))
+            .filter(row -> Double.isNaN(cost.get(row)))
+            .map(row -> records.fileRows().get(row))
+            .sorted()
+            .boxed()
+            .toList();
+    if (!rows.isEmpty()) {
+      mistake(
+          "filing.cost",
+          "the column "
+              + cost.name()
+              + " has no value (or the deflator none) in "
+              + (rows.size() == 1 ? "row " : rows.size() + " rows of the periods reviewed: ")
+              + rows.stream().limit(NAMED).map(String::valueOf).collect(Collectors.joining(", "))
+              + (rows.size() > NAMED ? ", …" : "")
+              + "; fill them in, narrow filing.periods, set the plants aside with"
+              + " records.keep.without-plants, or take filing.cost out to review price × quantity");
     }
   }
 

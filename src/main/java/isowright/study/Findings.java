@@ -23,6 +23,7 @@ import java.util.Optional;
  * @param plans the answers to the least-cost questions, question by question, technology by
  *     technology
  * @param reviews filed costs held against least cost
+ * @param review what follows from the filed costs: orders, other choices, allowances
  * @param specification results beside what was laid down before fitting
  * @param costs what was found of the cost side
  * @param remarks what must be said of the whole study
@@ -36,6 +37,7 @@ public record Findings(
     List<FitFindings.Given> given,
     List<Planned> plans,
     List<Reviewed> reviews,
+    ReviewFindings review,
     SpecificationFindings specification,
     CostFindings costs,
     List<Said> remarks) {
@@ -60,6 +62,7 @@ public record Findings(
         given,
         plans,
         reviews,
+        ReviewFindings.NONE,
         SpecificationFindings.NONE,
         CostFindings.NONE,
         remarks);

@@ -8,7 +8,6 @@ import isowright.records.RecordsRefused;
 import isowright.study.Findings.Said;
 import isowright.study.FitFindings.Fitted;
 import isowright.study.PlanFindings.Planned;
-import isowright.study.PlanFindings.Reviewed;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -50,7 +49,11 @@ public final class Pipeline {
     if (study.records().isPresent()) {
       reading = Optional.of(RecordsStage.read(study.records().get()));
     }
-    Optional<Panel> panel = reading.map(Reading::panel);
+    Optional<CapitalStage.Priced> priced = Optional.empty();
+    if (reading.isPresent()) {
+      priced = Optional.of(CapitalStage.price(study, reading.get().panel()));
+    }
+    Optional<Panel> panel = priced.map(CapitalStage.Priced::inForce);
     Demands.check(study, panel);
 
     progress.stage("fitting technologies", 2, STAGES);
@@ -80,15 +83,16 @@ public final class Pipeline {
     List<Planned> plans = new PlanStage(study, panel, candidates).plans();
 
     progress.stage("holding filed costs against least cost", 4, STAGES);
-    List<Reviewed> reviews = new ArrayList<>();
-    if (study.filing().isPresent() && panel.isPresent()) {
-      reviews.addAll(
-          new ReviewStage(study, study.filing().get(), panel.get(), candidates).reviews());
-    }
+    ReviewStage.Review review = ReviewStage.of(study, priced, candidates);
     Optional<Findings.Records> records =
         reading
             .map(
-                r -> RecordsStage.describe(study.records().orElseThrow(), r, study.money().words()))
+                r ->
+                    RecordsStage.describe(
+                        study.records().orElseThrow(),
+                        r,
+                        panel.orElse(r.panel()),
+                        study.money().words()))
             .or(() -> describe(study, costReading));
     return new Findings(
         Settings.run(study),
@@ -98,7 +102,8 @@ public final class Pipeline {
         fitted,
         study.given().stream().map(GivenStage::describe).toList(),
         plans,
-        reviews,
+        review.reviews(),
+        review.findings(),
         new SpecificationFindings(
             ExpectationStage.held(study.protocol().expectations(), fitted),
             study.protocol().decisions()),
@@ -109,7 +114,8 @@ public final class Pipeline {
   private static Optional<Findings.Records> describe(Study study, Optional<Reading> costs) {
     return costs.map(
         r ->
-            RecordsStage.describe(study.costs().orElseThrow().records(), r, study.money().words()));
+            RecordsStage.describe(
+                study.costs().orElseThrow().records(), r, r.panel(), study.money().words()));
   }
 
   private static void refuseIfNothingWasEstimated(List<Fit> fits) throws Unfit {

@@ -102,6 +102,7 @@ public final class PlanFindings {
    * @param technical Σ price × quantity less the cost of the same mix drawn back onto the isoquant
    * @param mix the cost of that mix less the least cost
    * @param status as of a plan
+   * @param detail what follows from the gap; absent where there is none
    * @param remarks what must be said of it
    */
   public record Reviewed(
@@ -116,5 +117,106 @@ public final class PlanFindings {
       Optional<Figure> technical,
       Optional<Figure> mix,
       String status,
-      List<Said> remarks) {}
+      Optional<Detail> detail,
+      List<Said> remarks) {
+
+    /** A filing of which no more is known than its gap. */
+    public Reviewed(
+        String plant,
+        String period,
+        String technology,
+        double filed,
+        double atPrices,
+        Optional<Figure> leastCost,
+        Optional<Figure> gap,
+        double unreconciled,
+        Optional<Figure> technical,
+        Optional<Figure> mix,
+        String status,
+        List<Said> remarks) {
+      this(
+          plant,
+          period,
+          technology,
+          filed,
+          atPrices,
+          leastCost,
+          gap,
+          unreconciled,
+          technical,
+          mix,
+          status,
+          Optional.empty(),
+          remarks);
+    }
+  }
+
+  /**
+   * What follows from a gap.
+   *
+   * @param ratio filed over least cost
+   * @param remainder what of the gap is left undivided
+   * @param efficiency the parts as ratios of costs; absent where the gap is not split
+   * @param scale where output stands against the efficient scale; no part of the gap
+   * @param needed what would have to be true for the filed cost to be least cost; empty where it
+   *     was not asked, the plants being many
+   */
+  public record Detail(
+      Figure ratio,
+      Figure remainder,
+      Optional<Efficiency> efficiency,
+      Optional<Scale> scale,
+      List<Needed> needed) {
+    /** Copies the list. */
+    public Detail {
+      needed = List.copyOf(needed);
+    }
+  }
+
+  /**
+   * Ratios of costs in Farrell's sense; technical × mix = cost.
+   *
+   * @param technical the factor by which all inputs would shrink to yield the output by the
+   *     reference
+   * @param mix least cost over the cost of that mix
+   * @param cost least cost over price × quantity
+   */
+  public record Efficiency(Figure technical, Figure mix, Figure cost) {}
+
+  /**
+   * Where an output stands against the output at which a unit costs least.
+   *
+   * @param state {@code found}, {@code same-returns}, {@code still-falling}, {@code still-rising},
+   *     {@code most-costly} or {@code no-answer}
+   * @param elasticity the scale elasticity at the least-cost mix of the output
+   * @param output the efficient scale
+   * @param part what the output would cost less at the unit cost of the efficient scale
+   */
+  public record Scale(
+      String state, Figure elasticity, Optional<Figure> output, Optional<Figure> part) {}
+
+  /**
+   * What would have to be true for a filed cost to be least cost, all else being as it is.
+   *
+   * @param kind {@code price}, {@code productivity} or {@code substitution}
+   * @param input the input whose price it is; empty for the others
+   * @param asIs what it is
+   * @param value what it would have to be; absent where no value within the bounds does
+   * @param low the lower bound of the search
+   * @param high the upper bound
+   * @param end where there is no value: the last one tried
+   * @param costAtEnd least cost there
+   * @param regular where there is no value: whether the search went to its bound, rather than to
+   *     the end of what the technology can answer
+   */
+  public record Needed(
+      String kind,
+      String input,
+      double asIs,
+      Optional<Figure> value,
+      double low,
+      double high,
+      double end,
+      double costAtEnd,
+      boolean regular) {}
 }

@@ -42,7 +42,7 @@ final class ProductivityWords {
     }
     boolean best =
         value
-            .word(List.of("typical", "best-quarter"), List.of())
+            .word(List.of("typical", "best-quarter"), List.of("frontier"))
             .filter(word -> word.equals("best-quarter"))
             .isPresent();
     return best

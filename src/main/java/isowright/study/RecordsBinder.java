@@ -41,8 +41,14 @@ final class RecordsBinder {
     this.records = root.section("records");
   }
 
-  /** What is declared. */
-  Declared bind(Optional<String> filedCost) {
+  /**
+   * What is declared.
+   *
+   * @param filedCost the column of filed cost
+   * @param capital inputs whose user cost stands in place of a price
+   * @param further the further columns that are asked for
+   */
+  Declared bind(Optional<String> filedCost, Capital capital, List<Roles.Further> further) {
     Optional<Source> source = source();
     Optional<String> plant = column(records, "plant");
     Optional<String> period = column(records, "period");
@@ -60,7 +66,8 @@ final class RecordsBinder {
     Optional<Study.Records> bound = Optional.empty();
     if (source.isPresent() && output.isPresent() && inputs.size() >= 2) {
       Roles roles =
-          new Roles(plant, period, output.get(), outputUnit, inputs, controls, deflator, filedCost);
+          new Roles(plant, period, output.get(), outputUnit, inputs, controls, deflator, filedCost)
+              .withAllFurther(further);
       bound = Optional.of(new Study.Records(source.get(), roles, keep));
     }
     return new Declared(
@@ -72,6 +79,7 @@ final class RecordsBinder {
         inputs.stream().map(Input::unit).toList(),
         inputs.stream()
             .filter(input -> input.price().isEmpty() && input.spending().isEmpty())
+            .filter(input -> !capital.assets().containsKey(input.name()))
             .map(Input::name)
             .toList(),
         outputUnit,

@@ -27,9 +27,11 @@ final class RecordsStage {
   /**
    * What the records are.
    *
+   * @param inForce the same records at the prices in force
    * @param money how money is printed, such as "EUR of 2020"
    */
-  static Findings.Records describe(Study.Records asked, Reading reading, String money) {
+  static Findings.Records describe(
+      Study.Records asked, Reading reading, Panel inForce, String money) {
     Panel panel = reading.panel();
     List<Remark> remarks = new ArrayList<>(reading.remarks());
     remarks.addAll(PanelAudit.of(panel));
@@ -43,7 +45,7 @@ final class RecordsStage {
         panel.periods().get(0),
         panel.periods().get(panel.periods().size() - 1),
         reading.facts(),
-        PanelAudit.describe(panel).stream().map(column -> described(column, money)).toList(),
+        PanelAudit.describe(inForce).stream().map(column -> described(column, money)).toList(),
         reading.setAside().stream()
             .map(set -> new Findings.SetAside(set.reason(), set.count(), set.rows()))
             .toList(),

@@ -1,172 +1,212 @@
 package isowright.study;
 
 import isowright.estimation.EstimatedTechnology;
-import isowright.estimation.Productivity;
-import isowright.inference.DeltaMethod;
-import isowright.inference.Estimate;
 import isowright.inference.Support;
-import isowright.leastcost.Minimiser;
-import isowright.leastcost.Plan;
-import isowright.leastcost.Question;
 import isowright.records.Panel;
-import isowright.review.FiledCost;
-import isowright.review.Gap;
+import isowright.review.GapEstimates;
 import isowright.study.Findings.Said;
 import isowright.study.PlanFindings.Reviewed;
+import isowright.study.ReviewChoices.Choice;
+import isowright.study.ReviewFindings.Allowed;
+import isowright.study.ReviewFindings.Order;
+import isowright.study.ReviewFindings.Variant;
 import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.Comparator;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.stream.Collectors;
+import java.util.stream.IntStream;
 
-/** Holds the filed costs of a study against least cost, plant by plant and period by period. */
+/**
+ * Holds the filed costs of a study against least cost, plant by plant and period by period, for
+ * each technology: gaps in parts, the order of plants, the same under other choices, allowances.
+ */
 final class ReviewStage {
 
-  private final Study study;
+  /** For so many filings of a technology and period it is asked what would have to be true. */
+  private static final int MOST_NEEDED = 500;
+
+  /**
+   * A review.
+   *
+   * @param reviews filings by technology, period and plant
+   * @param findings what follows from them
+   */
+  record Review(List<Reviewed> reviews, ReviewFindings findings) {
+    /** Nothing reviewed. */
+    static final Review NONE = new Review(List.of(), ReviewFindings.NONE);
+  }
+
   private final Study.Filing filing;
   private final Panel panel;
   private final List<Candidate> candidates;
-  private final Support support;
+  private final List<Choice> choices;
+  private final double level;
 
-  ReviewStage(Study study, Study.Filing filing, Panel panel, List<Candidate> candidates) {
-    this.study = study;
+  private final List<Reviewed> reviews = new ArrayList<>();
+  private final List<Order> orders = new ArrayList<>();
+  private final List<Variant> variants = new ArrayList<>();
+  private final List<Allowed> allowances = new ArrayList<>();
+  private final List<Said> remarks = new ArrayList<>();
+  private final GapSpread spread = new GapSpread();
+
+  private ReviewStage(
+      Study study, Study.Filing filing, CapitalStage.Priced priced, List<Candidate> candidates) {
     this.filing = filing;
-    this.panel = panel;
+    this.panel = priced.inForce();
     this.candidates = candidates.stream().filter(Candidate::usable).toList();
-    this.support = Support.of(panel);
+    this.choices = new ReviewChoices(study, filing, priced).all();
+    this.level = study.estimation().confidence();
   }
 
-  List<Reviewed> reviews() {
+  /** The review that a study asks for; nothing where it asks for none. */
+  static Review of(Study study, Optional<CapitalStage.Priced> priced, List<Candidate> candidates) {
+    return study.filing().isPresent() && priced.isPresent()
+        ? new ReviewStage(study, study.filing().get(), priced.get(), candidates).review()
+        : Review.NONE;
+  }
+
+  /** The periods reviewed, as their first and last index in a panel. */
+  static int[] periods(Study.Filing filing, Panel panel) {
     int last = panel.periods().size() - 1;
     int from = filing.firstPeriod().map(panel.periods()::indexOf).orElse(last);
     int to = filing.lastPeriod().map(panel.periods()::indexOf).orElse(last);
-    Productivity reference = PlanStage.productivity(filing.against(), Optional.of(panel));
-    List<Reviewed> reviews = new ArrayList<>();
+    return IntStream.rangeClosed(from, to).toArray();
+  }
+
+  private Review review() {
+    Support support = Support.of(panel);
+    int[] periods = periods(filing, panel);
     for (Candidate candidate : candidates) {
-      for (int period = from; period <= to; period++) {
-        EstimatedTechnology technology = candidate.at(period, reference);
-        for (int r = 0; r < panel.rows(); r++) {
-          if (panel.rowPeriods().get(r) == period) {
-            reviews.add(review(candidate, technology, r));
-          }
-        }
+      for (int period : periods) {
+        review(candidate, period, support, period == periods[periods.length - 1]);
       }
     }
-    return reviews;
+    remarks.addAll(0, wholeRemarks());
+    return new Review(
+        reviews,
+        new ReviewFindings(
+            ReviewReference.asked(filing).words(),
+            orders,
+            variants,
+            spread.spreads(panel),
+            allowances,
+            filing.allowance(),
+            remarks));
   }
 
-  private Reviewed review(Candidate candidate, EstimatedTechnology estimated, int row) {
-    int n = study.inputs().size();
-    double[] mix = new double[n];
-    double[] prices = new double[n];
-    double atPrices = 0;
-    for (int i = 0; i < n; i++) {
-      mix[i] = panel.quantities().get(i).get(row);
-      prices[i] = panel.prices().get(i).orElseThrow().get(row);
-      atPrices += mix[i] * prices[i];
-    }
-    double filed = filing.cost().isPresent() ? panel.filedCost().orElseThrow().get(row) : atPrices;
-    String plant = panel.plants().get(panel.plantOf(row));
-    String period = panel.periods().get(panel.rowPeriods().get(row));
-    if (!Double.isFinite(atPrices) || !Double.isFinite(filed)) {
-      return unanswered(plant, period, candidate.name(), filed, atPrices);
-    }
-    Question question = Question.of(panel.output().get(row), prices);
-    Gap gap = FiledCost.against(estimated.technology()).gap(mix, question, filed);
-    List<Said> remarks = new ArrayList<>();
-    if (!gap.reason().isEmpty()) {
-      remarks.add(Said.of(gap.complete() ? "note" : "warning", "review", gap.reason()));
-    }
-    if (!gap.complete()) {
-      return new Reviewed(
-          plant,
-          period,
-          candidate.name(),
-          filed,
-          atPrices,
-          Optional.empty(),
-          Optional.empty(),
-          filed - atPrices,
-          Optional.empty(),
-          Optional.empty(),
-          gap.status() == Plan.Status.INFEASIBLE ? "infeasible" : "irregular",
-          remarks);
-    }
-    double[] least = Minimiser.of(estimated.technology()).mix(question);
-    boolean inside = support.inside(least);
-    List<Figure> figures = figures(candidate, estimated, question, mix, gap);
-    return new Reviewed(
-        plant,
-        period,
-        candidate.name(),
-        filed,
-        atPrices,
-        Optional.of(figures.get(0)),
-        Optional.of(figures.get(1)),
-        gap.unreconciled(),
-        Optional.of(figures.get(2)),
-        Optional.of(figures.get(3)),
-        inside ? "solved" : "outside-records",
-        remarks);
-  }
-
-  private List<Figure> figures(
-      Candidate candidate,
-      EstimatedTechnology estimated,
-      Question question,
-      double[] mix,
-      Gap gap) {
-    double filed = gap.filed();
-    double[] values = {gap.leastCost(), gap.gap(), gap.technical(), gap.mix()};
-    List<Figure> figures = new ArrayList<>();
-    if (candidate.fit().isEmpty()) {
-      for (double value : values) {
-        figures.add(Figure.exact(value));
+  private void review(Candidate candidate, int period, Support support, boolean last) {
+    Choice asked = choices.get(0);
+    EstimatedTechnology reference = asked.reference().of(candidate, period);
+    GapEstimates estimates = GapEstimates.against(reference, level);
+    List<HeldFiling> held = held(asked, estimates, period);
+    ReviewFigures figures = new ReviewFigures(panel, candidate, period, reference, support, level);
+    double threshold = smallestNeeded(held);
+    reviews.addAll(
+        held.parallelStream()
+            .map(h -> figures.reviewed(h, size(h) >= threshold))
+            .collect(Collectors.toList()));
+    figures.direction(held).ifPresent(remarks::add);
+    String name = panel.periods().get(period);
+    new OrderStage(filing.simulation(), level)
+        .order(candidate, name, reference, held)
+        .ifPresent(orders::add);
+    for (Choice choice : choices) {
+      if (choice == asked || choice.forGiven() || candidate.fit().isPresent()) {
+        vary(candidate, period, choice);
       }
-      return figures;
     }
-    DeltaMethod delta = DeltaMethod.of(estimated, study.estimation().confidence());
-    List<Estimate> estimates =
-        delta.estimates(
-            t -> {
-              Gap moved = FiledCost.against(t).gap(mix, question, filed);
-              return new double[] {moved.leastCost(), moved.gap(), moved.technical(), moved.mix()};
-            },
-            DeltaMethod.Scale.LINEAR);
-    Estimate least =
-        delta.estimate(
-            estimates.get(0).value(), estimates.get(0).standardError(), DeltaMethod.Scale.LOG);
-    figures.add(FitStage.figure(least));
-    // Filed cost is exact, so the gap's interval is that of least cost, turned round.
-    figures.add(
-        Figure.estimated(
-            filed - least.value(),
-            least.standardError(),
-            filed - least.high(),
-            filed - least.low(),
-            least.method().word()));
-    figures.add(FitStage.figure(estimates.get(2)));
-    figures.add(FitStage.figure(estimates.get(3)));
-    return figures;
+    if (last && filing.allowance().isPresent()) {
+      allowances.addAll(
+          new AllowanceStage(filing.allowance().get()).allowed(candidate, name, estimates, held));
+    }
   }
 
-  private static Reviewed unanswered(
-      String plant, String period, String technology, double filed, double atPrices) {
-    return new Reviewed(
-        plant,
-        period,
-        technology,
-        filed,
-        atPrices,
-        Optional.empty(),
-        Optional.empty(),
-        filed - atPrices,
-        Optional.empty(),
-        Optional.empty(),
-        "infeasible",
-        List.of(
+  private void vary(Candidate candidate, int period, Choice choice) {
+    GapEstimates estimates = GapEstimates.against(choice.reference().of(candidate, period), level);
+    List<HeldFiling> held = held(choice, estimates, period);
+    spread.note(candidate.name(), choice.words(), held);
+    List<HeldFiling> answered = held.stream().filter(HeldFiling::answered).toList();
+    if (answered.isEmpty()) {
+      return;
+    }
+    GapEstimates.Total total = estimates.total(answered.stream().map(HeldFiling::gap).toList());
+    variants.add(
+        new Variant(
+            candidate.name(),
+            panel.periods().get(period),
+            choice.code(),
+            "",
+            choice.words(),
+            choice.money(),
+            answered.size(),
+            total.filed(),
+            ReviewFigures.figure(candidate, total.leastCost()),
+            ReviewFigures.figure(candidate, total.gap()),
+            ReviewFigures.figure(candidate, total.share())));
+  }
+
+  private List<HeldFiling> held(Choice choice, GapEstimates estimates, int period) {
+    return Arrays.stream(FilingRows.of(panel, period))
+        .parallel()
+        .mapToObj(row -> held(choice.rows().filing(row), estimates))
+        .toList();
+  }
+
+  private HeldFiling held(FilingRows.Filing row, GapEstimates estimates) {
+    return new HeldFiling(
+        row,
+        panel.plants().get(panel.plantOf(row.row())),
+        row.known()
+            ? Optional.of(estimates.of(row.mix(), row.question(), row.filed()))
+            : Optional.empty());
+  }
+
+  /** The size of the gap below which it is not asked what would have to be true. */
+  private static double smallestNeeded(List<HeldFiling> held) {
+    OptionalDouble at =
+        held.stream()
+            .map(ReviewStage::size)
+            .sorted(Comparator.reverseOrder())
+            .mapToDouble(size -> size)
+            .limit(MOST_NEEDED)
+            .min();
+    return at.orElse(0);
+  }
+
+  private static double size(HeldFiling held) {
+    return held.answered() ? Math.abs(held.gap().gap().gap()) : -1;
+  }
+
+  private List<Said> wholeRemarks() {
+    List<Said> all = new ArrayList<>();
+    if (filing.smearing()) {
+      for (Candidate candidate : candidates) {
+        String factor =
+            candidate.fit().isPresent()
+                ? "is " + ReviewReference.factorWords(candidate)
+                : "is not known, there being no residuals, so the technology is taken as it stands";
+        all.add(
             Said.of(
-                "warning",
-                "missing-price-or-cost",
-                "A price or the filed cost of this plant and period is missing, so it cannot be"
-                    + " reviewed.")));
+                "note",
+                "smearing",
+                "The smearing factor of " + candidate.name() + " " + factor + "."));
+      }
+    }
+    boolean many =
+        Arrays.stream(periods(filing, panel))
+            .anyMatch(period -> FilingRows.of(panel, period).length > MOST_NEEDED);
+    if (many) {
+      all.add(
+          Said.of(
+              "note",
+              "needed-for-largest",
+              "What would have to be true is asked of the "
+                  + MOST_NEEDED
+                  + " largest gaps of each technology and period."));
+    }
+    return all;
   }
 }

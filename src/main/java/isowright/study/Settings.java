@@ -84,6 +84,7 @@ final class Settings {
     settings.put("estimation.confidence", Double.toString(study.estimation().confidence()));
     settings.put("money", study.money().words());
     protocol(study.protocol(), settings);
+    settings.putAll(ReviewSettings.of(study));
     return settings;
   }
 

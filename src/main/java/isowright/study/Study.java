@@ -34,6 +34,7 @@ import java.util.Optional;
  * @param filing the filed costs to be reviewed
  * @param protocol what was laid down before fitting
  * @param costs the cost side; absent where none is asked
+ * @param capital user costs in place of prices, and the owner's services
  */
 public record Study(
     Path file,
@@ -51,7 +52,8 @@ public record Study(
     List<LeastCostQuestion> leastCost,
     Optional<Filing> filing,
     Protocol protocol,
-    Optional<Costs> costs) {
+    Optional<Costs> costs,
+    Capital capital) {
 
   /** Copies the lists. */
   public Study {
@@ -226,10 +228,41 @@ public record Study(
    * @param firstPeriod the first period; absent: the last of the records
    * @param lastPeriod the last period
    * @param against typical or best quarter
+   * @param smearing whether the reference is brought from the median to the mean of output (Duan
+   *     1983)
+   * @param simulation how ranks are drawn
+   * @param allowance how a gap becomes an allowance, where asked
    */
   public record Filing(
       Optional<String> cost,
       Optional<String> firstPeriod,
       Optional<String> lastPeriod,
-      Productivity against) {}
+      Productivity against,
+      boolean smearing,
+      Simulation simulation,
+      Optional<Allowance> allowance) {}
+
+  /**
+   * Draws of the technology's parameters.
+   *
+   * @param draws how many
+   * @param seed where they begin, so that a second run gives the same
+   */
+  public record Simulation(int draws, long seed) {
+    /** What is in force where nothing is written. */
+    public static final Simulation USUAL = new Simulation(999, 20240613);
+  }
+
+  /**
+   * How a gap becomes an allowance; nothing here has a default.
+   *
+   * @param controllable the share of filed cost that the plant can influence, 0 to 1
+   * @param quantile which quantile of the gap's distribution is used, so that error speaks for the
+   *     plant
+   * @param years over how many years it is removed, in equal steps
+   * @param frontierShift by which share controllable cost falls each year for all plants
+   * @param index by which share prices rise each year
+   */
+  public record Allowance(
+      double controllable, double quantile, int years, double frontierShift, double index) {}
 }

@@ -6,7 +6,6 @@ import isowright.estimation.Specification.Time;
 import isowright.study.Study.Estimation;
 import isowright.study.Study.Filing;
 import isowright.study.Study.Given;
-import isowright.study.Study.Productivity;
 import isowright.study.Study.Questions;
 import isowright.technology.Form;
 import java.nio.file.Path;
@@ -39,10 +38,12 @@ final class StudyBinder {
           "questions",
           "least-cost",
           "filing",
+          "capital",
+          "owner",
           "expect",
           "decisions",
           "costs");
-  private static final List<String> LATER = List.of("matrix", "capital", "owner");
+  private static final List<String> LATER = List.of("matrix");
 
   private static final List<String> ESTIMATION_KEYS =
       List.of(
@@ -77,8 +78,12 @@ final class StudyBinder {
     Optional<String> title =
         root.need("title", "the title of the report, such as `title: Glassworks, 2024`")
             .flatMap(YamlValue::text);
-    Optional<String> filedCost = filedCostColumn(root);
-    Declared declared = new RecordsBinder(file, root).bind(filedCost);
+    Optional<String> filedCost = FilingBinder.costColumn(root);
+    CapitalBinder capitalBinder = new CapitalBinder(root);
+    Capital capital = capitalBinder.bind();
+    Declared declared =
+        new RecordsBinder(file, root).bind(filedCost, capital, capitalBinder.further());
+    capitalBinder.check(declared);
     needRecordsOrGiven(root, declared);
     GivenBinder givenBinder = new GivenBinder(root, declared.inputs());
     List<Given> given = givenBinder.bind();
@@ -92,7 +97,7 @@ final class StudyBinder {
     checkCosts(root, declared, estimation);
     Questions questions = questions(root.section("questions"));
     var leastCost = new PlanBinder(declared, names).bind(root);
-    Optional<Filing> filing = filing(root, declared);
+    Optional<Filing> filing = new FilingBinder(declared).bind(root);
     Protocol protocol = new ProtocolBinder(root, declared, !fitted.isEmpty()).bind();
     return Optional.of(
         new Study(
@@ -111,7 +116,8 @@ final class StudyBinder {
             leastCost,
             filing,
             protocol,
-            declared.costs()));
+            declared.costs(),
+            capital));
   }
 
   private static void needRecordsOrGiven(YamlSection root, Declared declared) {
@@ -263,44 +269,5 @@ final class StudyBinder {
         .flatMap(section -> section.get(key))
         .map(value -> value.positive().orElse(1))
         .orElse(1.0);
-  }
-
-  /** The column of filed cost, which is one of the roles of the records' columns. */
-  private static Optional<String> filedCostColumn(YamlSection root) {
-    return root.get("filing")
-        .filter(YamlValue::isMapping)
-        .flatMap(YamlValue::section)
-        .flatMap(section -> section.text("cost"));
-  }
-
-  private static Optional<Filing> filing(YamlSection root, Declared declared) {
-    Optional<YamlSection> written = root.section("filing");
-    if (written.isEmpty()) {
-      return Optional.empty();
-    }
-    YamlSection section = written.get();
-    section.allow("`filing`", List.of("cost", "periods", "against"), List.of("allowance"));
-    if (!declared.present()) {
-      root.refuse("filing", "filed costs stand in records, but there is no `records`");
-    } else if (!declared.unpriced().isEmpty()) {
-      root.refuse(
-          "filing",
-          "filed costs are held against least cost at the prices paid, but there is neither price"
-              + " nor spending of "
-              + String.join(", ", declared.unpriced())
-              + "; name a column for each");
-    }
-    if (section.has("periods") && declared.present() && !declared.period()) {
-      section.refuse("periods", "periods are named, but `records.period` names no column");
-    }
-    Optional<List<String>> span = RecordsBinder.periods(section);
-    Productivity against =
-        section
-            .get("against")
-            .map(value -> ProductivityWords.read(value, false))
-            .orElse(Productivity.TYPICAL);
-    return Optional.of(
-        new Filing(
-            section.text("cost"), span.map(s -> s.get(0)), span.map(s -> s.get(1)), against));
   }
 }

@@ -252,6 +252,14 @@ final class YamlValue {
         : Optional.empty();
   }
 
+  /** Whether a number stands there, not in quotes. */
+  boolean isNumber() {
+    return node instanceof ScalarNode scalar
+        && scalar.isPlain()
+        && (NUMBER.matcher(scalar.getValue()).matches()
+            || INFINITE.matcher(scalar.getValue()).matches());
+  }
+
   boolean isList() {
     return node instanceof SequenceNode;
   }

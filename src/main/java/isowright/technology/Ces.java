@@ -200,6 +200,11 @@ public final class Ces implements Technology {
   }
 
   @Override
+  public Optional<Technology> withSubstitution(double elasticity) {
+    return Optional.of(new Ces(scaling, constant, shares, FORM.curvature(elasticity), scale));
+  }
+
+  @Override
   public double logOutput(double[] logInputs) {
     return constant + scale * PowerMean.log(logInputs, scaling.logBase(), shares, -rho);
   }

@@ -89,6 +89,17 @@ public sealed interface Technology permits CobbDouglas, Ces, Translog {
     return conditionalDemand().isPresent();
   }
 
+  /**
+   * The same technology with another elasticity of substitution between every pair of inputs, at
+   * every mix, with the same output and output elasticities at the base; empty where the form has
+   * no such elasticity as a parameter of its own.
+   *
+   * @param elasticity σ, positive
+   */
+  default Optional<Technology> withSubstitution(double elasticity) {
+    return Optional.empty();
+  }
+
   /** The number of inputs, n. */
   default int dimension() {
     return inputs().size();

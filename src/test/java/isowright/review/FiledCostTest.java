@@ -62,7 +62,8 @@ class FiledCostTest {
       double[] prices = {1 + 9 * random.nextDouble(), 1 + 9 * random.nextDouble()};
       double output = ces.output(mix) * (.7 + .5 * random.nextDouble());
       Gap gap = FiledCost.against(ces).gap(mix, output, prices, 300 * random.nextDouble());
-      assertThat(gap.unreconciled() + gap.technical() + gap.mix()).isEqualTo(gap.gap());
+      assertThat(gap.unreconciled() + gap.technical() + gap.mix() + gap.remainder())
+          .isEqualTo(gap.gap());
       double size = gap.filed() + gap.leastCost();
       assertThat(gap.gap()).isCloseTo(gap.filed() - gap.leastCost(), within(1e-14 * size));
       assertThat(gap.mix()).isGreaterThan(-1e-11 * size);

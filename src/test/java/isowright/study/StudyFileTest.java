@@ -78,7 +78,10 @@ class StudyFileTest {
                 Optional.of("filed_cost"),
                 Optional.of("2023"),
                 Optional.of("2024"),
-                new Productivity(Productivity.Kind.BEST_QUARTER, Optional.empty())));
+                new Productivity(Productivity.Kind.BEST_QUARTER, Optional.empty()),
+                true,
+                new Study.Simulation(499, 7),
+                Optional.of(new Study.Allowance(0.65, 0.25, 5, 0.008, 0.021))));
   }
 
   @Test

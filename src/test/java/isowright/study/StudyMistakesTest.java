@@ -55,8 +55,16 @@ class StudyMistakesTest {
   }
 
   static List<Bad> table() throws IOException {
+    List<Bad> all = new ArrayList<>();
+    for (String file : List.of("mistakes.txt", "filing-mistakes.txt")) {
+      all.addAll(table(file));
+    }
+    return all;
+  }
+
+  private static List<Bad> table(String file) throws IOException {
     List<String> lines;
-    try (InputStream in = StudyMistakesTest.class.getResourceAsStream("mistakes.txt")) {
+    try (InputStream in = StudyMistakesTest.class.getResourceAsStream(file)) {
       lines =
           new String(Objects.requireNonNull(in).readAllBytes(), StandardCharsets.UTF_8)
               .lines()

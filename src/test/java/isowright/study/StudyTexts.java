@@ -75,6 +75,9 @@ final class StudyTexts {
         cost: filed_cost
         periods: [2023, 2024]
         against: best-quarter
+        smearing: true
+        simulation: {draws: 499, seed: 7}
+        allowance: {controllable: 0.65, quantile: 0.25, years: 5, frontier-shift: 0.008, index: 0.021}
       """;
 
   /** The least that a study with records needs. */

@@ -1,0 +1,193 @@
+package isowright.review;
+
+import isowright.estimation.EstimatedTechnology;
+import isowright.inference.DeltaMethod;
+import isowright.inference.DeltaMethod.Scale;
+import isowright.inference.Estimate;
+import isowright.leastcost.Question;
+import java.util.List;
+
+/**
+ * How sure is the gap between a filed cost and least cost, and how sure are its parts? First-order
+ * propagation of the technology's parameter covariance ({@link DeltaMethod}) with the closed
+ * derivatives of {@link CostSlopes}:
+ *
+ * <pre>
+ *   d technical = −Σ w x · dθ,    d mix = Σ w x · dθ − dC,    d gap = −dC
+ * </pre>
+ *
+ * <p>Least cost and the ratio of filed to least cost are positive, so their intervals are symmetric
+ * in logs; that of the gap is least cost's, turned round; that of the technical part is symmetric.
+ * The mix part is never negative and, near the least-cost mix, quadratic in how far the mix lies
+ * from it, so its root is what moves evenly with the parameters: its interval is (√m ± t
+ * se/(2√m))², cut at zero. The parts' standard errors do not add up, because the parts move
+ * together.
+ *
+ * <p>Assumptions: the filing, the quantities and the prices are exact; the parameters' estimated
+ * covariance holds. The chance of a single year in a plant's own output is part of the gap, not of
+ * its interval. Tested in {@code GapEstimatesTest} (against differences) and, for coverage, in
+ * {@code GapCoverageTest}.
+ */
+public final class GapEstimates {
+
+  private final FiledCost filedCost;
+  private final CostSlopes slopes;
+  private final DeltaMethod delta;
+
+  private GapEstimates(EstimatedTechnology reference, double level) {
+    this.filedCost = FiledCost.against(reference.technology());
+    this.slopes = new CostSlopes(reference.technology());
+    this.delta = DeltaMethod.of(reference, level);
+  }
+
+  /** Against a reference technology, at a confidence level such as 0.95. */
+  public static GapEstimates against(EstimatedTechnology reference, double level) {
+    return new GapEstimates(reference, level);
+  }
+
+  /**
+   * The gap of one plant in one period.
+   *
+   * @param mix the inputs used x, shape n, positive
+   * @param question output and prices
+   * @param filed the filed cost
+   */
+  public GapEstimate of(double[] mix, Question question, double filed) {
+    FiledCost.Measured measured = filedCost.measured(mix, question, filed);
+    Gap gap = measured.gap();
+    double[] cost = slopes.ofCost(question, measured.plan());
+    double error = delta.standardError(cost);
+    Estimate least = delta.estimate(gap.leastCost(), error, Scale.LOG);
+    double[] inLogs = new double[cost.length];
+    for (int k = 0; k < cost.length; k++) {
+      inLogs[k] = cost[k] / gap.leastCost();
+    }
+    double[] contraction = slopes.ofContraction(mix, gap.contraction());
+    double[] technical = new double[cost.length];
+    double[] inMix = new double[cost.length];
+    for (int k = 0; k < cost.length; k++) {
+      double saved = gap.atPrices() * gap.contraction() * contraction[k];
+      technical[k] = -saved;
+      inMix[k] = saved - cost[k];
+    }
+    double ratio = filed / gap.leastCost();
+    double relative = error / gap.leastCost();
+    return new GapEstimate(
+        gap,
+        measured.plan(),
+        least,
+        turnedRound(gap, least),
+        delta.estimate(gap.technical(), delta.standardError(technical), Scale.LINEAR),
+        onTheRoot(delta.estimate(gap.mix(), delta.standardError(inMix), Scale.LINEAR)),
+        delta.estimate(gap.remainder(), gap.complete() ? 0 : error, Scale.LINEAR),
+        delta.estimate(ratio, ratio * relative, Scale.LOG),
+        efficiency(gap, contraction, inLogs, relative),
+        inLogs);
+  }
+
+  /** Ratios on the log scale; that of the mix is cut at one, which it cannot pass. */
+  private GapEstimate.Efficiency efficiency(
+      Gap gap, double[] contraction, double[] inLogs, double relative) {
+    double[] inMix = new double[inLogs.length];
+    for (int k = 0; k < inMix.length; k++) {
+      inMix[k] = inLogs[k] - contraction[k];
+    }
+    double technical = gap.technicalRatio();
+    double mix = gap.mixRatio();
+    Estimate ofMix = delta.estimate(mix, mix * delta.standardError(inMix), Scale.LOG);
+    return new GapEstimate.Efficiency(
+        delta.estimate(technical, technical * delta.standardError(contraction), Scale.LOG),
+        new Estimate(
+            mix,
+            ofMix.standardError(),
+            ofMix.low(),
+            ofMix.high() > 1 ? Math.max(1, mix) : ofMix.high(),
+            ofMix.level(),
+            ofMix.method()),
+        delta.estimate(gap.costRatio(), gap.costRatio() * relative, Scale.LOG));
+  }
+
+  /**
+   * The total over several filings in one period: the least costs, whose parameters are the same,
+   * and what is filed.
+   *
+   * @param estimates the filings, each with a least cost
+   */
+  public Total total(List<GapEstimate> estimates) {
+    double filed = 0;
+    double least = 0;
+    double[] moved = new double[slopes.parameters()];
+    for (GapEstimate estimate : estimates) {
+      filed += estimate.gap().filed();
+      least += estimate.gap().leastCost();
+      double[] own = estimate.slopes();
+      for (int k = 0; k < moved.length; k++) {
+        moved[k] += own[k] * estimate.gap().leastCost();
+      }
+    }
+    Estimate cost = delta.estimate(least, delta.standardError(moved), Scale.LOG);
+    return new Total(filed, cost, shifted(filed, 1, cost), shifted(1, 1 / filed, cost));
+  }
+
+  /**
+   * Several filings together.
+   *
+   * @param filed what is filed
+   * @param leastCost least cost
+   * @param gap the gap
+   * @param share the gap as a share of what is filed
+   */
+  public record Total(double filed, Estimate leastCost, Estimate gap, Estimate share) {}
+
+  /** a − b C with the interval of C turned round. */
+  private static Estimate shifted(double a, double b, Estimate cost) {
+    return new Estimate(
+        a - b * cost.value(),
+        b * cost.standardError(),
+        a - b * cost.high(),
+        a - b * cost.low(),
+        cost.level(),
+        cost.method());
+  }
+
+  /**
+   * The quantile of the gap's sampling distribution: filed less the opposite quantile of least
+   * cost.
+   */
+  public double quantile(GapEstimate estimate, double probability) {
+    return estimate.gap().filed()
+        - delta.quantile(
+            estimate.leastCost().value(),
+            estimate.leastCost().standardError(),
+            Scale.LOG,
+            1 - probability);
+  }
+
+  /** (√m ± h)² from m ± 2 h √m, cut at zero. */
+  private static Estimate onTheRoot(Estimate linear) {
+    double root = Math.sqrt(Math.max(linear.value(), 0));
+    if (root == 0 || Double.isNaN(linear.high())) {
+      return linear;
+    }
+    double half = (linear.high() - linear.value()) / (2 * root);
+    double low = Math.max(root - half, 0);
+    double high = root + half;
+    return new Estimate(
+        linear.value(),
+        linear.standardError(),
+        low * low,
+        high * high,
+        linear.level(),
+        linear.method());
+  }
+
+  private static Estimate turnedRound(Gap gap, Estimate least) {
+    return new Estimate(
+        gap.gap(),
+        least.standardError(),
+        gap.filed() - least.high(),
+        gap.filed() - least.low(),
+        least.level(),
+        least.method());
+  }
+}

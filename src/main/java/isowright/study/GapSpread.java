@@ -1,0 +1,57 @@
+package isowright.study;
+
+import isowright.study.ReviewFindings.Spread;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.TreeMap;
+
+/** Gathers, filing by filing, the lowest and the highest gap that any choice gives. */
+final class GapSpread {
+
+  private static final class Range {
+    private int choices;
+    private double low = Double.POSITIVE_INFINITY;
+    private double high = Double.NEGATIVE_INFINITY;
+    private String lowBy = "";
+    private String highBy = "";
+  }
+
+  /** By row of the panel, so that spreads come in the order of the records. */
+  private final TreeMap<Integer, Range> ranges = new TreeMap<>();
+
+  /** Notes the gaps of filings under one technology and choice. */
+  void note(String technology, String words, List<HeldFiling> held) {
+    for (HeldFiling filing : held) {
+      if (filing.answered()) {
+        double share = filing.gap().gap().gap() / filing.gap().gap().filed();
+        Range range = ranges.computeIfAbsent(filing.filing().row(), row -> new Range());
+        range.choices++;
+        if (share < range.low) {
+          range.low = share;
+          range.lowBy = technology + ", " + words;
+        }
+        if (share > range.high) {
+          range.high = share;
+          range.highBy = technology + ", " + words;
+        }
+      }
+    }
+  }
+
+  /** The spreads of all filings that had a gap under any choice. */
+  List<Spread> spreads(isowright.records.Panel panel) {
+    List<Spread> spreads = new ArrayList<>();
+    ranges.forEach(
+        (row, range) ->
+            spreads.add(
+                new Spread(
+                    panel.plants().get(panel.plantOf(row)),
+                    panel.periods().get(panel.rowPeriods().get(row)),
+                    range.choices,
+                    range.low,
+                    range.lowBy,
+                    range.high,
+                    range.highBy)));
+    return spreads;
+  }
+}

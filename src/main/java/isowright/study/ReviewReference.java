@@ -1,0 +1,58 @@
+package isowright.study;
+
+import isowright.estimation.EstimatedTechnology;
+import isowright.estimation.Productivity;
+import java.util.Locale;
+import java.util.Optional;
+
+/**
+ * Against what filed costs are held: a productivity, and whether its output is the median (as a fit
+ * in logs has it) or the mean.
+ *
+ * <p>The mean of output is the median times Duan's smearing factor, mean exp(residual) (Duan, N.
+ * 1983, Smearing Estimate: A Nonparametric Retransformation Method, <i>Journal of the American
+ * Statistical Association</i> 78, 605–610). The factor is taken as it is, without an uncertainty of
+ * its own.
+ *
+ * @param against whose productivity
+ * @param smearing whether output is the mean
+ */
+record ReviewReference(Study.Productivity against, boolean smearing) {
+
+  static ReviewReference asked(Study.Filing filing) {
+    return new ReviewReference(filing.against(), filing.smearing());
+  }
+
+  /** The technology of a candidate in a period by this reference. */
+  EstimatedTechnology of(Candidate candidate, int period) {
+    Productivity productivity = PlanStage.productivity(against, Optional.empty());
+    EstimatedTechnology estimated = candidate.at(period, productivity);
+    return smearing && candidate.fit().isPresent()
+        ? new EstimatedTechnology(
+            estimated.technology().shifted(Math.log(factor(candidate))),
+            estimated.covariance(),
+            estimated.degreesOfFreedom())
+        : estimated;
+  }
+
+  private static double factor(Candidate candidate) {
+    return candidate.fit().orElseThrow().numbers().smearing();
+  }
+
+  /** In words. */
+  String words() {
+    String whose =
+        against.kind() == Study.Productivity.Kind.TYPICAL
+            ? "the typical plant"
+            : "the plant at the upper quartile of productivity";
+    return whose
+        + (smearing
+            ? ", at the mean of its output (smearing factor)"
+            : ", at the median of its output (no smearing factor)");
+  }
+
+  /** The smearing factor of a candidate in words. */
+  static String factorWords(Candidate candidate) {
+    return String.format(Locale.ROOT, "%.4f", factor(candidate));
+  }
+}
