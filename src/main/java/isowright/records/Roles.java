@@ -105,16 +105,7 @@ public record Roles(
   /** The same with these further columns and no others. */
   public Roles withAllFurther(List<Further> all) {
     return new Roles(
-        plant,
-        period,
-        output,
-        outputUnit,
-        inputs,
-        controls,
-        deflator,
-        filedCost,
-        all,
-        explained);
+        plant, period, output, outputUnit, inputs, controls, deflator, filedCost, all, explained);
   }
 
   /**
