@@ -82,7 +82,8 @@ final class SelectedPanel {
         optional(panel.spending(), kept),
         columns(panel.controls(), kept),
         panel.filedCost().map(c -> column(c, kept)),
-        columns(panel.further(), kept));
+        columns(panel.further(), kept),
+        panel.moneyFactor().map(c -> column(c, kept)));
   }
 
   /** The same records with a period struck from the list of periods; no row may be in it. */
@@ -111,7 +112,8 @@ final class SelectedPanel {
         panel.spending(),
         panel.controls(),
         panel.filedCost(),
-        panel.further());
+        panel.further(),
+        panel.moneyFactor());
   }
 
   private static Panel.Rows whole(Panel.Rows values, int[] kept) {

@@ -113,13 +113,9 @@ public final class Pipeline {
 
   private static Optional<Findings.Records> describe(Study study, Optional<Reading> costs) {
     return costs.map(
-<<<<<<< HEAD
         r ->
             RecordsStage.describe(
                 study.costs().orElseThrow().records(), r, r.panel(), study.money().words()));
-=======
-        r -> RecordsStage.describe(study.costs().orElseThrow().records(), r, r.panel()));
->>>>>>> 5b2792a (Format)
   }
 
   private static void refuseIfNothingWasEstimated(List<Fit> fits) throws Unfit {
