@@ -50,6 +50,38 @@ final class PublishedDesigns {
         table.logs("output"));
   }
 
+  /**
+   * −ln(cost / fuel price) of 123 electricity companies on a constant, ln output, half its square,
+   * and the logs of the capital and labour prices over the fuel price.
+   */
+  static ArrayDesign electricity() throws IOException {
+    Table table = Table.read("electricity-1970.csv");
+    int rows = 123;
+    double[][] columns = new double[5][rows];
+    double[] response = new double[rows];
+    for (int i = 0; i < rows; i++) {
+      double fuel = table.of("fuel")[i];
+      double output = Math.log(table.of("output")[i]);
+      columns[0][i] = 1;
+      columns[1][i] = output;
+      columns[2][i] = 0.5 * output * output;
+      columns[3][i] = Math.log(table.of("capital")[i] / fuel);
+      columns[4][i] = Math.log(table.of("labor")[i] / fuel);
+      response[i] = -Math.log(table.of("cost")[i] / fuel);
+    }
+    return ArrayDesign.of(
+        List.of("constant", "output", "square", "capital", "labour"), columns, response);
+  }
+
+  /** ln output on a constant, ln labour and ln capital of 27 states' primary metals. */
+  static ArrayDesign primaryMetals() throws IOException {
+    Table table = Table.read("primary-metals-27-states.csv");
+    return ArrayDesign.of(
+        List.of("constant", "labour", "capital"),
+        new double[][] {table.ones(), table.logs("labor"), table.logs("capital")},
+        table.logs("output"));
+  }
+
   /** A comma-separated file with a heading. */
   private record Table(List<String> names, List<List<String>> cells) {
 
