@@ -36,6 +36,7 @@ final class CostStage {
   private final Panel panel;
   private final CostData data;
   private final List<Said> records = new ArrayList<>();
+  private final List<CostFit> usable = new ArrayList<>();
 
   CostStage(Study study, Costs asked, Panel panel) throws Unfit {
     this.study = study;
@@ -76,6 +77,11 @@ final class CostStage {
     if (!reasons.isEmpty()) {
       throw new Unfit(reasons);
     }
+  }
+
+  /** The answers of the cost functions fitted to the least-cost questions; after the findings. */
+  List<PlanFindings.Planned> plans() {
+    return new CostPlans(study, asked, panel, data).plans(usable);
   }
 
   CostFindings findings() {
@@ -122,6 +128,7 @@ final class CostStage {
           List.of(),
           remarks);
     }
+    usable.add(fit);
     CostFigures figures = new CostFigures(data, fit);
     CostFindings.Regular regular = figures.regularity();
     remark(fit, regular, remarks);

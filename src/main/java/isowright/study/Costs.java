@@ -62,6 +62,13 @@ public record Costs(
    */
   public record Quantity(String name, String column, String unit) {}
 
+  /** The unit of output, where there is one output and its unit is stated. */
+  Optional<String> outputUnit() {
+    return outputs.size() == 1 && !outputs.get(0).unit().isEmpty()
+        ? Optional.of(outputs.get(0).unit())
+        : Optional.empty();
+  }
+
   /** The names of the inputs, in order. */
   public List<String> inputNames() {
     return inputs.stream().map(Input::name).toList();

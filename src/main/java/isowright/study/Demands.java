@@ -82,6 +82,16 @@ final class Demands {
   }
 
   private boolean priced(int input) {
+    boolean amongCosts =
+        study.records().isEmpty()
+            && study
+                .costs()
+                .filter(c -> c.inputNames().contains(study.inputs().get(input)))
+                .isPresent();
+    return amongCosts || pricedInPanel(input);
+  }
+
+  private boolean pricedInPanel(int input) {
     return panel
         .map(p -> p.prices().get(input).isPresent() && Double.isFinite(meanPrice(p, input)))
         .orElse(false);

@@ -71,16 +71,20 @@ public final class Pipeline {
             ? Optional.of(RecordsStage.read(study.costs().get().records()))
             : Optional.empty();
     CostFindings costs = CostFindings.NONE;
+    List<Planned> costPlans = List.of();
     if (costReading.isPresent()) {
-      costs =
-          new CostStage(study, study.costs().orElseThrow(), costReading.get().panel()).findings();
+      CostStage stage =
+          new CostStage(study, study.costs().orElseThrow(), costReading.get().panel());
+      costs = stage.findings();
+      costPlans = stage.plans();
     }
 
     progress.stage("answering least-cost questions", 3, STAGES);
     List<Candidate> candidates = new ArrayList<>();
     fits.forEach(fit -> candidates.add(Candidate.fitted(fit)));
     study.given().forEach(given -> candidates.add(Candidate.given(given)));
-    List<Planned> plans = new PlanStage(study, panel, candidates).plans();
+    List<Planned> plans = new ArrayList<>(new PlanStage(study, panel, candidates).plans());
+    plans.addAll(costPlans);
 
     progress.stage("holding filed costs against least cost", 4, STAGES);
     ReviewStage.Review review = ReviewStage.of(study, priced, candidates);

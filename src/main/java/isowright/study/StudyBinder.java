@@ -90,9 +90,14 @@ final class StudyBinder {
     if (declared.inputs().isEmpty()) {
       declared = declared.withInputs(givenBinder.inputs());
     }
+    Optional<Costs> costs = declared.costs();
+    if (declared.inputs().isEmpty() && costs.isPresent()) {
+      declared = declared.withInputs(costs.get().inputNames());
+    }
     List<String> fitted = technologies(root, declared);
     List<String> names = new ArrayList<>(fitted);
     names.addAll(givenBinder.names());
+    costs.ifPresent(c -> c.forms().forEach(form -> names.add(form.word())));
     Estimation estimation = estimation(root.section("estimation"), declared, fitted);
     checkCosts(root, declared, estimation);
     Questions questions = questions(root.section("questions"));
@@ -106,7 +111,7 @@ final class StudyBinder {
             title.orElse(""),
             declared.records(),
             declared.money(),
-            declared.outputUnit(),
+            declared.outputUnit().or(() -> costs.flatMap(Costs::outputUnit)),
             declared.inputs(),
             declared.units(),
             fitted,
