@@ -168,7 +168,7 @@ final class BriefSection {
 
   private static String sure(Material material) {
     Findings findings = material.findings();
-    if (findings.fits().isEmpty()) {
+    if (findings.fits().isEmpty() && findings.costs().fits().isEmpty()) {
       return "The figures are exact for the technologies as stated. How far those are from the truth is"
           + " not known from this study.";
     }

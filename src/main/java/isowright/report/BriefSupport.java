@@ -47,6 +47,7 @@ final class BriefSupport {
                   + (regular.size() == 1 ? " makes" : " make")
                   + " economic sense at every row of the records."));
     }
+    CostsSection.supported(material, points);
     List<String> inside =
         material.findings().plans().stream()
             .filter(plan -> plan.status().equals("solved"))
@@ -97,6 +98,7 @@ final class BriefSupport {
                               + " is "
                               + lower(Phrases.regularity(regular)))));
     }
+    CostsSection.unsupported(material, points);
     for (Planned plan : material.findings().plans()) {
       if (Terms.cautionary(plan.status())) {
         points.add(Text.of(named(plan) + ": " + Terms.status(plan.status()) + "."));

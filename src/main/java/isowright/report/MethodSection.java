@@ -29,13 +29,20 @@ final class MethodSection {
   static Section of(Material material) {
     MethodSection method = new MethodSection(material);
     List<Block> blocks = new ArrayList<>();
-    blocks.add(method.notation());
-    blocks.add(method.forms());
-    blocks.add(method.derived());
+    if (CostsSection.alone(material.findings())) {
+      blocks.add(CostMethod.of(method::cite));
+    } else {
+      blocks.add(method.notation());
+      blocks.add(method.forms());
+      blocks.add(method.derived());
+      if (!material.findings().costs().fits().isEmpty()) {
+        blocks.add(CostMethod.of(method::cite));
+      }
+    }
     if (!material.findings().fits().isEmpty()) {
       blocks.add(method.estimation());
     }
-    if (!material.findings().plans().isEmpty()) {
+    if (!material.findings().plans().isEmpty() && !CostsSection.alone(material.findings())) {
       blocks.add(method.leastCost());
     }
     blocks.add(method.references());

@@ -28,6 +28,16 @@ enum Source {
       "Baltagi, B. H. and Li, Q. (1990)",
       "A Lagrange Multiplier Test for the Error Components Model with Incomplete Panels",
       "Econometric Reviews 9, 103–107"),
+  BARTEN(
+      "Barten 1969",
+      "Barten, A. P. (1969)",
+      "Maximum Likelihood Estimation of a Complete System of Demand Equations",
+      "European Economic Review 1, 7–73"),
+  BERNDT(
+      "Berndt and Wood 1975",
+      "Berndt, E. R. and Wood, D. O. (1975)",
+      "Technology, Prices, and the Derived Demand for Energy",
+      "Review of Economics and Statistics 57, 259–268"),
   BLACKORBY(
       "Blackorby and Russell 1989",
       "Blackorby, C. and Russell, R. R. (1989)",
@@ -49,6 +59,16 @@ enum Source {
       "Cameron, A. C., Gelbach, J. B. and Miller, D. L. (2011)",
       "Robust Inference with Multiway Clustering",
       "Journal of Business and Economic Statistics 29, 238–249"),
+  CAVES(
+      "Caves, Christensen and Swanson 1981",
+      "Caves, D. W., Christensen, L. R. and Swanson, J. A. (1981)",
+      "Productivity Growth, Scale Economies, and Capacity Utilization in U.S. Railroads, 1955–74",
+      "American Economic Review 71, 994–1002"),
+  CHRISTENSEN_GREENE(
+      "Christensen and Greene 1976",
+      "Christensen, L. R. and Greene, W. H. (1976)",
+      "Economies of Scale in U.S. Electric Power Generation",
+      "Journal of Political Economy 84, 655–676"),
   CHOW(
       "Chow 1960",
       "Chow, G. C. (1960)",
@@ -163,7 +183,13 @@ enum Source {
       "Wooldridge 2002",
       "Wooldridge, J. M. (2002)",
       "Econometric Analysis of Cross Section and Panel Data",
-      "Cambridge, Massachusetts: MIT Press");
+      "Cambridge, Massachusetts: MIT Press"),
+  ZELLNER(
+      "Zellner 1962",
+      "Zellner, A. (1962)",
+      "An Efficient Method of Estimating Seemingly Unrelated Regressions and Tests for"
+          + " Aggregation Bias",
+      "Journal of the American Statistical Association 57, 348–368");
 
   private final String cited;
   private final String authors;

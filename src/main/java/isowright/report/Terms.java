@@ -14,6 +14,9 @@ final class Terms {
       case "cobb-douglas" -> "Cobb-Douglas";
       case "ces" -> "CES";
       case "translog" -> "Translog";
+      case "cobb-douglas-cost" -> "Cobb-Douglas cost";
+      case "cobb-douglas-cost-squared-output" -> "Cobb-Douglas cost, output squared";
+      case "translog-cost" -> "Translog cost";
       default -> name;
     };
   }
