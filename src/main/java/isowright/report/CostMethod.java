@@ -24,7 +24,8 @@ final class CostMethod {
                 + citing.cite(Source.SHEPHARD)
                 + ":"));
     blocks.add(
-        Display.of("ln C = a_0 + Σ_k a_k z_k + {1}/{2} Σ_k Σ_l b_{kl} z_k z_l, s_i = {∂ ln C}/{∂ ln w_i}"));
+        Display.of(
+            "ln C = a_0 + Σ_k a_k z_k + {1}/{2} Σ_k Σ_l b_{kl} z_k z_l, s_i = {∂ ln C}/{∂ ln w_i}"));
     blocks.add(
         Paragraph.of(
             "Homogeneity in prices is imposed by writing the coefficients of the last price in terms of"

@@ -223,7 +223,7 @@ final class CostTables {
                 Text.of(test.nullHypothesis()),
                 List.of(
                     Cell.of(Phrases.statistic(test)),
-                    Cell.of(Numbers.p(test.p())),
+                    Cell.of(Numbers.p(test.p(), Phrases.level(material.confidence()))),
                     Cell.of(Phrases.outcome(test, material.confidence())))));
       }
       if (!rows.isEmpty()) {
@@ -285,6 +285,4 @@ final class CostTables {
                         + MOST_ROWS
                         + " rows a technology; the findings file holds them all."))));
   }
-
-  private static final int MOST_ROWS = 40;
 }

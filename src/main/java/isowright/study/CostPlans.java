@@ -66,8 +66,7 @@ final class CostPlans {
             : List.of();
     List<Figure> shares =
         answered
-            ? figures.figures(
-                f -> CostElasticities.at(f, v).shares(), DeltaMethod.Scale.LINEAR)
+            ? figures.figures(f -> CostElasticities.at(f, v).shares(), DeltaMethod.Scale.LINEAR)
             : List.of();
     return new Planned(
         question.name(),
@@ -200,8 +199,7 @@ final class CostPlans {
             String.format(
                 Locale.ROOT,
                 "%s of %,.6g lies outside those recorded (%,.6g to %,.6g)",
-                (data.arguments().price(k) ? "a price of " : "")
-                    + data.arguments().names().get(k),
+                (data.arguments().price(k) ? "a price of " : "") + data.arguments().names().get(k),
                 Math.exp(v[k]),
                 Math.exp(least),
                 Math.exp(most)));
