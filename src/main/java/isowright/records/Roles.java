@@ -75,7 +75,7 @@ public record Roles(
       Optional<String> period,
       String cost,
       List<Control> arguments,
-      List<String> further) {
+      List<Further> further) {
     return new Roles(
         plant,
         period,
@@ -85,7 +85,7 @@ public record Roles(
         arguments,
         Optional.empty(),
         Optional.empty(),
-        columnsOfNumbers(further),
+        further,
         "cost");
   }
 

@@ -6,6 +6,8 @@ import isowright.estimation.CostSpecification.Restriction;
 import isowright.records.Keep;
 import isowright.records.Roles;
 import isowright.records.Roles.Control;
+import isowright.records.Roles.Further;
+import isowright.records.Roles.Measure;
 import isowright.records.Source;
 import java.util.ArrayList;
 import java.util.Arrays;
@@ -88,7 +90,7 @@ final class CostsBinder {
             period,
             cost.get(),
             arguments(inputs, outputs, fixed),
-            inputs.stream().flatMap(i -> i.share().or(i::spending).stream()).toList());
+            shares(inputs));
     return Optional.of(
         new Costs(
             new Study.Records(source.get(), roles, keep),
@@ -249,6 +251,19 @@ final class CostsBinder {
           .ifPresent(word -> imposed.add(Restriction.values()[words.indexOf(word)]));
     }
     return imposed;
+  }
+
+  private static List<Further> shares(List<Costs.Input> inputs) {
+    List<Further> all = new ArrayList<>();
+    for (Costs.Input input : inputs) {
+      input
+          .share()
+          .ifPresent(c -> all.add(new Further(c, "share of " + input.name(), Measure.NUMBER)));
+      input
+          .spending()
+          .ifPresent(c -> all.add(new Further(c, "spending on " + input.name(), Measure.NUMBER)));
+    }
+    return all;
   }
 
   private List<Control> arguments(
