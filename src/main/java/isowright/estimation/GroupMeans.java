@@ -107,7 +107,7 @@ final class GroupMeans {
   private static void eachGroup(Design design, Visitor visitor) {
     Groups groups = design.groups();
     int columns = design.columns().size() + 1;
-    double[][] block = new double[columns][BLOCK];
+    double[][] block = new double[columns][Math.min(BLOCK, design.rows())];
     int first = 0;
     while (first < groups.count()) {
       int from = groups.start(first);

@@ -107,6 +107,11 @@ record PlantTreatment(Design design, Treatment outcome, List<String> lacking) {
   /** Why the variances of random effects could not be had, if they could not. */
   private static List<String> lacking(
       Specification specification, Design levels, VarianceComponents components) {
+    boolean sound = components.row() > 0 && !Double.isNaN(components.group());
+    boolean amemiya = specification.components() == VarianceComponents.Method.AMEMIYA;
+    if (sound && !amemiya) {
+      return List.of();
+    }
     List<String> lacking = new ArrayList<>();
     int plants = levels.groups().count();
     LinearFit within = LeastSquares.fit(Effects.within(levels));
@@ -133,7 +138,7 @@ record PlantTreatment(Design design, Treatment outcome, List<String> lacking) {
               + " Set variance-components to wallace-hussain, set plant-effects to within, ask for a"
               + " form with fewer parameters, or add plants.");
     }
-    if (specification.components() == VarianceComponents.Method.AMEMIYA) {
+    if (amemiya) {
       within.collinearities().stream()
           .filter(c -> !c.column().equals(CONSTANT))
           .filter(c -> c.among().equals(List.of(Collinearity.GROUP_EFFECTS)))

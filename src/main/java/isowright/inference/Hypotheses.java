@@ -140,7 +140,7 @@ public final class Hypotheses {
   static String sentence(String null0, double p, double level) {
     String claim = "the claim that " + null0;
     if (Double.isNaN(p)) {
-      return "The test of " + claim + " could not be made: the covariance is singular.";
+      return "The test of " + claim + " could not be made: its covariance cannot be inverted.";
     }
     String at = "At the " + percent(level) + " level the records ";
     return p < level

@@ -30,9 +30,10 @@ import java.util.stream.IntStream;
  *       239–253; plants of unequal length: Baltagi, B. H. and Li, Q. (1990), <i>Econometric
  *       Theory</i> 6, 283–284.
  *   <li>{@code random-against-within}, within and random: see {@link RandomAgainstWithin}.
- *   <li>{@code plant-means}, random and Mundlak: Wald test, in its F form and with the covariance
- *       of the fit, that the plant means of inputs and controls add nothing (Mundlak, Y. (1978),
- *       <i>Econometrica</i> 46, 69–85). Unlike the one before it needs no equal variances.
+ *   <li>{@code plant-means}, random and Mundlak, and within where the test before it is in doubt:
+ *       Wald test, in its F form and with the covariance of the fit, that the plant means of inputs
+ *       and controls add nothing (Mundlak, Y. (1978), <i>Econometrica</i> 46, 69–85). Unlike the
+ *       one before it needs no equal variances.
  *   <li>{@code poolability}, pooled and within: F of the regression against one regression a plant
  *       (Chow 1960; Baltagi, <i>Econometric Analysis of Panel Data</i>, section 4.1), with trends
  *       of their own where there is a trend.
@@ -74,8 +75,10 @@ final class PanelHypotheses {
       hypotheses.plantEffects().ifPresent(verdicts::add);
       hypotheses.plantVariance().ifPresent(verdicts::add);
       if (linear) {
-        RandomAgainstWithin.of(fit).ifPresent(verdicts::add);
-        hypotheses.plantMeans().ifPresent(verdicts::add);
+        Optional<RandomAgainstWithin.Outcome> compared = RandomAgainstWithin.of(fit);
+        compared.ifPresent(outcome -> verdicts.add(outcome.verdict()));
+        boolean doubtful = compared.isPresent() && !compared.get().definite();
+        hypotheses.plantMeans(doubtful).ifPresent(verdicts::add);
         hypotheses.poolability().ifPresent(verdicts::add);
       }
     }
@@ -145,8 +148,11 @@ final class PanelHypotheses {
             new Law.ChiSquared(1)));
   }
 
-  private Optional<Verdict> plantMeans() {
-    if (!effects.random()) {
+  /**
+   * @param always whether the test is wanted for a fit without random effects too
+   */
+  private Optional<Verdict> plantMeans(boolean always) {
+    if (!effects.random() && !always) {
       return Optional.empty();
     }
     Fit with =
@@ -155,7 +161,9 @@ final class PanelHypotheses {
             : Estimation.fit(
                 panel,
                 specification.with(
-                    PlantEffects.MUNDLAK, specification.time(), specification.standardErrors()));
+                    PlantEffects.MUNDLAK,
+                    withoutPlants(specification.time()),
+                    specification.standardErrors()));
     if (!with.state().usable()) {
       return Optional.empty();
     }

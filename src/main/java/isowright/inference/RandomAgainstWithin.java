@@ -13,6 +13,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.stream.IntStream;
 import org.apache.commons.math3.linear.Array2DRowRealMatrix;
+import org.apache.commons.math3.linear.ArrayRealVector;
 import org.apache.commons.math3.linear.EigenDecomposition;
 
 /**
@@ -27,10 +28,11 @@ import org.apache.commons.math3.linear.EigenDecomposition;
  * holds for those only. Compared are the slopes that both have, but not those of trend and periods:
  * what is the same for all plants in a period tells nothing of differences between plants.
  *
- * <p>In small samples V_W − V_R need not be positive definite. Then the directions in which it is
- * not are left out (generalised inverse of its positive part, in units of the standard errors
- * within plants), the degrees of freedom are the directions kept, and the verdict says so and
- * points to the test of plant means, which has no such trouble.
+ * <p>In small samples V_W − V_R need not be positive definite. The generalised inverse is taken
+ * then (of the directions whose variance can be told from zero in units of the standard errors
+ * within plants; the degrees of freedom are their number), as published values do; the verdict says
+ * so, no p-value is given where the statistic comes out negative, and the test of plant means,
+ * which has no such trouble, is set beside it.
  *
  * <p>Source: Hausman, J. A. (1978), Specification Tests in Econometrics, <i>Econometrica</i> 46,
  * 1251–1271, eq. 2.7. Checked against Baltagi's table of the US states (9.5254) in {@code
@@ -46,8 +48,16 @@ final class RandomAgainstWithin {
 
   private RandomAgainstWithin() {}
 
+  /**
+   * The test of a fit within plants or of random effects.
+   *
+   * @param verdict the verdict
+   * @param definite whether the difference of the covariances is positive definite
+   */
+  record Outcome(Verdict verdict, boolean definite) {}
+
   /** The test, for a fit within plants or of random effects. */
-  static Optional<Verdict> of(Fit fit) {
+  static Optional<Outcome> of(Fit fit) {
     Specification specification = fit.specification();
     PlantEffects effects = specification.plantEffects();
     if (effects != PlantEffects.WITHIN && effects != PlantEffects.RANDOM) {
@@ -77,7 +87,7 @@ final class RandomAgainstWithin {
     return shared.length == 0 ? Optional.empty() : Optional.of(test(inside, outside, shared));
   }
 
-  private static Verdict test(LinearFit inside, LinearFit outside, int[] shared) {
+  private static Outcome test(LinearFit inside, LinearFit outside, int[] shared) {
     int q = shared.length;
     double[][] within = inside.inverseCrossProduct();
     double[][] between = outside.inverseCrossProduct();
@@ -98,32 +108,32 @@ final class RandomAgainstWithin {
         new EigenDecomposition(new Array2DRowRealMatrix(difference, false));
     double statistic = 0;
     int kept = 0;
+    boolean definite = true;
     for (int k = 0; k < q; k++) {
       double variance = directions.getRealEigenvalue(k);
-      if (variance > SMALLEST) {
-        double along =
-            directions
-                .getEigenvector(k)
-                .dotProduct(new org.apache.commons.math3.linear.ArrayRealVector(scaled, false));
+      definite &= variance > SMALLEST;
+      if (Math.abs(variance) > SMALLEST) {
+        double along = directions.getEigenvector(k).dotProduct(new ArrayRealVector(scaled, false));
         statistic += along * along / variance;
         kept++;
       }
     }
-    return verdict(kept == 0 ? Double.NaN : statistic, kept, q);
+    boolean usable = kept > 0 && statistic >= 0;
+    return new Outcome(verdict(usable ? statistic : Double.NaN, kept, q, definite), definite);
   }
 
-  private static Verdict verdict(double statistic, int kept, int q) {
-    String variances = "Both covariances are classical, each with its own error variance.";
-    String note =
-        kept == q
-            ? variances
-            : variances
-                + " Their difference is not positive definite: "
-                + kept
-                + " of "
-                + q
-                + " directions were kept (generalised inverse), so this is a guide only; the test of"
-                + " plant means (plant-effects: mundlak) asks the same without that trouble.";
+  private static Verdict verdict(double statistic, int kept, int q, boolean definite) {
+    String note = "Both covariances are classical, each with its own error variance.";
+    if (!definite) {
+      note +=
+          " Their difference is not positive definite, so its generalised inverse was taken ("
+              + kept
+              + " of "
+              + q
+              + " directions)"
+              + (Double.isNaN(statistic) ? " and gives no statistic" : "")
+              + ": read the test of plant means, which asks the same without that trouble.";
+    }
     return Verdict.of(
             "random-against-within",
             "plant effects are unrelated to inputs and controls, so that random effects may be used",

@@ -112,6 +112,8 @@ final class FitStage {
     List<FitFindings.Pair> substitution = elasticities.substitution();
     FitStatistics statistics = numbers.statistics();
     FitFindings.Regular regular = RegularityFindings.of(fit);
+    List<Verdict> verdicts =
+        Hypotheses.of(fit, study.questions().returnsToScale(), study.questions().substitution());
     return new Fitted(
         fit.specification().form().name(),
         how(
@@ -136,8 +138,7 @@ final class FitStage {
         elasticities.demand(),
         Optional.of(regular),
         fit.profile().map(profile -> curvature(fit, profile)),
-        Hypotheses.of(fit, study.questions().returnsToScale(), study.questions().substitution())
-            .stream()
+        verdicts.stream()
             .map(verdict -> tested(verdict, fit.specification().confidence()))
             .toList(),
         plantLevels(fit),
@@ -145,7 +146,7 @@ final class FitStage {
         Optional.of(numbers.smearing()),
         points(numbers),
         influential(numbers),
-        remarks(fit, regular, substitution));
+        remarks(fit, regular, substitution, verdicts));
   }
 
   private FitFindings.How how(Fit fit, String covarianceWords, double degreesOfFreedom) {
@@ -282,8 +283,14 @@ final class FitStage {
   }
 
   private List<Said> remarks(
-      Fit fit, FitFindings.Regular regular, List<FitFindings.Pair> elasticities) {
+      Fit fit,
+      FitFindings.Regular regular,
+      List<FitFindings.Pair> elasticities,
+      List<Verdict> verdicts) {
     List<Said> remarks = new ArrayList<>();
+    verdicts.stream()
+        .filter(verdict -> Double.isNaN(verdict.p()))
+        .forEach(verdict -> remarks.add(Said.of("note", "test-not-made", verdict.sentence())));
     fit.reasons().forEach(reason -> remarks.add(Said.of("warning", fit.state().word(), reason)));
     CovarianceWords.few(fit.numbers().covarianceSource()).ifPresent(remarks::add);
     remarks.addAll(new PanelStage(fit).remarks());

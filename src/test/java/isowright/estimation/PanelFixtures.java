@@ -7,6 +7,9 @@ import isowright.records.RecordsReader;
 import isowright.records.RecordsRefused;
 import isowright.records.Roles;
 import isowright.records.Source;
+import java.io.IOException;
+import java.io.UncheckedIOException;
+import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.Arrays;
@@ -56,8 +59,39 @@ public final class PanelFixtures {
 
   /** 48 US states 1970–86 (Munnell 1990; Baltagi, table of chapter 2). */
   public static Panel usStates() {
-    return published(
-        "us-states-public-capital.csv",
+    return usStates(PUBLISHED.resolve("us-states-public-capital.csv"));
+  }
+
+  /**
+   * The same states with holes, by a rule that the reference script shares: row i of the file (from
+   * 0) is left out where i mod 7 is 3 or i mod 11 is 5; of Texas only 1970 is kept.
+   */
+  public static Panel usStatesWithHoles() {
+    try {
+      List<String> lines = Files.readAllLines(PUBLISHED.resolve("us-states-public-capital.csv"));
+      List<String> kept = new ArrayList<>(List.of(lines.get(0)));
+      for (int i = 0; i + 1 < lines.size(); i++) {
+        String line = lines.get(i + 1);
+        boolean texas = line.startsWith("TEXAS,") && !line.startsWith("TEXAS,1970");
+        if (i % 7 != 3 && i % 11 != 5 && !texas) {
+          kept.add(line);
+        }
+      }
+      Path file = Files.createTempFile("states-with-holes", ".csv");
+      try {
+        Files.write(file, kept);
+        return usStates(file);
+      } finally {
+        Files.delete(file);
+      }
+    } catch (IOException e) {
+      throw new UncheckedIOException(e);
+    }
+  }
+
+  private static Panel usStates(Path file) {
+    return read(
+        file,
         "state",
         "year",
         "gsp",
@@ -76,7 +110,17 @@ public final class PanelFixtures {
       String output,
       List<Roles.Input> inputs,
       List<Roles.Control> controls) {
-    Source source = new Source(PUBLISHED.resolve(file), Optional.empty(), Optional.empty());
+    return read(PUBLISHED.resolve(file), plant, period, output, inputs, controls);
+  }
+
+  private static Panel read(
+      Path file,
+      String plant,
+      String period,
+      String output,
+      List<Roles.Input> inputs,
+      List<Roles.Control> controls) {
+    Source source = new Source(file, Optional.empty(), Optional.empty());
     Roles roles =
         new Roles(
             Optional.of(plant).filter(name -> !name.isEmpty()),
