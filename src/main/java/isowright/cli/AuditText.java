@@ -9,11 +9,13 @@ import isowright.records.RecordsRefused;
 import isowright.records.Remark;
 import isowright.records.Remark.Severity;
 import isowright.report.Numbers;
+import isowright.study.Costs;
 import isowright.study.Study;
 import java.io.PrintWriter;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
+import java.util.Optional;
 import java.util.stream.Collectors;
 
 /** Prints what the records of a study are, and what is wrong with them. Fits nothing. */
@@ -30,12 +32,14 @@ final class AuditText {
   /** Prints the audit; the answer says whether the records can be used as they are. */
   boolean print(Study study) throws RecordsRefused {
     out.println("Study    " + study.title() + " (" + study.file().getFileName() + ")");
-    if (study.records().isEmpty()) {
+    Optional<Study.Records> asked =
+        study.records().or(() -> study.costs().map(Costs::records));
+    if (asked.isEmpty()) {
       out.println(
           "Records  none: the study asks technologies taken as known, so there is nothing to audit");
       return true;
     }
-    Study.Records records = study.records().get();
+    Study.Records records = asked.get();
     Reading reading = RecordsReader.read(records.source(), records.roles(), records.keep());
     Panel panel = reading.panel();
     List<Remark> remarks = new ArrayList<>(PanelAudit.of(reading));
