@@ -66,5 +66,6 @@ final class LinearDesign implements Design {
     form.regressors(z, to - from, into, offset);
     circumstances.fill(from, to, z, into, offset + formColumns);
     rows.logOutput(from, to, into[columns.size()]);
+    form.subtractFixed(z, to - from, into[columns.size()]);
   }
 }

@@ -109,6 +109,8 @@ final class LinearEstimation {
             PanelRows.of(panel, base).times(outcome.rows()));
     int columns = fit.columns().size();
     int first = constant ? 0 : 1;
+    int beside = circumstances.count() + outcome.plantMeans().length;
+    double[][] toReported = Matrices.extended(form.reported(panel.inputs()), beside);
     double[] residuals = residuals(treatment, fit);
     PlantLevels levels =
         new PlantLevels(
@@ -118,21 +120,22 @@ final class LinearEstimation {
             PlantLevels.level(columns, constant, outcome.plantMeans().length),
             size -> outcome.components().map(c -> c.shrinkage(size)).orElse(1.0),
             rowVariance(treatment, fit, residuals),
-            Matrices.identity(columns + first));
-    double[] parameters = new double[columns + first];
-    System.arraycopy(fit.coefficients(), 0, parameters, first, columns);
-    double[][] full = covariance.matrix();
+            toReported);
+    double[] free = new double[columns + first];
+    System.arraycopy(fit.coefficients(), 0, free, first, columns);
     if (!constant) {
-      parameters[0] = levels.typical();
-      full = levels.covariance(levels.weights(new Productivity.Typical()));
+      free[0] = levels.typical();
     }
-    int beside = circumstances.count() + outcome.plantMeans().length;
+    double[][] full =
+        constant
+            ? Matrices.sandwich(toReported, covariance.matrix())
+            : levels.covariance(levels.weights(new Productivity.Typical()));
     Technology technology =
         form.technology(
-            panel.inputs(),
-            base,
-            parameters[0],
-            Arrays.copyOfRange(parameters, 1, parameters.length - beside));
+            panel.inputs(), base, free[0], Arrays.copyOfRange(free, 1, free.length - beside));
+    double[] own = technology.parameters();
+    double[] parameters = Arrays.copyOf(own, own.length + beside);
+    System.arraycopy(free, free.length - beside, parameters, own.length, beside);
     List<String> names = new ArrayList<>(technology.parameterNames());
     names.addAll(fit.columns().subList(columns - beside, columns));
     Solution solution =
@@ -208,12 +211,26 @@ final class LinearEstimation {
     return sum;
   }
 
-  private static FitStatistics statistics(PlantTreatment treatment, LinearFit fit) {
-    return treatment
-        .outcome()
-        .components()
-        .map(c -> FitStatistics.ofPartlyWithin(fit, c.shares(treatment.levels().groups())))
-        .orElseGet(() -> FitStatistics.of(fit));
+  private FitStatistics statistics(PlantTreatment treatment, LinearFit fit) {
+    FitStatistics statistics =
+        treatment
+            .outcome()
+            .components()
+            .map(c -> FitStatistics.ofPartlyWithin(fit, c.shares(treatment.levels().groups())))
+            .orElseGet(() -> FitStatistics.of(fit));
+    if (form.unrestricted() == form) {
+      return statistics;
+    }
+    // A restriction may have taken something off the response; its spread is that of ln Q itself.
+    LinearDesign whole =
+        new LinearDesign(
+            PanelRows.of(panel, base),
+            form.unrestricted(),
+            panel.inputs(),
+            circumstances,
+            constant);
+    Design treated = treatment.again(panel, specification, whole);
+    return statistics.explaining(fit.ssr(), LeastSquares.fit(treated).totalSumOfSquares());
   }
 
   static Covariance.Kind kind(Specification.StandardErrors standardErrors) {

@@ -41,4 +41,18 @@ final class Matrices {
     }
     return identity;
   }
+
+  /** The matrix with an identity of this size below and to the right of it. */
+  static double[][] extended(double[][] matrix, int by) {
+    int rows = matrix.length;
+    int columns = matrix[0].length;
+    double[][] extended = new double[rows + by][columns + by];
+    for (int i = 0; i < rows; i++) {
+      System.arraycopy(matrix[i], 0, extended[i], 0, columns);
+    }
+    for (int k = 0; k < by; k++) {
+      extended[rows + k][columns + k] = 1;
+    }
+    return extended;
+  }
 }

@@ -53,6 +53,14 @@ record PlantTreatment(Design design, Treatment outcome, List<String> lacking) {
     };
   }
 
+  /** The same treatment of other columns of the same rows, with the variances found here. */
+  Design again(Panel panel, Specification specification, Design other) {
+    return outcome
+        .components()
+        .map(found -> Effects.partlyWithin(other, found.shares(other.groups())))
+        .orElseGet(() -> of(panel, specification, other).design());
+  }
+
   private static PlantTreatment plain(Design levels, Design design) {
     return new PlantTreatment(design, Treatment.none(levels), List.of());
   }

@@ -135,18 +135,11 @@ final class ProfiledSolution {
   /** Reported parameters by free ones (constant, inner, curvatures, circumstances). */
   private double[][] toReported(ProfiledModel model, double[] inner, double[] curvatures) {
     double[][] core = problem.form().reported(inner, curvatures);
-    int free = 1 + inner.length + curvatures.length;
-    int count = problem.circumstances().count();
-    double[][] all = new double[core.length + count][free + count];
-    for (int k = 0; k < core.length; k++) {
-      System.arraycopy(core[k], 0, all[k], 0, free);
+    for (double[] row : core) {
       for (int c = 0; c < curvatures.length; c++) {
-        all[k][1 + inner.length + c] *= model.slope(curvatures[c]);
+        row[1 + inner.length + c] *= model.slope(curvatures[c]);
       }
     }
-    for (int c = 0; c < count; c++) {
-      all[core.length + c][free + c] = 1;
-    }
-    return all;
+    return Matrices.extended(core, problem.circumstances().count());
   }
 }

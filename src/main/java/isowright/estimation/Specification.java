@@ -15,6 +15,7 @@ import java.util.Locale;
  * @param confidence the level of all intervals, such as 0.95
  * @param components how the variances of random effects are estimated; of no meaning without them
  * @param estimator by which principle
+ * @param regularity where the fit is held to be regular
  */
 public record Specification(
     Form form,
@@ -24,7 +25,8 @@ public record Specification(
     StandardErrors standardErrors,
     double confidence,
     VarianceComponents.Method components,
-    Estimator estimator) {
+    Estimator estimator,
+    RegularityImposed regularity) {
 
   /** By least squares, variances of random effects (if any) estimated after Swamy and Arora. */
   public Specification(
@@ -42,25 +44,85 @@ public record Specification(
         standardErrors,
         confidence,
         VarianceComponents.Method.SWAMY_ARORA,
-        new Estimator.LeastSquares());
+        new Estimator.LeastSquares(),
+        RegularityImposed.FREE);
+  }
+
+  /** The same for another form. */
+  public Specification withForm(Form other) {
+    return new Specification(
+        other,
+        plantEffects,
+        time,
+        scaled,
+        standardErrors,
+        confidence,
+        components,
+        estimator,
+        regularity);
   }
 
   /** The same by another principle. */
   public Specification by(Estimator other) {
     return new Specification(
-        form, plantEffects, time, scaled, standardErrors, confidence, components, other);
+        form,
+        plantEffects,
+        time,
+        scaled,
+        standardErrors,
+        confidence,
+        components,
+        other,
+        regularity);
   }
 
   /** The same with the variances of random effects estimated otherwise. */
   public Specification with(VarianceComponents.Method method) {
     return new Specification(
-        form, plantEffects, time, scaled, standardErrors, confidence, method, estimator);
+        form,
+        plantEffects,
+        time,
+        scaled,
+        standardErrors,
+        confidence,
+        method,
+        estimator,
+        regularity);
+  }
+
+  /** The same with regularity imposed otherwise. */
+  public Specification with(RegularityImposed imposed) {
+    return new Specification(
+        form,
+        plantEffects,
+        time,
+        scaled,
+        standardErrors,
+        confidence,
+        components,
+        estimator,
+        imposed);
   }
 
   /** The same with another treatment of plants, of time, and of the covariance. */
   public Specification with(PlantEffects effects, Time change, StandardErrors errors) {
     return new Specification(
-        form, effects, change, scaled, errors, confidence, components, estimator);
+        form, effects, change, scaled, errors, confidence, components, estimator, regularity);
+  }
+
+  /** Where the fit is held to be regular: monotone and quasi-concave. */
+  public enum RegularityImposed {
+    /** Nowhere; it is tested afterwards. */
+    FREE,
+    /** At the geometric mean of the records. */
+    AT_MEAN,
+    /** At every row of the records. */
+    EVERYWHERE;
+
+    /** The word used in files. */
+    public String word() {
+      return words(this);
+    }
   }
 
   /** What is done about lasting differences between plants. */

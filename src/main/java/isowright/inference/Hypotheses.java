@@ -1,14 +1,18 @@
 package isowright.inference;
 
+import isowright.estimation.CurvatureProfile;
 import isowright.estimation.Estimation;
 import isowright.estimation.Fit;
 import isowright.estimation.Solution;
 import isowright.estimation.Specification;
+import isowright.technology.Form;
 import isowright.technology.LinearForm;
 import isowright.technology.NonlinearForm;
+import isowright.technology.Restriction;
 import java.math.BigDecimal;
 import java.math.RoundingMode;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
@@ -45,48 +49,73 @@ public final class Hypotheses {
   public static List<Verdict> of(Fit fit, double returnsToScale, double substitution) {
     Hypotheses hypotheses = new Hypotheses(fit, returnsToScale, substitution);
     List<Verdict> verdicts = new ArrayList<>();
-    verdicts.add(hypotheses.constantReturns());
+    verdicts.addAll(hypotheses.restrictions());
     hypotheses.substitution().ifPresent(verdicts::add);
+    hypotheses.oneSubstitution().ifPresent(verdicts::add);
     hypotheses.cobbDouglas().ifPresent(verdicts::add);
     verdicts.addAll(PanelHypotheses.of(fit));
     return List.copyOf(verdicts);
   }
 
-  private Verdict constantReturns() {
-    int n = fit.panel().inputs().size();
+  /** The form's restrictions that it does not obey by itself, from the strongest to the weakest. */
+  private List<Verdict> restrictions() {
+    List<Verdict> verdicts = new ArrayList<>();
+    constantReturns().ifPresent(verdicts::add);
+    restriction(
+            Restriction.HOMOGENEOUS,
+            "the scale elasticity is the same at every mix, so that the technology is homogeneous",
+            0)
+        .ifPresent(verdicts::add);
+    restriction(
+            Restriction.HOMOTHETIC,
+            "the cheapest proportions of inputs do not change with scale (homothetic to the second"
+                + " order at the base point)",
+            0)
+        .ifPresent(verdicts::add);
+    return verdicts;
+  }
+
+  private Optional<Verdict> constantReturns() {
     String subject =
         returnsToScale == 1
             ? "returns to scale are constant at every mix"
             : "the degree of homogeneity is " + plain(returnsToScale) + " at every mix";
-    double[][] rows = restrictions(n);
-    double[] right = new double[rows.length];
-    right[0] = returnsToScale;
-    double f =
-        LinearRestrictions.statistic(rows, right, numbers.parameters(), numbers.covariance());
-    return Verdict.of("constant-returns", subject, f, new Law.F(rows.length, degrees()));
+    return restriction(Restriction.CONSTANT_RETURNS, subject, returnsToScale - 1);
   }
 
-  /** The restrictions of constant returns over the reported parameters. */
-  private double[][] restrictions(int n) {
-    int all = numbers.parameters().length;
-    if (fit.specification().form() instanceof LinearForm linear) {
-      double[][] own = linear.constantReturns(n);
-      boolean biased = fit.specification().time() == Specification.Time.BIASED_TREND;
-      double[][] rows = new double[own.length + (biased ? 1 : 0)][all];
-      for (int i = 0; i < own.length; i++) {
-        System.arraycopy(own[i], 0, rows[i], 1, own[i].length - 1);
-      }
-      if (biased) {
-        // Returns stay what they are only if what time adds to the elasticities sums to nothing.
-        for (String input : fit.panel().inputs()) {
-          rows[own.length][numbers.index(input + "*trend")] = 1;
-        }
-      }
-      return rows;
+  /**
+   * The test of a restriction; none where the form obeys it at any parameters.
+   *
+   * @param less what is taken off the first departure
+   */
+  private Optional<Verdict> restriction(Restriction restriction, String subject, double less) {
+    Form form = fit.specification().form();
+    if (form.obeys(restriction)) {
+      return Optional.empty();
     }
-    double[][] row = new double[1][all];
-    row[0][numbers.index("scale")] = 1;
-    return row;
+    double[] own = numbers.technology().parameters();
+    Form.Departure departure = form.departure(restriction, fit.panel().inputs(), own);
+    boolean biased =
+        restriction == Restriction.CONSTANT_RETURNS
+            && fit.specification().time() == Specification.Time.BIASED_TREND;
+    int count = departure.value().length + (biased ? 1 : 0);
+    double[] value = Arrays.copyOf(departure.value(), count);
+    value[0] -= less;
+    double[][] jacobian = new double[count][numbers.parameters().length];
+    for (int i = 0; i < departure.value().length; i++) {
+      System.arraycopy(departure.jacobian()[i], 0, jacobian[i], 0, own.length);
+    }
+    if (biased) {
+      // Returns stay what they are only if what time adds to the elasticities sums to nothing.
+      for (String input : fit.panel().inputs()) {
+        int place = numbers.index(input + "*trend");
+        jacobian[count - 1][place] = 1;
+        value[count - 1] += numbers.parameters()[place];
+      }
+    }
+    double f = LinearRestrictions.statistic(value, jacobian, numbers.covariance());
+    return Optional.of(
+        Verdict.of(restriction.word(), subject, f, new Law.F(value.length, degrees())));
   }
 
   private Optional<Verdict> substitution() {
@@ -95,14 +124,47 @@ public final class Hypotheses {
     }
     double free = numbers.linear().ssr();
     double held = Estimation.ssrAt(fit, form.curvature(substitution));
-    double scaling = fit.profile().get().scaling();
-    double ratio = numbers.residuals().length * Math.log(held / free) / scaling;
+    double ratio = numbers.residuals().length * Math.log(held / free) / scaling();
+    int count = fit.profiles().size();
     String null0 =
-        "the elasticity of substitution is "
+        (count == 1
+                ? "the elasticity of substitution is "
+                : "every elasticity of substitution, within nests and between them, is ")
             + plain(substitution)
             + (substitution == 1 ? " (Cobb-Douglas)" : "");
     return Optional.of(
-        Verdict.of("unit-substitution", null0, Math.max(ratio, 0), new Law.ChiSquared(1)));
+        Verdict.of("unit-substitution", null0, Math.max(ratio, 0), new Law.ChiSquared(count)));
+  }
+
+  /**
+   * One elasticity of substitution within nests and between them: a likelihood ratio, divided like
+   * the profiles for a covariance other than the classical one.
+   */
+  private Optional<Verdict> oneSubstitution() {
+    int count = fit.profiles().size();
+    if (count < 2 || !(fit.specification().form() instanceof NonlinearForm form)) {
+      return Optional.empty();
+    }
+    double held =
+        Estimation.leastSsr(fit.panel(), fit.specification().withForm(form.withOneCurvature()));
+    double ratio = numbers.residuals().length * Math.log(held / numbers.linear().ssr()) / scaling();
+    return Optional.of(
+        Verdict.of(
+            "one-substitution",
+            "one elasticity of substitution serves within nests and between them, so that CES without"
+                + " nests is enough",
+            Math.max(ratio, 0),
+            new Law.ChiSquared(count - 1)));
+  }
+
+  /**
+   * By how much a likelihood ratio is divided for a covariance other than the classical one: the
+   * mean over the curvatures of what their profiles are divided by, which for a single one is exact
+   * (Kent 1982) and for several the first-order correction of Rao and Scott (1981, <i>Journal of
+   * the American Statistical Association</i> 76, 221–230) but for correlations.
+   */
+  private double scaling() {
+    return fit.profiles().stream().mapToDouble(CurvatureProfile::scaling).average().orElse(1);
   }
 
   private Optional<Verdict> cobbDouglas() {
@@ -112,19 +174,18 @@ public final class Hypotheses {
       return Optional.empty();
     }
     int[] places = linear.secondOrder(n);
-    double[][] rows = new double[places.length][numbers.parameters().length];
-    for (int i = 0; i < places.length; i++) {
-      rows[i][1 + places[i]] = 1;
-    }
+    double[][] rows =
+        LinearRestrictions.independent(
+            places, linear.reported(fit.panel().inputs()), numbers.parameters().length);
     double f =
         LinearRestrictions.statistic(
-            rows, new double[places.length], numbers.parameters(), numbers.covariance());
+            rows, new double[rows.length], numbers.parameters(), numbers.covariance());
     return Optional.of(
         Verdict.of(
             "cobb-douglas-in-translog",
             "all second-order terms are zero, so that Cobb-Douglas is enough",
             f,
-            new Law.F(places.length, degrees())));
+            new Law.F(rows.length, degrees())));
   }
 
   private double degrees() {

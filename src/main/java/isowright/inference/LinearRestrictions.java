@@ -20,15 +20,25 @@ final class LinearRestrictions {
 
   /** The F statistic; NaN where R V R′ is singular. */
   static double statistic(double[][] r, double[] right, double[] b, double[][] v) {
-    int q = r.length;
-    double[] departure = new double[q];
-    for (int i = 0; i < q; i++) {
+    double[] departure = new double[r.length];
+    for (int i = 0; i < r.length; i++) {
       departure[i] = -right[i];
       for (int k = 0; k < b.length; k++) {
         departure[i] += r[i][k] * b[k];
       }
     }
-    RealMatrix restriction = new Array2DRowRealMatrix(r, false);
+    return statistic(departure, r, v);
+  }
+
+  /**
+   * The same from departures g(b) of any smooth kind and their Jacobian G in place of R.
+   *
+   * @param departure shape q
+   * @param jacobian q × k
+   */
+  static double statistic(double[] departure, double[][] jacobian, double[][] v) {
+    int q = departure.length;
+    RealMatrix restriction = new Array2DRowRealMatrix(jacobian, false);
     RealMatrix middle =
         restriction.multiply(new Array2DRowRealMatrix(v, false)).multiply(restriction.transpose());
     SingularValueDecomposition decomposition = new SingularValueDecomposition(middle);
@@ -45,5 +55,37 @@ final class LinearRestrictions {
       sum += departure[i] * solved[i];
     }
     return sum / q;
+  }
+
+  /**
+   * The independent restrictions among "these coefficients are zero", given how the coefficients
+   * follow from free ones: where some are bound by others, fewer than there are coefficients.
+   *
+   * @param places the coefficients, counted without the constant
+   * @param reported all parameters by the free ones, p × f, the constant first in both
+   * @param columns how many parameters there are with those that follow
+   */
+  static double[][] independent(int[] places, double[][] reported, int columns) {
+    double[][] free = new double[places.length][];
+    for (int i = 0; i < places.length; i++) {
+      free[i] = reported[1 + places[i]];
+    }
+    SingularValueDecomposition decomposition =
+        new SingularValueDecomposition(new Array2DRowRealMatrix(free));
+    int rank = decomposition.getRank();
+    if (rank == places.length) {
+      double[][] rows = new double[places.length][columns];
+      for (int i = 0; i < places.length; i++) {
+        rows[i][1 + places[i]] = 1;
+      }
+      return rows;
+    }
+    double[][] rows = new double[rank][columns];
+    for (int q = 0; q < rank; q++) {
+      for (int i = 0; i < places.length; i++) {
+        rows[q][1 + places[i]] = decomposition.getU().getEntry(i, q);
+      }
+    }
+    return rows;
   }
 }

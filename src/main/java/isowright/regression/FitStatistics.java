@@ -69,4 +69,15 @@ public record FitStatistics(
         -2 * logLikelihood + 2 * parameters,
         -2 * logLikelihood + parameters * Math.log(rows));
   }
+
+  /** The same where the response has another spread about its mean than that of the design. */
+  public FitStatistics explaining(double ssr, double totalSumOfSquares) {
+    return new FitStatistics(
+        totalSumOfSquares > 0 ? 1 - ssr / totalSumOfSquares : Double.NaN,
+        residualStandardError,
+        logLikelihood,
+        parameters,
+        aic,
+        bic);
+  }
 }

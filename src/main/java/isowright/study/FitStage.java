@@ -19,7 +19,6 @@ import isowright.study.Findings.Said;
 import isowright.study.FitFindings.Fitted;
 import isowright.study.FitFindings.Parameter;
 import isowright.study.FitFindings.Point;
-import isowright.technology.Form;
 import isowright.technology.NonlinearForm;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
@@ -54,14 +53,15 @@ final class FitStage {
   Specification specification(String technology) {
     Study.Estimation how = study.estimation();
     return new Specification(
-        Form.named(technology),
+        how.held().form(technology, panel.inputs()),
         how.plantEffects(),
         how.time(),
         how.scaled(),
         standardErrors(study),
         how.confidence(),
         how.components(),
-        how.estimator());
+        how.estimator(),
+        how.held().regularity());
   }
 
   static Specification.StandardErrors standardErrors(Study study) {

@@ -3,6 +3,8 @@ package isowright.study;
 import isowright.technology.Ces;
 import isowright.technology.CobbDouglas;
 import isowright.technology.Form;
+import isowright.technology.GeneralisedLeontief;
+import isowright.technology.NestedCes;
 import isowright.technology.Technology;
 import isowright.technology.Translog;
 import java.util.ArrayList;
@@ -57,6 +59,8 @@ final class GivenBinder {
     Map<String, Reader> readers = new LinkedHashMap<>();
     readers.put(CobbDouglas.FORM.name(), this::cobbDouglas);
     readers.put(Ces.FORM.name(), this::ces);
+    readers.put(NestedCes.FORM.name(), this::nestedCes);
+    readers.put(GeneralisedLeontief.FORM.name(), this::generalisedLeontief);
     readers.put(Translog.FORM.name(), this::translog);
     return readers;
   }
@@ -133,11 +137,7 @@ final class GivenBinder {
     Optional<double[]> shares =
         perInput(section, "shares", "a share").filter(s -> sound(section, s));
     OptionalDouble rho = rho(section);
-    OptionalDouble scale =
-        section
-            .need("scale", "the degree of homogeneity, such as `scale: 1`")
-            .map(YamlValue::positive)
-            .orElse(OptionalDouble.empty());
+    OptionalDouble scale = scale(section);
     Optional<double[]> base = base(section);
     if (constant.isEmpty()
         || shares.isEmpty()
@@ -170,22 +170,98 @@ final class GivenBinder {
     return true;
   }
 
+  private static OptionalDouble scale(YamlSection section) {
+    return section
+        .need("scale", "the degree of homogeneity, such as `scale: 1`")
+        .map(YamlValue::positive)
+        .orElse(OptionalDouble.empty());
+  }
+
   private static OptionalDouble rho(YamlSection section) {
     Optional<YamlValue> value =
         section.need("rho", "the substitution parameter, σ = 1/(1 + rho), such as `rho: 0.5`");
-    if (value.isEmpty()) {
-      return OptionalDouble.empty();
-    }
-    OptionalDouble rho = value.get().numberOrInfinity();
+    return value.map(GivenBinder::curvature).orElse(OptionalDouble.empty());
+  }
+
+  /** A curvature ρ in the economic region. */
+  static OptionalDouble curvature(YamlValue value) {
+    OptionalDouble rho = value.numberOrInfinity();
     if (rho.isPresent() && rho.getAsDouble() < -1) {
-      value
-          .get()
-          .refuse(
-              "expects -1 (straight isoquants) or more, up to .inf (fixed proportions), found "
-                  + value.get().found());
+      value.refuse(
+          "expects -1 (straight isoquants) or more, up to .inf (fixed proportions), found "
+              + value.found());
       return OptionalDouble.empty();
     }
     return rho;
+  }
+
+  private Optional<Technology> nestedCes(YamlSection section) {
+    GivenGroups reader = new GivenGroups(section, inputs);
+    OptionalDouble constant = constant(section);
+    OptionalDouble rho = rho(section);
+    OptionalDouble scale = scale(section);
+    Optional<GivenGroups.Groups> groups = reader.read();
+    inputs = reader.inputs();
+    Optional<double[]> base = base(section);
+    if (constant.isEmpty()
+        || groups.isEmpty()
+        || rho.isEmpty()
+        || scale.isEmpty()
+        || base.isEmpty()) {
+      return Optional.empty();
+    }
+    return Optional.of(
+        NestedCes.of(
+            inputs,
+            base.get(),
+            groups.get().names(),
+            constant.getAsDouble(),
+            groups.get().within(),
+            groups.get().between(),
+            rho.getAsDouble(),
+            groups.get().rho(),
+            scale.getAsDouble()));
+  }
+
+  /** Weights of inputs and of pairs of inputs; pairs count twice in their sum, which is 1. */
+  private Optional<Technology> generalisedLeontief(YamlSection section) {
+    section.allow(
+        "a given generalised Leontief technology",
+        List.of("name", "form", "constant", "weights", "scale", "scaling"),
+        List.of());
+    OptionalDouble constant = constant(section);
+    OptionalDouble scale = scale(section);
+    Optional<YamlSection> written =
+        section
+            .need(
+                "weights", "a weight for every input and for pairs, such as `labour*machines: 0.1`")
+            .flatMap(YamlValue::section);
+    if (inputs.isEmpty() && written.isPresent()) {
+      inputs = written.get().keys().stream().filter(key -> !key.contains("*")).toList();
+      inputs.forEach(name -> InputNames.check(written.get(), name));
+    }
+    List<String> names =
+        GeneralisedLeontief.weightNames(inputs).stream()
+            .map(name -> name.substring(name.indexOf(':') + 1))
+            .toList();
+    Optional<double[]> weights = new InputNumbers(names, "weight").orZero(section, "weights");
+    Optional<double[]> base = base(section);
+    if (constant.isEmpty() || scale.isEmpty() || weights.isEmpty() || base.isEmpty()) {
+      return Optional.empty();
+    }
+    double sum = GeneralisedLeontief.sum(inputs.size(), weights.get());
+    if (Math.abs(sum - 1) > SHARE_TOLERANCE) {
+      section.refuse(
+          "weights",
+          String.format(
+              Locale.ROOT,
+              "weights must sum to 1, those of pairs counted twice; these sum to %.10g",
+              sum));
+      return Optional.empty();
+    }
+    return Optional.of(
+        GeneralisedLeontief.of(
+            inputs, base.get(), constant.getAsDouble(), weights.get(), scale.getAsDouble()));
   }
 
   private Optional<Technology> translog(YamlSection section) {

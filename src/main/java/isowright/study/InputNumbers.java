@@ -14,9 +14,20 @@ import java.util.function.Function;
 final class InputNumbers {
 
   private final List<String> inputs;
+  private final String noun;
 
   InputNumbers(List<String> inputs) {
-    this.inputs = List.copyOf(inputs);
+    this(inputs, "input");
+  }
+
+  /**
+   * For other names than those of inputs.
+   *
+   * @param noun what a name is the name of
+   */
+  InputNumbers(List<String> names, String noun) {
+    this.inputs = List.copyOf(names);
+    this.noun = noun;
   }
 
   /** A finite number for every input, in the order of the inputs. */
@@ -39,7 +50,8 @@ final class InputNumbers {
     List<String> missing = inputs.stream().filter(name -> !there.contains(name)).toList();
     if (!missing.isEmpty()) {
       section.refuse(
-          key, "one number for every input is needed; missing: " + String.join(", ", missing));
+          key,
+          "one number for every " + noun + " is needed; missing: " + String.join(", ", missing));
     }
     if (read.get().size() < inputs.size() || there.size() > inputs.size()) {
       return Optional.empty();
@@ -52,13 +64,20 @@ final class InputNumbers {
     return read(section, key, YamlValue::positive).orElse(Map.of());
   }
 
+  /** Finite numbers in the order of the names, zero for those left out. */
+  Optional<double[]> orZero(YamlSection section, String key) {
+    return read(section, key, YamlValue::number)
+        .filter(found -> found.size() == section.section(key).map(s -> s.keys().size()).orElse(0))
+        .map(found -> inputs.stream().mapToDouble(name -> found.getOrDefault(name, 0.0)).toArray());
+  }
+
   private Optional<Map<String, Double>> read(
       YamlSection section, String key, Function<YamlValue, OptionalDouble> reader) {
     Optional<YamlSection> numbers = section.section(key);
     if (numbers.isEmpty() || inputs.isEmpty()) {
       return Optional.empty(); // without inputs every name would be wrong, and that is told already
     }
-    numbers.get().allowInputs(inputs);
+    numbers.get().allowNames(inputs, noun);
     Map<String, Double> values = new LinkedHashMap<>();
     for (String name : inputs) {
       numbers

@@ -7,6 +7,7 @@ import java.io.UncheckedIOException;
 import java.util.LinkedHashMap;
 import java.util.Map;
 import java.util.Properties;
+import java.util.stream.Collectors;
 
 /** What a run was made with: version, hashes, and every setting in force, defaults included. */
 final class Settings {
@@ -77,6 +78,7 @@ final class Settings {
       }
       settings.put("estimation.scaling", how.scaled() ? "geometric-mean" : "none");
       settings.put("estimation.standard-errors", FitStage.standardErrors(study).word());
+      held(how.held(), settings);
       settings.put(
           "questions.returns-to-scale", Double.toString(study.questions().returnsToScale()));
       settings.put("questions.substitution", Double.toString(study.questions().substitution()));
@@ -86,6 +88,18 @@ final class Settings {
     protocol(study.protocol(), settings);
     settings.putAll(ReviewSettings.of(study));
     return settings;
+  }
+
+  private static void held(Study.Held held, Map<String, String> settings) {
+    held.restrict().ifPresent(to -> settings.put("estimation.restrict", to.word()));
+    settings.put("estimation.regularity", held.regularity().word());
+    if (!held.nests().isEmpty()) {
+      settings.put(
+          "estimation.nests",
+          held.nests().stream()
+              .map(group -> String.join(" + ", group))
+              .collect(Collectors.joining(", ")));
+    }
   }
 
   private static void protocol(Protocol protocol, Map<String, String> settings) {

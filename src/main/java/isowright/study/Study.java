@@ -6,6 +6,8 @@ import isowright.records.Keep;
 import isowright.records.Roles;
 import isowright.records.Source;
 import isowright.regression.VarianceComponents;
+import isowright.technology.Form;
+import isowright.technology.Restriction;
 import isowright.technology.Technology;
 import java.nio.file.Path;
 import java.util.List;
@@ -106,7 +108,8 @@ public record Study(
       boolean scaled,
       Optional<Specification.StandardErrors> standardErrors,
       double confidence,
-      List<Estimator> estimators) {
+      List<Estimator> estimators,
+      Held held) {
 
     /** Copies the list. */
     public Estimation {
@@ -127,18 +130,54 @@ public record Study(
           scaled,
           standardErrors,
           confidence,
-          List.of());
+          List.of(),
+          Held.FREE);
     }
 
     /** The same by these principles. */
     Estimation by(List<Estimator> principles) {
       return new Estimation(
-          plantEffects, time, components, scaled, standardErrors, confidence, principles);
+          plantEffects, time, components, scaled, standardErrors, confidence, principles, held);
+    }
+
+    /** The same with the forms held to this. */
+    Estimation held(Held to) {
+      return new Estimation(
+          plantEffects, time, components, scaled, standardErrors, confidence, estimators, to);
     }
 
     /** The principle that the technologies rest on. */
     public Estimator estimator() {
       return estimators.isEmpty() ? new Estimator.LeastSquares() : estimators.get(0);
+    }
+  }
+
+  /**
+   * What the forms that are fitted are held to.
+   *
+   * @param nests the inputs by group, for the form that has groups; empty where not stated
+   * @param restrict the strongest restriction asked
+   * @param regularity where the fit is held to be regular
+   */
+  public record Held(
+      List<List<String>> nests,
+      Optional<Restriction> restrict,
+      Specification.RegularityImposed regularity) {
+
+    /** Nothing but what each form is. */
+    public static final Held FREE =
+        new Held(List.of(), Optional.empty(), Specification.RegularityImposed.FREE);
+
+    /** Copies the lists. */
+    public Held {
+      nests = nests.stream().map(List::copyOf).toList();
+    }
+
+    /** A form as it is fitted. */
+    public Form form(String name, List<String> inputs) {
+      Form form = Form.named(name);
+      Form grouped = nests.isEmpty() ? form : form.nested(nests, inputs);
+      return restrict.map(grouped::restricted).orElse(grouped);
     }
   }
 

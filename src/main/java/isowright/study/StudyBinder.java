@@ -15,6 +15,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.function.Function;
+import java.util.stream.Collectors;
 
 /**
  * Reads a whole study from the root of its YAML: the top level and what is small enough to be read
@@ -52,17 +53,12 @@ final class StudyBinder {
           "variance-components",
           "scaling",
           "standard-errors",
-          "confidence");
-  private static final List<String> ESTIMATION_LATER =
-      List.of(
-          "resampling",
-          "zeros",
+          "confidence",
           "restrict",
           "regularity",
-          "nests",
-          "instruments",
-          "proxy",
-          "frontier");
+          "nests");
+  private static final List<String> ESTIMATION_LATER =
+      List.of("resampling", "zeros", "instruments", "proxy", "frontier");
 
   private final Path file;
   private final String sha256;
@@ -98,7 +94,7 @@ final class StudyBinder {
     List<String> names = new ArrayList<>(fitted);
     names.addAll(givenBinder.names());
     costs.ifPresent(c -> c.forms().forEach(form -> names.add(form.word())));
-    Estimation estimation = estimation(root.section("estimation"), declared, fitted);
+    Estimation estimation = estimation(root, declared, fitted);
     checkCosts(root, declared, estimation);
     Questions questions = questions(root.section("questions"));
     var leastCost = new PlanBinder(declared, names).bind(root);
@@ -141,7 +137,10 @@ final class StudyBinder {
         root.lacks(
             "technologies",
             "the forms to be fitted, such as `technologies: ["
-                + String.join(", ", Form.names())
+                + Form.all().stream()
+                    .filter(form -> !form.needsNests())
+                    .map(Form::name)
+                    .collect(Collectors.joining(", "))
                 + "]`");
       }
       return List.of();
@@ -169,8 +168,10 @@ final class StudyBinder {
   }
 
   private static Estimation estimation(
-      Optional<YamlSection> written, Declared declared, List<String> technologies) {
+      YamlSection root, Declared declared, List<String> technologies) {
+    Optional<YamlSection> written = root.section("estimation");
     if (written.isEmpty()) {
+      root.get("technologies").ifPresent(value -> HeldBinder.needNests(value, technologies));
       return new Estimation(PlantEffects.NONE, Time.NONE, true, Optional.empty(), USUAL_CONFIDENCE);
     }
     YamlSection section = written.get();
@@ -201,7 +202,8 @@ final class StudyBinder {
         scaled,
         errors,
         confidence(section),
-        List.of());
+        List.of(),
+        new HeldBinder(section, root, declared.inputs(), technologies).bind(effects));
   }
 
   private static void checkColumns(YamlSection section, StandardErrors kind, Declared declared) {

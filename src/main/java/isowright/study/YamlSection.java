@@ -137,20 +137,34 @@ final class YamlSection {
 
   /** Adds a mistake for every key that is not the name of an input. */
   void allowInputs(Collection<String> inputs) {
+    allowNames(inputs, "input");
+  }
+
+  /**
+   * Adds a mistake for every key that is not one of some names.
+   *
+   * @param noun what the names are names of, such as {@code input}; its plural takes an s
+   */
+  void allowNames(Collection<String> names, String noun) {
+    String article = "aeiou".indexOf(noun.charAt(0)) >= 0 ? "an " : "a ";
     for (String key : values.keySet()) {
-      if (!inputs.contains(key)) {
+      if (!names.contains(key)) {
         String remedy =
             key.chars().allMatch(Character::isDigit)
                 ? "; was a decimal comma meant? Decimals are written with a point"
-                : YamlValue.nearest(key, inputs);
+                : YamlValue.nearest(key, names);
         refuse(
             key,
             "`"
                 + YamlValue.quote(key)
-                + "` is not an input"
+                + "` is not "
+                + article
+                + noun
                 + remedy
-                + "; inputs: "
-                + String.join(", ", inputs));
+                + "; "
+                + noun
+                + "s: "
+                + String.join(", ", names));
       }
     }
   }

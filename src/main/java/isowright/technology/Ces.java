@@ -48,7 +48,7 @@ import java.util.Optional;
 public final class Ces implements Technology {
 
   /** How the form presents itself to an estimator. */
-  public static final NonlinearForm FORM = new CesForm();
+  public static final NonlinearForm FORM = new CesForm(false);
 
   /** How far given shares may sum from one: what printing them to nine decimals leaves. */
   private static final double SUM_TOLERANCE = 1e-9;
@@ -270,7 +270,8 @@ public final class Ces implements Technology {
     return sum;
   }
 
-  private static double[] normalised(double[] raw) {
+  /** Shares divided by their sum. */
+  static double[] normalised(double[] raw) {
     double sum = sum(raw);
     double[] divided = raw.clone();
     for (int i = 0; i < divided.length; i++) {

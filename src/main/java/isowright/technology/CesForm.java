@@ -1,16 +1,16 @@
 package isowright.technology;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 
 /**
  * How constant elasticity of substitution presents itself to an estimator.
  *
- * <p>Inner parameters: the scale ν, then the log ratios θ_i = ln(δ_i/δ_n), i &lt; n. With δ =
- * softmax(θ, 0) the shares are positive and sum to one whatever step is taken, the model is smooth
- * in θ everywhere, and θ has no unit; a share that wants to be zero or negative shows as a θ
- * without bound, which {@link #admissible} reports. With z, w, E as in {@link PowerMean} and t =
- * −ρ:
+ * <p>Inner parameters: the scale ν (unless returns are held constant), then the log ratios θ_i =
+ * ln(δ_i/δ_n), i &lt; n ({@link LogRatios}). The model is smooth in θ everywhere, and θ has no
+ * unit; a share that wants to be zero or negative shows as a θ without bound, which {@link
+ * #admissible} reports. With z, w, E as in {@link PowerMean} and t = −ρ:
  *
  * <pre>  h = ν M(t),   ∂h/∂θ_i = ν (p_i − δ_i)/t = ν δ_i (e^{x_i} − 1 − w)/(E t),
  *  ∂h/∂ν = M(t),   ∂h/∂ρ = −ν M′(t) </pre>
@@ -19,11 +19,17 @@ import java.util.List;
  */
 final class CesForm implements NonlinearForm {
 
-  /** A share under this says that the input adds nothing: the log ratio has run away. */
-  private static final double SMALLEST_SHARE = 1e-6;
-
   /** The least part of the summed coefficients that a start gives to an input. */
   private static final double SMALLEST_START = 0.02;
+
+  private final boolean constantReturns;
+
+  /**
+   * @param constantReturns whether ν is held at one
+   */
+  CesForm(boolean constantReturns) {
+    this.constantReturns = constantReturns;
+  }
 
   @Override
   public String name() {
@@ -31,12 +37,32 @@ final class CesForm implements NonlinearForm {
   }
 
   @Override
+  public Form restricted(Restriction restriction) {
+    return restriction == Restriction.CONSTANT_RETURNS ? new CesForm(true) : this;
+  }
+
+  @Override
+  public boolean regularByForm() {
+    return true;
+  }
+
+  @Override
+  public boolean obeys(Restriction restriction) {
+    return restriction != Restriction.CONSTANT_RETURNS || constantReturns;
+  }
+
+  @Override
+  public double[][] restrictions(Restriction restriction, List<String> inputs) {
+    return Form.lastIsOne(restriction, constantReturns, inputs.size() + 3);
+  }
+
+  @Override
   public List<String> innerNames(List<String> inputs) {
-    int last = inputs.size() - 1;
-    List<String> names = new ArrayList<>(List.of("scale"));
-    for (String input : inputs.subList(0, last)) {
-      names.add("ln(share:" + input + "/share:" + inputs.get(last) + ")");
+    List<String> names = new ArrayList<>();
+    if (!constantReturns) {
+      names.add("scale");
     }
+    names.addAll(LogRatios.names(inputs));
     return List.copyOf(names);
   }
 
@@ -56,9 +82,11 @@ final class CesForm implements NonlinearForm {
    */
   @Override
   public List<double[]> starts(double[] cobbDouglasCoefficients) {
-    return List.of(start(cobbDouglasCoefficients));
+    double[] start = start(cobbDouglasCoefficients);
+    return List.of(constantReturns ? Arrays.copyOfRange(start, 1, start.length) : start);
   }
 
+  /** The scale and the log ratios. */
   static double[] start(double[] cobbDouglasCoefficients) {
     int n = cobbDouglasCoefficients.length;
     double positive = 0;
@@ -117,7 +145,13 @@ final class CesForm implements NonlinearForm {
       double[] curvatures,
       double[] value,
       double[][] derivatives) {
-    CesRows block = new CesRows(z, shares(inner), inner[0], -curvatures[0], value, derivatives);
+    double[][] all = derivatives;
+    if (constantReturns) {
+      all = new double[derivatives.length + 1][];
+      all[0] = new double[rows];
+      System.arraycopy(derivatives, 0, all, 1, derivatives.length);
+    }
+    CesRows block = new CesRows(z, shares(inner), scale(inner), -curvatures[0], value, all);
     for (int from = 0; from < rows; from += CesRows.BLOCK) {
       block.evaluate(from, Math.min(CesRows.BLOCK, rows - from));
     }
@@ -125,59 +159,42 @@ final class CesForm implements NonlinearForm {
 
   @Override
   public boolean admissible(double[] inner) {
-    double scale = inner[0];
-    if (!(scale > 0) || Double.isInfinite(scale)) {
-      return false;
-    }
-    for (double share : shares(inner)) {
-      if (!(share >= SMALLEST_SHARE)) {
-        return false;
-      }
-    }
-    return true;
+    double scale = scale(inner);
+    return scale > 0 && scale < Double.POSITIVE_INFINITY && LogRatios.admissible(shares(inner));
   }
 
   @Override
   public Technology technology(
       List<String> inputs, double[] base, double constant, double[] inner, double[] curvatures) {
-    return new Ces(new InputScale(inputs, base), constant, shares(inner), curvatures[0], inner[0]);
+    return new Ces(
+        new InputScale(inputs, base), constant, shares(inner), curvatures[0], scale(inner));
   }
 
-  /** ∂δ_j/∂θ_i = δ_j ([i = j] − δ_i); constant, ρ and scale are carried over as they are. */
+  /** The shares follow from the ratios; constant, ρ and scale are carried over as they are. */
   @Override
   public double[][] reported(double[] inner, double[] curvatures) {
-    int n = inner.length;
-    double[] shares = shares(inner);
-    double[][] jacobian = new double[n + 3][n + 2];
-    jacobian[0][0] = 1;
-    for (int j = 0; j < n; j++) {
-      for (int i = 0; i < n - 1; i++) {
-        jacobian[1 + j][2 + i] = shares[j] * ((i == j ? 1 : 0) - shares[i]);
-      }
-    }
-    jacobian[n + 1][n + 1] = 1;
-    jacobian[n + 2][1] = 1;
-    return jacobian;
+    int columns = inner.length + 2;
+    List<double[]> rows = new ArrayList<>();
+    rows.add(unit(columns, 0));
+    rows.addAll(LogRatios.slopes(shares(inner), columns, constantReturns ? 1 : 2));
+    rows.add(unit(columns, columns - 1));
+    rows.add(constantReturns ? new double[columns] : unit(columns, 1));
+    return rows.toArray(double[][]::new);
   }
 
-  /**
-   * softmax(θ_1, …, θ_{n−1}, 0) of (ν, θ_1, …), relative to the largest so that nothing overflows.
-   */
-  private static double[] shares(double[] inner) {
-    int n = inner.length;
-    double largest = 0;
-    for (int i = 1; i < n; i++) {
-      largest = Math.max(largest, inner[i]);
-    }
-    double[] shares = new double[n];
-    double sum = 0;
-    for (int i = 0; i < n; i++) {
-      shares[i] = Math.exp((i < n - 1 ? inner[1 + i] : 0) - largest);
-      sum += shares[i];
-    }
-    for (int i = 0; i < n; i++) {
-      shares[i] /= sum;
-    }
-    return shares;
+  /** A row with a one. */
+  static double[] unit(int size, int at) {
+    double[] unit = new double[size];
+    unit[at] = 1;
+    return unit;
+  }
+
+  private double scale(double[] inner) {
+    return constantReturns ? 1 : inner[0];
+  }
+
+  private double[] shares(double[] inner) {
+    int first = constantReturns ? 0 : 1;
+    return LogRatios.shares(inner, first, inner.length - first + 1);
   }
 }

@@ -172,11 +172,25 @@ public final class CobbDouglas implements Technology {
       return new CobbDouglas(inputs, base, constant, coefficients);
     }
 
+    /** Σ_i β_i = 1 for constant returns; the weaker restrictions always hold. */
     @Override
-    public double[][] constantReturns(int inputs) {
-      double[] row = new double[inputs + 1];
+    public double[][] restrictions(Restriction restriction, List<String> inputs) {
+      if (restriction != Restriction.CONSTANT_RETURNS) {
+        return new double[0][];
+      }
+      double[] row = new double[inputs.size() + 1];
       Arrays.fill(row, 1);
       return new double[][] {row};
+    }
+
+    @Override
+    public Form restricted(Restriction restriction) {
+      return obeys(restriction) ? this : new RestrictedLinearForm(this, restriction);
+    }
+
+    @Override
+    public boolean obeys(Restriction restriction) {
+      return restriction != Restriction.CONSTANT_RETURNS;
     }
 
     @Override

@@ -24,6 +24,11 @@ public non-sealed interface NonlinearForm extends Form {
    */
   List<String> curvatureNames(List<String> inputs);
 
+  /** The form with one curvature in place of several; this form where there are not several. */
+  default NonlinearForm withOneCurvature() {
+    return this;
+  }
+
   /** The linear form to which this one tends as ρ → 0; its coefficients are the start. */
   LinearForm limit();
 

@@ -19,7 +19,8 @@ import java.util.Optional;
  *
  * <p>Notation: n inputs, p parameters; all logs natural. Log inputs have shape n.
  */
-public sealed interface Technology permits CobbDouglas, Ces, Translog {
+public sealed interface Technology
+    permits CobbDouglas, Ces, NestedCes, GeneralisedLeontief, Translog {
 
   /** The form's name in study files, such as {@code cobb-douglas}. */
   String form();

@@ -206,9 +206,17 @@ public final class Translog implements Technology {
       return new Translog(inputs, base, constant, coefficients);
     }
 
-    /** Σ_i β_i = 1 and, for every i, Σ_j β_ij = 0: constant returns at every mix. */
+    /**
+     * Σ_j β_ij = 0 for every i: the scale elasticity is Σ β_i at every mix; with Σ_i β_i = 1
+     * besides returns are constant. That the cheapest proportions do not depend on scale
+     * (homothetic) is not linear: {@link HomotheticTranslog}.
+     */
     @Override
-    public double[][] constantReturns(int n) {
+    public double[][] restrictions(Restriction restriction, List<String> inputs) {
+      int n = inputs.size();
+      if (restriction == Restriction.HOMOTHETIC) {
+        return new double[0][];
+      }
       int k = n + n * (n + 1) / 2;
       double[][] rows = new double[n + 1][k + 1];
       Arrays.fill(rows[0], 0, n, 1);
@@ -218,7 +226,32 @@ public final class Translog implements Technology {
           rows[i + 1][place(n, i, j)] = 1;
         }
       }
-      return rows;
+      return restriction == Restriction.CONSTANT_RETURNS
+          ? rows
+          : Arrays.copyOfRange(rows, 1, n + 1);
+    }
+
+    /**
+     * For homotheticity: r_i β_p − r_p β_i for i ≠ p, r_i = Σ_j β_ij, p the input of the largest
+     * |β|.
+     */
+    @Override
+    public Departure departure(Restriction restriction, List<String> inputs, double[] parameters) {
+      return restriction == Restriction.HOMOTHETIC
+          ? HomotheticTranslog.departure(inputs.size(), parameters)
+          : LinearForm.super.departure(restriction, inputs, parameters);
+    }
+
+    @Override
+    public Form restricted(Restriction restriction) {
+      return restriction == Restriction.HOMOTHETIC
+          ? new HomotheticTranslog()
+          : new RestrictedLinearForm(this, restriction);
+    }
+
+    @Override
+    public boolean obeys(Restriction restriction) {
+      return false;
     }
 
     @Override

@@ -176,7 +176,8 @@ class ArchitectureTest {
 
   @Test
   void formsAreKnownInOnePlaceOnly() {
-    List<String> forms = List.of("CobbDouglas", "Ces", "Translog");
+    List<String> forms =
+        List.of("CobbDouglas", "Ces", "NestedCes", "GeneralisedLeontief", "Translog");
     noClasses()
         .that()
         .resideOutsideOfPackage("isowright.technology")

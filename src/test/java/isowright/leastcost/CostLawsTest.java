@@ -7,6 +7,7 @@ import isowright.leastcost.Plan.Status;
 import isowright.leastcost.RandomTechnologies.Planted;
 import isowright.technology.Ces;
 import isowright.technology.CobbDouglas;
+import isowright.technology.Technology;
 import isowright.technology.Translog;
 import java.util.Arrays;
 import java.util.Optional;
@@ -206,19 +207,7 @@ class CostLawsTest {
         base[i] *= unit[i];
         prices[i] /= unit[i];
       }
-      var names = planted.technology().inputs();
-      double[] all = planted.technology().parameters();
-      double[] own = Arrays.copyOfRange(all, 1, all.length);
-      var rescaled =
-          switch (k % 3) {
-            case 0 -> new CobbDouglas(names, base, all[0], own);
-            case 1 -> {
-              int n = unit.length;
-              double[] shares = Arrays.copyOf(own, n);
-              yield Ces.of(names, base, all[0], shares, own[n], own[n + 1]);
-            }
-            default -> new Translog(names, base, all[0], own);
-          };
+      Technology rescaled = RandomTechnologies.withBase(planted.technology(), base);
       Plan before = planted.plan();
       Plan after = Minimiser.of(rescaled).plan(planted.question().at(prices));
       assertThat(after.cost()).isCloseTo(before.cost(), within(MET * before.cost()));

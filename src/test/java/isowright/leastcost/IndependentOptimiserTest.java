@@ -3,7 +3,6 @@ package isowright.leastcost;
 import static org.assertj.core.api.Assertions.assertThat;
 
 import isowright.leastcost.RandomTechnologies.Planted;
-import isowright.technology.Ces;
 import isowright.technology.Technology;
 import isowright.technology.Translog;
 import org.apache.commons.math3.analysis.solvers.BrentSolver;
@@ -102,9 +101,15 @@ class IndependentOptimiserTest {
   }
 
   private static double box(Technology technology) {
-    if (technology instanceof Ces ces && ces.rho() > 0) {
+    double rho = 0;
+    for (int k = 0; k < technology.parameterNames().size(); k++) {
+      if (technology.parameterNames().get(k).startsWith("rho")) {
+        rho = Math.max(rho, technology.parameters()[k]);
+      }
+    }
+    if (rho > 0) {
       // Further out the target is beyond reach of the last input alone, a cliff for the optimiser.
-      return Math.min(BOX, .15 / ces.rho());
+      return Math.min(BOX, .15 / rho);
     }
     return technology instanceof Translog ? REGULAR_BOX : BOX;
   }

@@ -2,9 +2,12 @@ package isowright.leastcost;
 
 import isowright.technology.Ces;
 import isowright.technology.CobbDouglas;
+import isowright.technology.GeneralisedLeontief;
+import isowright.technology.NestedCes;
 import isowright.technology.Regularity;
 import isowright.technology.Technology;
 import isowright.technology.Translog;
+import java.util.Arrays;
 import java.util.List;
 import java.util.SplittableRandom;
 
@@ -37,12 +40,14 @@ final class RandomTechnologies {
     return random.nextInt(bound);
   }
 
-  /** One of the three forms in turn. */
+  /** One of the five forms in turn. */
   Planted any(int k) {
-    return switch (k % 3) {
+    return switch (k % 5) {
       case 0 -> cobbDouglas();
       case 1 -> ces(curvature());
-      default -> translog();
+      case 2 -> translog();
+      case 3 -> nestedCes();
+      default -> generalisedLeontief();
     };
   }
 
@@ -68,6 +73,95 @@ final class RandomTechnologies {
 
   Planted ces(double rho) {
     int n = 2 + random.nextInt(3);
+    double[] shares = shares(n);
+    Ces ces = Ces.of(names(n), base(n), between(-2, 8), shares, rho, between(0.6, 1.5));
+    // Mixes spread no wider than a few cost shares allow at this substitution.
+    return plant(ces, Math.min(1.5, 1.5 / Math.abs(rho)), between(0.1, 10));
+  }
+
+  /** Two inputs in a nest, two apart or one; curvatures up to σ = 0.15. */
+  Planted nestedCes() {
+    int n = 3 + random.nextInt(2);
+    List<String> names = names(n);
+    double[][] within = new double[n - 1][];
+    double[] curvatures = new double[n - 1];
+    for (int g = 0; g < n - 1; g++) {
+      within[g] = g == 0 ? shares(2) : new double[] {1};
+      curvatures[g] = 1 / Math.exp(between(Math.log(0.15), Math.log(6))) - 1;
+    }
+    double rho = 1 / Math.exp(between(Math.log(0.15), Math.log(6))) - 1;
+    NestedCes nested =
+        NestedCes.of(
+            names,
+            base(n),
+            groups(n),
+            between(-2, 8),
+            within,
+            shares(n - 1),
+            rho,
+            curvatures,
+            between(0.6, 1.5));
+    return plant(nested, 0.25, between(0.1, 10));
+  }
+
+  /** The first and the last input together, the others alone. */
+  private static List<List<String>> groups(int n) {
+    List<String> names = names(n);
+    return n == 3
+        ? List.of(List.of(names.get(0), names.get(2)), List.of(names.get(1)))
+        : List.of(
+            List.of(names.get(0), names.get(3)), List.of(names.get(1)), List.of(names.get(2)));
+  }
+
+  /** The same parameters with inputs divided by another base: inputs in other units. */
+  static Technology withBase(Technology technology, double[] base) {
+    List<String> names = technology.inputs();
+    int n = names.size();
+    double[] all = technology.parameters();
+    double[] own = Arrays.copyOfRange(all, 1, all.length);
+    return switch (technology.form()) {
+      case "cobb-douglas" -> new CobbDouglas(names, base, all[0], own);
+      case "ces" -> Ces.of(names, base, all[0], Arrays.copyOf(own, n), own[n], own[n + 1]);
+      case "nested-ces" -> {
+        double[][] within = new double[n - 1][];
+        Arrays.fill(within, new double[] {1});
+        within[0] = Arrays.copyOf(own, 2);
+        double[] curvatures = new double[n - 1];
+        curvatures[0] = own[n + 2];
+        double[] between = Arrays.copyOfRange(own, 2, n + 1);
+        yield NestedCes.of(
+            names, base, groups(n), all[0], within, between, own[n + 1], curvatures, own[n + 3]);
+      }
+      case "generalised-leontief" -> {
+        double[] weights = Arrays.copyOf(own, own.length - 1);
+        yield GeneralisedLeontief.of(names, base, all[0], weights, own[own.length - 1]);
+      }
+      default -> new Translog(names, base, all[0], own);
+    };
+  }
+
+  /** Weights that are not negative, so regular everywhere. */
+  Planted generalisedLeontief() {
+    int n = 2 + random.nextInt(3);
+    double[] weights = new double[n * (n + 1) / 2];
+    double[] shares = shares(n);
+    for (int i = 0; i < n; i++) {
+      double own = shares[i];
+      for (int j = 0; j < n; j++) {
+        double cross = j == i ? 0 : 0.8 * shares[i] * shares[j];
+        own -= cross;
+        if (j > i) {
+          weights[GeneralisedLeontief.place(n, i, j)] = cross;
+        }
+      }
+      weights[GeneralisedLeontief.place(n, i, i)] = own;
+    }
+    GeneralisedLeontief technology =
+        GeneralisedLeontief.of(names(n), base(n), between(-2, 8), weights, between(0.6, 1.5));
+    return plant(technology, 0.6, between(0.1, 10));
+  }
+
+  private double[] shares(int n) {
     double[] shares = new double[n];
     double sum = 0;
     for (int i = 0; i < n; i++) {
@@ -77,9 +171,7 @@ final class RandomTechnologies {
     for (int i = 0; i < n; i++) {
       shares[i] /= sum;
     }
-    Ces ces = Ces.of(names(n), base(n), between(-2, 8), shares, rho, between(0.6, 1.5));
-    // Mixes spread no wider than a few cost shares allow at this substitution.
-    return plant(ces, Math.min(1.5, 1.5 / Math.abs(rho)), between(0.1, 10));
+    return shares;
   }
 
   /** A translog that is regular at the planted mix, drawn until it is. */

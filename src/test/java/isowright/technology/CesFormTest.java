@@ -212,10 +212,11 @@ class CesFormTest {
 
   @Test
   void allFormsAreOfferedByName() {
-    assertThat(Form.names()).containsExactly("cobb-douglas", "ces", "translog");
+    assertThat(Form.names())
+        .containsExactly("cobb-douglas", "ces", "nested-ces", "generalised-leontief", "translog");
     assertThat(Form.named("ces")).isSameAs(FORM);
     assertThatThrownBy(() -> Form.named("cobb"))
         .isInstanceOf(IllegalArgumentException.class)
-        .hasMessageContaining("cobb-douglas, ces, translog");
+        .hasMessageContaining("cobb-douglas, ces, nested-ces, generalised-leontief, translog");
   }
 }

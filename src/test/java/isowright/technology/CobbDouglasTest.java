@@ -45,7 +45,10 @@ class CobbDouglasTest extends TechnologyContract {
     CobbDouglas.FORM.regressors(z, 3, into, 1);
     assertThat(into[1]).containsExactly(1, 2, 3);
     assertThat(into[2]).containsExactly(4, 5, 6);
-    assertThat(CobbDouglas.FORM.constantReturns(2)).isDeepEqualTo(new double[][] {{1, 1, 1}});
+    assertThat(
+            CobbDouglas.FORM.restrictions(
+                Restriction.CONSTANT_RETURNS, List.of("labour", "machines")))
+        .isDeepEqualTo(new double[][] {{1, 1, 1}});
     assertThat(CobbDouglas.FORM.secondOrder(2)).isEmpty();
   }
 

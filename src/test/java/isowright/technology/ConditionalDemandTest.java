@@ -40,9 +40,11 @@ class ConditionalDemandTest {
       double share = .2 + .5 * random.nextDouble();
       double[] shares = {share, .7 * (1 - share), .3 * (1 - share)};
       Technology technology =
-          k % 3 == 0
-              ? new CobbDouglas(NAMES, BASE, 1, shares)
-              : Ces.of(NAMES, BASE, 1, shares, rho, .8);
+          switch (k % 5) {
+            case 0 -> new CobbDouglas(NAMES, BASE, 1, shares);
+            case 1, 2 -> Ces.of(NAMES, BASE, 1, shares, rho, .8);
+            default -> nested(random, shares, rho);
+          };
       double[] z = new double[3];
       double[] prices = new double[3];
       boolean[] fixed = new boolean[3];
@@ -55,7 +57,11 @@ class ConditionalDemandTest {
       double[] before = z.clone();
       Reach reach = smooth(technology).logMix(target, prices, fixed, z);
       if (reach != Reach.REACHED) {
-        assertThat(reach).isEqualTo(rho > 0 ? Reach.TOO_LITTLE : Reach.TOO_MUCH);
+        for (int i = 0; i < 3; i++) {
+          before[i] = fixed[i] ? before[i] : reach == Reach.TOO_LITTLE ? 1e6 : -1e6;
+        }
+        double extreme = technology.logOutput(before);
+        assertThat(reach == Reach.TOO_LITTLE ? target - extreme : extreme - target).isPositive();
         continue;
       }
       assertThat(technology.logOutput(z)).isCloseTo(target, within(1e-12));
@@ -69,10 +75,25 @@ class ConditionalDemandTest {
         }
         double each = prices[i] + z[i] - Math.log(e[i]);
         multiplier = Double.isNaN(multiplier) ? each : multiplier;
-        // Rounding of logs of the size of 10, times 1 + ρ (up to 5).
+        // Rounding of logs of the size of 10, times 1 + ρ (up to 5); in a nest, twice.
         assertThat(each).isCloseTo(multiplier, within(1e-12));
       }
     }
+  }
+
+  private static Technology nested(SplittableRandom random, double[] shares, double rho) {
+    double[] within = {.3 + .4 * random.nextDouble(), 0};
+    within[1] = 1 - within[0];
+    return NestedCes.of(
+        NAMES,
+        BASE,
+        List.of(List.of("a", "c"), List.of("b")),
+        1,
+        new double[][] {within, {1}},
+        new double[] {shares[0] + shares[2], shares[1]},
+        rho,
+        new double[] {Math.exp(4 * random.nextDouble() - 2.5) - .95, 0},
+        .8);
   }
 
   @Test

@@ -1,5 +1,6 @@
 package isowright.technology;
 
+import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Random;
@@ -55,12 +56,72 @@ final class RandomTechnologies {
     return new Translog(inputs(n), base(random, n), random.nextGaussian(), coefficients);
   }
 
+  /** A curvature with σ between 0.05 and 10. */
+  static double curvature(Random random) {
+    return Math.pow(10, -1 + 2.3 * random.nextDouble()) - 1;
+  }
+
+  /** Groups of n inputs: one of two and the rest alone, or, for four, sometimes two pairs. */
+  static List<List<String>> groups(Random random, int n) {
+    List<String> inputs = inputs(n);
+    if (n == 4 && random.nextBoolean()) {
+      // Not neighbours, so that the order of inputs and that of groups differ.
+      return List.of(List.of(inputs.get(0), inputs.get(3)), List.of(inputs.get(2), inputs.get(1)));
+    }
+    List<List<String>> groups = new ArrayList<>();
+    groups.add(List.of(inputs.get(n - 1), inputs.get(0)));
+    for (int i = 1; i < n - 1; i++) {
+      groups.add(List.of(inputs.get(i)));
+    }
+    return groups;
+  }
+
+  /** Three or four inputs in groups; curvatures drawn by {@link #curvature}. */
+  static NestedCes nestedCes(Random random, int n) {
+    List<List<String>> groups = groups(random, n);
+    double[][] within = new double[groups.size()][];
+    double[] curvatures = new double[groups.size()];
+    for (int g = 0; g < within.length; g++) {
+      within[g] = shares(random, groups.get(g).size());
+      curvatures[g] = curvature(random);
+    }
+    return NestedCes.of(
+        inputs(n),
+        base(random, n),
+        groups,
+        random.nextGaussian(),
+        within,
+        shares(random, groups.size()),
+        curvature(random),
+        curvatures,
+        0.5 + random.nextDouble());
+  }
+
+  /** Cross terms b_ij = κ s_i s_j, κ about that of σ = 2, some negative. */
+  static GeneralisedLeontief generalisedLeontief(Random random, int n) {
+    double[] shares = shares(random, n);
+    double[] weights = new double[n * (n + 1) / 2];
+    for (int i = 0; i < n; i++) {
+      weights[GeneralisedLeontief.place(n, i, i)] += shares[i];
+      for (int j = i + 1; j < n; j++) {
+        double cross = (-0.1 + 1.4 * random.nextDouble()) * shares[i] * shares[j];
+        weights[GeneralisedLeontief.place(n, i, j)] = cross;
+        weights[GeneralisedLeontief.place(n, i, i)] -= cross;
+        weights[GeneralisedLeontief.place(n, j, j)] -= cross;
+      }
+    }
+    return GeneralisedLeontief.of(
+        inputs(n), base(random, n), random.nextGaussian(), weights, 0.5 + random.nextDouble());
+  }
+
   /** A form drawn at random, with two to four inputs; CES with σ between 0.05 and 10. */
   static Technology any(Random random) {
     int n = 2 + random.nextInt(3);
-    return switch (random.nextInt(3)) {
+    return switch (random.nextInt(5)) {
       case 0 -> cobbDouglas(random, n);
-      case 1 -> ces(random, n, Math.pow(10, -1 + 2.3 * random.nextDouble()) - 1);
+      case 1 -> ces(random, n, curvature(random));
+      case 2 -> nestedCes(random, Math.max(n, 3));
+      case 3 -> generalisedLeontief(random, n);
       default -> translog(random, n);
     };
   }
@@ -72,9 +133,43 @@ final class RandomTechnologies {
     if (technology instanceof Ces ces) {
       return Ces.of(ces.inputs(), base, all[0], ces.shares(), ces.rho(), ces.scale());
     }
+    if (technology instanceof NestedCes nested) {
+      return withBase(nested, base);
+    }
+    if (technology instanceof GeneralisedLeontief leontief) {
+      double[] weights = Arrays.copyOfRange(all, 1, all.length - 1);
+      return GeneralisedLeontief.of(leontief.inputs(), base, all[0], weights, all[all.length - 1]);
+    }
     return technology instanceof CobbDouglas
         ? new CobbDouglas(technology.inputs(), base, all[0], rest)
         : new Translog(technology.inputs(), base, all[0], rest);
+  }
+
+  private static NestedCes withBase(NestedCes technology, double[] base) {
+    List<List<String>> groups = new ArrayList<>();
+    for (String name : technology.parameterNames()) {
+      if (name.startsWith("share:")) {
+        groups.add(List.of(name.substring("share:".length()).split("\\+")));
+      }
+    }
+    int count = groups.size();
+    double[] all = technology.parameters();
+    int at = 1;
+    double[][] within = new double[count][];
+    for (int g = 0; g < count; g++) {
+      int size = groups.get(g).size();
+      within[g] = size == 1 ? new double[] {1} : Arrays.copyOfRange(all, at, at + size);
+      at += size == 1 ? 0 : size;
+    }
+    double[] between = Arrays.copyOfRange(all, at, at + count);
+    at += count;
+    double rho = all[at++];
+    double[] curvatures = new double[count];
+    for (int g = 0; g < count; g++) {
+      curvatures[g] = groups.get(g).size() == 1 ? 0 : all[at++];
+    }
+    return NestedCes.of(
+        technology.inputs(), base, groups, all[0], within, between, rho, curvatures, all[at]);
   }
 
   /** ln x around the technology's base, normal with this spread in logs. */

@@ -89,7 +89,7 @@ class TranslogTest extends TechnologyContract {
   void constantReturnsRestrictionsMakeTheScaleElasticityOneEverywhere() {
     // β sums to one and every row of second-order coefficients to zero.
     double[] coefficients = {0.3, 0.5, 0.2, -0.06, 0.04, 0.02, -0.07, 0.03, -0.05};
-    for (double[] row : Translog.FORM.constantReturns(3)) {
+    for (double[] row : Translog.FORM.restrictions(Restriction.CONSTANT_RETURNS, THREE)) {
       double sum = 0;
       for (int k = 0; k < coefficients.length; k++) {
         sum += row[k] * coefficients[k];
