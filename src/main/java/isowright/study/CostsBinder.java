@@ -85,12 +85,7 @@ final class CostsBinder {
       return Optional.empty();
     }
     Roles roles =
-        Roles.ofCosts(
-            plant,
-            period,
-            cost.get(),
-            arguments(inputs, outputs, fixed),
-            shares(inputs));
+        Roles.ofCosts(plant, period, cost.get(), arguments(inputs, outputs, fixed), shares(inputs));
     return Optional.of(
         new Costs(
             new Study.Records(source.get(), roles, keep),
