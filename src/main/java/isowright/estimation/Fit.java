@@ -1,6 +1,9 @@
 package isowright.estimation;
 
 import isowright.records.Panel;
+import isowright.regression.Covariance;
+import isowright.regression.Design;
+import isowright.regression.LinearFit;
 import isowright.technology.LinearForm;
 import isowright.technology.Technology;
 import java.util.Arrays;
@@ -159,6 +162,20 @@ public record Fit(
       System.arraycopy(means, 0, to[0], p + circumstances.count(), means.length);
     }
     return to;
+  }
+
+  /**
+   * The covariance, of the kind that this fit uses, of another regression on the same rows.
+   *
+   * @param design the other regression, of as many rows as {@link Solution#design}
+   * @param linear its fit
+   */
+  public Covariance covarianceOf(Design design, LinearFit linear) {
+    return Covariance.estimate(
+        design,
+        linear,
+        LinearEstimation.kind(specification.standardErrors()),
+        PanelRows.of(panel, base).times(numbers().treatment().rows()));
   }
 
   /** The technology of the typical plant in the last period. */

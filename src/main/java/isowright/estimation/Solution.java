@@ -4,6 +4,7 @@ import isowright.regression.Covariance;
 import isowright.regression.Design;
 import isowright.regression.FitStatistics;
 import isowright.regression.LinearFit;
+import isowright.regression.VarianceInflation;
 import isowright.technology.Technology;
 import java.util.List;
 
@@ -75,6 +76,11 @@ public record Solution(
       sum += Math.exp(residual);
     }
     return sum / residuals.length;
+  }
+
+  /** By how much the other regressors inflate the variance of each coefficient. */
+  public List<VarianceInflation> inflation() {
+    return VarianceInflation.of(design, linear);
   }
 
   /** The index of a reported parameter; −1 if there is none of that name. */

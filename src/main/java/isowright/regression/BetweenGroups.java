@@ -40,6 +40,16 @@ final class BetweenGroups implements Design {
   }
 
   @Override
+  public Design before() {
+    return design;
+  }
+
+  @Override
+  public Design likewise(Design other) {
+    return new BetweenGroups(other, byRows);
+  }
+
+  @Override
   public void fill(int from, int to, double[][] into) {
     Groups of = design.groups();
     int columns = design.columns().size() + 1;

@@ -53,6 +53,19 @@ public interface Design {
     return 0;
   }
 
+  /** The design before anything was removed from its rows; itself where nothing was. */
+  default Design before() {
+    return this;
+  }
+
+  /**
+   * What was done to the rows of {@link #before()}, done to those of another design of the same
+   * rows and groups; the other design itself where nothing was done.
+   */
+  default Design likewise(Design other) {
+    return other;
+  }
+
   /**
    * The leverage that the removed parameters have at a row, on top of that of the regressors; zero
    * by default.

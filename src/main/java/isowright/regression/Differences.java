@@ -67,6 +67,16 @@ public final class Differences implements Design {
   }
 
   @Override
+  public Design before() {
+    return design;
+  }
+
+  @Override
+  public Design likewise(Design other) {
+    return new Differences(other, ends, groups);
+  }
+
+  @Override
   public void fill(int from, int to, double[][] into) {
     fill(from, to, into, new double[columns().size() + 1]);
   }

@@ -148,6 +148,16 @@ public final class Effects {
     }
 
     @Override
+    public Design before() {
+      return design.before();
+    }
+
+    @Override
+    public Design likewise(Design other) {
+      return within(design.likewise(other));
+    }
+
+    @Override
     public int absorbed() {
       return design.absorbed() + groups.count();
     }

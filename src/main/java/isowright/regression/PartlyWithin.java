@@ -72,6 +72,16 @@ final class PartlyWithin implements Design {
   }
 
   @Override
+  public Design before() {
+    return design.before();
+  }
+
+  @Override
+  public Design likewise(Design other) {
+    return new PartlyWithin(design.likewise(other), shares);
+  }
+
+  @Override
   public int absorbed() {
     return design.absorbed();
   }

@@ -3,12 +3,13 @@ package isowright.report;
 import isowright.study.SpecificationFindings;
 import java.io.IOException;
 
-/** What was laid down beforehand, as it stands in the findings file. */
+/** The specification as a whole, as it stands in the findings file. */
 final class SpecificationJson {
 
   private SpecificationJson() {}
 
   static void write(JsonFile file, SpecificationFindings found) throws IOException {
+    file.object("specification", () -> specification(file, found));
     file.list(
         "expectations",
         found.expectations(),
@@ -32,6 +33,19 @@ final class SpecificationJson {
           file.text("by", decision.by());
           file.text("what", decision.what());
           file.text("why", decision.why());
+        });
+  }
+
+  private static void specification(JsonFile file, SpecificationFindings found) throws IOException {
+    file.list(
+        "varianceInflation",
+        found.inflation(),
+        true,
+        factor -> {
+          file.text("technology", factor.technology());
+          file.text("parameter", factor.parameter());
+          file.number("raw", factor.raw());
+          file.number("centred", factor.centred());
         });
   }
 }

@@ -188,6 +188,10 @@ final class Terms {
       case "plant-effects" -> "Plant effects";
       case "plant-variance" -> "Variance between plants";
       case "random-against-within" -> "Random effects against within";
+      case "reset" -> "RESET: is the form rich enough?";
+      case "breusch-pagan" -> "Breusch-Pagan: equal variance";
+      case "white" -> "White: equal variance";
+      case "jarque-bera" -> "Jarque-Bera: normal errors";
       default -> Phrases.sentence(name.replace('-', ' '));
     };
   }

@@ -10,6 +10,7 @@ import isowright.report.Document.Section;
 import isowright.report.Document.Table;
 import isowright.study.FitFindings.Fitted;
 import isowright.study.FitFindings.Tested;
+import isowright.study.SpecificationFindings;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -26,7 +27,9 @@ final class TestsSection {
     for (Fitted fit : material.findings().fits()) {
       List<Row> rows = new ArrayList<>();
       for (Tested test : fit.tests()) {
-        rows.add(new Row(Text.of(Terms.test(test.name())), cells(test, material)));
+        if (!SpecificationFindings.TESTS.contains(test.name())) {
+          rows.add(new Row(Text.of(Terms.test(test.name())), cells(test, material)));
+        }
       }
       if (!rows.isEmpty()) {
         groups.add(new Group(Optional.of(Terms.technology(fit.technology())), rows));
@@ -52,7 +55,7 @@ final class TestsSection {
     return new Section(ID, "Tests", blocks);
   }
 
-  private static List<Cell> cells(Tested test, Material material) {
+  static List<Cell> cells(Tested test, Material material) {
     return List.of(
         Cell.of(test.nullHypothesis()),
         Cell.of(Phrases.statistic(test)),

@@ -11,6 +11,7 @@ import isowright.inference.DeltaMethod;
 import isowright.inference.Estimate;
 import isowright.inference.Hypotheses;
 import isowright.inference.Law;
+import isowright.inference.SpecificationTests;
 import isowright.inference.Verdict;
 import isowright.records.Panel;
 import isowright.regression.FitStatistics;
@@ -112,8 +113,7 @@ final class FitStage {
     List<FitFindings.Pair> substitution = elasticities.substitution();
     FitStatistics statistics = numbers.statistics();
     FitFindings.Regular regular = RegularityFindings.of(fit);
-    List<Verdict> verdicts =
-        Hypotheses.of(fit, study.questions().returnsToScale(), study.questions().substitution());
+    List<Verdict> verdicts = verdicts(fit);
     return new Fitted(
         fit.specification().form().name(),
         how(
@@ -222,6 +222,14 @@ final class FitStage {
         profile.substitutionLow(),
         profile.substitutionHigh(),
         profile.threshold());
+  }
+
+  private List<Verdict> verdicts(Fit fit) {
+    List<Verdict> verdicts = new ArrayList<>();
+    verdicts.addAll(
+        Hypotheses.of(fit, study.questions().returnsToScale(), study.questions().substitution()));
+    verdicts.addAll(SpecificationTests.of(fit));
+    return verdicts;
   }
 
   private static FitFindings.Tested tested(Verdict verdict, double confidence) {

@@ -108,9 +108,7 @@ public final class Pipeline {
         plans,
         review.reviews(),
         review.findings(),
-        new SpecificationFindings(
-            ExpectationStage.held(study.protocol().expectations(), fitted),
-            study.protocol().decisions()),
+        SpecificationStage.findings(study, fits, fitted),
         costs,
         remarks(fitted, plans));
   }

@@ -1,26 +1,44 @@
 package isowright.study;
 
+import isowright.inference.SpecificationTests;
 import isowright.study.Protocol.Decision;
 import java.util.List;
 import java.util.Optional;
 
 /**
- * What was found of the specification as a whole: results beside what was expected of them, and the
- * decisions that were taken.
+ * What was found of the specification as a whole: how far regressors stand in one another's way,
+ * results beside what was expected of them, and the decisions that were taken.
  *
+ * @param inflation variance inflation of every coefficient of the fits linear in their parameters
  * @param expectations what was expected and what was found, fit by fit
  * @param decisions the decisions stated in the study file
  */
-public record SpecificationFindings(List<Expected> expectations, List<Decision> decisions) {
+public record SpecificationFindings(
+    List<Inflation> inflation, List<Expected> expectations, List<Decision> decisions) {
 
   /** Nothing asked, nothing found. */
-  public static final SpecificationFindings NONE = new SpecificationFindings(List.of(), List.of());
+  public static final SpecificationFindings NONE =
+      new SpecificationFindings(List.of(), List.of(), List.of());
+
+  /** The names of the tests of the specification among the tests of a fit. */
+  public static final List<String> TESTS = SpecificationTests.NAMES;
 
   /** Copies the lists. */
   public SpecificationFindings {
+    inflation = List.copyOf(inflation);
     expectations = List.copyOf(expectations);
     decisions = List.copyOf(decisions);
   }
+
+  /**
+   * By what factor the other regressors inflate the variance of a coefficient.
+   *
+   * @param technology the fit
+   * @param parameter the coefficient's name
+   * @param raw about zero, effects and constant counted among the other regressors
+   * @param centred about the mean, or about the means of plants where these were removed
+   */
+  public record Inflation(String technology, String parameter, double raw, double centred) {}
 
   /** How a result lies to the range in which it was expected. */
   public enum Agreement {
