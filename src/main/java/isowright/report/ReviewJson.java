@@ -77,6 +77,17 @@ final class ReviewJson {
           file.list("orders", review.orders(), false, order -> order(file, order));
           file.list("variants", review.variants(), false, variant -> variant(file, variant));
           file.list(
+              "omissions",
+              review.omissions(),
+              true,
+              omission -> {
+                file.text("technology", omission.technology());
+                file.text("period", omission.period());
+                file.text("plant", omission.plant());
+                file.number("gap", omission.gap());
+                file.number("share", omission.share());
+              });
+          file.list(
               "spreads",
               review.spreads(),
               true,
@@ -141,7 +152,6 @@ final class ReviewJson {
     file.text("technology", variant.technology());
     file.text("period", variant.period());
     file.text("choice", variant.choice());
-    file.text("plant", variant.plant());
     file.text("words", variant.words());
     file.text("money", variant.money());
     file.whole("filings", variant.filings());

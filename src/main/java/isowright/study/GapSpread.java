@@ -16,21 +16,39 @@ final class GapSpread {
     private String highBy = "";
   }
 
+  /** Shares that differ by less are the same, and the choice that came first is named. */
+  private static final double SAME = 1e-9;
+
   /** By row of the panel, so that spreads come in the order of the records. */
   private final TreeMap<Integer, Range> ranges = new TreeMap<>();
 
   /** Notes the gaps of filings under one technology and choice. */
   void note(String technology, String words, List<HeldFiling> held) {
-    for (HeldFiling filing : held) {
-      if (filing.answered()) {
-        double share = filing.gap().gap().gap() / filing.gap().gap().filed();
+    List<HeldFiling> answered = held.stream().filter(HeldFiling::answered).toList();
+    noteShares(
+        technology,
+        words,
+        answered,
+        answered.stream().mapToDouble(h -> h.gap().gap().gap() / h.gap().gap().filed()).toArray());
+  }
+
+  /**
+   * Notes the gaps of filings.
+   *
+   * @param shares the gap of each as a share of what is filed; NaN where there is none
+   */
+  void noteShares(String technology, String words, List<HeldFiling> filings, double[] shares) {
+    for (int i = 0; i < shares.length; i++) {
+      double share = shares[i];
+      if (!Double.isNaN(share)) {
+        HeldFiling filing = filings.get(i);
         Range range = ranges.computeIfAbsent(filing.filing().row(), row -> new Range());
         range.choices++;
-        if (share < range.low) {
+        if (share < range.low - SAME) {
           range.low = share;
           range.lowBy = technology + ", " + words;
         }
-        if (share > range.high) {
+        if (share > range.high + SAME) {
           range.high = share;
           range.highBy = technology + ", " + words;
         }

@@ -11,6 +11,7 @@ import java.util.Optional;
  * @param reference against what costs were held, in words; empty where nothing was reviewed
  * @param orders the plants in order, for each technology and period
  * @param variants totals under other choices, for each technology and period
+ * @param omissions the gap when a plant is left out of the estimation
  * @param spreads for each plant and period, the lowest and highest gap under any choice
  * @param allowances what each plant would be allowed year by year
  * @param terms the terms of the allowances
@@ -20,6 +21,7 @@ public record ReviewFindings(
     String reference,
     List<Order> orders,
     List<Variant> variants,
+    List<Omission> omissions,
     List<Spread> spreads,
     List<Allowed> allowances,
     Optional<Study.Allowance> terms,
@@ -28,12 +30,13 @@ public record ReviewFindings(
   /** Nothing reviewed. */
   public static final ReviewFindings NONE =
       new ReviewFindings(
-          "", List.of(), List.of(), List.of(), List.of(), Optional.empty(), List.of());
+          "", List.of(), List.of(), List.of(), List.of(), List.of(), Optional.empty(), List.of());
 
   /** Copies the lists. */
   public ReviewFindings {
     orders = List.copyOf(orders);
     variants = List.copyOf(variants);
+    omissions = List.copyOf(omissions);
     spreads = List.copyOf(spreads);
     allowances = List.copyOf(allowances);
     remarks = List.copyOf(remarks);
@@ -128,8 +131,7 @@ public record ReviewFindings(
    * @param period the period
    * @param choice a short, stable name: {@code as-asked}, {@code typical}, {@code typical-mean},
    *     {@code best-quarter}, {@code best-quarter-mean}, {@code without-deflator}, {@code
-   *     without-owner}, {@code recorded-prices}, {@code without-plant}
-   * @param plant the plant left out of the fit, empty for other choices
+   *     without-owner}, {@code recorded-prices}
    * @param words the same in words
    * @param money the money of the figures, in words
    * @param filings how many filings have an answer
@@ -142,7 +144,6 @@ public record ReviewFindings(
       String technology,
       String period,
       String choice,
-      String plant,
       String words,
       String money,
       int filings,
@@ -150,6 +151,19 @@ public record ReviewFindings(
       Figure leastCost,
       Figure gap,
       Figure share) {}
+
+  /**
+   * The total gap by a technology that was estimated without one plant; the filings stay the same.
+   * A value to set beside the gap and its interval, as it says how much hangs on one plant.
+   *
+   * @param technology the technology
+   * @param period the period
+   * @param plant the plant left out of the estimation
+   * @param gap the gap
+   * @param share the gap as a share of filed cost
+   */
+  public record Omission(
+      String technology, String period, String plant, double gap, double share) {}
 
   /**
    * The lowest and highest gap of a filing under any technology and choice, as shares of filed

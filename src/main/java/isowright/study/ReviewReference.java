@@ -27,12 +27,15 @@ record ReviewReference(Study.Productivity against, boolean smearing) {
   EstimatedTechnology of(Candidate candidate, int period) {
     Productivity productivity = PlanStage.productivity(against, Optional.empty());
     EstimatedTechnology estimated = candidate.at(period, productivity);
-    return smearing && candidate.fit().isPresent()
-        ? new EstimatedTechnology(
-            estimated.technology().shifted(Math.log(factor(candidate))),
-            estimated.covariance(),
-            estimated.degreesOfFreedom())
-        : estimated;
+    return new EstimatedTechnology(
+        estimated.technology().shifted(shift(candidate)),
+        estimated.covariance(),
+        estimated.degreesOfFreedom());
+  }
+
+  /** What the smearing factor adds to ln Q; 0 where there is none. */
+  double shift(Candidate candidate) {
+    return smearing && candidate.fit().isPresent() ? Math.log(factor(candidate)) : 0;
   }
 
   private static double factor(Candidate candidate) {

@@ -8,6 +8,7 @@ import isowright.study.Findings.Said;
 import isowright.study.PlanFindings.Reviewed;
 import isowright.study.ReviewChoices.Choice;
 import isowright.study.ReviewFindings.Allowed;
+import isowright.study.ReviewFindings.Omission;
 import isowright.study.ReviewFindings.Order;
 import isowright.study.ReviewFindings.Variant;
 import java.util.ArrayList;
@@ -48,9 +49,11 @@ final class ReviewStage {
   private final List<Reviewed> reviews = new ArrayList<>();
   private final List<Order> orders = new ArrayList<>();
   private final List<Variant> variants = new ArrayList<>();
+  private final List<Omission> omissions = new ArrayList<>();
   private final List<Allowed> allowances = new ArrayList<>();
   private final List<Said> remarks = new ArrayList<>();
   private final GapSpread spread = new GapSpread();
+  private final OmissionStage omitted;
 
   private ReviewStage(
       Study study, Study.Filing filing, CapitalStage.Priced priced, List<Candidate> candidates) {
@@ -59,6 +62,7 @@ final class ReviewStage {
     this.candidates = candidates.stream().filter(Candidate::usable).toList();
     this.choices = new ReviewChoices(study, filing, priced).all();
     this.level = study.estimation().confidence();
+    this.omitted = new OmissionStage(panel, spread);
   }
 
   /** The review that a study asks for; nothing where it asks for none. */
@@ -91,6 +95,7 @@ final class ReviewStage {
             ReviewReference.asked(filing).words(),
             orders,
             variants,
+            omissions,
             spread.spreads(panel),
             allowances,
             filing.allowance(),
@@ -118,6 +123,7 @@ final class ReviewStage {
         vary(candidate, period, choice);
       }
     }
+    omissions.addAll(omitted.omissions(candidate, period, asked.reference(), held));
     if (last && filing.allowance().isPresent()) {
       allowances.addAll(
           new AllowanceStage(filing.allowance().get()).allowed(candidate, name, estimates, held));
@@ -138,7 +144,6 @@ final class ReviewStage {
             candidate.name(),
             panel.periods().get(period),
             choice.code(),
-            "",
             choice.words(),
             choice.money(),
             answered.size(),
