@@ -32,8 +32,7 @@ final class AuditText {
   /** Prints the audit; the answer says whether the records can be used as they are. */
   boolean print(Study study) throws RecordsRefused {
     out.println("Study    " + study.title() + " (" + study.file().getFileName() + ")");
-    Optional<Study.Records> asked =
-        study.records().or(() -> study.costs().map(Costs::records));
+    Optional<Study.Records> asked = study.records().or(() -> study.costs().map(Costs::records));
     if (asked.isEmpty()) {
       out.println(
           "Records  none: the study asks technologies taken as known, so there is nothing to audit");
