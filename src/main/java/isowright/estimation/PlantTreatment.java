@@ -138,7 +138,7 @@ record PlantTreatment(Design design, Treatment outcome, List<String> lacking) {
           "Within plants the records are fitted without any error, so random effects have no scale."
               + " Check that output was not computed from inputs, or set plant-effects to within.");
     }
-    if (Double.isNaN(components.group())) {
+    if (components.row() > 0 && Double.isNaN(components.group())) {
       lacking.add(
           "The variance between plants cannot be estimated after Swamy and Arora: "
               + plants

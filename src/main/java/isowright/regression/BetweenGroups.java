@@ -4,7 +4,7 @@ import java.util.List;
 
 /**
  * Group means of a design, one row a group; see {@link Effects#between}. Tested in {@code
- * EffectsTest}.
+ * GroupTransformationsTest}.
  */
 final class BetweenGroups implements Design {
 

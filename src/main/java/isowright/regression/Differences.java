@@ -6,7 +6,7 @@ import java.util.function.IntPredicate;
 
 /**
  * First differences of a design; see {@link Effects#differences}. The groups are those of the
- * design that have a difference at all. Tested in {@code EffectsTest}.
+ * design that have a difference at all. Tested in {@code GroupTransformationsTest}.
  */
 public final class Differences implements Design {
 

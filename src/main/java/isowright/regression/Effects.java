@@ -18,7 +18,7 @@ import java.util.function.IntPredicate;
  *
  * <p>Sources: R. Frisch and F. V. Waugh 1933, Econometrica 1, 387–401; M. C. Lovell 1963, Journal
  * of the American Statistical Association 58, 993–1010. Tested against dummy variables in {@code
- * EffectsTest}.
+ * EffectsTest}, the others in {@code GroupTransformationsTest}.
  */
 public final class Effects {
 

@@ -9,7 +9,7 @@ import java.util.List;
  *
  * <p>A group with fewer rows than columns is fitted exactly and takes as many parameters as it has
  * rows, so that the sum is that of the least squares space of the free model whatever the groups
- * (F. M. Fisher 1970, Econometrica 38, 361–366). Tested in {@code SeparateFitsTest}.
+ * (F. M. Fisher 1970, Econometrica 38, 361–366). Tested in {@code GroupTransformationsTest}.
  *
  * @param ssr the sum of squared residuals over all groups
  * @param parameters how many parameters are estimated in all, constants among them
