@@ -34,9 +34,17 @@ public final class Estimation {
     }
     Form form = specification.form();
     if (form instanceof LinearForm linear) {
-      return new LinearEstimation(panel, specification, base, linear).fit();
+      return linear(panel, specification, base, linear);
     }
     return new ProfiledEstimation(panel, specification, base, (NonlinearForm) form).fit();
+  }
+
+  private static Fit linear(
+      Panel panel, Specification specification, double[] base, LinearForm form) {
+    if (specification.estimator() instanceof Estimator.Instruments instruments) {
+      return new InstrumentedEstimation(panel, specification, base, form, instruments).fit();
+    }
+    return new LinearEstimation(panel, specification, base, form).fit();
   }
 
   /**

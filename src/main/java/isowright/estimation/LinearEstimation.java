@@ -49,7 +49,7 @@ final class LinearEstimation {
     LinearFit fit = LeastSquares.fit(treatment.design());
     Optional<Fit> lacking =
         lacking(panel, specification, base, fit, treatment.outcome().rows().kind());
-    return lacking.orElseGet(() -> solved(treatment, fit));
+    return lacking.orElseGet(() -> solved(treatment, fit, new Particulars.None()));
   }
 
   /** The fit that says what the rows lack, if anything. */
@@ -98,7 +98,12 @@ final class LinearEstimation {
             .replace(Collinearity.GROUP_EFFECTS, "the plant effects");
   }
 
-  private Fit solved(PlantTreatment treatment, LinearFit fit) {
+  /**
+   * The fit that a solved regression is.
+   *
+   * @param fit of {@code treatment.design()}, over the columns of its levels
+   */
+  Fit solved(PlantTreatment treatment, LinearFit fit, Particulars particulars) {
     Design design = treatment.design();
     Treatment outcome = treatment.outcome();
     Covariance covariance =
@@ -150,7 +155,9 @@ final class LinearEstimation {
             fit,
             residuals,
             levels,
-            outcome);
+            outcome,
+            new double[0],
+            particulars);
     return new Fit(
         specification,
         panel,
@@ -167,9 +174,8 @@ final class LinearEstimation {
   private double[] residuals(PlantTreatment treatment, LinearFit fit) {
     Design levels = treatment.levels();
     return switch (specification.plantEffects()) {
-      case NONE, WITHIN -> LeastSquares.residuals(treatment.design(), fit);
-      case BETWEEN -> LeastSquares.residuals(levels, fit);
-      case DIFFERENCES -> LeastSquares.residuals(Effects.within(levels), fit);
+      case NONE, BETWEEN -> LeastSquares.residuals(levels, fit);
+      case WITHIN, DIFFERENCES -> LeastSquares.residuals(Effects.within(levels), fit);
       case RANDOM, MUNDLAK -> {
         double[] residuals = LeastSquares.residuals(levels, fit);
         VarianceComponents components = treatment.outcome().components().orElseThrow();

@@ -28,6 +28,7 @@ final class Obstacles {
   static List<String> of(Panel panel, Specification specification) {
     Obstacles obstacles = new Obstacles(panel, specification);
     obstacles.form();
+    obstacles.estimator();
     obstacles.plants();
     obstacles.time();
     obstacles.standardErrors();
@@ -62,6 +63,39 @@ final class Obstacles {
               + form.name()
               + " is not linear in its parameters, and a biased trend is defined here for forms that"
               + " are. Set time to trend or quadratic-trend, or ask for cobb-douglas or translog.");
+    }
+  }
+
+  private void estimator() {
+    Estimator estimator = specification.estimator();
+    if (estimator instanceof Estimator.LeastSquares) {
+      return;
+    }
+    if (!(specification.form() instanceof LinearForm)) {
+      found.add(
+          "The form "
+              + specification.form().name()
+              + " is not linear in its parameters, and "
+              + estimator.word()
+              + " is carried out for forms that are. Take `"
+              + estimator.word()
+              + "` out, or ask for cobb-douglas or translog.");
+    }
+    if (specification.time() == Time.BIASED_TREND) {
+      found.add(
+          "A biased trend makes products of inputs and time, which "
+              + estimator.word()
+              + " does not treat. Set time to quadratic-trend.");
+    }
+    PlantEffects effects = specification.plantEffects();
+    if (estimator instanceof Estimator.Instruments
+        && effects != PlantEffects.NONE
+        && effects != PlantEffects.WITHIN
+        && effects != PlantEffects.DIFFERENCES) {
+      found.add(
+          "Instruments are not carried out with plant-effects: "
+              + effects.word()
+              + ". Set plant-effects to none, within or differences.");
     }
   }
 

@@ -31,6 +31,11 @@ public final class RowsUsed {
     return new RowsUsed(Kind.EACH, rows, new int[0]);
   }
 
+  /** Some rows of the panel, as they are. */
+  static RowsUsed some(int[] rows) {
+    return new RowsUsed(Kind.EACH, rows.length, rows.clone());
+  }
+
   /** One row a plant. */
   static RowsUsed plantMeans(Panel panel) {
     int[] first = panel.plantStarts().toArray();
@@ -57,6 +62,6 @@ public final class RowsUsed {
    * is the first of its plant (a mean).
    */
   public int panelRow(int row) {
-    return kind == Kind.EACH ? row : panelRows[row];
+    return panelRows.length == 0 ? row : panelRows[row];
   }
 }

@@ -23,10 +23,19 @@ public record Series(String name, int lag, Optional<Boolean> log) {
 
   /** As it is written in a study file: {@code wage}, {@code lag wage}, {@code lag 2 wage}. */
   public String word() {
+    return lagged(name);
+  }
+
+  /** As it enters: {@code ln wage}, {@code lag ln wage}; or as it is written where not in logs. */
+  String entering(boolean logged) {
+    return lagged(logged ? "ln " + name : name);
+  }
+
+  private String lagged(String what) {
     return switch (lag) {
-      case 0 -> name;
-      case 1 -> "lag " + name;
-      default -> "lag " + lag + " " + name;
+      case 0 -> what;
+      case 1 -> "lag " + what;
+      default -> "lag " + lag + " " + what;
     };
   }
 }

@@ -26,6 +26,7 @@ import java.util.List;
  * @param treatment what was done about plants
  * @param searched the parameters as a search found them, a start for refits; empty where none was
  *     searched for
+ * @param particulars what belongs to the estimator alone
  */
 public record Solution(
     Technology technology,
@@ -39,7 +40,38 @@ public record Solution(
     double[] residuals,
     PlantLevels levels,
     Treatment treatment,
-    double[] searched) {
+    double[] searched,
+    Particulars particulars) {
+
+  /** By least squares. */
+  public Solution(
+      Technology technology,
+      List<String> names,
+      double[] parameters,
+      double[][] covariance,
+      Covariance covarianceSource,
+      FitStatistics statistics,
+      Design design,
+      LinearFit linear,
+      double[] residuals,
+      PlantLevels levels,
+      Treatment treatment,
+      double[] searched) {
+    this(
+        technology,
+        names,
+        parameters,
+        covariance,
+        covarianceSource,
+        statistics,
+        design,
+        linear,
+        residuals,
+        levels,
+        treatment,
+        searched,
+        new Particulars.None());
+  }
 
   /** Without a search. */
   public Solution(

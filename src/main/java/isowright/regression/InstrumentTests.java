@@ -1,5 +1,6 @@
 package isowright.regression;
 
+import java.util.Arrays;
 import java.util.List;
 import org.apache.commons.math3.linear.Array2DRowRealMatrix;
 import org.apache.commons.math3.linear.ArrayRealVector;
@@ -159,23 +160,23 @@ public final class InstrumentTests {
         stage.pivots());
   }
 
-  /** Q′X with Z = QR: for each regressor R times its coefficients on Z. */
+  /** Q′X with Z = QR: for each regressor that was estimated R times its coefficients on Z. */
   private RealMatrix rotatedRegressors(LinearFit stage, int[] kept) {
     InstrumentedDesign of = fit.of();
     int[] instruments = of.instrumentColumns();
     int[] endogenous = of.endogenousColumns();
-    boolean[] moved = of.endogenous();
-    RealMatrix rotated = new Array2DRowRealMatrix(kept.length, of.regressors());
-    for (int e = 0; e < endogenous.length; e++) {
-      double[] weights = fit.firstStages().get(e).coefficients();
-      rotated.setColumn(endogenous[e], rotated(stage, kept, weights));
-    }
-    for (int l = 0; l < instruments.length; l++) {
-      if (instruments[l] < of.regressors() && !moved[instruments[l]]) {
-        double[] unit = new double[instruments.length];
-        unit[l] = 1;
-        rotated.setColumn(instruments[l], rotated(stage, kept, unit));
+    int[] estimated = fit.fit().kept();
+    RealMatrix rotated = new Array2DRowRealMatrix(kept.length, estimated.length);
+    for (int p = 0; p < estimated.length; p++) {
+      int e = Arrays.binarySearch(endogenous, estimated[p]);
+      double[] weights = new double[instruments.length];
+      if (e >= 0) {
+        weights = fit.firstStages().get(e).coefficients();
+      } else {
+        // The exogenous regressors are the first instruments, in their order.
+        weights[Arrays.binarySearch(instruments, estimated[p])] = 1;
       }
+      rotated.setColumn(p, rotated(stage, kept, weights));
     }
     return rotated;
   }

@@ -99,6 +99,24 @@ public final class PanelFixtures {
         List.of(new Roles.Control("unemp", false)));
   }
 
+  /** The same with private capital and employment alone, and no control. */
+  public static Panel usStatesOfTwoInputs() {
+    return published(
+        "us-states-public-capital.csv",
+        "state",
+        "year",
+        "gsp",
+        List.of(input("pc", "pc"), input("emp", "emp")),
+        List.of());
+  }
+
+  /** The rows of {@link #usStates()} in some periods. */
+  public static Panel usStatesIn(List<String> periods) {
+    Panel all = usStates();
+    return SelectedPanel.kept(
+        all, row -> periods.contains(all.periods().get(all.rowPeriods().get(row))));
+  }
+
   private static Roles.Input input(String name, String column) {
     return new Roles.Input(name, column, Optional.empty(), Optional.empty(), Optional.empty());
   }
