@@ -51,6 +51,7 @@ final class Painter implements Placement.Screen {
     canvas.translate(area.getX(), area.getY());
     Library.label(chart, ticks, plot.rows().isEmpty());
     chart.paint(canvas, (int) area.getWidth(), (int) area.getHeight());
+    Library.locate(chart);
     ticks.write(recording);
     axisLines();
     axisTitles();
@@ -173,15 +174,18 @@ final class Painter implements Placement.Screen {
       avoid(placement, layer);
     }
     for (Plot.Label label : plot.labels()) {
-      Placement.Placed placed = placement.place(label, this);
-      letters(
-          label.text(),
-          placed.x(),
-          placed.baseline(),
-          Anchor.START,
-          label.bold(),
-          label.color(),
-          true);
+      placement
+          .place(label, this)
+          .ifPresent(
+              placed ->
+                  letters(
+                      label.text(),
+                      placed.x(),
+                      placed.baseline(),
+                      Anchor.START,
+                      label.bold(),
+                      label.color(),
+                      true));
     }
   }
 

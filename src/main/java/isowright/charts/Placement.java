@@ -5,11 +5,13 @@ import isowright.charts.Plot.Side;
 import java.awt.geom.Rectangle2D;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 
 /**
  * Where labels stand: of all places offered (points, sides, distances) the one that covers least.
  * Covering another label or leaving the plot is worst, covering a line is bad, covering a dot less
- * so; among equals the earlier point, side and the shorter distance win. Deterministic.
+ * so; among equals the earlier point, side and the shorter distance win. A label that would cover
+ * another wherever it stood is left out: what it names stands in the chart's table. Deterministic.
  */
 final class Placement {
 
@@ -67,8 +69,8 @@ final class Placement {
     onDots.add(new double[] {x, y});
   }
 
-  /** Puts a label where it covers least. */
-  Placed place(Label label, Screen screen) {
+  /** Puts a label where it covers least; nowhere if it would cover another one everywhere. */
+  Optional<Placed> place(Label label, Screen screen) {
     double width = Letters.width(label.text(), Style.LETTERS, label.bold());
     double least = Double.POSITIVE_INFINITY;
     Rectangle2D best = new Rectangle2D.Double();
@@ -86,8 +88,15 @@ final class Placement {
         }
       }
     }
+    if (covers(best)) {
+      return Optional.empty();
+    }
     taken.add(best);
-    return new Placed(label, best.getX(), best.getY() + ASCENT * Style.LETTERS);
+    return Optional.of(new Placed(label, best.getX(), best.getY() + ASCENT * Style.LETTERS));
+  }
+
+  private boolean covers(Rectangle2D box) {
+    return taken.stream().anyMatch(other -> other.intersects(box));
   }
 
   private static Rectangle2D box(double x, double y, double width, Side side, double distance) {
