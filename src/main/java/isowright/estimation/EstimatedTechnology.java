@@ -24,4 +24,12 @@ public record EstimatedTechnology(
   public EstimatedTechnology with(Replicas others) {
     return new EstimatedTechnology(technology, covariance, degreesOfFreedom, others);
   }
+
+  /**
+   * The technology, and those of its refits, with output exp(shift) times as large at every mix.
+   */
+  public EstimatedTechnology shifted(double logShift) {
+    return new EstimatedTechnology(
+        technology.shifted(logShift), covariance, degreesOfFreedom, replicas.shifted(logShift));
+  }
 }

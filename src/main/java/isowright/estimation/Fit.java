@@ -70,6 +70,16 @@ public record Fit(
     return profiles.stream().findFirst();
   }
 
+  /**
+   * Whether the rows of each plant stand for themselves in the regression, whatever other plants
+   * there are: least squares, pooled or within plants.
+   */
+  public boolean plantsStandAlone() {
+    return specification.estimator() instanceof Estimator.LeastSquares
+        && (specification.plantEffects() == Specification.PlantEffects.NONE
+            || specification.plantEffects() == Specification.PlantEffects.WITHIN);
+  }
+
   /** The numbers, where the state is usable. */
   public Solution numbers() {
     return solution.orElseThrow(

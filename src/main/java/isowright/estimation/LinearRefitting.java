@@ -6,6 +6,7 @@ import isowright.regression.ClusterBootstrap;
 import isowright.regression.GroupProducts;
 import isowright.regression.LeaveOut;
 import isowright.regression.Refits;
+import isowright.technology.LinearForm;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -18,12 +19,12 @@ final class LinearRefitting implements Refitting {
 
   private final Fit fit;
   private final GroupProducts products;
-  private final boolean within;
+  private final LinearForm form;
 
-  LinearRefitting(Fit fit) {
+  LinearRefitting(Fit fit, LinearForm form) {
     this.fit = fit;
+    this.form = form;
     this.products = GroupProducts.of(fit.numbers().design(), fit.numbers().linear());
-    this.within = !fit.specification().plantEffects().constant();
   }
 
   /** What each plant contributes. */
@@ -64,18 +65,8 @@ final class LinearRefitting implements Refitting {
       all.add(
           refits.failed(i)
               ? Refit.failed(Outcome.LOST_RANK)
-              : Refit.of(withConstant(refits.coefficients(i))));
+              : Refit.of(LinearParameters.reported(fit, form, refits.coefficients(i))));
     }
     return new RefittedParameters(all);
-  }
-
-  private double[] withConstant(double[] coefficients) {
-    if (!within) {
-      return coefficients;
-    }
-    double[] reported = new double[coefficients.length + 1];
-    reported[0] = fit.numbers().parameters()[0];
-    System.arraycopy(coefficients, 0, reported, 1, coefficients.length);
-    return reported;
   }
 }

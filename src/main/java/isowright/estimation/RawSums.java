@@ -22,13 +22,16 @@ final class RawSums {
     this.total = total;
   }
 
-  /** The sums of a linear fit; each row of them K slopes, the response, and the number of rows. */
+  /**
+   * The sums of a linear fit over the columns of the form without restriction, whose coefficients
+   * are the reported parameters; each row of them K slopes, the response, and the number of rows.
+   */
   static RawSums of(Fit fit, LinearForm form) {
     Panel panel = fit.panel();
     LinearDesign raw =
         new LinearDesign(
             PanelRows.of(panel, fit.base()),
-            form,
+            form.unrestricted(),
             panel.inputs(),
             Circumstances.of(panel, fit.specification().time()),
             false);

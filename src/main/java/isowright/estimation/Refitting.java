@@ -1,6 +1,5 @@
 package isowright.estimation;
 
-import isowright.estimation.Specification.PlantEffects;
 import isowright.technology.LinearForm;
 import isowright.technology.NonlinearForm;
 import java.util.Optional;
@@ -28,13 +27,9 @@ interface Refitting {
     if (specification.estimator() instanceof Estimator.ControlFunction) {
       return Optional.empty();
     }
-    // In these the rows of each plant stand for themselves, whatever other plants there are.
-    boolean plain =
-        specification.estimator() instanceof Estimator.LeastSquares
-            && (specification.plantEffects() == PlantEffects.NONE
-                || specification.plantEffects() == PlantEffects.WITHIN);
-    if (plain && specification.form() instanceof LinearForm) {
-      return Optional.of(new LinearRefitting(fit));
+    boolean plain = fit.plantsStandAlone();
+    if (plain && specification.form() instanceof LinearForm form) {
+      return Optional.of(new LinearRefitting(fit, form));
     }
     if (plain
         && specification.form() instanceof NonlinearForm form

@@ -18,6 +18,12 @@ public record Replicas(
   public static final Replicas NONE =
       new Replicas(Technologies.NONE, Technologies.NONE, Technologies.NONE);
 
+  /** The same with output exp(shift) times as large at every mix. */
+  Replicas shifted(double logShift) {
+    return new Replicas(
+        drawn.shifted(logShift), withoutPlants.shifted(logShift), withoutPeriods.shifted(logShift));
+  }
+
   /** Technologies by number, made when they are asked for. */
   public interface Technologies {
 
@@ -33,6 +39,11 @@ public record Replicas(
           public Optional<Technology> get(int i) {
             return Optional.empty();
           }
+
+          @Override
+          public String name(int i) {
+            return "";
+          }
         };
 
     /** How many there are, those without an estimate included. */
@@ -40,5 +51,29 @@ public record Replicas(
 
     /** Technology i; empty where it could not be estimated. */
     Optional<Technology> get(int i);
+
+    /** What was left out of refit i, or the number of the draw. */
+    String name(int i);
+
+    /** The same with output exp(shift) times as large at every mix. */
+    default Technologies shifted(double logShift) {
+      Technologies own = this;
+      return new Technologies() {
+        @Override
+        public int count() {
+          return own.count();
+        }
+
+        @Override
+        public Optional<Technology> get(int i) {
+          return own.get(i).map(technology -> technology.shifted(logShift));
+        }
+
+        @Override
+        public String name(int i) {
+          return own.name(i);
+        }
+      };
+    }
   }
 }

@@ -10,6 +10,7 @@ import isowright.technology.Technology;
 import java.util.Arrays;
 import java.util.Optional;
 import java.util.function.Function;
+import java.util.function.IntFunction;
 import java.util.function.IntPredicate;
 import java.util.function.ToDoubleFunction;
 import org.apache.commons.statistics.distribution.NormalDistribution;
@@ -118,12 +119,14 @@ public final class Replication {
     Technologies plants =
         technologies(
             ranked(productivity, withoutPlants),
+            fit.panel().plants()::get,
             (p, reported) ->
                 levels ? withoutPlant(rows, p, reported, productivity) : Optional.of(reported[0]),
             build);
     Technologies periods =
         technologies(
             ranked(productivity, withoutPeriods),
+            fit.panel().periods()::get,
             (t, reported) -> {
               if (fit.specification().time().byPeriod() && t == period) {
                 return Optional.empty();
@@ -144,12 +147,17 @@ public final class Replication {
   private Technologies drawnAnew(
       Productivity productivity, boolean levels, Function<double[], Technology> build) {
     if (drawn.count() == 0 || !levels) {
-      return technologies(drawn, (i, reported) -> Optional.of(reported[0]), build);
+      return technologies(
+          drawn, Integer::toString, (i, reported) -> Optional.of(reported[0]), build);
+    }
+    if (!levelsKnown()) {
+      return Technologies.NONE;
     }
     ToDoubleFunction<double[]> level = drawnLevel(productivity);
     double own = ownDeviation(productivity);
     return technologies(
         drawn,
+        Integer::toString,
         (i, reported) -> Optional.of(level.applyAsDouble(reported) + own * noise(i, productivity)),
         build);
   }
@@ -168,6 +176,11 @@ public final class Replication {
         return refits.whole(i).isPresent()
             ? ask(refits.whole(i).get(), period, productivity)
             : otherwise.get(i);
+      }
+
+      @Override
+      public String name(int i) {
+        return otherwise.name(i);
       }
     };
   }
@@ -211,8 +224,16 @@ public final class Replication {
   }
 
   private static Technologies technologies(
-      RefittedParameters refits, Constant constant, Function<double[], Technology> build) {
+      RefittedParameters refits,
+      IntFunction<String> names,
+      Constant constant,
+      Function<double[], Technology> build) {
     return new Technologies() {
+      @Override
+      public String name(int i) {
+        return names.apply(i);
+      }
+
       @Override
       public int count() {
         return refits.count();
@@ -244,8 +265,11 @@ public final class Replication {
   private ToDoubleFunction<double[]> drawnLevel(Productivity productivity) {
     Solution numbers = fit.numbers();
     double[] weights = numbers.levels().weights(productivity);
-    if (fit.specification().form() instanceof LinearForm) {
-      double[] direction = numbers.levels().direction(weights);
+    if (fit.specification().form() instanceof LinearForm form) {
+      double[] direction =
+          form.unrestricted() == form
+              ? numbers.levels().direction(weights)
+              : slopeMeans(form, weights);
       double[] centre = numbers.parameters();
       int first = centre.length - direction.length;
       double constant = centre[0] + numbers.levels().shift(weights);
@@ -259,6 +283,32 @@ public final class Replication {
     }
     RowLevels rows = new RowLevels(fit);
     return reported -> rows.weighted(reported, weights);
+  }
+
+  /**
+   * Less the weighted means of the columns of the form without restriction, where plants' levels
+   * are their own means.
+   */
+  private double[] slopeMeans(LinearForm form, double[] weights) {
+    LinearDesign whole =
+        new LinearDesign(
+            PanelRows.of(fit.panel(), fit.base()),
+            form.unrestricted(),
+            fit.panel().inputs(),
+            Circumstances.of(fit.panel(), fit.specification().time()),
+            false);
+    double[] means = GroupMeans.of(whole, new double[whole.columns().size()]).regressors(weights);
+    for (int k = 0; k < means.length; k++) {
+      means[k] = -means[k];
+    }
+    return means;
+  }
+
+  /** Whether draws can be carried to a level: not to random ones under a restricted form. */
+  private boolean levelsKnown() {
+    return !fit.specification().plantEffects().random()
+        || !(fit.specification().form() instanceof LinearForm form)
+        || form.unrestricted() == form;
   }
 
   private double ownDeviation(Productivity productivity) {

@@ -52,30 +52,62 @@ public final class Hypotheses {
     verdicts.addAll(hypotheses.restrictions());
     hypotheses.substitution().ifPresent(verdicts::add);
     hypotheses.oneSubstitution().ifPresent(verdicts::add);
-    hypotheses.cobbDouglas().ifPresent(verdicts::add);
+    hypotheses.cobbDouglas().map(hypotheses::verdict).ifPresent(verdicts::add);
     verdicts.addAll(PanelHypotheses.of(fit));
     return List.copyOf(verdicts);
+  }
+
+  /**
+   * A null of a fit: how far the estimate departs from it, and how the departure moves with the
+   * reported parameters.
+   *
+   * @param departure g, shape q; zero under the null
+   * @param jacobian G, q × P
+   */
+  record Null(String name, String nullHypothesis, double[] departure, double[][] jacobian) {}
+
+  /**
+   * The headline nulls that are linear in the parameters, by a form that is: constant returns, and
+   * Cobb-Douglas within a richer form.
+   */
+  static List<Null> linear(Fit fit, double returnsToScale) {
+    Hypotheses hypotheses = new Hypotheses(fit, returnsToScale, 1);
+    List<Null> nulls = new ArrayList<>();
+    if (fit.specification().form() instanceof LinearForm) {
+      hypotheses.constantReturns().ifPresent(nulls::add);
+      hypotheses.cobbDouglas().ifPresent(nulls::add);
+    }
+    return nulls;
+  }
+
+  private Verdict verdict(Null tested) {
+    double f =
+        LinearRestrictions.statistic(tested.departure(), tested.jacobian(), numbers.covariance());
+    return Verdict.of(
+        tested.name(), tested.nullHypothesis(), f, new Law.F(tested.departure().length, degrees()));
   }
 
   /** The form's restrictions that it does not obey by itself, from the strongest to the weakest. */
   private List<Verdict> restrictions() {
     List<Verdict> verdicts = new ArrayList<>();
-    constantReturns().ifPresent(verdicts::add);
+    constantReturns().map(this::verdict).ifPresent(verdicts::add);
     restriction(
             Restriction.HOMOGENEOUS,
             "the scale elasticity is the same at every mix, so that the technology is homogeneous",
             0)
+        .map(this::verdict)
         .ifPresent(verdicts::add);
     restriction(
             Restriction.HOMOTHETIC,
             "the cheapest proportions of inputs do not change with scale (homothetic to the second"
                 + " order at the base point)",
             0)
+        .map(this::verdict)
         .ifPresent(verdicts::add);
     return verdicts;
   }
 
-  private Optional<Verdict> constantReturns() {
+  private Optional<Null> constantReturns() {
     String subject =
         returnsToScale == 1
             ? "returns to scale are constant at every mix"
@@ -84,11 +116,11 @@ public final class Hypotheses {
   }
 
   /**
-   * The test of a restriction; none where the form obeys it at any parameters.
+   * The null of a restriction; none where the form obeys it at any parameters.
    *
    * @param less what is taken off the first departure
    */
-  private Optional<Verdict> restriction(Restriction restriction, String subject, double less) {
+  private Optional<Null> restriction(Restriction restriction, String subject, double less) {
     Form form = fit.specification().form();
     if (form.obeys(restriction)) {
       return Optional.empty();
@@ -113,9 +145,7 @@ public final class Hypotheses {
         value[count - 1] += numbers.parameters()[place];
       }
     }
-    double f = LinearRestrictions.statistic(value, jacobian, numbers.covariance());
-    return Optional.of(
-        Verdict.of(restriction.word(), subject, f, new Law.F(value.length, degrees())));
+    return Optional.of(new Null(restriction.word(), subject, value, jacobian));
   }
 
   private Optional<Verdict> substitution() {
@@ -167,7 +197,7 @@ public final class Hypotheses {
     return fit.profiles().stream().mapToDouble(CurvatureProfile::scaling).average().orElse(1);
   }
 
-  private Optional<Verdict> cobbDouglas() {
+  private Optional<Null> cobbDouglas() {
     int n = fit.panel().inputs().size();
     if (!(fit.specification().form() instanceof LinearForm linear)
         || linear.secondOrder(n).length == 0) {
@@ -177,15 +207,18 @@ public final class Hypotheses {
     double[][] rows =
         LinearRestrictions.independent(
             places, linear.reported(fit.panel().inputs()), numbers.parameters().length);
-    double f =
-        LinearRestrictions.statistic(
-            rows, new double[rows.length], numbers.parameters(), numbers.covariance());
+    double[] departure = new double[rows.length];
+    for (int i = 0; i < rows.length; i++) {
+      for (int k = 0; k < rows[i].length; k++) {
+        departure[i] += rows[i][k] * numbers.parameters()[k];
+      }
+    }
     return Optional.of(
-        Verdict.of(
+        new Null(
             "cobb-douglas-in-translog",
             "all second-order terms are zero, so that Cobb-Douglas is enough",
-            f,
-            new Law.F(rows.length, degrees())));
+            departure,
+            rows));
   }
 
   private double degrees() {

@@ -3,6 +3,7 @@ package isowright.inference;
 import isowright.estimation.EstimatedTechnology;
 import isowright.technology.Technology;
 import java.util.List;
+import java.util.Optional;
 import java.util.function.Function;
 
 /**
@@ -22,9 +23,7 @@ public interface Intervals {
 
   /** For an estimated technology and a confidence level: from refits where there are any. */
   static Intervals of(EstimatedTechnology estimated, double level) {
-    DeltaMethod delta = DeltaMethod.of(estimated, level);
-    return ReplicatedIntervals.any(estimated.replicas())
-        ? new ReplicatedIntervals(estimated, delta, level)
-        : delta;
+    Optional<Intervals> refits = ReplicatedIntervals.of(estimated, level).map(r -> r);
+    return refits.orElseGet(() -> DeltaMethod.of(estimated, level));
   }
 }

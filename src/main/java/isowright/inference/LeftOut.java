@@ -17,10 +17,10 @@ public record LeftOut(Optional<Most> plant, Optional<Most> period) {
   /**
    * The plant or period whose absence moves the figure most.
    *
-   * @param index its place in the panel
+   * @param name its name
    * @param value the figure without it
    * @param lost how many plants or periods cannot be left out, because without them the figure
    *     could not be had
    */
-  public record Most(int index, double value, int lost) {}
+  public record Most(String name, double value, int lost) {}
 }

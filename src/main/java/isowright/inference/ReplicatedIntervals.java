@@ -49,7 +49,14 @@ public final class ReplicatedIntervals implements Intervals {
     this.level = level;
   }
 
-  static boolean any(Replicas replicas) {
+  /** For an estimated technology; absent where it was fitted once. */
+  public static Optional<ReplicatedIntervals> of(EstimatedTechnology estimated, double level) {
+    return any(estimated.replicas())
+        ? Optional.of(new ReplicatedIntervals(estimated, DeltaMethod.of(estimated, level), level))
+        : Optional.empty();
+  }
+
+  private static boolean any(Replicas replicas) {
     return replicas.drawn().count() > 0
         || replicas.withoutPlants().count() > 0
         || replicas.withoutPeriods().count() > 0;
@@ -63,7 +70,16 @@ public final class ReplicatedIntervals implements Intervals {
   @Override
   public List<Estimate> estimates(
       Function<Technology, double[]> functions, DeltaMethod.Scale scale) {
-    List<Estimate> analytic = delta.estimates(functions, scale);
+    return refitted(delta.estimates(functions, scale), functions);
+  }
+
+  /**
+   * The same for functions whose estimates by propagation are known.
+   *
+   * @param analytic those estimates, one a function
+   */
+  public List<Estimate> refitted(
+      List<Estimate> analytic, Function<Technology, double[]> functions) {
     double[][] drawn = values(replicas.drawn(), functions, analytic.size());
     Moves plants = moves(replicas.withoutPlants(), functions, analytic);
     Moves periods = moves(replicas.withoutPeriods(), functions, analytic);
@@ -154,7 +170,7 @@ public final class ReplicatedIntervals implements Intervals {
     if (count <= EXACT) {
       boolean[] exact = new boolean[count];
       Arrays.fill(exact, true);
-      return new Moves(values(without, functions, analytic.size()), exact);
+      return new Moves(without, values(without, functions, analytic.size()), exact);
     }
     double[][] near = linear(without, functions, analytic);
     boolean[] exact = new boolean[count];
@@ -175,7 +191,7 @@ public final class ReplicatedIntervals implements Intervals {
         .filter(i -> exact[i])
         .forEach(
             i -> near[i] = without.get(i).map(functions).orElseGet(() -> missing(analytic.size())));
-    return new Moves(near, exact);
+    return new Moves(without, near, exact);
   }
 
   private static double size(double value, double centre) {
@@ -211,7 +227,7 @@ public final class ReplicatedIntervals implements Intervals {
   }
 
   /** The figures without each plant or period, and which of them were refitted. */
-  private record Moves(double[][] values, boolean[] exact) {
+  private record Moves(Technologies without, double[][] values, boolean[] exact) {
 
     Optional<Most> most(int f, double centre) {
       int most = -1;
@@ -226,7 +242,7 @@ public final class ReplicatedIntervals implements Intervals {
       }
       return most < 0 || Double.isNaN(centre)
           ? Optional.empty()
-          : Optional.of(new Most(most, values[most][f], lost));
+          : Optional.of(new Most(without.name(most), values[most][f], lost));
     }
 
     double acceleration(int f) {

@@ -30,8 +30,18 @@ final class CovarianceWords {
         .replaceAll("(\\d) times\\b", "$1 periods");
   }
 
-  /** The warning of few clusters, where there are few. */
-  static Optional<Said> few(Covariance covariance) {
+  /**
+   * The warning of few clusters, where there are few.
+   *
+   * @param resampled whether the study asks for resampling, and so for the wild cluster bootstrap
+   */
+  static Optional<Said> few(Covariance covariance, boolean resampled) {
+    String offer =
+        resampled
+            ? " The wild cluster bootstrap stands beside the tests; it holds its size with few"
+                + " plants."
+            : " `resampling` under `estimation` in the study file adds draws of whole plants and the"
+                + " wild cluster bootstrap of the tests, which holds its size with few plants.";
     int clusters = covariance.clusters().orElse(Integer.MAX_VALUE);
     String freedom =
         " They use Student's law with "
@@ -46,7 +56,8 @@ final class CovarianceWords {
                       + " plants; below about "
                       + FEW_CLUSTERS
                       + " such intervals tend to be too narrow."
-                      + freedom)
+                      + freedom
+                      + offer)
               : Optional.empty();
       case CLUSTERED_TWO_WAY ->
           clusters < FEW_CLUSTERS

@@ -3,7 +3,7 @@ package isowright.study;
 import isowright.estimation.CurvatureProfile;
 import isowright.estimation.Fit;
 import isowright.inference.DeltaMethod;
-import isowright.inference.Estimate;
+import isowright.inference.Intervals;
 import isowright.study.FitFindings.Pair;
 import isowright.technology.Elasticities;
 import isowright.technology.Technology;
@@ -20,13 +20,13 @@ final class ElasticityFindings {
   /** Derivatives of elasticities are differences and good to about 1e-9 of their size. */
   private static final double ROUNDING = 1e-9;
 
-  private final DeltaMethod delta;
+  private final Intervals intervals;
   private final List<String> inputs;
   private final double[] mean;
   private final Optional<CurvatureProfile> profile;
 
-  ElasticityFindings(Fit fit, DeltaMethod delta) {
-    this.delta = delta;
+  ElasticityFindings(Fit fit, Intervals intervals) {
+    this.intervals = intervals;
     this.inputs = fit.panel().inputs();
     this.mean = fit.meanLogInputs();
     this.profile = fit.profile();
@@ -47,8 +47,8 @@ final class ElasticityFindings {
 
   /**
    * Hicks once for a pair, Allen once for a pair, Morishima in both directions. Where one curvature
-   * rules them all, the interval is that of its profile: the delta interval misleads in a flat
-   * valley.
+   * rules them all, the interval is that of its profile, unless plants were drawn: the delta
+   * interval misleads in a flat valley.
    */
   List<Pair> substitution() {
     int n = inputs.size();
@@ -92,14 +92,8 @@ final class ElasticityFindings {
   private Pair pair(int i, int j, String measure, Figure figure) {
     Figure shown =
         profile
-            .map(
-                p ->
-                    Figure.estimated(
-                        figure.value(),
-                        figure.uncertainty().map(Figure.Uncertainty::standardError).orElse(0.0),
-                        p.substitutionLow(),
-                        p.substitutionHigh(),
-                        Estimate.Method.PROFILE.word()))
+            .filter(p -> !EstimatedFigures.resampled(figure))
+            .map(p -> EstimatedFigures.profiled(figure, p.substitutionLow(), p.substitutionHigh()))
             .orElseGet(() -> fixedByTheForm(figure) ? exact(figure.value()) : figure);
     return new Pair(inputs.get(i), inputs.get(j), measure, shown);
   }
@@ -119,8 +113,8 @@ final class ElasticityFindings {
   }
 
   private List<Figure> figures(Function<Technology, double[]> functions) {
-    return delta.estimates(functions, DeltaMethod.Scale.LINEAR).stream()
-        .map(FitStage::figure)
+    return intervals.estimates(functions, DeltaMethod.Scale.LINEAR).stream()
+        .map(EstimatedFigures::of)
         .toList();
   }
 

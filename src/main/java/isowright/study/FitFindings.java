@@ -35,6 +35,7 @@ public final class FitFindings {
    * @param smearing mean of exp(residual), by which exp(predicted logs) is multiplied
    * @param points fitted value and residual of each row
    * @param influence the most influential rows
+   * @param robustness how far the fit stands when looked at in other ways
    * @param remarks what must be said of this fit
    */
   public record Fitted(
@@ -56,6 +57,7 @@ public final class FitFindings {
       Optional<Double> smearing,
       List<Point> points,
       List<Influential> influence,
+      RobustnessFindings robustness,
       List<Said> remarks) {
     /** Whether the fit has an answer that later stages may use. */
     public boolean usable() {
@@ -193,8 +195,25 @@ public final class FitFindings {
    * @param period its period
    * @param leverage its leverage
    * @param cook Cook's distance
+   * @param deletedResidual its externally studentised residual; NaN where its leverage is one
+   * @param dffits DFFITS
+   * @param covarianceRatio the covariance ratio
+   * @param dfbetas the DFBETAS largest in absolute value
+   * @param parameter the parameter that the row so moves most
+   * @param beyond how many of the five cut-offs it lies beyond
    */
-  public record Influential(int row, String plant, String period, double leverage, double cook) {}
+  public record Influential(
+      int row,
+      String plant,
+      String period,
+      double leverage,
+      double cook,
+      double deletedResidual,
+      double dffits,
+      double covarianceRatio,
+      double dfbetas,
+      String parameter,
+      int beyond) {}
 
   /**
    * A technology taken as known.

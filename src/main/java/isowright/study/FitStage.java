@@ -4,18 +4,19 @@ import isowright.estimation.CurvatureProfile;
 import isowright.estimation.EstimatedTechnology;
 import isowright.estimation.Estimation;
 import isowright.estimation.Fit;
-import isowright.estimation.RowsUsed;
+import isowright.estimation.Productivity;
+import isowright.estimation.Replication;
 import isowright.estimation.Solution;
 import isowright.estimation.Specification;
 import isowright.inference.DeltaMethod;
 import isowright.inference.Estimate;
 import isowright.inference.Hypotheses;
+import isowright.inference.Intervals;
 import isowright.inference.Law;
 import isowright.inference.SpecificationTests;
 import isowright.inference.Verdict;
 import isowright.records.Panel;
 import isowright.regression.FitStatistics;
-import isowright.regression.Influence;
 import isowright.study.Findings.Said;
 import isowright.study.FitFindings.Fitted;
 import isowright.study.FitFindings.Parameter;
@@ -32,9 +33,6 @@ final class FitStage {
 
   /** Points kept of a fit for its charts; more cannot be told apart on a page. */
   private static final int POINTS = 2000;
-
-  /** Rows named as the most influential of a fit. */
-  private static final int INFLUENTIAL = 5;
 
   private final Panel panel;
   private final Study study;
@@ -74,9 +72,16 @@ final class FitStage {
             plants ? Specification.StandardErrors.CLUSTERED : Specification.StandardErrors.ROBUST);
   }
 
+  /** The refits of a fit that has numbers. */
+  Optional<Replication> replication(Fit fit) {
+    return fit.state().usable()
+        ? Optional.of(Replication.of(fit, study.estimation().resampling()))
+        : Optional.empty();
+  }
+
   /** What a fit found. */
-  Fitted findings(Fit fit) {
-    return fit.state().usable() ? usable(fit) : unusable(fit);
+  Fitted findings(Fit fit, Optional<Replication> replication) {
+    return replication.map(refits -> usable(fit, refits)).orElseGet(() -> unusable(fit));
   }
 
   private Fitted unusable(Fit fit) {
@@ -102,14 +107,21 @@ final class FitStage {
         Optional.empty(),
         List.of(),
         List.of(),
+        RobustnessFindings.NONE,
         remarks);
   }
 
-  private Fitted usable(Fit fit) {
+  private Fitted usable(Fit fit, Replication replication) {
     Solution numbers = fit.numbers();
-    EstimatedTechnology typical = fit.typical();
+    EstimatedTechnology typical =
+        replication.at(panel.periods().size() - 1, new Productivity.Typical());
     DeltaMethod delta = DeltaMethod.of(typical, fit.specification().confidence());
-    ElasticityFindings elasticities = new ElasticityFindings(fit, delta);
+    ElasticityFindings elasticities =
+        new ElasticityFindings(fit, Intervals.of(typical, fit.specification().confidence()));
+    Map<String, Figure> output = elasticities.output();
+    Figure scale = elasticities.scale();
+    RobustnessStage other = new RobustnessStage(study, fit, replication);
+    RobustnessFindings robustness = other.findings(output, scale);
     List<FitFindings.Pair> substitution = elasticities.substitution();
     FitStatistics statistics = numbers.statistics();
     FitFindings.Regular regular = RegularityFindings.of(fit);
@@ -132,8 +144,8 @@ final class FitStage {
                 statistics.aic(),
                 statistics.bic(),
                 numbers.linear().residualDegreesOfFreedom())),
-        elasticities.output(),
-        Optional.of(elasticities.scale()),
+        output,
+        Optional.of(scale),
         substitution,
         elasticities.demand(),
         Optional.of(regular),
@@ -145,8 +157,9 @@ final class FitStage {
         new PanelStage(fit).findings(),
         Optional.of(numbers.smearing()),
         points(numbers),
-        influential(numbers),
-        remarks(fit, regular, substitution, verdicts));
+        other.influential(),
+        robustness,
+        remarks(fit, regular, substitution, verdicts, other.remarks(robustness, output, scale)));
   }
 
   private FitFindings.How how(Fit fit, String covarianceWords, double degreesOfFreedom) {
@@ -199,17 +212,8 @@ final class FitStage {
     return Figure.estimated(value, error, low, high, Estimate.Method.PROFILE.word());
   }
 
-  /** What no parameter moves, such as a quantity that is held, is exact. */
   static Figure figure(Estimate estimate) {
-    if (estimate.standardError() == 0) {
-      return Figure.exact(estimate.value());
-    }
-    return Figure.estimated(
-        estimate.value(),
-        estimate.standardError(),
-        estimate.low(),
-        estimate.high(),
-        estimate.method().word());
+    return EstimatedFigures.of(estimate);
   }
 
   private static FitFindings.Curvature curvature(Fit fit, CurvatureProfile profile) {
@@ -273,34 +277,21 @@ final class FitStage {
     return points;
   }
 
-  private List<FitFindings.Influential> influential(Solution numbers) {
-    RowsUsed used = numbers.treatment().rows();
-    return Influence.most(numbers.design(), numbers.linear(), INFLUENTIAL).stream()
-        .map(
-            found -> {
-              int row = used.panelRow(found.row());
-              String period = panel.periods().get(panel.rowPeriods().get(row));
-              return new FitFindings.Influential(
-                  panel.fileRows().get(row),
-                  panel.plants().get(panel.plantOf(row)),
-                  used.kind() == RowsUsed.Kind.PLANT_MEANS ? "mean of its periods" : period,
-                  found.leverage(),
-                  found.cooksDistance());
-            })
-        .toList();
-  }
-
   private List<Said> remarks(
       Fit fit,
       FitFindings.Regular regular,
       List<FitFindings.Pair> elasticities,
-      List<Verdict> verdicts) {
+      List<Verdict> verdicts,
+      List<Said> robustness) {
     List<Said> remarks = new ArrayList<>();
     verdicts.stream()
         .filter(verdict -> Double.isNaN(verdict.p()))
         .forEach(verdict -> remarks.add(Said.of("note", "test-not-made", verdict.sentence())));
     fit.reasons().forEach(reason -> remarks.add(Said.of("warning", fit.state().word(), reason)));
-    CovarianceWords.few(fit.numbers().covarianceSource()).ifPresent(remarks::add);
+    CovarianceWords.few(
+            fit.numbers().covarianceSource(), study.estimation().resampling().isPresent())
+        .ifPresent(remarks::add);
+    remarks.addAll(robustness);
     remarks.addAll(new PanelStage(fit).remarks());
     if (regular.both() < regular.rows()) {
       remarks.add(Said.of("warning", "irregular-rows", RegularityFindings.words(regular)));

@@ -1,6 +1,7 @@
 package isowright.study;
 
 import isowright.estimation.Fit;
+import isowright.estimation.Replication;
 import isowright.estimation.Unfit;
 import isowright.records.Panel;
 import isowright.records.Reading;
@@ -11,6 +12,7 @@ import isowright.study.PlanFindings.Planned;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.IntStream;
 
 /**
  * Runs the stages of a study in order: records, technologies, least cost, review.
@@ -59,11 +61,17 @@ public final class Pipeline {
     progress.stage("fitting technologies", 2, STAGES);
     List<Fit> fits = new ArrayList<>();
     List<Fitted> fitted = new ArrayList<>();
+    List<Optional<Replication>> refits = new ArrayList<>();
     if (panel.isPresent() && !study.technologies().isEmpty()) {
       FitStage stage = new FitStage(panel.get(), study);
       fits.addAll(stage.fit());
       refuseIfNothingWasEstimated(fits);
-      fitted.addAll(fits.parallelStream().map(stage::findings).toList());
+      refits.addAll(fits.stream().map(stage::replication).toList());
+      fitted.addAll(
+          IntStream.range(0, fits.size())
+              .parallel()
+              .mapToObj(f -> stage.findings(fits.get(f), refits.get(f)))
+              .toList());
     }
 
     Optional<Reading> costReading =
@@ -81,7 +89,9 @@ public final class Pipeline {
 
     progress.stage("answering least-cost questions", 3, STAGES);
     List<Candidate> candidates = new ArrayList<>();
-    fits.forEach(fit -> candidates.add(Candidate.fitted(fit)));
+    for (int f = 0; f < fits.size(); f++) {
+      candidates.add(Candidate.fitted(fits.get(f), refits.get(f)));
+    }
     study.given().forEach(given -> candidates.add(Candidate.given(given)));
     List<Planned> plans = new ArrayList<>(new PlanStage(study, panel, candidates).plans());
     plans.addAll(costPlans);

@@ -1,7 +1,7 @@
 package isowright.study;
 
 import isowright.inference.DeltaMethod;
-import isowright.inference.Estimate;
+import isowright.inference.Intervals;
 import isowright.leastcost.CostCurve;
 import isowright.leastcost.LeastCost;
 import isowright.leastcost.Minimiser;
@@ -18,11 +18,11 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.function.Function;
 import java.util.function.Predicate;
+import java.util.stream.Stream;
 
 /**
  * The figures of a plan with their uncertainty: money and quantities on the log scale (they are
- * positive), shares on their own. Without a delta method (a technology taken as known) all figures
- * are exact.
+ * positive), shares on their own. Of a technology taken as known all figures are exact.
  */
 final class PlanFigures {
 
@@ -41,11 +41,18 @@ final class PlanFigures {
   }
 
   private final List<String> inputs;
-  private final Optional<DeltaMethod> delta;
+  private final Optional<Intervals> intervals;
+  private final Optional<Intervals> curveIntervals;
 
-  PlanFigures(List<String> inputs, Optional<DeltaMethod> delta) {
+  /**
+   * @param intervals for the figures of the plan; absent where they are exact
+   * @param curveIntervals for the points of its cost curve, which are many
+   */
+  PlanFigures(
+      List<String> inputs, Optional<Intervals> intervals, Optional<Intervals> curveIntervals) {
     this.inputs = inputs;
-    this.delta = delta;
+    this.intervals = intervals;
+    this.curveIntervals = curveIntervals;
   }
 
   Answer answer(Technology technology, Question question, Plan plan) {
@@ -54,9 +61,14 @@ final class PlanFigures {
     }
     int n = inputs.size();
     List<Figure> positive =
-        figures(technology, t -> money(Minimiser.of(t), question, plan), DeltaMethod.Scale.LOG);
+        figures(
+            intervals,
+            technology,
+            t -> money(Minimiser.of(t), question, plan),
+            DeltaMethod.Scale.LOG);
     List<Figure> shares =
         figures(
+            intervals,
             technology,
             t -> {
               Plan p = Minimiser.of(t).plan(question, plan);
@@ -66,7 +78,10 @@ final class PlanFigures {
     List<Said> remarks = new ArrayList<>();
     boolean unsure =
         positive.stream()
+            .filter(f -> !EstimatedFigures.resampled(f))
             .anyMatch(f -> f.uncertainty().map(u -> Double.isNaN(u.standardError())).orElse(false));
+    ResamplingWords.failed(Stream.concat(positive.stream(), shares.stream()))
+        .ifPresent(remarks::add);
     if (unsure) {
       remarks.add(
           Said.of(
@@ -107,6 +122,7 @@ final class PlanFigures {
     int width = 3 + inputs.size();
     List<Figure> all =
         figures(
+            curveIntervals,
             technology,
             t -> {
               LeastCost leastCost = Minimiser.of(t);
@@ -152,17 +168,19 @@ final class PlanFigures {
     return row;
   }
 
-  private List<Figure> figures(
-      Technology technology, Function<Technology, double[]> functions, DeltaMethod.Scale scale) {
-    if (delta.isEmpty()) {
+  private static List<Figure> figures(
+      Optional<Intervals> by,
+      Technology technology,
+      Function<Technology, double[]> functions,
+      DeltaMethod.Scale scale) {
+    if (by.isEmpty()) {
       List<Figure> exact = new ArrayList<>();
       for (double value : functions.apply(technology)) {
         exact.add(Figure.exact(value));
       }
       return exact;
     }
-    List<Estimate> estimates = delta.get().estimates(functions, scale);
-    return estimates.stream().map(FitStage::figure).toList();
+    return by.get().estimates(functions, scale).stream().map(EstimatedFigures::of).toList();
   }
 
   private static Optional<Figure> finite(Figure figure) {

@@ -3,6 +3,7 @@ package isowright.study;
 import isowright.estimation.EstimatedTechnology;
 import isowright.estimation.Productivity;
 import isowright.inference.DeltaMethod;
+import isowright.inference.Intervals;
 import isowright.inference.Support;
 import isowright.leastcost.Isoquant;
 import isowright.leastcost.Minimiser;
@@ -63,6 +64,7 @@ final class PlanStage {
     PlanFigures figures =
         new PlanFigures(
             study.inputs(),
+            candidate.fit().map(f -> Intervals.of(estimated, study.estimation().confidence())),
             candidate.fit().map(f -> DeltaMethod.of(estimated, study.estimation().confidence())));
     List<Said> remarks = new ArrayList<>();
     String status = status(asked, plan, remarks);

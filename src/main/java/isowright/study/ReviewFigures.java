@@ -2,12 +2,14 @@ package isowright.study;
 
 import isowright.estimation.EstimatedTechnology;
 import isowright.inference.Estimate;
+import isowright.inference.ReplicatedIntervals;
 import isowright.inference.Support;
 import isowright.leastcost.Plan;
 import isowright.records.Panel;
 import isowright.review.Condition;
 import isowright.review.Conditions;
 import isowright.review.EfficientScale;
+import isowright.review.FiledCost;
 import isowright.review.Gap;
 import isowright.review.GapEstimate;
 import isowright.study.Findings.Said;
@@ -23,11 +25,16 @@ import java.util.Optional;
 /** Turns filings held against one technology in one period into findings. */
 final class ReviewFigures {
 
+  /** Of more filings in a period the gaps are not worked out again for every refit. */
+  private static final int MOST_REFITTED = 2_000;
+
   private final Candidate candidate;
   private final String period;
   private final Support support;
   private final EfficientScale scale;
   private final Conditions conditions;
+  private final Optional<ReplicatedIntervals> refits;
+  private final int filings;
 
   ReviewFigures(
       Panel panel,
@@ -47,6 +54,9 @@ final class ReviewFigures {
     }
     this.scale = EfficientScale.of(reference, level, smallest, largest);
     this.conditions = Conditions.on(reference, level);
+    this.filings = FilingRows.of(panel, period).length;
+    this.refits =
+        filings <= MOST_REFITTED ? ReplicatedIntervals.of(reference, level) : Optional.empty();
   }
 
   /**
@@ -78,20 +88,57 @@ final class ReviewFigures {
           held, gap.status() == Plan.Status.INFEASIBLE ? "infeasible" : "irregular", remarks);
     }
     boolean inside = support.inside(estimate.plan().mix());
+    List<Estimate> four = refitted(filing, estimate);
+    ResamplingWords.failed(four.stream().map(this::figure)).ifPresent(remarks::add);
     return new Reviewed(
         held.plant(),
         period,
         candidate.name(),
         gap.filed(),
         gap.atPrices(),
-        Optional.of(figure(estimate.leastCost())),
-        Optional.of(figure(estimate.difference())),
+        Optional.of(figure(four.get(0))),
+        Optional.of(figure(four.get(1))),
         gap.unreconciled(),
-        split(gap, estimate.technical()),
-        split(gap, estimate.mix()),
+        split(gap, four.get(2)),
+        split(gap, four.get(3)),
         inside ? "solved" : "outside-records",
         Optional.of(detail(filing, estimate, needed)),
         remarks);
+  }
+
+  /** Least cost, the gap, its technical part, that of the mix: with their refits, where any are. */
+  private List<Estimate> refitted(FilingRows.Filing filing, GapEstimate estimate) {
+    List<Estimate> four =
+        List.of(estimate.leastCost(), estimate.difference(), estimate.technical(), estimate.mix());
+    return refits
+        .map(
+            r ->
+                r.refitted(
+                    four,
+                    t -> {
+                      Gap gap =
+                          FiledCost.against(t).gap(filing.mix(), filing.question(), filing.filed());
+                      return new double[] {gap.leastCost(), gap.gap(), gap.technical(), gap.mix()};
+                    }))
+        .orElse(four);
+  }
+
+  /** Said where there are too many filings for refits. */
+  Optional<Said> unrefitted() {
+    return filings > MOST_REFITTED && candidate.replication().isPresent()
+        ? Optional.of(
+            Said.of(
+                "note",
+                "gaps-not-refitted",
+                "There are "
+                    + filings
+                    + " filings in "
+                    + period
+                    + "; of more than "
+                    + MOST_REFITTED
+                    + " the gaps are not worked out again for plants drawn anew or left out, and"
+                    + " their intervals are those of propagation."))
+        : Optional.empty();
   }
 
   private Reviewed without(HeldFiling held, String status, List<Said> remarks) {

@@ -27,10 +27,7 @@ record ReviewReference(Study.Productivity against, boolean smearing) {
   EstimatedTechnology of(Candidate candidate, int period) {
     Productivity productivity = PlanStage.productivity(against, Optional.empty());
     EstimatedTechnology estimated = candidate.at(period, productivity);
-    return new EstimatedTechnology(
-        estimated.technology().shifted(shift(candidate)),
-        estimated.covariance(),
-        estimated.degreesOfFreedom());
+    return estimated.shifted(shift(candidate));
   }
 
   /** What the smearing factor adds to ln Q; 0 where there is none. */

@@ -114,6 +114,7 @@ final class ReviewStage {
             .map(h -> figures.reviewed(h, size(h) >= threshold))
             .collect(Collectors.toList()));
     figures.direction(held).ifPresent(remarks::add);
+    figures.unrefitted().ifPresent(remarks::add);
     String name = panel.periods().get(period);
     new OrderStage(filing.simulation(), level)
         .order(candidate, name, reference, held)

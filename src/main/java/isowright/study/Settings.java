@@ -79,6 +79,12 @@ final class Settings {
       settings.put("estimation.scaling", how.scaled() ? "geometric-mean" : "none");
       settings.put("estimation.standard-errors", FitStage.standardErrors(study).word());
       held(how.held(), settings);
+      how.resampling()
+          .ifPresent(
+              drawing -> {
+                settings.put("estimation.resampling.draws", Integer.toString(drawing.draws()));
+                settings.put("estimation.resampling.seed", Long.toString(drawing.seed()));
+              });
       settings.put(
           "questions.returns-to-scale", Double.toString(study.questions().returnsToScale()));
       settings.put("questions.substitution", Double.toString(study.questions().substitution()));

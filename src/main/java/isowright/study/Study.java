@@ -1,6 +1,7 @@
 package isowright.study;
 
 import isowright.estimation.Estimator;
+import isowright.estimation.Replication;
 import isowright.estimation.Specification;
 import isowright.records.Keep;
 import isowright.records.Roles;
@@ -99,7 +100,8 @@ public record Study(
   /**
    * How technologies are fitted; {@code standardErrors} absent means clustered where there is a
    * plant column, else robust. Of the principles asked for, the technologies rest on the first; the
-   * others are set beside it. None: least squares.
+   * others are set beside it. None: least squares. Where {@code resampling} is there, every
+   * headline figure is resampled.
    */
   public record Estimation(
       Specification.PlantEffects plantEffects,
@@ -109,14 +111,15 @@ public record Study(
       Optional<Specification.StandardErrors> standardErrors,
       double confidence,
       List<Estimator> estimators,
-      Held held) {
+      Held held,
+      Optional<Replication.Drawing> resampling) {
 
     /** Copies the list. */
     public Estimation {
       estimators = List.copyOf(estimators);
     }
 
-    /** By least squares. */
+    /** By least squares, without resampling. */
     public Estimation(
         Specification.PlantEffects plantEffects,
         Specification.Time time,
@@ -131,19 +134,36 @@ public record Study(
           standardErrors,
           confidence,
           List.of(),
-          Held.FREE);
+          Held.FREE,
+          Optional.empty());
     }
 
     /** The same by these principles. */
     Estimation by(List<Estimator> principles) {
       return new Estimation(
-          plantEffects, time, components, scaled, standardErrors, confidence, principles, held);
+          plantEffects,
+          time,
+          components,
+          scaled,
+          standardErrors,
+          confidence,
+          principles,
+          held,
+          resampling);
     }
 
     /** The same with the forms held to this. */
     Estimation held(Held to) {
       return new Estimation(
-          plantEffects, time, components, scaled, standardErrors, confidence, estimators, to);
+          plantEffects,
+          time,
+          components,
+          scaled,
+          standardErrors,
+          confidence,
+          estimators,
+          to,
+          resampling);
     }
 
     /** The principle that the technologies rest on. */

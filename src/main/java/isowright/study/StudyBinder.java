@@ -54,11 +54,12 @@ final class StudyBinder {
           "scaling",
           "standard-errors",
           "confidence",
+          "resampling",
           "restrict",
           "regularity",
           "nests");
   private static final List<String> ESTIMATION_LATER =
-      List.of("resampling", "zeros", "instruments", "proxy", "frontier");
+      List.of("zeros", "instruments", "proxy", "frontier");
 
   private final Path file;
   private final String sha256;
@@ -203,7 +204,8 @@ final class StudyBinder {
         errors,
         confidence(section),
         List.of(),
-        new HeldBinder(section, root, declared.inputs(), technologies).bind(effects));
+        new HeldBinder(section, root, declared.inputs(), technologies).bind(effects),
+        ResamplingBinder.read(section, !technologies.isEmpty()));
   }
 
   private static void checkColumns(YamlSection section, StandardErrors kind, Declared declared) {

@@ -214,15 +214,21 @@ class ReplicationTest {
   void panelsPutTogetherGiveTheSameAsProducts() {
     Panel panel = panel(3);
     Fit fit = fit(panel, "translog", PlantEffects.NONE, Time.TREND);
-    RefittedParameters quick = new LinearRefitting(fit).drawn(20, 3);
+    RefittedParameters quick = refitting(fit).drawn(20, 3);
     RefittedParameters slow = new PanelRefitting(fit).drawn(20, 3);
-    RefittedParameters quickPeriods = new LinearRefitting(fit).withoutPeriods().orElseThrow();
+    RefittedParameters quickPeriods = refitting(fit).withoutPeriods().orElseThrow();
     RefittedParameters slowPeriods = new PanelRefitting(fit).withoutPeriods().orElseThrow();
-    RefittedParameters quickPlants = new LinearRefitting(fit).withoutPlants().orElseThrow();
+    RefittedParameters quickPlants = refitting(fit).withoutPlants().orElseThrow();
     RefittedParameters slowPlants = new PanelRefitting(fit).withoutPlants().orElseThrow();
     assertSame(quick, slow, 20);
     assertSame(quickPeriods, slowPeriods, PERIODS);
     assertSame(quickPlants, slowPlants, PLANTS);
+  }
+
+  private static Refitting refitting(Fit fit) {
+    Refitting refitting = Refitting.of(fit).orElseThrow();
+    assertThat(refitting).isInstanceOf(LinearRefitting.class);
+    return refitting;
   }
 
   private static void assertSame(RefittedParameters quick, RefittedParameters slow, int count) {

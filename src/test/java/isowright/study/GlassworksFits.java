@@ -308,13 +308,25 @@ final class GlassworksFits {
                       points.get(7).plant(),
                       points.get(7).period(),
                       0.141,
-                      0.32),
+                      0.32,
+                      2.31,
+                      0.94,
+                      0.71,
+                      0.52,
+                      "labour",
+                      3),
                   new Influential(
                       points.get(64).row(),
                       points.get(64).plant(),
                       points.get(64).period(),
                       0.098,
-                      0.11));
+                      0.11,
+                      -1.44,
+                      -0.47,
+                      1.02,
+                      -0.3,
+                      "machines",
+                      1));
       return new Fitted(
           technology,
           how,
@@ -334,6 +346,7 @@ final class GlassworksFits {
           points.isEmpty() ? Optional.empty() : Optional.of(1.0064),
           points,
           influence,
+          RobustnessFindings.NONE,
           remarks);
     }
 
