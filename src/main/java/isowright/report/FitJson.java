@@ -50,6 +50,7 @@ final class FitJson {
     PanelJson.write(file, fit.panel());
     file.number("smearing", fit.smearing().orElse(Double.NaN));
     rows(file, fit);
+    RefitJson.write(file, fit);
     file.remarks("remarks", fit.remarks());
   }
 
@@ -201,6 +202,14 @@ final class FitJson {
           file.text("period", row.period());
           file.number("leverage", row.leverage());
           file.number("cook", row.cook());
+          if (Double.isFinite(row.dffits())) {
+            file.number("deletedResidual", row.deletedResidual());
+            file.number("dffits", row.dffits());
+            file.number("covarianceRatio", row.covarianceRatio());
+            file.number("dfbetas", row.dfbetas());
+            file.text("dfbetasOf", row.parameter());
+            file.whole("beyond", row.beyond());
+          }
         });
   }
 

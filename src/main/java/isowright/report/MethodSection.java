@@ -221,9 +221,7 @@ final class MethodSection {
           Text.of(
               "Predictions of output from logs by the smearing factor " + cite(Source.DUAN) + "."));
     }
-    if (material.findings().fits().stream().anyMatch(fit -> !fit.influence().isEmpty())) {
-      points.add(Text.of("Influence by leverage and Cook’s distance " + cite(Source.COOK) + "."));
-    }
+    points.addAll(RobustnessMethod.points(material, this::cite));
     points.add(
         Text.of("On inputs chosen knowing productivity, see " + cite(Source.MARSCHAK) + "."));
     return new Section(ID + "-estimation", "Estimation", List.of(new Points(false, points)));

@@ -39,6 +39,7 @@ final class PlanJson {
           file.truth("inside", point.inside());
         });
     file.matrix("isoquant", plan.isoquant().toArray(new double[0][]));
+    RefitJson.write(file, plan);
     file.remarks("remarks", plan.remarks());
   }
 
@@ -64,6 +65,7 @@ final class PlanJson {
       ReviewJson.detail(file, review.detail().get());
     }
     file.text("status", review.status());
+    RefitJson.write(file, review);
     file.remarks("remarks", review.remarks());
   }
 }

@@ -5,6 +5,7 @@ import isowright.report.Document.Cell;
 import isowright.report.Document.Column;
 import isowright.report.Document.Group;
 import isowright.report.Document.Paragraph;
+import isowright.report.Document.Points;
 import isowright.report.Document.Row;
 import isowright.report.Document.Section;
 import isowright.report.Document.Table;
@@ -35,6 +36,11 @@ final class SensitivitySection {
                 : "Each row is one figure, each column one technology. Where a row differs by more than"
                     + " its intervals, the answer rests on the form chosen as much as on the records."));
     blocks.add(table(material, fits, given));
+    List<Text> lines =
+        material.usable().stream().map(RobustnessSection::line).flatMap(Optional::stream).toList();
+    if (!lines.isEmpty()) {
+      blocks.add(new Points(false, lines));
+    }
     blocks.addAll(Material.notices(material.findings().remarks()));
     return new Section(ID, "Sensitivity to the technology", blocks);
   }

@@ -33,6 +33,11 @@ enum Source {
       "Barten, A. P. (1969)",
       "Maximum Likelihood Estimation of a Complete System of Demand Equations",
       "European Economic Review 1, 7–73"),
+  BELSLEY(
+      "Belsley, Kuh and Welsch 1980",
+      "Belsley, D. A., Kuh, E. and Welsch, R. E. (1980)",
+      "Regression Diagnostics",
+      "New York: Wiley"),
   BERNDT(
       "Berndt and Wood 1975",
       "Berndt, E. R. and Wood, D. O. (1975)",
@@ -54,6 +59,11 @@ enum Source {
       "Cameron, A. C. and Miller, D. L. (2015)",
       "A Practitioner’s Guide to Cluster-Robust Inference",
       "Journal of Human Resources 50, 317–372"),
+  CAMERON_BOOTSTRAP(
+      "Cameron, Gelbach and Miller 2008",
+      "Cameron, A. C., Gelbach, J. B. and Miller, D. L. (2008)",
+      "Bootstrap-Based Improvements for Inference with Clustered Errors",
+      "Review of Economics and Statistics 90, 414–427"),
   CAMERON_GELBACH(
       "Cameron, Gelbach and Miller 2011",
       "Cameron, A. C., Gelbach, J. B. and Miller, D. L. (2011)",
@@ -89,6 +99,11 @@ enum Source {
       "Cook, R. D. (1977)",
       "Detection of Influential Observation in Linear Regression",
       "Technometrics 19, 15–18"),
+  DAVISON(
+      "Davison and Hinkley 1997",
+      "Davison, A. C. and Hinkley, D. V. (1997)",
+      "Bootstrap Methods and their Application",
+      "Cambridge: Cambridge University Press"),
   DRISCOLL(
       "Driscoll and Kraay 1998",
       "Driscoll, J. C. and Kraay, A. C. (1998)",
@@ -99,6 +114,11 @@ enum Source {
       "Duan, N. (1983)",
       "Smearing Estimate: A Nonparametric Retransformation Method",
       "Journal of the American Statistical Association 78, 605–610"),
+  EFRON(
+      "Efron 1987",
+      "Efron, B. (1987)",
+      "Better Bootstrap Confidence Intervals",
+      "Journal of the American Statistical Association 82, 171–185"),
   FARRELL(
       "Farrell 1957",
       "Farrell, M. J. (1957)",
@@ -115,6 +135,7 @@ enum Source {
       "Specification Tests in Econometrics",
       "Econometrica 46, 1251–1271"),
   HICKS("Hicks 1932", "Hicks, J. R. (1932)", "The Theory of Wages", "London: Macmillan"),
+  HUBER("Huber 1981", "Huber, P. J. (1981)", "Robust Statistics", "New York: Wiley"),
   KLUMP(
       "Klump and de La Grandville 2000",
       "Klump, R. and de La Grandville, O. (2000)",
@@ -179,6 +200,11 @@ enum Source {
       "Wallace, T. D. and Hussain, A. (1969)",
       "The Use of Error Components Models in Combining Cross Section with Time Series Data",
       "Econometrica 37, 55–72"),
+  WEBB(
+      "Webb 2023",
+      "Webb, M. D. (2023)",
+      "Reworking Wild Bootstrap-Based Inference for Clustered Errors",
+      "Canadian Journal of Economics 56, 839–858"),
   WOOLDRIDGE(
       "Wooldridge 2002",
       "Wooldridge, J. M. (2002)",

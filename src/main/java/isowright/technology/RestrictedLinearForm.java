@@ -8,8 +8,6 @@ import org.apache.commons.math3.linear.Array2DRowRealMatrix;
 import org.apache.commons.math3.linear.ArrayRealVector;
 import org.apache.commons.math3.linear.DecompositionSolver;
 import org.apache.commons.math3.linear.QRDecomposition;
-import org.apache.commons.math3.linear.RRQRDecomposition;
-import org.apache.commons.math3.linear.RealMatrix;
 
 /**
  * A form linear in its parameters, held exactly to linear restrictions R β = r: β = p + N γ with γ
@@ -164,14 +162,7 @@ final class RestrictedLinearForm implements LinearForm {
     static Elimination of(double[][] rows) {
       int count = rows.length;
       int size = rows[0].length - 1;
-      RealMatrix r = new Array2DRowRealMatrix(rows).getSubMatrix(0, count - 1, 0, size - 1);
-      RealMatrix permutation = new RRQRDecomposition(r).getP();
-      int[] bound = new int[count];
-      for (int b = 0; b < count; b++) {
-        while (permutation.getEntry(bound[b], b) == 0) {
-          bound[b]++;
-        }
-      }
+      int[] bound = pivots(rows, size);
       Arrays.sort(bound);
       int[] free = new int[size - count];
       int at = 0;
@@ -189,6 +180,36 @@ final class RestrictedLinearForm implements LinearForm {
           solver.solve(new Array2DRowRealMatrix(columns(rows, free), false)).getData();
       double[] fixed = solver.solve(new ArrayRealVector(right, false)).toArray();
       return new Elimination(free, bound, weights, fixed);
+    }
+
+    /** Columns that elimination with the largest entry as pivot goes through: independent ones. */
+    private static int[] pivots(double[][] rows, int size) {
+      double[][] left = Arrays.stream(rows).map(double[]::clone).toArray(double[][]::new);
+      int[] pivots = new int[left.length];
+      for (int step = 0; step < left.length; step++) {
+        int row = step;
+        int column = 0;
+        for (int i = step; i < left.length; i++) {
+          for (int k = 0; k < size; k++) {
+            if (Math.abs(left[i][k]) > Math.abs(left[row][column])) {
+              row = i;
+              column = k;
+            }
+          }
+        }
+        double[] pivot = left[row];
+        left[row] = left[step];
+        left[step] = pivot;
+        pivots[step] = column;
+        for (int i = step + 1; i < left.length; i++) {
+          double part = left[i][column] / pivot[column];
+          for (int k = 0; k < size; k++) {
+            left[i][k] -= part * pivot[k];
+          }
+          left[i][column] = 0;
+        }
+      }
+      return pivots;
     }
 
     private static double[][] columns(double[][] rows, int[] which) {
