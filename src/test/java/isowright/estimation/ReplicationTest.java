@@ -11,6 +11,7 @@ import isowright.estimation.Specification.Time;
 import isowright.records.Panel;
 import isowright.regression.ClusterBootstrap;
 import isowright.technology.Form;
+import isowright.technology.Restriction;
 import isowright.technology.Technology;
 import java.util.ArrayList;
 import java.util.Arrays;
@@ -83,14 +84,22 @@ class ReplicationTest {
     Fit fit =
         Estimation.fit(
             panel,
-            new Specification(
-                Form.named(form), effects, time, true, StandardErrors.CLUSTERED, .95));
+            new Specification(form(form), effects, time, true, StandardErrors.CLUSTERED, .95));
     assertThat(fit.state().usable()).isTrue();
     return fit;
   }
 
+  /** A form by its name, or the translog held to constant returns. */
+  private static Form form(String name) {
+    return name.equals("restricted")
+        ? Form.named("translog").restricted(Restriction.CONSTANT_RETURNS)
+        : Form.named(name);
+  }
+
   @ParameterizedTest
   @CsvSource({
+    "restricted, NONE, TREND",
+    "restricted, WITHIN, TREND",
     "cobb-douglas, NONE, TREND",
     "cobb-douglas, WITHIN, PERIOD_EFFECTS",
     "translog, WITHIN, TREND",
@@ -168,6 +177,7 @@ class ReplicationTest {
   @ParameterizedTest
   @CsvSource({
     "cobb-douglas, NONE",
+    "restricted, WITHIN",
     "translog, WITHIN",
     "ces, NONE",
     "ces, WITHIN",
@@ -247,18 +257,25 @@ class ReplicationTest {
    * the plants' levels too would make it five times as large.
    */
   @ParameterizedTest
-  @CsvSource({"0", "1", "2"})
-  void theConstantOfADrawSpeaksOfThePlantsRecorded(int which) {
+  @CsvSource({
+    "0, cobb-douglas, WITHIN",
+    "1, cobb-douglas, WITHIN",
+    "2, cobb-douglas, WITHIN",
+    "2, restricted, WITHIN",
+    "1, cobb-douglas, RANDOM"
+  })
+  void theConstantOfADrawSpeaksOfThePlantsRecorded(int which, String form, PlantEffects effects) {
     Panel panel = panel(4);
-    Fit fit = fit(panel, "cobb-douglas", PlantEffects.WITHIN, Time.TREND);
+    Fit fit = fit(panel, form, effects, Time.TREND);
     Replication replication = Replication.of(fit, Optional.of(new Drawing(2000, 11)));
     EstimatedTechnology estimated = replication.at(2, PRODUCTIVITIES.get(which));
     double[] logs = fit.meanLogInputs();
-    double[] gradient = new double[4];
+    int p = estimated.technology().parameters().length;
+    double[] gradient = new double[p];
     estimated.technology().parameterGradient(logs, gradient);
     double variance = 0;
-    for (int k = 0; k < 4; k++) {
-      for (int l = 0; l < 4; l++) {
+    for (int k = 0; k < p; k++) {
+      for (int l = 0; l < p; l++) {
         variance += gradient[k] * estimated.covariance()[k][l] * gradient[l];
       }
     }
@@ -268,6 +285,7 @@ class ReplicationTest {
     for (int d = 0; d < 2000; d++) {
       squares += Math.pow(drawn.get(d).orElseThrow().logOutput(logs) - centre, 2) / 2000;
     }
+    System.out.println(form + effects + Math.sqrt(squares / variance));
     assertThat(Math.sqrt(squares / variance)).isBetween(.9, 1.1);
   }
 
