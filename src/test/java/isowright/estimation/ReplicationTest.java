@@ -285,7 +285,6 @@ class ReplicationTest {
     for (int d = 0; d < 2000; d++) {
       squares += Math.pow(drawn.get(d).orElseThrow().logOutput(logs) - centre, 2) / 2000;
     }
-    System.out.println(form + effects + Math.sqrt(squares / variance));
     assertThat(Math.sqrt(squares / variance)).isBetween(.9, 1.1);
   }
 
