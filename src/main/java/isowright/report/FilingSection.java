@@ -43,10 +43,24 @@ final class FilingSection {
             Weight.WARNING,
             Text.of(
                 "Unexplained cost is not waste. Product, site, age of plant, service and what the"
-                    + " records leave out stand in the gap beside anything that could be saved.")));
+                    + " records leave out stand in the gap beside anything that could be saved."
+                    + " Safe staffing, law, collective agreements and licensed practice come"
+                    + " first.")));
+    if (!material.findings().review().reference().isEmpty()) {
+      blocks.add(
+          Paragraph.of(
+              "Held against "
+                  + material.findings().review().reference()
+                  + ". Intervals hold the uncertainty of the technology; the filing, its quantities"
+                  + " and its prices are taken as they stand. A single year's chance in a plant's own"
+                  + " output is part of its gap."));
+    }
+    blocks.addAll(Material.notices(material.findings().review().remarks()));
     for (String technology : technologies(material)) {
       blocks.add(technology(material, technology));
     }
+    ReviewBlocks.sensitivity(material).ifPresent(blocks::add);
+    AllowanceBlocks.section(material).ifPresent(blocks::add);
     return new Section(ID, "Filed cost and least cost", blocks);
   }
 
@@ -70,6 +84,8 @@ final class FilingSection {
     reviews.sort(Comparator.comparingDouble(FilingSection::size).reversed());
     int shown = Math.min(LONGEST, reviews.size());
     blocks.add(table(material, technology, reviews.subList(0, shown), reviews.size()));
+    blocks.addAll(ReviewBlocks.orders(material, technology));
+    blocks.addAll(ReviewBlocks.needed(material, technology, reviews));
     reviews.stream()
         .filter(review -> !review.remarks().isEmpty())
         .limit(LONGEST_REMARKS)
