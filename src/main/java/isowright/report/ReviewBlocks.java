@@ -41,14 +41,14 @@ final class ReviewBlocks {
     List<Block> blocks = new ArrayList<>();
     for (Order order : material.findings().review().orders()) {
       if (order.technology().equals(technology)) {
-        blocks.add(order(material, order));
+        blocks.add(order(order));
         blocks.add(Paragraph.of(apart(order)));
       }
     }
     return blocks;
   }
 
-  private static Table order(Material material, Order order) {
+  private static Table order(Order order) {
     boolean year = order.groupsWithYear().isPresent();
     List<Column> columns = new ArrayList<>();
     columns.add(Column.ofNumbers("Rank", ""));
