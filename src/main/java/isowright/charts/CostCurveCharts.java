@@ -176,7 +176,7 @@ final class CostCurveCharts {
   private double[] ends(Function<Figure.Uncertainty, Double> end, double without) {
     return curve.stream()
         .flatMap(p -> java.util.stream.Stream.of(p.averageCost(), p.marginalCost()))
-        .mapToDouble(f -> f.uncertainty().map(end).orElse(without))
+        .mapToDouble(f -> f.uncertainty().map(end).filter(Double::isFinite).orElse(without))
         .toArray();
   }
 

@@ -31,7 +31,9 @@ public record Estimate(
     /** The set of values that a likelihood-ratio test does not reject. */
     PROFILE("profile"),
     /** Resampling of whole groups. */
-    RESAMPLING("resampling");
+    RESAMPLING("resampling"),
+    /** Draws of parameters from their estimated law. */
+    SIMULATION("simulation");
 
     private final String word;
 

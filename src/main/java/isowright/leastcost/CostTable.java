@@ -134,7 +134,7 @@ final class CostTable {
     return near.isPresent() ? leastCost.plan(asked) : plan;
   }
 
-  private static Point point(double output, Plan plan) {
+  static Point point(double output, Plan plan) {
     return new Point(output, plan.cost(), plan.marginalCost(), plan);
   }
 

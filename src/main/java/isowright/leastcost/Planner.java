@@ -76,8 +76,17 @@ public final class Planner {
    */
   public PlanOutcome again(PlanTask task, PlanOutcome near) {
     Found found =
-        pursuit(task.goal(), leastCost)
-            .pursue(near.settled(), near.fixedMoney(), Optional.of(near.plan()));
+        task.goal()
+            .fold(
+                target -> Optional.<Found>empty(),
+                budget -> Optional.<Found>empty(),
+                profit ->
+                    new ProfitPursuit(technology, leastCost, profit.price())
+                        .near(near.settled(), near.fixedMoney(), near.output(), near.plan()))
+            .orElseGet(
+                () ->
+                    pursuit(task.goal(), leastCost)
+                        .pursue(near.settled(), near.fixedMoney(), Optional.of(near.plan())));
     return found.state() == Pursuit.State.FOUND
         ? outcome(task, new Settled(near.settled(), near.fixedMoney(), found), near.proof())
         : none(found);

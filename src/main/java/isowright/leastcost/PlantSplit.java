@@ -6,6 +6,7 @@ import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 import java.util.PriorityQueue;
+import java.util.function.DoubleFunction;
 
 /**
  * How is a target split over plants at least cost, Σ q_p = Q, with own technologies, prices,
@@ -37,6 +38,7 @@ public final class PlantSplit {
 
   private final List<PlantOption> plants;
   private final List<CostTable> tables = new ArrayList<>();
+  private final List<DoubleFunction<CostTable.Point>> costs = new ArrayList<>();
   private final double target;
   private final int n;
   private double[] best = {};
@@ -49,7 +51,9 @@ public final class PlantSplit {
     this.target = target;
     n = plants.size();
     for (PlantOption plant : plants) {
-      tables.add(new CostTable(plant, target));
+      CostTable table = new CostTable(plant, target);
+      tables.add(table);
+      costs.add(table::examined);
     }
   }
 
@@ -64,6 +68,38 @@ public final class PlantSplit {
           "a target of " + target + " for " + plants.size() + " plants");
     }
     return new PlantSplit(plants, target).split();
+  }
+
+  /**
+   * The split by plants whose technologies differ a little from those of a split at hand, the same
+   * plants running and the same at capacity. Where marginal costs do not fix the split (constant
+   * returns), outputs stay as they were, which changes cost only to second order.
+   *
+   * @param near the split at hand
+   */
+  public static SplitOutcome again(List<PlantOption> plants, SplitOutcome near) {
+    int n = plants.size();
+    double[] outputs = new double[n];
+    double[] low = new double[n];
+    double[] high = new double[n];
+    List<DoubleFunction<CostTable.Point>> costs = new ArrayList<>();
+    int moving = 0;
+    for (int p = 0; p < n; p++) {
+      SplitOutcome.Share share = near.shares().get(p);
+      PlantOption plant = plants.get(p);
+      LeastCost leastCost = Minimiser.of(plant.technology());
+      costs.add(q -> CostTable.point(q, leastCost.plan(plant.question().at(q), share.plan())));
+      outputs[p] = share.output();
+      boolean free = share.runs() && !share.atCapacity();
+      low[p] = free ? 0 : share.output();
+      high[p] = free ? plant.capacity() : share.output();
+      moving += free ? 1 : 0;
+    }
+    if (moving > 1) {
+      SplitPolish polish = new SplitPolish(costs, outputs, low, high);
+      outputs = polish.converge() ? polish.outputs : outputs;
+    }
+    return SplitReport.again(plants, costs, outputs, near);
   }
 
   private SplitOutcome split() {
@@ -139,7 +175,7 @@ public final class PlantSplit {
       }
     }
     keep(outputs);
-    SplitPolish polish = new SplitPolish(tables, outputs, low, high);
+    SplitPolish polish = new SplitPolish(costs, outputs, low, high);
     polish.polish();
     for (int p = 0; p < n; p++) {
       if (polish.outputs[p] > 0) {

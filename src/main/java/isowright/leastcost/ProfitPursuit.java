@@ -26,6 +26,9 @@ final class ProfitPursuit implements Pursuit {
   /** The walk ends a factor of e^40 from the usual output: no plant is that large or small. */
   private static final double FARTHEST = 40;
 
+  /** How far from a known best output the search for a new one begins, in logs. */
+  private static final double CLOSE = 0.01;
+
   /** At a capacity itself marginal cost is beyond measure; it is asked this far short, in logs. */
   private static final double BESIDE = 1e-9;
 
@@ -67,6 +70,26 @@ final class ProfitPursuit implements Pursuit {
       return new Found(State.NOTHING, none, Double.NaN, Double.NaN);
     }
     return new Found(State.FOUND, best.get(), bestOutput, fixedMoney - bestProfit);
+  }
+
+  /**
+   * The best output near one that was best by a technology nearby; empty where marginal cost does
+   * not pass the price there, as at a capacity.
+   */
+  Optional<Found> near(Question question, double fixedMoney, double output, Plan plan) {
+    best = Optional.empty();
+    bestProfit = Double.NEGATIVE_INFINITY;
+    double middle = Math.log(output);
+    for (double width = CLOSE; width < 1 && best.isEmpty(); width *= 4) {
+      Climb climb = new Climb(leastCost, question, Optional.of(plan));
+      climb.at(middle - width);
+      Plan below = climb.plan;
+      climb.at(middle + width);
+      if (below.answered() && climb.plan.answered()) {
+        passage(question, middle - width, below, middle + width, climb.plan);
+      }
+    }
+    return best.map(found -> new Found(State.FOUND, found, bestOutput, fixedMoney - bestProfit));
   }
 
   /** Walks to larger outputs; the state says whether the walk ended where a best output can be. */
@@ -147,6 +170,9 @@ final class ProfitPursuit implements Pursuit {
 
   /** Beyond an output there is no answer: capacity, or the technology is no longer regular. */
   private Found edge(Question question, double low, Plan below, double high, Plan beyond) {
+    if (below.marginalCost() >= price) {
+      return new Found(State.FOUND, below, Math.exp(low), Double.NaN); // nothing better beyond
+    }
     Climb climb = new Climb(leastCost, question, Optional.of(below));
     double from = low;
     Plan fromPlan = below;

@@ -1,6 +1,7 @@
 package isowright.leastcost;
 
 import java.util.List;
+import java.util.function.DoubleFunction;
 
 /**
  * Newton's method for a split near a good one: marginal costs of the plants that can move are made
@@ -22,10 +23,13 @@ final class SplitPolish {
   /** A slope of marginal cost below this part of c/q is as good as none: constant returns. */
   private static final double LEVEL = 1e-10;
 
+  /** An elasticity of marginal cost below this does not fix a split to any digit that matters. */
+  private static final double FLAT = 1e-3;
+
   /** Marginal costs this close, relative, are equal: they carry the rounding of a solved mix. */
   private static final double EQUAL = 1e-12;
 
-  private final List<CostTable> tables;
+  private final List<DoubleFunction<CostTable.Point>> costs;
   private final double[] low;
   private final double[] high;
   private final int n;
@@ -37,10 +41,12 @@ final class SplitPolish {
   private final double[] slope;
 
   /**
+   * @param costs what each plant's cost is at an output
    * @param low the least output of each plant that runs; plants that do not have low and high 0
    */
-  SplitPolish(List<CostTable> tables, double[] outputs, double[] low, double[] high) {
-    this.tables = tables;
+  SplitPolish(
+      List<DoubleFunction<CostTable.Point>> costs, double[] outputs, double[] low, double[] high) {
+    this.costs = costs;
     this.outputs = outputs.clone();
     this.low = low;
     this.high = high;
@@ -80,6 +86,30 @@ final class SplitPolish {
         return;
       }
     }
+  }
+
+  /**
+   * Newton's method to the end from a start that is nearly there, whether cost falls or not.
+   *
+   * @return false where marginal costs do not move with output, so that nothing fixes the split
+   */
+  boolean converge() {
+    for (int iteration = 0; iteration < ITERATIONS; iteration++) {
+      double[] step = step();
+      double longest = 0;
+      for (int p = 0; p < n; p++) {
+        boolean level = high[p] > low[p] && Math.abs(slope[p]) * outputs[p] < FLAT * marginal[p];
+        if (level) {
+          return false;
+        }
+        longest = Math.max(longest, Math.abs(step[p]) / Math.max(outputs[p], 1e-300));
+        outputs[p] += step[p];
+      }
+      if (!(longest > EQUAL)) {
+        return true;
+      }
+    }
+    return true;
   }
 
   /** Newton's step with plants that would leave their range held at its end. */
@@ -129,9 +159,9 @@ final class SplitPolish {
     double q = outputs[p];
     double above = Math.min(q * (1 + BESIDE), high[p]);
     double below = Math.max(q * (1 - BESIDE), low[p]);
-    CostTable.Point here = tables.get(p).examined(q);
-    CostTable.Point up = tables.get(p).examined(above);
-    CostTable.Point down = tables.get(p).examined(below);
+    CostTable.Point here = costs.get(p).apply(q);
+    CostTable.Point up = costs.get(p).apply(above);
+    CostTable.Point down = costs.get(p).apply(below);
     marginal[p] = here.marginal();
     slope[p] = (up.marginal() - down.marginal()) / (above - below);
     if (!Double.isFinite(marginal[p]) || !Double.isFinite(slope[p])) {
@@ -146,7 +176,7 @@ final class SplitPolish {
     double sum = 0;
     for (int p = 0; p < n; p++) {
       if (high[p] > 0) {
-        double cost = tables.get(p).examined(at[p]).cost();
+        double cost = costs.get(p).apply(at[p]).cost();
         if (Double.isNaN(cost)) {
           return Double.POSITIVE_INFINITY;
         }

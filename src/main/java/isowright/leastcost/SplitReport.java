@@ -4,12 +4,46 @@ import isowright.leastcost.PlanOutcome.State;
 import isowright.leastcost.SplitOutcome.Share;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.function.DoubleFunction;
 
 /** What is said of a split that was found, or of a target that no split reaches. */
 record SplitReport(List<PlantOption> plants, List<CostTable> tables, double target) {
 
   /** An output this near the most a plant can make is at capacity. */
   private static final double AT = 1e-9;
+
+  /** The same split with outputs and technologies moved a little. */
+  static SplitOutcome again(
+      List<PlantOption> plants,
+      List<DoubleFunction<CostTable.Point>> costs,
+      double[] outputs,
+      SplitOutcome near) {
+    List<Share> shares = new ArrayList<>();
+    double total = 0;
+    double lambda = Double.POSITIVE_INFINITY;
+    for (int p = 0; p < plants.size(); p++) {
+      Share before = near.shares().get(p);
+      if (!before.runs()) {
+        shares.add(before);
+        total += before.cost();
+        continue;
+      }
+      CostTable.Point point = costs.get(p).apply(outputs[p]);
+      double cost = point.cost() + plants.get(p).runningCost();
+      total += cost;
+      shares.add(new Share(outputs[p], cost, point.plan(), before.atCapacity(), point.marginal()));
+      lambda = before.atCapacity() ? lambda : Math.min(lambda, point.marginal());
+    }
+    List<Share> valued = new ArrayList<>();
+    for (Share share : shares) {
+      double value =
+          share.runs() && share.atCapacity() && Double.isFinite(lambda)
+              ? lambda - share.capacityValue()
+              : 0;
+      valued.add(new Share(share.output(), share.cost(), share.plan(), share.atCapacity(), value));
+    }
+    return new SplitOutcome(near.state(), valued, total, lambda, near.proof(), near.reason());
+  }
 
   SplitOutcome outOfReach(double most) {
     List<String> ends = new ArrayList<>();

@@ -40,6 +40,7 @@ final class PlanJson {
         });
     file.matrix("isoquant", plan.isoquant().toArray(new double[0][]));
     RefitJson.write(file, plan);
+    PlanDetailJson.write(file, plan.detail());
     file.remarks("remarks", plan.remarks());
   }
 

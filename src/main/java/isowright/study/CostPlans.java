@@ -210,7 +210,7 @@ final class CostPlans {
 
   private List<CurvePoint> curve(
       Study.LeastCostQuestion question, CostFigures figures, CostFit fit) {
-    double[] targets = CurveSpan.targets(question);
+    double[] targets = CurveSpan.targets(question, question.target());
     double[] v = point(question);
     int place = data.arguments().inputs().size();
     List<Double> kept = new ArrayList<>();

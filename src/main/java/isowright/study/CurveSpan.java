@@ -7,12 +7,10 @@ final class CurveSpan {
 
   private CurveSpan() {}
 
-  /** Those asked, or from half to one and a half times the target. */
-  static double[] targets(Study.LeastCostQuestion asked) {
+  /** Those asked, or from half to one and a half times the output of the plan. */
+  static double[] targets(Study.LeastCostQuestion asked, double output) {
     Study.Curve curve =
-        asked
-            .curve()
-            .orElseGet(() -> new Study.Curve(0.5 * asked.target(), 1.5 * asked.target(), POINTS));
+        asked.curve().orElseGet(() -> new Study.Curve(0.5 * output, 1.5 * output, POINTS));
     double[] targets = new double[curve.points()];
     for (int k = 0; k < targets.length; k++) {
       targets[k] =

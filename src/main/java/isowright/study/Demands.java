@@ -1,5 +1,6 @@
 package isowright.study;
 
+import isowright.cost.CostForm;
 import isowright.records.Column;
 import isowright.records.Nearest;
 import isowright.records.Panel;
@@ -10,7 +11,10 @@ import java.util.Optional;
 import java.util.stream.Collectors;
 import java.util.stream.Stream;
 
-/** Checks what a study asks of its records: plants, periods and prices that they do not hold. */
+/**
+ * Checks what a study asks of its records: plants, periods and prices that they do not hold; and
+ * goals that no technology taken as known can achieve.
+ */
 final class Demands {
 
   /** So many rows are named. */
@@ -27,10 +31,13 @@ final class Demands {
 
   static void check(Study study, Optional<Panel> panel) throws StudyRefused {
     Demands demands = new Demands(study, panel);
-    for (int q = 0; q < study.leastCost().size(); q++) {
-      demands.leastCost("least-cost[" + (q + 1) + "]", study.leastCost().get(q));
+    for (Study.LeastCostQuestion asked : study.leastCost()) {
+      demands.leastCost("least-cost[" + asked.terms().place() + "]", asked);
     }
     study.filing().ifPresent(demands::filing);
+    if (demands.mistakes.isEmpty()) {
+      demands.mistakes.addAll(new OutOfReach(study, panel).mistakes());
+    }
     if (!demands.mistakes.isEmpty()) {
       throw new StudyRefused(study.file(), KeyPlaces.of(study.file()).located(demands.mistakes));
     }
@@ -56,9 +63,14 @@ final class Demands {
   }
 
   private void leastCost(String key, Study.LeastCostQuestion asked) {
-    for (int i = 0; i < study.inputs().size(); i++) {
+    List<PlanTerms.Plant> plants = asked.terms().across();
+    boolean asksPrices =
+        plants.isEmpty() || plants.stream().anyMatch(plant -> plant.prices().isEmpty());
+    for (int i = 0; i < study.inputs().size() && asksPrices; i++) {
       String input = study.inputs().get(i);
-      if (!asked.prices().containsKey(input) && !priced(i)) {
+      boolean stated =
+          asked.prices().containsKey(input) || asked.terms().bands().containsKey(input);
+      if (!stated && !priced(i)) {
         mistake(
             key + ".prices",
             "no price of "
@@ -67,18 +79,45 @@ final class Demands {
                 + " column under inputs");
       }
     }
+    costFunctions(key, asked);
     asked.period().ifPresent(period -> period(key + ".period", period));
-    asked
-        .productivity()
-        .plant()
-        .ifPresent(
-            plant -> {
-              if (panel.isPresent() && !panel.get().plants().contains(plant)) {
-                mistake(
-                    key + ".productivity",
-                    "the records have no plant " + plant + nearest(plant, panel.get().plants()));
-              }
-            });
+    asked.productivity().plant().ifPresent(plant -> plant(key + ".productivity", plant));
+    for (int p = 0; p < plants.size(); p++) {
+      String place = key + ".across[" + (p + 1) + "].plant";
+      plants.get(p).plant().ifPresent(plant -> plant(place, plant));
+    }
+  }
+
+  /**
+   * A cost function says what a target costs at single prices; for the rest a technology is needed.
+   */
+  private void costFunctions(String key, Study.LeastCostQuestion asked) {
+    List<String> forms =
+        study.costs().map(c -> c.forms().stream().map(CostForm::word).toList()).orElse(List.of());
+    boolean wanted =
+        asked.technologies().isEmpty()
+            ? !forms.isEmpty()
+            : asked.technologies().stream().anyMatch(forms::contains);
+    PlanTerms terms = asked.terms();
+    boolean more =
+        !PlanCircumstances.goalKey(terms).equals("target")
+            || terms.jumps()
+            || !terms.takeAtLeast().isEmpty()
+            || !terms.across().isEmpty();
+    if (wanted && more) {
+      mistake(
+          key,
+          "a cost function answers targets at single prices only; budgets, prices of output, whole"
+              + " units, price bands, commitments and plants need a technology: name one under"
+              + " `technology`, fitted or given, and none of "
+              + String.join(", ", forms));
+    }
+  }
+
+  private void plant(String key, String plant) {
+    if (panel.isPresent() && !panel.get().plants().contains(plant)) {
+      mistake(key, "the records have no plant " + plant + nearest(plant, panel.get().plants()));
+    }
   }
 
   private boolean priced(int input) {
@@ -163,6 +202,9 @@ final class Demands {
   }
 
   private void mistake(String key, String message) {
-    mistakes.add(new Mistake(0, 0, key, message));
+    Mistake found = new Mistake(0, 0, key, message);
+    if (!mistakes.contains(found)) {
+      mistakes.add(found); // several targets of one question say the same
+    }
   }
 }

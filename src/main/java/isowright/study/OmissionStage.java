@@ -68,7 +68,8 @@ final class OmissionStage {
   }
 
   private Technologies refits(Candidate candidate, int period, ReviewReference reference) {
-    Productivity productivity = PlanStage.productivity(reference.against(), Optional.empty());
+    Productivity productivity =
+        PlanCircumstances.productivity(reference.against(), Optional.empty());
     EstimatedTechnology known = candidate.at(period, productivity);
     if (known.replicas().withoutPlants().count() > 0) {
       return known.replicas().withoutPlants();

@@ -1,5 +1,7 @@
 package isowright.study;
 
+import isowright.leastcost.Goal;
+import isowright.leastcost.PriceSchedule;
 import isowright.study.Study.Curve;
 import isowright.study.Study.LeastCostQuestion;
 import isowright.study.Study.Limit;
@@ -7,7 +9,6 @@ import isowright.study.Study.Productivity;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
@@ -20,24 +21,37 @@ final class PlanBinder {
 
   private static final int MOST_POINTS = 2001;
 
+  /** More targets than a table of answers can hold. */
+  private static final int MOST_TARGETS = 50;
+
   private static final List<String> KEYS =
       List.of(
           "name",
           "technology",
           "target",
+          "budget",
+          "output-price",
           "prices",
+          "price-bands",
           "productivity",
           "period",
           "hold",
           "limits",
+          "take-at-least",
+          "whole",
+          "across",
           "curve");
-  private static final List<String> LATER =
-      List.of("whole", "price-bands", "take-at-least", "budget", "output-price", "across");
+
+  private static final List<String> GOALS = List.of("target", "budget", "output-price");
 
   private final Declared declared;
   private final List<String> technologies;
   private final InputNumbers numbers;
+  private final LimitBinder limits;
+  private final PurchaseBinder purchases;
+  private final AcrossBinder across;
   private final List<String> names = new ArrayList<>();
+  private int place;
 
   /**
    * A reader of questions.
@@ -49,65 +63,137 @@ final class PlanBinder {
     this.declared = declared;
     this.technologies = List.copyOf(technologies);
     this.numbers = new InputNumbers(declared.inputs());
+    this.limits = new LimitBinder(declared.inputs());
+    this.purchases = new PurchaseBinder(declared.inputs());
+    this.across = new AcrossBinder(declared, technologies);
   }
 
-  /** The questions under {@code least-cost}. */
+  /** The questions under {@code least-cost}; one for each target. */
   List<LeastCostQuestion> bind(YamlSection root) {
     List<LeastCostQuestion> all = new ArrayList<>();
     for (YamlValue item : root.get("least-cost").flatMap(YamlValue::list).orElse(List.of())) {
-      item.section().flatMap(this::question).ifPresent(all::add);
+      place++;
+      item.section().map(this::questions).ifPresent(all::addAll);
     }
     return all;
   }
 
-  private Optional<LeastCostQuestion> question(YamlSection section) {
-    section.allow("a least-cost question", KEYS, LATER);
+  private List<LeastCostQuestion> questions(YamlSection section) {
+    section.allow("a least-cost question", KEYS, List.of());
     Optional<String> name =
         section
             .need("name", "what the question is called, such as `name: Plan 2025`")
             .flatMap(YamlValue::text);
-    name.ifPresent(
-        written -> {
-          if (names.contains(written)) {
-            section.refuse("name", "two questions are called `" + YamlValue.quote(written) + "`");
-          }
-          names.add(written);
-        });
-    Optional<OptionalDouble> target = target(section);
+    name.ifPresent(written -> claim(section, written));
+    List<Goal> goals = goals(section);
     List<String> wanted = technologies(section);
-    Map<String, Double> prices = prices(section);
+    Map<String, Double> hold = limits.hold(section);
+    Map<String, Limit> limited = limits.limits(section);
+    limits.check(section, hold, limited);
+    Map<String, PriceSchedule> bands = purchases.bands(section);
+    Map<String, Double> take = purchases.takeAtLeast(section, hold, limited, bands);
+    List<String> whole = purchases.whole(section, hold, limited);
+    List<PlanTerms.Plant> plants = across.bind(section);
+    Map<String, Double> prices = prices(section, plants);
     Productivity productivity = productivity(section);
     Optional<String> period = section.text("period");
     if (section.has("period") && !declared.period()) {
       section.refuse("period", "a period is named, but `records.period` names no column");
     }
-    Map<String, Double> hold = section.has("hold") ? numbers.some(section, "hold") : Map.of();
-    Map<String, Limit> limits = limits(section);
-    checkHeld(section, hold, limits);
-    Optional<Curve> curve = section.section("curve").flatMap(PlanBinder::curve);
-    if (name.isEmpty() || target.isEmpty() || target.get().isEmpty()) {
-      return Optional.empty();
+    Optional<YamlSection> curved = section.section("curve");
+    Optional<Curve> curve = curved.flatMap(PlanBinder::curve);
+    List<String> shortRun = curved.map(c -> shortRun(c, hold)).orElse(List.of());
+    List<LeastCostQuestion> questions = new ArrayList<>();
+    for (Goal goal : name.isPresent() ? goals : List.<Goal>of()) {
+      PlanTerms terms =
+          new PlanTerms(place, name.get(), goal, bands, take, whole, plants, shortRun);
+      questions.add(
+          new LeastCostQuestion(
+              goals.size() == 1 ? name.get() : name.get() + ", " + target(goal),
+              wanted,
+              goal.fold(Goal.Target::output, budget -> Double.NaN, profit -> Double.NaN),
+              prices,
+              productivity,
+              period,
+              hold,
+              limited,
+              curve,
+              terms));
     }
-    return Optional.of(
-        new LeastCostQuestion(
-            name.get(),
-            wanted,
-            target.get().getAsDouble(),
-            prices,
-            productivity,
-            period,
-            hold,
-            limits,
-            curve));
+    return questions;
   }
 
-  private static Optional<OptionalDouble> target(YamlSection section) {
-    if (!section.has("target") && (section.has("budget") || section.has("output-price"))) {
-      return Optional.empty(); // the refusal of the other key says enough
+  private void claim(YamlSection section, String name) {
+    if (names.contains(name)) {
+      section.refuse("name", "two questions are called `" + YamlValue.quote(name) + "`");
     }
-    return section
-        .need("target", "the output to be reached, such as `target: 52000`")
-        .map(YamlValue::positive);
+    names.add(name);
+  }
+
+  private String target(Goal goal) {
+    double output = goal.fold(Goal.Target::output, b -> Double.NaN, p -> Double.NaN);
+    return PlanWords.number(output, declared.outputUnit().orElse(""));
+  }
+
+  /** The targets, or the budget, or the price of output; none where that cannot be told. */
+  private static List<Goal> goals(YamlSection section) {
+    List<String> there = GOALS.stream().filter(section::has).toList();
+    if (there.isEmpty()) {
+      section.lacks(
+          "target",
+          "the output to be reached, such as `target: 52000`; or `budget` for the most output, or"
+              + " `output-price` for the most profit");
+      return List.of();
+    }
+    for (String more : there.subList(1, there.size())) {
+      section.refuse(
+          more,
+          "`"
+              + there.get(0)
+              + "` and `"
+              + more
+              + "` are two goals; one question has one of "
+              + String.join(", ", GOALS));
+    }
+    if (section.has("across") && !section.has("target")) {
+      section.refuse("across", "only a `target` can be split over plants");
+    }
+    YamlValue value = section.get(there.get(0)).orElseThrow();
+    if (value.isList() && there.get(0).equals("target")) {
+      return targets(value);
+    }
+    OptionalDouble number = value.positive();
+    if (number.isEmpty()) {
+      return List.of();
+    }
+    double goal = number.getAsDouble();
+    return List.of(
+        switch (there.get(0)) {
+          case "budget" -> new Goal.Budget(goal);
+          case "output-price" -> new Goal.Profit(goal);
+          default -> new Goal.Target(goal);
+        });
+  }
+
+  private static List<Goal> targets(YamlValue value) {
+    List<Goal> targets = new ArrayList<>();
+    List<YamlValue> items = value.list().orElse(List.of());
+    if (items.isEmpty() || items.size() > MOST_TARGETS) {
+      value.refuse("expects 1 to " + MOST_TARGETS + " targets, found " + items.size());
+      return targets;
+    }
+    for (YamlValue item : items) {
+      OptionalDouble number = item.positive();
+      if (number.isPresent()) {
+        Goal goal = new Goal.Target(number.getAsDouble());
+        if (targets.contains(goal)) {
+          item.refuse("the target " + item.found() + " stands twice; once is enough");
+        } else {
+          targets.add(goal);
+        }
+      }
+    }
+    return targets;
   }
 
   private List<String> technologies(YamlSection section) {
@@ -135,23 +221,49 @@ final class PlanBinder {
     return wanted;
   }
 
-  private Map<String, Double> prices(YamlSection section) {
+  /** Prices of the inputs that have none in bands. */
+  private Map<String, Double> prices(YamlSection section, List<PlanTerms.Plant> plants) {
+    List<String> banded =
+        section
+            .get("price-bands")
+            .filter(YamlValue::isMapping)
+            .flatMap(YamlValue::section)
+            .map(YamlSection::keys)
+            .orElse(List.of());
+    List<String> needed =
+        declared.inputs().stream().filter(name -> !banded.contains(name)).toList();
     if (section.has("prices")) {
-      Optional<double[]> all = numbers.positive(section, "prices");
       Map<String, Double> prices = new LinkedHashMap<>();
-      for (int i = 0; all.isPresent() && i < declared.inputs().size(); i++) {
-        prices.put(declared.inputs().get(i), all.get()[i]);
+      if (banded.isEmpty()) {
+        Optional<double[]> all = numbers.positive(section, "prices");
+        for (int i = 0; all.isPresent() && i < declared.inputs().size(); i++) {
+          prices.put(declared.inputs().get(i), all.get()[i]);
+        }
+        return prices;
+      }
+      prices.putAll(numbers.some(section, "prices"));
+      List<String> written = section.section("prices").map(YamlSection::keys).orElse(List.of());
+      List<String> missing = needed.stream().filter(name -> !written.contains(name)).toList();
+      if (!missing.isEmpty()) {
+        section.refuse(
+            "prices",
+            "every input needs a price here or bands under `price-bands`; missing: "
+                + String.join(", ", missing));
       }
       return prices;
     }
-    if (!declared.present()) {
+    if (!plants.isEmpty() && plants.stream().noneMatch(plant -> plant.prices().isEmpty())) {
+      return Map.of();
+    }
+    List<String> unpriced = declared.unpriced().stream().filter(needed::contains).toList();
+    if (!declared.present() && !needed.isEmpty()) {
       section.lacks(
           "prices", "there are no records to take them from, so name one for every input");
-    } else if (!declared.unpriced().isEmpty()) {
+    } else if (!unpriced.isEmpty()) {
       section.lacks(
           "prices",
           "the records have neither price nor spending of "
-              + String.join(", ", declared.unpriced())
+              + String.join(", ", unpriced)
               + "; name a price for every input here, or a column there");
     }
     return Map.of();
@@ -171,72 +283,31 @@ final class PlanBinder {
     return read;
   }
 
-  private Map<String, Limit> limits(YamlSection section) {
-    Map<String, Limit> all = new LinkedHashMap<>();
-    Optional<YamlSection> limits = section.section("limits");
-    if (limits.isEmpty() || declared.inputs().isEmpty()) {
-      return all;
-    }
-    limits.get().allowInputs(declared.inputs());
-    for (String name : declared.inputs()) {
-      limits.get().get(name).flatMap(PlanBinder::limit).ifPresent(limit -> all.put(name, limit));
-    }
-    return all;
-  }
-
-  private static Optional<Limit> limit(YamlValue value) {
-    Optional<List<YamlValue>> items = value.list();
-    if (items.isEmpty()) {
-      return Optional.empty();
-    }
-    if (items.get().size() != 2) {
-      value.refuse("expects a least and a most, such as [0, 60000], found " + items.get().size());
-      return Optional.empty();
-    }
-    OptionalDouble low = items.get().get(0).number();
-    OptionalDouble high = items.get().get(1).numberOrInfinity();
-    if (low.isEmpty() || high.isEmpty()) {
-      return Optional.empty();
-    }
-    if (low.getAsDouble() < 0) {
-      value.refuse("the least of an input cannot be below 0");
-    } else if (high.getAsDouble() <= 0) {
-      value.refuse("the most of an input must be above 0");
-    } else if (low.getAsDouble() > high.getAsDouble()) {
-      value.refuse(
-          String.format(
-              Locale.ROOT,
-              "the least, %s, is above the most, %s; swap them",
-              items.get().get(0).found(),
-              items.get().get(1).found()));
-    } else {
-      return Optional.of(new Limit(low.getAsDouble(), high.getAsDouble()));
-    }
-    return Optional.empty();
-  }
-
-  private void checkHeld(YamlSection section, Map<String, Double> hold, Map<String, Limit> limits) {
-    for (Map.Entry<String, Double> held : hold.entrySet()) {
-      Limit limit = limits.get(held.getKey());
-      if (limit != null && (held.getValue() < limit.low() || held.getValue() > limit.high())) {
-        section.refuse(
-            "hold",
-            String.format(
-                Locale.ROOT,
-                "`%s` is held at %s, outside its limits [%s, %s]",
-                held.getKey(),
-                held.getValue(),
-                limit.low(),
-                limit.high()));
+  /** The inputs that a short-run curve holds at the plan. */
+  private List<String> shortRun(YamlSection curve, Map<String, Double> hold) {
+    List<String> names = curve.get("short-run").map(YamlValue::texts).orElse(List.of());
+    for (String name : names) {
+      if (!declared.inputs().contains(name)) {
+        curve.refuse(
+            "short-run",
+            "`"
+                + YamlValue.quote(name)
+                + "` is not an input"
+                + YamlValue.nearest(name, declared.inputs())
+                + "; inputs: "
+                + String.join(", ", declared.inputs()));
       }
     }
-    if (!hold.isEmpty() && hold.size() == declared.inputs().size()) {
-      section.refuse("hold", "every input is held, so nothing is left to choose");
+    if (!names.isEmpty() && !hold.isEmpty()) {
+      curve.refuse("short-run", "the question holds inputs already, so its curve is the short run");
+    } else if (!names.isEmpty() && names.size() >= declared.inputs().size()) {
+      curve.refuse("short-run", "one input at least must be free to change");
     }
+    return names;
   }
 
   private static Optional<Curve> curve(YamlSection section) {
-    section.allow("`curve`", List.of("from", "to", "points"), List.of());
+    section.allow("`curve`", List.of("from", "to", "points", "short-run"), List.of());
     OptionalDouble from =
         section
             .need("from", "the lowest target of the curve")

@@ -16,12 +16,14 @@ public final class PlanFindings {
    * @param question the question's name
    * @param technology the technology's name (a form, or a given technology)
    * @param estimated whether the technology was estimated (then figures carry uncertainty)
-   * @param target the output to be reached
-   * @param prices by input
+   * @param target the output to be reached; for a budget or a price of output the output found, NaN
+   *     where there is none
+   * @param prices by input; of an input in bands the price of one more unit
    * @param productivity whose productivity, in words
    * @param limits limits and held inputs in words, by input; empty where none
-   * @param status {@code solved}, {@code corner}, {@code irregular}, {@code outside-records} or
-   *     {@code infeasible}
+   * @param status {@code solved}, {@code corner}, {@code irregular}, {@code outside-records},
+   *     {@code infeasible}, {@code unbounded} (no output is best) or {@code nothing} (best to make
+   *     nothing)
    * @param mix by input; empty where there is no answer
    * @param cost least cost
    * @param marginalCost marginal cost
@@ -33,6 +35,7 @@ public final class PlanFindings {
    *     with the other inputs at the plan; empty where it cannot be drawn
    * @param plants the mixes of the records (first two inputs), for the same chart; may be thinned
    * @param remarks what must be said of this plan
+   * @param detail what it says beside mix and cost
    */
   public record Planned(
       String question,
@@ -52,7 +55,51 @@ public final class PlanFindings {
       List<CurvePoint> curve,
       List<double[]> isoquant,
       List<Mix> plants,
-      List<Said> remarks) {
+      List<Said> remarks,
+      PlanDetail detail) {
+
+    /** A plan of which nothing is said beside mix and cost. */
+    public Planned(
+        String question,
+        String technology,
+        boolean estimated,
+        double target,
+        Map<String, Double> prices,
+        String productivity,
+        Map<String, String> limits,
+        String status,
+        Map<String, Figure> mix,
+        Optional<Figure> cost,
+        Optional<Figure> marginalCost,
+        Optional<Figure> averageCost,
+        Map<String, Figure> shares,
+        double optimality,
+        List<CurvePoint> curve,
+        List<double[]> isoquant,
+        List<Mix> plants,
+        List<Said> remarks) {
+      this(
+          question,
+          technology,
+          estimated,
+          target,
+          prices,
+          productivity,
+          limits,
+          status,
+          mix,
+          cost,
+          marginalCost,
+          averageCost,
+          shares,
+          optimality,
+          curve,
+          isoquant,
+          plants,
+          remarks,
+          PlanDetail.NONE);
+    }
+
     /** Whether there is a mix. */
     public boolean answered() {
       return !mix.isEmpty();

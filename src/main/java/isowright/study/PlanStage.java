@@ -1,25 +1,21 @@
 package isowright.study;
 
 import isowright.estimation.EstimatedTechnology;
-import isowright.estimation.Productivity;
-import isowright.inference.DeltaMethod;
-import isowright.inference.Intervals;
-import isowright.inference.Support;
 import isowright.leastcost.Isoquant;
-import isowright.leastcost.Minimiser;
-import isowright.leastcost.Plan;
-import isowright.leastcost.Question;
+import isowright.leastcost.PlanChecks;
+import isowright.leastcost.PlanOutcome;
+import isowright.leastcost.PlanTask;
+import isowright.leastcost.Proof;
 import isowright.records.Panel;
 import isowright.study.Findings.Said;
+import isowright.study.PlanDetail.Checks;
+import isowright.study.PlanDetail.Proved;
+import isowright.study.PlanDetail.Worth;
 import isowright.study.PlanFindings.CurvePoint;
 import isowright.study.PlanFindings.Planned;
-import isowright.technology.Technology;
-import java.text.DecimalFormat;
-import java.text.DecimalFormatSymbols;
 import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 
@@ -31,94 +27,121 @@ final class PlanStage {
   /** An isoquant is drawn from a third to three times the first input of the plan. */
   private static final double ISOQUANT_FACTOR = 3;
 
+  /** More plants than this cannot be told apart in one picture. */
+  private static final int SEEN = 500;
+
   private final Study study;
-  private final Optional<Panel> panel;
-  private final Optional<Support> support;
+  private final PlanCircumstances circumstances;
   private final List<Candidate> candidates;
+
+  /** One question to one technology. */
+  private record Pair(Study.LeastCostQuestion asked, Candidate candidate) {}
 
   PlanStage(Study study, Optional<Panel> panel, List<Candidate> candidates) {
     this.study = study;
-    this.panel = panel;
-    this.support = study.leastCost().isEmpty() ? Optional.empty() : panel.map(Support::of);
+    this.circumstances = new PlanCircumstances(study, panel);
     this.candidates = List.copyOf(candidates);
   }
 
   List<Planned> plans() {
-    List<Planned> plans = new ArrayList<>();
+    List<Pair> pairs = new ArrayList<>();
+    SplitStage split = new SplitStage(study, circumstances, candidates);
     for (Study.LeastCostQuestion asked : study.leastCost()) {
+      if (split.namesEveryTechnology(asked)) {
+        split.first(asked).ifPresent(candidate -> pairs.add(new Pair(asked, candidate)));
+        continue;
+      }
       for (Candidate candidate : candidates) {
         boolean wanted =
             asked.technologies().isEmpty() || asked.technologies().contains(candidate.name());
         if (wanted && candidate.usable()) {
-          plans.add(answer(asked, candidate));
+          pairs.add(new Pair(asked, candidate));
         }
       }
     }
-    return plans;
+    return pairs.parallelStream()
+        .map(
+            pair ->
+                pair.asked.terms().across().isEmpty()
+                    ? answer(pair.asked, pair.candidate)
+                    : split.answer(pair.asked, pair.candidate))
+        .toList();
   }
 
   private Planned answer(Study.LeastCostQuestion asked, Candidate candidate) {
-    EstimatedTechnology estimated = candidate.at(period(asked), productivity(asked));
-    Question question = question(asked);
-    Plan plan = Minimiser.of(estimated.technology()).plan(question);
-    PlanFigures figures =
-        new PlanFigures(
-            study.inputs(),
-            candidate.fit().map(f -> Intervals.of(estimated, study.estimation().confidence())),
-            candidate.fit().map(f -> DeltaMethod.of(estimated, study.estimation().confidence())));
+    EstimatedTechnology estimated =
+        candidate.at(circumstances.period(asked), circumstances.productivity(asked.productivity()));
+    PlanTask task = circumstances.task(asked);
+    PlanAnswer answer = PlanAnswer.of(study, asked, candidate, estimated, task);
+    PlanOutcome outcome = answer.outcome();
+    PlanFigures figures = new PlanFigures(answer, study.estimation().confidence());
     List<Said> remarks = new ArrayList<>();
-    String status = status(asked, plan, remarks);
-    if (!plan.reason().isEmpty()) {
-      remarks.add(Said.of(plan.answered() ? "note" : "warning", status, plan.reason()));
+    String status = status(outcome, remarks);
+    if (!outcome.plan().reason().isEmpty()) {
+      remarks.add(Said.of(outcome.planned() ? "note" : "warning", status, outcome.plan().reason()));
     }
-    PlanFigures.Answer answer = figures.answer(estimated.technology(), question, plan);
-    remarks.addAll(answer.remarks());
-    List<CurvePoint> curve =
-        figures.curve(
-            estimated.technology(), question, CurveSpan.targets(asked), mix -> inside(mix));
-    List<double[]> isoquant =
-        plan.answered() ? isoquant(estimated.technology(), question, plan) : List.of();
+    PlanFigures.Main main = figures.main();
+    remarks.addAll(main.remarks());
+    double around = outcome.planned() ? outcome.output() : asked.target();
+    double[] targets =
+        Double.isNaN(around) && asked.curve().isEmpty()
+            ? new double[0]
+            : CurveSpan.targets(asked, around);
+    List<CurvePoint> curve = figures.curve(targets, circumstances::inside);
+    PlanDetail detail = outcome.planned() ? detail(answer, candidate, main, targets) : bare(answer);
+    detail
+        .proof()
+        .map(Proved::reason)
+        .filter(reason -> !reason.isEmpty())
+        .ifPresent(reason -> remarks.add(Said.of("note", "local-proof", sentence(reason))));
+    if (answer.figures().estimated()
+        && outcome.planned()
+        && PlanStage.goal(asked.terms()).equals("profit")) {
+      remarks.add(
+          Said.of(
+              "note",
+              "changes-without-intervals",
+              "What other prices would change in profit is told without intervals: each is a search"
+                  + " of its own."));
+    }
     return new Planned(
         asked.name(),
         candidate.name(),
         candidate.fit().isPresent(),
-        asked.target(),
-        named(question.prices()),
-        productivityWords(asked, candidate),
-        limits(asked),
+        outcome.planned() ? outcome.output() : asked.target(),
+        prices(answer),
+        circumstances.productivityWords(asked, candidate),
+        circumstances.limitWords(asked),
         status,
-        answer.mix(),
-        answer.cost(),
-        answer.marginalCost(),
-        answer.averageCost(),
-        answer.shares(),
-        plan.optimality(),
+        main.mix(),
+        main.cost(),
+        main.marginalCost(),
+        main.averageCost(),
+        main.shares(),
+        outcome.plan().optimality(),
         curve,
-        isoquant,
+        outcome.planned() ? isoquant(answer) : List.of(),
         seen(asked),
-        remarks);
+        remarks,
+        detail);
   }
 
-  private boolean inside(double[] mix) {
-    return support.map(s -> s.inside(mix)).orElse(true);
+  private static String sentence(String reason) {
+    return "Only a local best is proved: " + reason + ".";
   }
 
-  private String status(Study.LeastCostQuestion asked, Plan plan, List<Said> remarks) {
-    if (plan.status() == Plan.Status.IRREGULAR) {
-      return "irregular";
+  private String status(PlanOutcome outcome, List<Said> remarks) {
+    if (!outcome.planned()) {
+      return outcome.state().name().toLowerCase(java.util.Locale.ROOT);
     }
-    if (plan.status() == Plan.Status.INFEASIBLE) {
-      return "infeasible";
-    }
-    if (support.isEmpty()) {
+    if (circumstances.panel().isEmpty()) {
       remarks.add(
           Said.of(
               "note",
               "no-records",
               "There are no records, so whether this mix has ever been seen cannot be said."));
     } else {
-      List<String> reasons = new ArrayList<>(support.get().reasons(plan.mix()));
-      outputReason(asked.target()).ifPresent(reasons::add);
+      List<String> reasons = circumstances.outside(outcome.plan().mix(), outcome.output());
       if (!reasons.isEmpty()) {
         remarks.add(
             Said.of(
@@ -128,137 +151,127 @@ final class PlanStage {
         return "outside-records";
       }
     }
-    return plan.status() == Plan.Status.CORNER ? "corner" : "solved";
+    return outcome.plan().status() == isowright.leastcost.Plan.Status.CORNER ? "corner" : "solved";
   }
 
-  private Optional<String> outputReason(double target) {
-    double[] output = panel.orElseThrow().output().toArray();
-    double least = Double.POSITIVE_INFINITY;
-    double most = Double.NEGATIVE_INFINITY;
-    for (double q : output) {
-      least = Math.min(least, q);
-      most = Math.max(most, q);
-    }
-    if (target >= least && target <= most) {
-      return Optional.empty();
-    }
-    return Optional.of(
-        String.format(
-            Locale.ROOT,
-            "the target of %,.6g lies outside recorded output (%,.6g to %,.6g)",
-            target,
-            least,
-            most));
-  }
-
-  private int period(Study.LeastCostQuestion asked) {
-    return panel
-        .map(p -> asked.period().map(p.periods()::indexOf).orElseGet(() -> p.periods().size() - 1))
-        .orElse(0);
-  }
-
-  private Productivity productivity(Study.LeastCostQuestion asked) {
-    return productivity(asked.productivity(), panel);
-  }
-
-  static Productivity productivity(Study.Productivity asked, Optional<Panel> panel) {
-    return switch (asked.kind()) {
-      case TYPICAL -> new Productivity.Typical();
-      case BEST_QUARTER -> new Productivity.UpperQuartile();
-      case PLANT ->
-          new Productivity.Plant(panel.orElseThrow().plants().indexOf(asked.plant().orElseThrow()));
-    };
-  }
-
-  private String productivityWords(Study.LeastCostQuestion asked, Candidate candidate) {
-    if (candidate.given().isPresent()) {
-      return "as given";
-    }
-    String when = panel.map(p -> " in " + p.periods().get(period(asked))).orElse("");
-    return switch (asked.productivity().kind()) {
-      case TYPICAL -> "the typical plant" + when;
-      case BEST_QUARTER -> "the plant at the upper quartile of productivity" + when;
-      case PLANT -> "plant " + asked.productivity().plant().orElseThrow() + when;
-    };
-  }
-
-  private Question question(Study.LeastCostQuestion asked) {
-    List<String> inputs = study.inputs();
-    double[] prices = new double[inputs.size()];
-    for (int i = 0; i < prices.length; i++) {
-      Double stated = asked.prices().get(inputs.get(i));
-      prices[i] = stated != null ? stated : Demands.meanPrice(panel.orElseThrow(), i);
-    }
-    Question question = Question.of(asked.target(), prices);
-    for (int i = 0; i < prices.length; i++) {
-      Study.Limit limit = asked.limits().get(inputs.get(i));
-      Double held = asked.hold().get(inputs.get(i));
-      if (held != null) {
-        question = question.holding(i, held);
-      } else if (limit != null) {
-        question = question.limiting(i, limit.low(), limit.high());
-      }
-    }
-    return question;
-  }
-
-  private Map<String, String> limits(Study.LeastCostQuestion asked) {
-    Map<String, String> words = new LinkedHashMap<>();
-    for (String input : study.inputs()) {
-      Study.Limit limit = asked.limits().get(input);
-      Double held = asked.hold().get(input);
-      if (held != null) {
-        words.put(input, "held at " + quantity(input, held));
-      } else if (limit != null) {
-        words.put(input, within(input, limit));
-      }
-    }
-    return words;
-  }
-
-  private String within(String input, Study.Limit limit) {
-    if (Double.isInfinite(limit.high())) {
-      return "at least " + quantity(input, limit.low());
-    }
-    return limit.low() <= 0
-        ? "at most " + quantity(input, limit.high())
-        : "at least "
-            + quantity(input, limit.low())
-            + " and at most "
-            + quantity(input, limit.high());
-  }
-
-  /** A quantity as stated, thousands set off, with its unit: "42,000 h". */
-  private String quantity(String input, double value) {
-    int at = study.inputs().indexOf(input);
-    DecimalFormatSymbols plain = DecimalFormatSymbols.getInstance(Locale.ROOT);
-    String number = new DecimalFormat("#,##0.######", plain).format(value);
-    return study.inputUnits().get(at).map(unit -> number + " " + unit).orElse(number);
-  }
-
-  private Map<String, Double> named(double[] values) {
+  private Map<String, Double> prices(PlanAnswer answer) {
     Map<String, Double> named = new LinkedHashMap<>();
-    for (int i = 0; i < values.length; i++) {
-      named.put(study.inputs().get(i), values[i]);
+    for (int i = 0; i < study.inputs().size(); i++) {
+      double price =
+          answer.outcome().planned()
+              ? answer.settled().price(i)
+              : answer.task().schedules().get(i).price(0);
+      named.put(study.inputs().get(i), price);
     }
     return named;
   }
 
-  private static List<double[]> isoquant(Technology technology, Question question, Plan plan) {
-    double[] mix = plan.mix();
+  private static PlanDetail bare(PlanAnswer answer) {
+    PlanTerms terms = answer.asked().terms();
+    PlanDetail none = PlanDetail.NONE;
+    return new PlanDetail(
+        terms.asked(),
+        goal(terms),
+        stated(terms),
+        none.output(),
+        none.profit(),
+        none.multipliers(),
+        none.checks(),
+        none.proof(),
+        none.envelope(),
+        none.efficientScale(),
+        none.demands(),
+        none.changes(),
+        none.costElasticities(),
+        none.demandElasticities(),
+        none.across());
+  }
+
+  static String goal(PlanTerms terms) {
+    return terms.goal().fold(target -> "target", budget -> "budget", profit -> "profit");
+  }
+
+  static Optional<Double> stated(PlanTerms terms) {
+    return terms
+        .goal()
+        .fold(
+            target -> Optional.empty(),
+            budget -> Optional.of(budget.money()),
+            profit -> Optional.of(profit.price()));
+  }
+
+  private PlanDetail detail(
+      PlanAnswer answer, Candidate candidate, PlanFigures.Main main, double[] targets) {
+    PlanTerms terms = answer.asked().terms();
+    Findings.Units units = Settings.units(study);
+    List<Worth> worths = new ArrayList<>(new WorthWords(units, answer).all());
+    WorthWords.whole(answer, units).ifPresent(worths::add);
+    DemandFigures demand = new DemandFigures(answer);
+    EnvelopeFigures envelope = new EnvelopeFigures(answer);
+    ChangeFigures changes =
+        new ChangeFigures(
+            answer, circumstances.observed(answer.asked(), candidate, answer.estimated()));
+    boolean plain = answer.smooth();
+    return new PlanDetail(
+        terms.asked(),
+        goal(terms),
+        stated(terms),
+        main.output(),
+        main.profit(),
+        worths,
+        Optional.of(checks(answer)),
+        Optional.of(proved(answer.outcome().proof())),
+        plain ? envelope.envelope(targets) : Optional.empty(),
+        plain ? Optional.of(efficientScale(envelope, targets)) : Optional.empty(),
+        plain ? demand.demands() : List.of(),
+        changes.changes(),
+        answer.leastCost() ? demand.costElasticities() : Map.of(),
+        plain ? demand.demandElasticities() : Map.of(),
+        List.of());
+  }
+
+  private PlanDetail.EfficientScale efficientScale(EnvelopeFigures envelope, double[] targets) {
+    return envelope.efficientScale(
+        targets[0], targets[targets.length - 1], circumstances::inside, circumstances::recorded);
+  }
+
+  private static Checks checks(PlanAnswer answer) {
+    PlanChecks found = PlanChecks.of(answer.technology(), answer.settled(), answer.plan());
+    return new Checks(
+        found.output(),
+        found.firstOrder(),
+        found.secondOrder(),
+        found.shephard(),
+        found.homogeneity(),
+        found.marginalCost());
+  }
+
+  static Proved proved(Proof proof) {
+    return new Proved(
+        proof.global() ? "global" : "local", proof.gap(), proof.parts(), proof.reason());
+  }
+
+  private static List<double[]> isoquant(PlanAnswer answer) {
+    double[] mix = answer.plan().mix();
     return mix[0] > 0 && mix[1] > 0
         ? Isoquant.around(
-            technology, question.target(), 0, 1, mix, ISOQUANT_FACTOR, ISOQUANT_POINTS)
+            answer.technology(),
+            answer.outcome().output(),
+            0,
+            1,
+            mix,
+            ISOQUANT_FACTOR,
+            ISOQUANT_POINTS)
         : List.of();
   }
 
   /** The mixes of the period of the question, in the first two inputs. */
   private List<PlanFindings.Mix> seen(Study.LeastCostQuestion asked) {
-    if (panel.isEmpty()) {
+    if (circumstances.panel().isEmpty()) {
       return List.of();
     }
-    Panel p = panel.get();
-    int period = period(asked);
+    Panel p = circumstances.panel().get();
+    int period = circumstances.period(asked);
     List<PlanFindings.Mix> mixes = new ArrayList<>();
     for (int r = 0; r < p.rows() && mixes.size() < SEEN; r++) {
       if (p.rowPeriods().get(r) == period) {
@@ -273,7 +286,4 @@ final class PlanStage {
     }
     return mixes;
   }
-
-  /** More plants than this cannot be told apart in one picture. */
-  private static final int SEEN = 500;
 }

@@ -25,7 +25,7 @@ record ReviewReference(Study.Productivity against, boolean smearing) {
 
   /** The technology of a candidate in a period by this reference. */
   EstimatedTechnology of(Candidate candidate, int period) {
-    Productivity productivity = PlanStage.productivity(against, Optional.empty());
+    Productivity productivity = PlanCircumstances.productivity(against, Optional.empty());
     EstimatedTechnology estimated = candidate.at(period, productivity);
     return estimated.shifted(shift(candidate));
   }

@@ -215,13 +215,15 @@ public record Study(
    * @param name its name
    * @param technologies the technologies (form names or names of given ones) whose answers are
    *     wanted; empty: all
-   * @param target the output to be reached
-   * @param prices by input; empty: mean prices of the last period
+   * @param target the output to be reached; NaN where a budget or a price of output stands in its
+   *     place
+   * @param prices by input; mean prices of the last period for those left out
    * @param productivity whose productivity
    * @param period the period at which time effects are evaluated; the last if absent
    * @param hold quantities of inputs that cannot change
    * @param limits lowest and highest quantity by input
    * @param curve the cost curve wanted; a default span if absent
+   * @param terms what is asked beside
    */
   public record LeastCostQuestion(
       String name,
@@ -232,7 +234,8 @@ public record Study(
       Optional<String> period,
       Map<String, Double> hold,
       Map<String, Limit> limits,
-      Optional<Curve> curve) {
+      Optional<Curve> curve,
+      PlanTerms terms) {
     /** Copies the collections. */
     public LeastCostQuestion {
       technologies = List.copyOf(technologies);
