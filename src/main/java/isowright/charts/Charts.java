@@ -25,7 +25,7 @@ public final class Charts {
     Setting setting = Setting.of(findings);
     List<Chart> charts = new ArrayList<>(ElasticityCharts.of(findings, setting));
     for (Fitted fit : findings.fits()) {
-      ProfileCharts.of(fit, setting).ifPresent(charts::add);
+      charts.addAll(ProfileCharts.of(fit, setting));
     }
     for (Fitted fit : findings.fits()) {
       ResidualCharts.of(fit, setting).ifPresent(charts::add);

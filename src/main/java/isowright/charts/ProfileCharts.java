@@ -36,9 +36,11 @@ final class ProfileCharts {
     least = profile.stream().min(Comparator.comparingDouble(ProfilePoint::ssr)).orElseThrow();
   }
 
-  /** The chart of a fit; none for forms without a curvature parameter. */
-  static Optional<Chart> of(Fitted fit, Setting setting) {
-    return fit.curvature().flatMap(curvature -> of(fit, curvature, setting));
+  /** The charts of a fit, one for each curvature. */
+  static List<Chart> of(Fitted fit, Setting setting) {
+    return fit.curvatures().stream()
+        .flatMap(curvature -> of(fit, curvature, setting).stream())
+        .toList();
   }
 
   private static Optional<Chart> of(Fitted fit, Curvature curvature, Setting setting) {
@@ -58,7 +60,8 @@ final class ProfileCharts {
 
   private Chart chart() {
     String technology = Words.sentence(Words.technology(fit.technology()));
-    String title = technology + ": " + finding(curvature, least.substitution());
+    String nest = nest().isEmpty() ? "" : " within " + nest().replace("+", " and ");
+    String title = technology + nest + ": " + finding(curvature, least.substitution());
     String caption =
         curvature.words()
             + " Values of the elasticity of substitution whose sum of squares lies under the"
@@ -69,12 +72,18 @@ final class ProfileCharts {
         Chart.Kind.PROFILE,
         new Said(
             fit.technology(),
-            setting.names().of("profile", fit.technology()),
+            setting.names().of("profile", fit.technology(), nest()),
             title,
             caption,
             alternative(title)),
         table(),
         this::plot);
+  }
+
+  /** The nest inside which the curvature rules; empty for that between nests and the only one. */
+  private String nest() {
+    int colon = curvature.name().indexOf(':');
+    return colon < 0 ? "" : curvature.name().substring(colon + 1);
   }
 
   /** The state of the profile in words that claim no more than it. */

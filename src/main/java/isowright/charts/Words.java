@@ -17,6 +17,8 @@ final class Words {
     return switch (name) {
       case "cobb-douglas" -> "Cobb-Douglas";
       case "ces" -> "CES";
+      case "nested-ces" -> "nested CES";
+      case "generalised-leontief" -> "generalised Leontief";
       default -> name;
     };
   }

@@ -44,7 +44,12 @@ final class FitJson {
     pairs(file, "substitution", fit.substitution());
     pairs(file, "demandElasticity", fit.demandElasticity());
     regularity(file, fit);
-    curvature(file, fit.curvature());
+    curvature(file, "curvature", fit.curvature());
+    file.list(
+        "nestCurvatures",
+        fit.curvature().map(Curvature::further).orElse(List.of()),
+        false,
+        nest -> curvature(file, nest));
     tests(file, fit.tests());
     file.numbersByName("plantLevels", fit.plantLevels());
     PanelJson.write(file, fit.panel());
@@ -132,30 +137,31 @@ final class FitJson {
         });
   }
 
-  private static void curvature(JsonFile file, Optional<Curvature> curvature) throws IOException {
+  private static void curvature(JsonFile file, String key, Optional<Curvature> curvature)
+      throws IOException {
     if (curvature.isEmpty()) {
-      file.nothing("curvature");
+      file.nothing(key);
       return;
     }
-    Curvature c = curvature.get();
-    file.object(
-        "curvature",
-        () -> {
-          file.text("state", c.state());
-          file.text("words", c.words());
-          file.number("substitutionLow", c.substitutionLow());
-          file.number("substitutionHigh", c.substitutionHigh());
-          file.remember("the elasticity of substitution", 0, c.substitutionHigh());
-          file.number("threshold", c.threshold());
-          file.list(
-              "curve",
-              c.curve(),
-              true,
-              point -> {
-                file.number("curvature", point.curvature());
-                file.number("substitution", point.substitution());
-                file.number("ssr", point.ssr());
-              });
+    file.object(key, () -> curvature(file, curvature.get()));
+  }
+
+  private static void curvature(JsonFile file, Curvature c) throws IOException {
+    file.text("name", c.name());
+    file.text("state", c.state());
+    file.text("words", c.words());
+    file.number("substitutionLow", c.substitutionLow());
+    file.number("substitutionHigh", c.substitutionHigh());
+    file.remember("the elasticity of substitution", 0, c.substitutionHigh());
+    file.number("threshold", c.threshold());
+    file.list(
+        "curve",
+        c.curve(),
+        true,
+        point -> {
+          file.number("curvature", point.curvature());
+          file.number("substitution", point.substitution());
+          file.number("ssr", point.ssr());
         });
   }
 

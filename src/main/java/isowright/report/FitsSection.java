@@ -105,7 +105,7 @@ final class FitsSection {
   private static void details(Material material, Fitted fit, List<Block> blocks) {
     String name = Terms.technology(fit.technology());
     List<Block> inside = new ArrayList<>();
-    fit.curvature().ifPresent(curvature -> curvature(material, curvature, inside));
+    fit.curvatures().forEach(curvature -> curvature(material, curvature, inside));
     inside.addAll(material.drawings(Chart.Kind.PROFILE, fit.technology()));
     fit.smearing()
         .ifPresent(

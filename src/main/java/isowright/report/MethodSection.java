@@ -97,6 +97,24 @@ final class MethodSection {
         blocks.add(
             Display.of("ln Q = ln A − {ν}/{ρ} ln Σ_i δ_i e^{−ρ z_i} + τ t, σ = {1}/{1 + ρ}"));
       }
+      case "nested-ces" -> {
+        blocks.add(
+            Paragraph.of(
+                "Constant elasticity of substitution in two stages "
+                    + cite(Source.SATO)
+                    + ": inputs make composites, composites make output:"));
+        blocks.add(Display.of("y_g = −{1}/{ρ_g} ln Σ_i δ_i e^{−ρ_g z_i}, σ_g = {1}/{1 + ρ_g}"));
+        blocks.add(
+            Display.of("ln Q = ln A − {ν}/{ρ} ln Σ_g δ_g e^{−ρ y_g} + τ t, σ = {1}/{1 + ρ}"));
+      }
+      case "generalised-leontief" -> {
+        blocks.add(
+            Paragraph.of(
+                "Generalised Leontief production function "
+                    + cite(Source.DIEWERT)
+                    + ", homogeneous of degree ν, its weights summing to one:"));
+        blocks.add(Display.of("ln Q = ln A + ν ln Σ_i Σ_j b_{ij} √{u_i u_j} + τ t, ln u_i = z_i"));
+      }
       case "translog" -> {
         blocks.add(
             Paragraph.of(

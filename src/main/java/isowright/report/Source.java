@@ -109,6 +109,11 @@ enum Source {
       "Driscoll, J. C. and Kraay, A. C. (1998)",
       "Consistent Covariance Matrix Estimation with Spatially Dependent Panel Data",
       "Review of Economics and Statistics 80, 549–560"),
+  DIEWERT(
+      "Diewert 1971",
+      "Diewert, W. E. (1971)",
+      "An Application of the Shephard Duality Theorem: A Generalized Leontief Production Function",
+      "Journal of Political Economy 79, 481–507"),
   DUAN(
       "Duan 1983",
       "Duan, N. (1983)",
@@ -190,6 +195,11 @@ enum Source {
       "The Exact Finite Sample Properties of the Estimators of Coefficients in the"
           + " Error Components Regression Models",
       "Econometrica 40, 261–275"),
+  SATO(
+      "Sato 1967",
+      "Sato, K. (1967)",
+      "A Two-Level Constant-Elasticity-of-Substitution Production Function",
+      "Review of Economic Studies 34, 201–218"),
   UZAWA(
       "Uzawa 1962",
       "Uzawa, H. (1962)",

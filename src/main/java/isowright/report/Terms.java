@@ -13,6 +13,8 @@ final class Terms {
     return switch (name) {
       case "cobb-douglas" -> "Cobb-Douglas";
       case "ces" -> "CES";
+      case "nested-ces" -> "Nested CES";
+      case "generalised-leontief" -> "Generalised Leontief";
       case "translog" -> "Translog";
       case "cobb-douglas-cost" -> "Cobb-Douglas cost";
       case "cobb-douglas-cost-squared-output" -> "Cobb-Douglas cost, output squared";
@@ -27,7 +29,10 @@ final class Terms {
     if (colon > 0) {
       String rest = name.substring(colon + 1);
       return switch (name.substring(0, colon)) {
-        case "share" -> "Share δ of " + rest;
+        case "share" -> "Share δ of " + rest.replace("+", " and ");
+        case "nest-share" -> "Share of " + rest + " in its nest";
+        case "rho" -> "Curvature ρ within " + rest.replace("+", " and ");
+        case "weight" -> "Weight of " + product(rest);
         case "control" -> "Control: " + rest;
         case "mean" -> "Plant mean of " + parameter(rest).toLowerCase(java.util.Locale.ROOT);
         case "period" -> "Period " + rest;
@@ -183,6 +188,9 @@ final class Terms {
   static String test(String name) {
     return switch (name) {
       case "constant-returns" -> "Constant returns to scale";
+      case "homogeneous" -> "Homogeneity";
+      case "homothetic" -> "Homotheticity";
+      case "one-substitution" -> "One elasticity of substitution (CES within nested CES)";
       case "unit-substitution" -> "Unit elasticity of substitution";
       case "cobb-douglas-in-translog" -> "Cobb-Douglas within translog";
       case "plant-effects" -> "Plant effects";

@@ -17,12 +17,13 @@ final class CurvatureWords {
       case INTERIOR ->
           String.format(
               Locale.ROOT,
-              "The sum of squares has its minimum inside the economic region; the %s interval of the"
-                  + " elasticity of substitution is %.3g to %.3g.",
+              "The sum of squares has its minimum inside the economic region; the %s interval of"
+                  + " %s is %.3g to %.3g.",
               level,
+              subject(fit, profile),
               profile.substitutionLow(),
               profile.substitutionHigh());
-      case FLAT -> flat(profile, level);
+      case FLAT -> flat(subject(fit, profile), profile, level);
       case BOUNDARY -> String.join(" ", fit.reasons()) + open(profile, level);
     };
   }
@@ -36,9 +37,24 @@ final class CurvatureWords {
         + " %";
   }
 
-  private static String flat(CurvatureProfile profile, String level) {
+  /** Which elasticity the profile is of, where a form has several. */
+  private static String subject(Fit fit, CurvatureProfile profile) {
+    String elasticity = "the elasticity of substitution";
+    if (fit.profiles().size() == 1) {
+      return elasticity;
+    }
+    int colon = profile.name().indexOf(':');
+    return elasticity
+        + (colon < 0
+            ? " between groups of inputs"
+            : " within " + profile.name().substring(colon + 1).replace("+", " and "));
+  }
+
+  private static String flat(String subject, CurvatureProfile profile, String level) {
     String statement = set(profile);
-    return "The sum of squares is flat along the elasticity of substitution: at "
+    return "The sum of squares is flat along "
+        + subject
+        + ": at "
         + level
         + " the records say no more than that it is "
         + statement

@@ -23,13 +23,13 @@ final class ElasticityFindings {
   private final Intervals intervals;
   private final List<String> inputs;
   private final double[] mean;
-  private final Optional<CurvatureProfile> profile;
+  private final List<CurvatureProfile> profiles;
 
   ElasticityFindings(Fit fit, Intervals intervals) {
     this.intervals = intervals;
     this.inputs = fit.panel().inputs();
     this.mean = fit.meanLogInputs();
-    this.profile = fit.profile();
+    this.profiles = fit.profiles();
   }
 
   Map<String, Figure> output() {
@@ -91,11 +91,37 @@ final class ElasticityFindings {
 
   private Pair pair(int i, int j, String measure, Figure figure) {
     Figure shown =
-        profile
+        profile(inputs.get(i), inputs.get(j), measure)
             .filter(p -> !EstimatedFigures.resampled(figure))
             .map(p -> EstimatedFigures.profiled(figure, p.substitutionLow(), p.substitutionHigh()))
             .orElseGet(() -> fixedByTheForm(figure) ? exact(figure.value()) : figure);
     return new Pair(inputs.get(i), inputs.get(j), measure, shown);
+  }
+
+  /**
+   * The profile of the curvature that alone fixes this elasticity: the only one; of several, that
+   * of a nest for the direct elasticity inside it, and that between groups for Allen's between
+   * inputs of different groups (Sato 1967).
+   */
+  private Optional<CurvatureProfile> profile(String first, String second, String measure) {
+    if (profiles.size() < 2) {
+      return profiles.stream().findFirst();
+    }
+    Optional<CurvatureProfile> nest =
+        profiles.stream()
+            .filter(
+                p -> {
+                  List<String> members =
+                      List.of(p.name().substring(p.name().indexOf(':') + 1).split("\\+"));
+                  return members.contains(first) && members.contains(second);
+                })
+            .findFirst();
+    if (measure.equals("hicks")) {
+      return nest;
+    }
+    return measure.equals("allen") && nest.isEmpty()
+        ? profiles.stream().findFirst()
+        : Optional.empty();
   }
 
   /** No parameter moves it: what standard error there is comes from rounding. */

@@ -1,6 +1,7 @@
 package isowright.study;
 
 import isowright.study.Findings.Said;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -62,6 +63,17 @@ public final class FitFindings {
     /** Whether the fit has an answer that later stages may use. */
     public boolean usable() {
       return state.equals("estimated") || state.equals("flat");
+    }
+
+    /** The profiles of all curvatures, that between nests first. */
+    public List<Curvature> curvatures() {
+      List<Curvature> all = new ArrayList<>();
+      curvature.ifPresent(
+          first -> {
+            all.add(first);
+            all.addAll(first.further());
+          });
+      return all;
     }
   }
 
@@ -135,6 +147,7 @@ public final class FitFindings {
   /**
    * The profile of the sum of squares over a curvature parameter.
    *
+   * @param name the name of the curvature among the parameters, such as {@code rho}
    * @param state {@code interior}, {@code boundary} or {@code flat}
    * @param words the state in a sentence
    * @param curve the profile, by ascending curvature
@@ -142,14 +155,29 @@ public final class FitFindings {
    *     where it is open below
    * @param substitutionHigh upper end; infinite where it is open above
    * @param threshold the sum of squares below which a value is inside the interval
+   * @param further the profiles of the form's other curvatures, those within nests
    */
   public record Curvature(
+      String name,
       String state,
       String words,
       List<ProfilePoint> curve,
       double substitutionLow,
       double substitutionHigh,
-      double threshold) {}
+      double threshold,
+      List<Curvature> further) {
+
+    /** The profile of a form's only curvature. */
+    public Curvature(
+        String state,
+        String words,
+        List<ProfilePoint> curve,
+        double substitutionLow,
+        double substitutionHigh,
+        double threshold) {
+      this("rho", state, words, curve, substitutionLow, substitutionHigh, threshold, List.of());
+    }
+  }
 
   /** One point of a profile: curvature, elasticity of substitution, sum of squares. */
   public record ProfilePoint(double curvature, double substitution, double ssr) {}

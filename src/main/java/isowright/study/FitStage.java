@@ -100,7 +100,7 @@ final class FitStage {
         List.of(),
         List.of(),
         Optional.empty(),
-        fit.profile().map(profile -> curvature(fit, profile)),
+        curvature(fit),
         List.of(),
         Map.of(),
         PanelFindings.of(panel.rows()),
@@ -149,7 +149,7 @@ final class FitStage {
         substitution,
         elasticities.demand(),
         Optional.of(regular),
-        fit.profile().map(profile -> curvature(fit, profile)),
+        curvature(fit),
         verdicts.stream()
             .map(verdict -> tested(verdict, fit.specification().confidence()))
             .toList(),
@@ -189,14 +189,15 @@ final class FitStage {
       String name = numbers.names().get(k);
       double value = numbers.parameters()[k];
       double error = Math.sqrt(Math.max(0, numbers.covariance()[k][k]));
-      boolean curvature = fit.profile().isPresent() && name.equals("rho");
+      Optional<CurvatureProfile> profile =
+          fit.profiles().stream().filter(p -> p.name().equals(name)).findFirst();
       boolean zeroMeansNothing =
-          fit.profile().isPresent()
-              && (curvature || name.equals("scale") || name.startsWith("share:"));
+          fit.specification().form() instanceof NonlinearForm
+              && (profile.isPresent() || name.equals("scale") || name.contains("share:"));
       Figure figure =
-          curvature
-              ? curvatureFigure(fit, value, error)
-              : figure(delta.estimate(value, error, DeltaMethod.Scale.LINEAR));
+          profile
+              .map(p -> curvatureFigure(fit, p, value, error))
+              .orElseGet(() -> figure(delta.estimate(value, error, DeltaMethod.Scale.LINEAR)));
       parameters.add(
           new Parameter(name, figure, zeroMeansNothing ? Double.NaN : law.p(value / error)));
     }
@@ -204,8 +205,8 @@ final class FitStage {
   }
 
   /** The interval of ρ is that of σ from the profile, carried over. */
-  private static Figure curvatureFigure(Fit fit, double value, double error) {
-    CurvatureProfile profile = fit.profile().orElseThrow();
+  private static Figure curvatureFigure(
+      Fit fit, CurvatureProfile profile, double value, double error) {
     NonlinearForm form = (NonlinearForm) fit.specification().form();
     double low = form.curvature(profile.substitutionHigh());
     double high = form.curvature(profile.substitutionLow());
@@ -216,8 +217,19 @@ final class FitStage {
     return EstimatedFigures.of(estimate);
   }
 
-  private static FitFindings.Curvature curvature(Fit fit, CurvatureProfile profile) {
+  private static Optional<FitFindings.Curvature> curvature(Fit fit) {
+    List<FitFindings.Curvature> all = new ArrayList<>();
+    fit.profiles().forEach(profile -> all.add(curvature(fit, profile, List.of())));
+    return all.isEmpty()
+        ? Optional.empty()
+        : Optional.of(
+            curvature(fit, fit.profiles().get(0), List.copyOf(all.subList(1, all.size()))));
+  }
+
+  private static FitFindings.Curvature curvature(
+      Fit fit, CurvatureProfile profile, List<FitFindings.Curvature> further) {
     return new FitFindings.Curvature(
+        profile.name(),
         profile.state().word(),
         CurvatureWords.of(fit, profile),
         profile.points().stream()
@@ -225,7 +237,8 @@ final class FitStage {
             .toList(),
         profile.substitutionLow(),
         profile.substitutionHigh(),
-        profile.threshold());
+        profile.threshold(),
+        further);
   }
 
   private List<Verdict> verdicts(Fit fit) {
@@ -304,13 +317,11 @@ final class FitStage {
               "The form itself fixes every elasticity of substitution; none was estimated, and the"
                   + " records were not asked about it."));
     }
-    if (fit.state() == Fit.State.FLAT) {
-      fit.profile()
-          .ifPresent(
-              profile ->
-                  remarks.add(
-                      Said.of("warning", "flat-curvature", CurvatureWords.of(fit, profile))));
-    }
+    fit.profiles().stream()
+        .filter(profile -> profile.state() == CurvatureProfile.State.FLAT)
+        .forEach(
+            profile ->
+                remarks.add(Said.of("warning", "flat-curvature", CurvatureWords.of(fit, profile))));
     if (panel.rows() > POINTS) {
       remarks.add(
           Said.of(

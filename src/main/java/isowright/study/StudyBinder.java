@@ -56,10 +56,9 @@ final class StudyBinder {
           "confidence",
           "resampling",
           "restrict",
-          "regularity",
           "nests");
   private static final List<String> ESTIMATION_LATER =
-      List.of("zeros", "instruments", "proxy", "frontier");
+      List.of("zeros", "regularity", "instruments", "proxy", "frontier");
 
   private final Path file;
   private final String sha256;

@@ -25,7 +25,7 @@ import java.util.List;
  * Estimation Problems</i>, Cornell University, section on homotheticity (from memory); that it is
  * exact at the point of expansion only: Denny, M. and Fuss, M. (1977), The Use of Approximation
  * Analysis to Test for Separability and the Existence of Consistent Aggregates, <i>American
- * Economic Review</i> 67, 404–418. Tested in {@code RestrictedTranslogTest}.
+ * Economic Review</i> 67, 404–418. Tested in {@code FurtherFormsTest}.
  */
 final class HomotheticTranslog implements NonlinearForm {
 

@@ -14,7 +14,7 @@ import java.util.Optional;
  * nest and P_g its tilted share, every derivative inside a nest is ν P_g times that of M_g; both
  * stages are computed by {@link CesRows}.
  *
- * <p>Tested in {@code NestedCesFormTest}.
+ * <p>Tested in {@code NonlinearFormsTest}.
  */
 final class NestedCesForm implements NonlinearForm {
 

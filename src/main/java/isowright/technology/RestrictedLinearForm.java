@@ -20,7 +20,7 @@ import org.apache.commons.math3.linear.QRDecomposition;
  * N′ of all coefficients is singular in the directions of R, as it must be.
  *
  * <p>Source: Lawson, C. L. and Hanson, R. J. (1974), <i>Solving Least Squares Problems</i>, chapter
- * 21 (elimination of equality constraints). Tested in {@code RestrictedTranslogTest}.
+ * 21 (elimination of equality constraints). Tested in {@code FurtherFormsTest}.
  */
 final class RestrictedLinearForm implements LinearForm {
 
