@@ -63,7 +63,7 @@ final class PanelRefitting implements Refitting {
   /**
    * @param whole whether levels will be asked for
    */
-  private Refit refit(Panel some, boolean whole) {
+  Refit refit(Panel some, boolean whole) {
     Specification own = fit.specification();
     // The covariance of a refit is not looked at; the classical one asks least of the rows.
     Specification plain =

@@ -70,17 +70,27 @@ final class RowLevels {
   private record Sum(double total, int rows) {}
 
   private Sum sum(double[] reported, int from, int to, IntPredicate keep) {
+    double[] levels = ofRows(reported, from, to);
+    double total = 0;
+    int kept = 0;
+    for (int row = from; row < to; row++) {
+      if (keep.test(row)) {
+        total += levels[row - from];
+        kept++;
+      }
+    }
+    return new Sum(total, kept);
+  }
+
+  /** ln Q less what technology (without its constant) and circumstances explain, row by row. */
+  double[] ofRows(double[] reported, int from, int to) {
     int p = first.parameters().length;
     Technology technology = first.withParameters(Arrays.copyOf(reported, p));
     double[][] columns = new double[circumstances.count()][to - from];
     circumstances.fill(from, to, rows.logInputs(from, to), columns, 0);
     double[] logs = new double[panel.logQuantities().size()];
-    double total = 0;
-    int kept = 0;
+    double[] levels = new double[to - from];
     for (int row = from; row < to; row++) {
-      if (!keep.test(row)) {
-        continue;
-      }
       for (int i = 0; i < logs.length; i++) {
         logs[i] = panel.logQuantities().get(i).get(row);
       }
@@ -88,9 +98,8 @@ final class RowLevels {
       for (int c = 0; c < columns.length; c++) {
         explained += reported[p + c] * columns[c][row - from];
       }
-      total += panel.logOutput().get(row) - explained;
-      kept++;
+      levels[row - from] = panel.logOutput().get(row) - explained;
     }
-    return new Sum(total, kept);
+    return levels;
   }
 }

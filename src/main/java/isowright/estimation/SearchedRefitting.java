@@ -98,7 +98,7 @@ final class SearchedRefitting implements Refitting {
     return ProfiledProblem.of(panel, fit.specification(), fit.base(), form);
   }
 
-  private Refit search(Panel panel) {
+  Refit search(Panel panel) {
     ProfiledProblem problem = problem(panel);
     return search(problem, problem.free());
   }

@@ -1,17 +1,22 @@
 package isowright.inference;
 
+import isowright.regression.LikelihoodComparison;
 import java.util.List;
 import org.apache.commons.statistics.distribution.ChiSquaredDistribution;
 import org.apache.commons.statistics.distribution.FDistribution;
+import org.apache.commons.statistics.distribution.NormalDistribution;
 import org.apache.commons.statistics.distribution.TDistribution;
 
 /** The law of a test statistic under its null. */
 public sealed interface Law {
 
-  /** Its name: {@code F}, {@code chi-squared} or {@code t}. */
+  /**
+   * Its name: {@code F}, {@code chi-squared}, {@code t}, {@code normal} or {@code weighted
+   * chi-squared}.
+   */
   String name();
 
-  /** Its degrees of freedom, one or two. */
+  /** Its degrees of freedom, none, one or two. */
   List<Double> degreesOfFreedom();
 
   /** The probability of a statistic at least as extreme. */
@@ -74,6 +79,58 @@ public sealed interface Law {
       return Double.isNaN(statistic)
           ? Double.NaN
           : Math.min(1, 2 * TDistribution.of(degrees).survivalProbability(Math.abs(statistic)));
+    }
+  }
+
+  /** The standard normal law, two-sided. */
+  record Normal() implements Law {
+    @Override
+    public String name() {
+      return "normal";
+    }
+
+    @Override
+    public List<Double> degreesOfFreedom() {
+      return List.of();
+    }
+
+    @Override
+    public double p(double statistic) {
+      return Double.isNaN(statistic)
+          ? Double.NaN
+          : Math.min(1, 2 * NormalDistribution.of(0, 1).survivalProbability(Math.abs(statistic)));
+    }
+  }
+
+  /**
+   * A sum of independent chi-squared variables of one degree of freedom each, with weights; its
+   * p-values come from draws that are always the same.
+   *
+   * @param weights the weights, positive
+   */
+  record WeightedSum(List<Double> weights) implements Law {
+    /** Copies the weights. */
+    public WeightedSum {
+      weights = List.copyOf(weights);
+    }
+
+    @Override
+    public String name() {
+      return "weighted chi-squared";
+    }
+
+    /** How many there are. */
+    @Override
+    public List<Double> degreesOfFreedom() {
+      return List.of((double) weights.size());
+    }
+
+    @Override
+    public double p(double statistic) {
+      return Double.isNaN(statistic)
+          ? Double.NaN
+          : LikelihoodComparison.weightedSumBeyond(
+              weights.stream().mapToDouble(Double::doubleValue).toArray(), statistic);
     }
   }
 }

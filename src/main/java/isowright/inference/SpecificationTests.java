@@ -1,7 +1,9 @@
 package isowright.inference;
 
+import isowright.estimation.Estimator;
 import isowright.estimation.Fit;
 import isowright.estimation.Solution;
+import isowright.estimation.Specification.RegularityImposed;
 import isowright.regression.ColumnMoments;
 import isowright.regression.DerivedColumns;
 import isowright.regression.Design;
@@ -9,6 +11,7 @@ import isowright.regression.LeastSquares;
 import isowright.technology.LinearForm;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 
 /**
  * Does a fit describe its rows as it claims? Tests of the specification: RESET, heteroskedasticity
@@ -49,15 +52,22 @@ public final class SpecificationTests {
     this.numbers = fit.numbers();
   }
 
-  /** The tests of a usable fit. */
+  /**
+   * The tests of a usable fit; none where the residuals are not those of least squares free of
+   * constraints (other estimators, regularity imposed).
+   */
   public static List<Verdict> of(Fit fit) {
     SpecificationTests tests = new SpecificationTests(fit);
     List<Verdict> verdicts = new ArrayList<>();
+    if (!(fit.specification().estimator() instanceof Estimator.LeastSquares)
+        || fit.specification().regularity() != RegularityImposed.FREE) {
+      return verdicts;
+    }
     if (fit.specification().form() instanceof LinearForm) {
       verdicts.add(tests.reset());
       verdicts.addAll(Heteroskedasticity.of(fit));
     }
-    verdicts.add(tests.normality());
+    tests.normality().ifPresent(verdicts::add);
     return List.copyOf(verdicts);
   }
 
@@ -95,15 +105,13 @@ public final class SpecificationTests {
         added.law());
   }
 
-  private Verdict normality() {
-    String null0 = "the errors follow a normal law, rows being taken as independent";
-    Law law = new Law.ChiSquared(2);
+  private Optional<Verdict> normality() {
     Design design = numbers.design();
     double[] residuals = LeastSquares.residuals(design, numbers.linear());
     // With two rows a plant, residuals come in pairs of opposite sign and have no skewness at all.
     boolean pairs = 2 * design.absorbed() >= residuals.length;
     if (pairs || residuals.length < FEWEST_ROWS) {
-      return Verdict.of("jarque-bera", null0, Double.NaN, law);
+      return Optional.empty();
     }
     int count = 0;
     for (int r = 0; r < residuals.length; r++) {
@@ -112,7 +120,12 @@ public final class SpecificationTests {
         residuals[count++] = residuals[r] / Math.sqrt(room);
       }
     }
-    return Verdict.of("jarque-bera", null0, jarqueBera(residuals, count), law);
+    return Optional.of(
+        Verdict.of(
+            "jarque-bera",
+            "the errors follow a normal law, rows being taken as independent",
+            jarqueBera(residuals, count),
+            new Law.ChiSquared(2)));
   }
 
   /** N/6 (S² + (K − 3)²/4) of the first {@code count} values. */

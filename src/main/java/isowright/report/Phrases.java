@@ -169,6 +169,7 @@ public final class Phrases {
         switch (test.distribution()) {
           case "chi-squared" -> "χ²";
           case "normal" -> "z";
+          case "weighted chi-squared" -> "Σwχ²";
           default -> test.distribution();
         };
     String degrees =

@@ -1,6 +1,7 @@
 package isowright.report;
 
 import isowright.study.SpecificationFindings;
+import isowright.study.SpecificationFindings.Predicted;
 import java.io.IOException;
 
 /** The specification as a whole, as it stands in the findings file. */
@@ -47,5 +48,29 @@ final class SpecificationJson {
           file.number("raw", factor.raw());
           file.number("centred", factor.centred());
         });
+    file.list(
+        "comparisons",
+        found.comparisons(),
+        false,
+        comparison -> {
+          file.text("first", comparison.first());
+          file.text("second", comparison.second());
+          FitJson.tests(file, comparison.tests());
+          file.text("words", comparison.words());
+        });
+    file.list("predictions", found.predictions(), false, p -> predicted(file, p));
+  }
+
+  private static void predicted(JsonFile file, Predicted predicted) throws IOException {
+    file.text("technology", predicted.technology());
+    file.text("judged", predicted.judged());
+    file.number("error", predicted.error());
+    file.number("levelError", predicted.levelError().orElse(Double.NaN));
+    file.number("spread", predicted.spread().orElse(Double.NaN));
+    file.figure("difference", predicted.difference());
+    file.whole("plants", predicted.plants());
+    file.whole("folds", predicted.folds());
+    file.whole("failed", predicted.failed());
+    file.text("verdict", predicted.verdict());
   }
 }

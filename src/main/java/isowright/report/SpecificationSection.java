@@ -56,6 +56,7 @@ final class SpecificationSection {
             List.of()));
     blocks.add(new Points(false, meanings()));
     inflation(material).ifPresent(blocks::add);
+    blocks.addAll(FormsBlocks.annex(material));
     blocks.add(Paragraph.of(CRITERIA));
     return Optional.of(new Section(ID, "Annex: specification", blocks));
   }

@@ -200,6 +200,12 @@ final class Terms {
       case "breusch-pagan" -> "Breusch-Pagan: equal variance";
       case "white" -> "White: equal variance";
       case "jarque-bera" -> "Jarque-Bera: normal errors";
+      case "vuong-alike" -> "Vuong: can they be told apart?";
+      case "vuong" -> "Vuong: which is nearer?";
+      case "vuong-akaike" -> "… corrected after Akaike";
+      case "vuong-schwarz" -> "… corrected after Schwarz";
+      case "j-first" -> "J test of the first";
+      case "j-second" -> "J test of the second";
       default -> Phrases.sentence(name.replace('-', ' '));
     };
   }

@@ -249,7 +249,7 @@ final class FitStage {
     return verdicts;
   }
 
-  private static FitFindings.Tested tested(Verdict verdict, double confidence) {
+  static FitFindings.Tested tested(Verdict verdict, double confidence) {
     return new FitFindings.Tested(
         verdict.name(),
         verdict.nullHypothesis(),

@@ -117,6 +117,20 @@ public final class PanelFixtures {
         all, row -> periods.contains(all.periods().get(all.rowPeriods().get(row))));
   }
 
+  /** The demo's glassworks, 2012 on, with a control. */
+  public static Panel glassworks() {
+    return read(
+        Path.of("notebooks-data/glassworks.csv"),
+        "plant",
+        "year",
+        "tonnes",
+        List.of(
+            input("labour", "labour_hours"),
+            input("machines", "machine_hours"),
+            input("energy", "energy_gj")),
+        List.of(new Roles.Control("breakdown_rate", false)));
+  }
+
   private static Roles.Input input(String name, String column) {
     return new Roles.Input(name, column, Optional.empty(), Optional.empty(), Optional.empty());
   }
