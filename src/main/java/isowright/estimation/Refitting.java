@@ -21,12 +21,9 @@ interface Refitting {
   /** Rows refitted in all, above which leaving out by fitting anew is not done. */
   long MOST_ROWS_REFITTED = 2_000_000;
 
-  /** The way for a fit; empty where its estimator draws plants itself. */
+  /** The way for a fit. */
   static Optional<Refitting> of(Fit fit) {
     Specification specification = fit.specification();
-    if (specification.estimator() instanceof Estimator.ControlFunction) {
-      return Optional.empty();
-    }
     boolean plain = fit.plantsStandAlone();
     if (plain && specification.form() instanceof LinearForm form) {
       return Optional.of(new LinearRefitting(fit, form));

@@ -62,7 +62,7 @@ final class FormsBlocks {
     SpecificationFindings found = material.findings().specification();
     List<Block> blocks = new ArrayList<>();
     comparisons(material, found.comparisons()).ifPresent(blocks::add);
-    predictions(material, found.predictions()).ifPresent(blocks::add);
+    predictions(found.predictions()).ifPresent(blocks::add);
     return blocks;
   }
 
@@ -106,7 +106,7 @@ final class FormsBlocks {
                         + " those of its rows."))));
   }
 
-  private static Optional<Block> predictions(Material material, List<Predicted> predictions) {
+  private static Optional<Block> predictions(List<Predicted> predictions) {
     if (predictions.isEmpty()) {
       return Optional.empty();
     }
