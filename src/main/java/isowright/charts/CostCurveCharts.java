@@ -86,8 +86,14 @@ final class CostCurveCharts {
     int last = targets.length - 1;
     StringBuilder words = new StringBuilder(title).append(". ");
     words.append("Average cost ").append(at(average, 0)).append(", ");
-    words.append(at(average, last)).append("; marginal cost ");
-    words.append(at(marginal, 0)).append(", ").append(at(marginal, last)).append('.');
+    words.append(at(average, last));
+    if (Double.isFinite(marginal[0]) && Double.isFinite(marginal[last])) {
+      words.append("; marginal cost ").append(at(marginal, 0));
+      words.append(", ").append(at(marginal, last));
+    } else {
+      words.append("; marginal cost could not be had");
+    }
+    words.append('.');
     plan.averageCost()
         .ifPresent(
             figure ->

@@ -16,6 +16,8 @@ import java.util.function.Predicate;
 /** Filed cost against least cost, with the line on which both are equal; a chart a technology. */
 final class FilingCharts {
 
+  private static final Figure NONE = Figure.exact(Double.NaN);
+
   /** How many plants are named. */
   private static final int NAMED = 4;
 
@@ -26,15 +28,20 @@ final class FilingCharts {
       return filing
           .leastCost()
           .filter(f -> f.value() > 0 && Double.isFinite(f.value()) && filing.filed() > 0)
-          .map(
-              f ->
-                  new Pair(
-                      filing,
-                      f.value(),
-                      f.uncertainty().map(Figure.Uncertainty::low).orElse(f.value()),
-                      f.uncertainty().map(Figure.Uncertainty::high).orElse(f.value())));
+          .map(f -> of(filing, f.value()));
     }
 
+    /** The ends are where least cost would lie if the gap were at an end of its interval. */
+    private static Pair of(Reviewed filing, double least) {
+      Optional<Figure.Uncertainty> gap = filing.gap().flatMap(Figure::uncertainty);
+      return new Pair(
+          filing,
+          least,
+          gap.map(u -> filing.filed() - u.high()).filter(Double::isFinite).orElse(least),
+          gap.map(u -> filing.filed() - u.low()).filter(Double::isFinite).orElse(least));
+    }
+
+    /** Told by the whole interval of the gap, as everywhere. */
     boolean above() {
       return filing.filed() > high;
     }
@@ -78,9 +85,9 @@ final class FilingCharts {
   private Chart chart() {
     String title =
         Words.sentence(Words.technology(technology))
-            + ": filed cost lies above "
-            + yardstick()
-            + " in "
+            + ": filed cost lies above least cost "
+            + (uncertain() ? "with its whole " + setting.level() + " interval " : "")
+            + "in "
             + Numbers.stated(count(Pair::above))
             + " of "
             + Numbers.stated(pairs.size())
@@ -88,7 +95,9 @@ final class FilingCharts {
     int without = filings.size() - pairs.size();
     String caption =
         "On the line filed cost equals least cost."
-            + (uncertain() ? " Bars are " + setting.level() + " intervals of least cost." : "")
+            + (uncertain()
+                ? " Bars are " + setting.level() + " intervals of the gap, drawn about least cost."
+                : "")
             + " Cost above least cost is unexplained here; that is not the same as waste."
             + (without == 0
                 ? ""
@@ -113,10 +122,6 @@ final class FilingCharts {
     return pairs.stream().anyMatch(p -> p.low() < p.high());
   }
 
-  private String yardstick() {
-    return uncertain() ? "the " + setting.level() + " interval of least cost" : "least cost";
-  }
-
   private long count(Predicate<Pair> which) {
     return pairs.stream().filter(which).count();
   }
@@ -128,9 +133,9 @@ final class FilingCharts {
     return title
         + ", "
         + Numbers.stated(count(Pair::within))
-        + " within it and "
+        + (uncertain() ? " cannot be told apart from it and " : " equal it and ")
         + Numbers.stated(count(Pair::below))
-        + " below. Together "
+        + (count(Pair::below) == 1 ? " lies below. Together " : " lie below. Together ")
         + Numbers.money(filed, money)
         + " were filed against a least cost of "
         + Numbers.money(least, money)
@@ -147,12 +152,19 @@ final class FilingCharts {
             "least cost (" + money + ")",
             "least cost, low",
             "least cost, high",
+            "gap (" + money + ")",
+            "gap, low",
+            "gap, high",
             "filed against least cost");
     for (Pair pair : drawn) {
       List<String> row = new ArrayList<>(List.of(pair.filing().plant(), pair.filing().period()));
       row.add(Numbers.tabular(pair.filing().filed()));
-      pair.filing().leastCost().ifPresent(f -> row.addAll(Words.cells(f)));
-      row.add(pair.above() ? "above" : pair.below() ? "below" : uncertain() ? "within" : "equal");
+      row.addAll(Words.cells(pair.filing().leastCost().orElse(NONE)));
+      row.addAll(Words.cells(pair.filing().gap().orElse(NONE)));
+      row.add(
+          pair.above()
+              ? "above"
+              : pair.below() ? "below" : uncertain() ? "cannot be told apart" : "equal");
       table.row(row);
     }
     return table;
@@ -177,7 +189,7 @@ final class FilingCharts {
     ActualPredictedCharts.equality(plot, "filed = least");
     if (uncertain()) {
       plot.intervals(
-          "interval of least cost",
+          "interval of the gap",
           drawn.stream().mapToDouble(p -> Math.max(p.low(), plot.x().low())).toArray(),
           drawn.stream().mapToDouble(Pair::high).toArray(),
           drawn.stream().mapToDouble(p -> p.filing().filed()).toArray(),
@@ -201,15 +213,14 @@ final class FilingCharts {
   }
 
   private void key(Plot plot) {
-    String what = uncertain() ? " the interval" : " least cost";
     if (count(Pair::above) > 0) {
-      plot.key(Dot.MARKED, "above" + what);
+      plot.key(Dot.MARKED, "above least cost");
     }
     if (count(Pair::within) > 0) {
-      plot.key(Dot.NEAR, uncertain() ? "within it" : "equal");
+      plot.key(Dot.NEAR, uncertain() ? "cannot be told apart" : "equal");
     }
     if (count(Pair::below) > 0) {
-      plot.key(Dot.FAR, "below" + (uncertain() ? " it" : what));
+      plot.key(Dot.FAR, "below least cost");
     }
   }
 

@@ -24,6 +24,15 @@ final class Letters {
     return text.isEmpty() ? 0 : Style.font(size, bold).getStringBounds(text, METRICS).getWidth();
   }
 
+  /** Words that are no wider than {@code width}: their beginning and an ellipsis where need be. */
+  static String shortened(String text, double width, float size, boolean bold) {
+    if (width(text, size, bold) <= width) {
+      return text;
+    }
+    double left = Math.max(0, width - width("…", size, bold));
+    return text.substring(0, fitting(text, left, size, bold)).stripTrailing() + "…";
+  }
+
   /**
    * A sentence in as few lines as are no wider than {@code width}, all about equally long. A number
    * is not parted from its unit; a word that is wider than a line is divided.

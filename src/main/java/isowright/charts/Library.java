@@ -6,6 +6,7 @@ import isowright.charts.Plot.Layer;
 import isowright.charts.Plot.Line;
 import java.awt.BasicStroke;
 import java.awt.Color;
+import java.util.Arrays;
 import java.util.Locale;
 import org.knowm.xchart.XYChart;
 import org.knowm.xchart.XYSeries;
@@ -38,7 +39,7 @@ final class Library {
     frame(chart, plot);
     int number = 0;
     for (Layer layer : plot.layers()) {
-      add(chart, layer, Integer.toString(number++));
+      add(chart, plot, layer, Integer.toString(number++));
     }
     return chart;
   }
@@ -95,7 +96,8 @@ final class Library {
     styler.setYAxisTickMarkSpacingHint(48);
   }
 
-  private static void ends(XYStyler styler, Axis axis, boolean horizontal) {
+  private static void ends(XYStyler styler, Axis asked, boolean horizontal) {
+    Axis axis = inPower(asked);
     double low;
     double high;
     if (axis.logarithmic()) {
@@ -118,13 +120,23 @@ final class Library {
     }
   }
 
+  /** An axis in its power of ten: the library counts ticks of extreme sizes without end. */
+  private static Axis inPower(Axis axis) {
+    return new Axis(
+        axis.title(), axis.inPower(axis.low()), axis.inPower(axis.high()), axis.logarithmic());
+  }
+
+  private static double[] inPower(Axis axis, double[] values) {
+    return axis.exponent() == 0 ? values : Arrays.stream(values).map(axis::inPower).toArray();
+  }
+
   /**
    * An invisible line at uneven places: where all values of a chart are evenly spaced, the library
    * puts ticks at the values instead of at round numbers.
    */
   private static void frame(XYChart chart, Plot plot) {
-    double[] x = uneven(plot.x());
-    double[] y = uneven(plot.y());
+    double[] x = uneven(inPower(plot.x()));
+    double[] y = uneven(inPower(plot.y()));
     XYSeries frame = chart.addSeries("frame", x, y);
     frame.setXYSeriesRenderStyle(XYSeriesRenderStyle.Scatter);
     frame.setMarker(SeriesMarkers.NONE);
@@ -138,7 +150,7 @@ final class Library {
     return new double[] {axis.low(), first, axis.high()};
   }
 
-  private static void add(XYChart chart, Layer layer, String key) {
+  private static void add(XYChart chart, Plot plot, Layer layer, String key) {
     if (layer instanceof Band band) {
       int n = band.x().length;
       double[] x = new double[2 * n];
@@ -149,22 +161,26 @@ final class Library {
         x[2 * n - 1 - i] = band.x()[i];
         y[2 * n - 1 - i] = band.low()[i];
       }
-      XYSeries series = chart.addSeries(key, x, y);
+      XYSeries series = series(chart, plot, key, x, y);
       series.setXYSeriesRenderStyle(XYSeriesRenderStyle.PolygonArea);
       series.setLineStyle(SeriesLines.NONE);
       series.setMarker(SeriesMarkers.NONE);
       series.setFillColor(new Ink(band.color(), band.name()));
     } else if (layer instanceof Line line) {
-      XYSeries series = chart.addSeries(key, line.x(), line.y());
+      XYSeries series = series(chart, plot, key, line.x(), line.y());
       series.setXYSeriesRenderStyle(XYSeriesRenderStyle.Line);
       series.setMarker(SeriesMarkers.NONE);
       series.setLineStyle(line.pen().stroke());
       series.setLineColor(new Ink(line.pen().color(), line.name()));
     } else if (layer instanceof Dots dots && dots.x().length > 0) {
-      XYSeries series = chart.addSeries(key, dots.x(), dots.y());
+      XYSeries series = series(chart, plot, key, dots.x(), dots.y());
       series.setXYSeriesRenderStyle(XYSeriesRenderStyle.Scatter);
       series.setMarker(new Dotted(dots.dot()));
       series.setMarkerColor(new Ink(dots.dot().color(), dots.name()));
     }
+  }
+
+  private static XYSeries series(XYChart chart, Plot plot, String key, double[] x, double[] y) {
+    return chart.addSeries(key, inPower(plot.x(), x), inPower(plot.y(), y));
   }
 }

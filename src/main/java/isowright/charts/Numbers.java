@@ -3,15 +3,15 @@ package isowright.charts;
 import java.math.BigDecimal;
 import java.math.MathContext;
 import java.math.RoundingMode;
-import java.util.Locale;
 
 /**
  * Numbers in print: thousands separated by commas, a point before decimals, whatever the machine's
- * language; no powers of ten for ordinary sizes.
+ * language; powers of ten only for sizes that nobody writes out.
  */
 final class Numbers {
 
   private static final String MINUS = "\u2212";
+  private static final String SUPERSCRIPTS = "⁰¹²³⁴⁵⁶⁷⁸⁹";
 
   private Numbers() {}
 
@@ -85,6 +85,15 @@ final class Numbers {
     return Math.max(0, Math.min(9, exact.scale()));
   }
 
+  /** "10⁻¹²". */
+  static String powerOfTen(int exponent) {
+    StringBuilder text = new StringBuilder(exponent < 0 ? "10⁻" : "10");
+    for (char digit : Integer.toString(Math.abs(exponent)).toCharArray()) {
+      text.append(SUPERSCRIPTS.charAt(digit - '0'));
+    }
+    return text.toString();
+  }
+
   private static String rounded(double value, int digits) {
     if (Double.isNaN(value)) {
       return "not known";
@@ -95,17 +104,36 @@ final class Numbers {
     if (value == 0) {
       return "0";
     }
-    double size = Math.abs(value);
-    if (size >= 1e15 || size < 1e-6) {
-      return String.format(Locale.ROOT, "%." + (digits - 1) + "e", value);
-    }
     BigDecimal shortened =
         new BigDecimal(value).round(new MathContext(digits, RoundingMode.HALF_UP));
-    return grouped(shortened.doubleValue(), Math.max(0, shortened.stripTrailingZeros().scale()));
+    double size = Math.abs(value);
+    if (size >= 1e15 || size < 1e-6) {
+      int exponent = shortened.precision() - shortened.scale() - 1;
+      BigDecimal mantissa = shortened.scaleByPowerOfTen(-exponent).stripTrailingZeros();
+      return mantissa.toPlainString() + " × " + powerOfTen(exponent);
+    }
+    BigDecimal plain = shortened.stripTrailingZeros();
+    return grouped(plain.setScale(Math.max(0, plain.scale())));
   }
 
   private static String grouped(double value, int decimals) {
-    return String.format(Locale.ROOT, "%,." + decimals + "f", value);
+    return grouped(BigDecimal.valueOf(value).setScale(decimals, RoundingMode.HALF_UP));
+  }
+
+  /** A decimal number with commas between thousands. */
+  private static String grouped(BigDecimal number) {
+    String digits = number.toPlainString();
+    int first = digits.startsWith("-") ? 1 : 0;
+    int point = digits.indexOf('.');
+    int whole = point < 0 ? digits.length() : point;
+    if (whole - first <= 3) {
+      return digits;
+    }
+    StringBuilder text = new StringBuilder(digits);
+    for (int i = whole - 3; i > first; i -= 3) {
+      text.insert(i, ',');
+    }
+    return text.toString();
   }
 
   private static String typographic(String number) {

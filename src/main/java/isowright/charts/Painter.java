@@ -29,6 +29,9 @@ final class Painter implements Placement.Screen {
   /** Room below the library's part; its own margin comes on top. */
   private static final int BELOW = 16;
 
+  /** How much of the width the labels of rows may take, and the values at the other side. */
+  private static final double ROW_SHARE = 0.34;
+
   private final Plot plot;
   private final Recording recording = new Recording();
   private final Rectangle2D area;
@@ -72,11 +75,22 @@ final class Painter implements Placement.Screen {
     double left = 0;
     double right = 0;
     for (Row row : plot.rows()) {
-      left = Math.max(left, indent(row) + Letters.width(row.text(), Style.LETTERS, row.heading()));
-      right = Math.max(right, Letters.width(row.value(), Style.LETTERS, false) + 4);
+      String text = text(plot, row);
+      left = Math.max(left, indent(row) + Letters.width(text, Style.LETTERS, row.heading()));
+      right = Math.max(right, Letters.width(value(plot, row), Style.LETTERS, false) + 4);
     }
     return new Rectangle2D.Double(
         Math.rint(left), top, Math.rint(plot.width() - left - right), plot.height() - top - BELOW);
+  }
+
+  /** The label of a row, as much of it as leaves room for the plot. */
+  private static String text(Plot plot, Row row) {
+    double room = ROW_SHARE * plot.width() - indent(row);
+    return Letters.shortened(row.text(), room, Style.LETTERS, row.heading());
+  }
+
+  private static String value(Plot plot, Row row) {
+    return Letters.shortened(row.value(), ROW_SHARE * plot.width(), Style.LETTERS, false);
   }
 
   private static boolean hasTitle(Plot plot) {
@@ -89,15 +103,15 @@ final class Painter implements Placement.Screen {
 
   @Override
   public double x(double value) {
-    double low = chart.getScreenXFromChart(plot.x().low());
-    double high = chart.getScreenXFromChart(plot.x().high());
+    double low = chart.getScreenXFromChart(plot.x().inPower(plot.x().low()));
+    double high = chart.getScreenXFromChart(plot.x().inPower(plot.x().high()));
     return area.getX() + low + plot.x().share(value) * (high - low);
   }
 
   @Override
   public double y(double value) {
-    double low = chart.getScreenYFromChart(plot.y().low());
-    double high = chart.getScreenYFromChart(plot.y().high());
+    double low = chart.getScreenYFromChart(plot.y().inPower(plot.y().low()));
+    double high = chart.getScreenYFromChart(plot.y().inPower(plot.y().high()));
     return area.getY() + low + plot.y().share(value) * (high - low);
   }
 
@@ -114,10 +128,18 @@ final class Painter implements Placement.Screen {
 
   private void axisTitles() {
     if (hasTitle(plot)) {
-      quiet(plot.y().title(), EDGE, area.getY() + 3, Anchor.START);
+      quiet(fitted(plot.y().heading(), EDGE), EDGE, area.getY() + 3, Anchor.START);
     }
+    String title = fitted(plot.x().heading(), EDGE);
+    double half = Letters.width(title, Style.LETTERS, false) / 2;
     double middle = (x(plot.x().low()) + x(plot.x().high())) / 2;
-    quiet(plot.x().title(), middle, plot.height() - 8.0, Anchor.MIDDLE);
+    double inside = Math.max(EDGE + half, Math.min(plot.width() - EDGE - half, middle));
+    quiet(title, inside, plot.height() - 8.0, Anchor.MIDDLE);
+  }
+
+  /** Words that begin at a column and end within the picture. */
+  private String fitted(String text, double from) {
+    return Letters.shortened(text, plot.width() - EDGE - from, Style.LETTERS, false);
   }
 
   private void key() {
@@ -147,8 +169,9 @@ final class Painter implements Placement.Screen {
             Optional.empty());
         x += 25;
       }
-      quiet(key.text(), x, y, Anchor.START);
-      x += Letters.width(key.text(), Style.LETTERS, false) + 22;
+      String text = fitted(key.text(), x);
+      quiet(text, x, y, Anchor.START);
+      x += Letters.width(text, Style.LETTERS, false) + 22;
     }
   }
 
@@ -157,9 +180,9 @@ final class Painter implements Placement.Screen {
     for (int i = 0; i < count; i++) {
       Row row = plot.rows().get(i);
       double y = y(Plot.rowAt(i, count)) + 4.5;
-      letters(row.text(), indent(row), y, Anchor.START, row.heading(), Style.TEXT, false);
+      letters(text(plot, row), indent(row), y, Anchor.START, row.heading(), Style.TEXT, false);
       if (!row.value().isEmpty()) {
-        quiet(row.value(), plot.width() - 8.0, y, Anchor.END);
+        quiet(value(plot, row), plot.width() - 8.0, y, Anchor.END);
       }
     }
   }
@@ -179,7 +202,7 @@ final class Painter implements Placement.Screen {
           .ifPresent(
               placed ->
                   letters(
-                      label.text(),
+                      placed.text(),
                       placed.x(),
                       placed.baseline(),
                       Anchor.START,

@@ -9,14 +9,15 @@ import java.util.Optional;
 
 /**
  * Where labels stand: of all places offered (points, sides, distances) the one that covers least.
- * Covering another label or leaving the plot is worst, covering a line is bad, covering a dot less
- * so; among equals the earlier point, side and the shorter distance win. A label that would cover
- * another wherever it stood is left out: what it names stands in the chart's table. Deterministic.
+ * Covering another label is worst, being moved into the plot and covering a line are bad, covering
+ * a dot less so; among equals the earlier point, side and the shorter distance win. A label that
+ * would cover another wherever it stood is left out: what it names stands in the chart's table.
+ * Deterministic.
  */
 final class Placement {
 
   private static final double[] DISTANCES = {7, 12, 18, 26};
-  private static final double OUTSIDE = 1000;
+  private static final double MOVED = 40;
   private static final double ON_LABEL = 400;
   private static final double ON_LINE = 12;
   private static final double ON_DOT = 4;
@@ -33,8 +34,8 @@ final class Placement {
     double y(double value);
   }
 
-  /** A label in its place: the left end of its baseline. */
-  record Placed(Label label, double x, double baseline) {}
+  /** What a label says, shortened to the plot, and the left end of its baseline. */
+  record Placed(String text, double x, double baseline) {}
 
   private final Rectangle2D plot;
   private final List<double[]> onLines = new ArrayList<>();
@@ -71,7 +72,8 @@ final class Placement {
 
   /** Puts a label where it covers least; nowhere if it would cover another one everywhere. */
   Optional<Placed> place(Label label, Screen screen) {
-    double width = Letters.width(label.text(), Style.LETTERS, label.bold());
+    String text = Letters.shortened(label.text(), plot.getWidth(), Style.LETTERS, label.bold());
+    double width = Letters.width(text, Style.LETTERS, label.bold());
     double least = Double.POSITIVE_INFINITY;
     Rectangle2D best = new Rectangle2D.Double();
     for (int p = 0; p < label.x().length; p++) {
@@ -79,8 +81,10 @@ final class Placement {
       double y = screen.y(label.y()[p]);
       for (int d = 0; d < DISTANCES.length; d++) {
         for (int s = 0; s < label.sides().size(); s++) {
-          Rectangle2D box = box(x, y, width, label.sides().get(s), DISTANCES[d]);
-          double cost = cost(box) + 0.5 * p + 1.5 * s + 6 * d;
+          Rectangle2D asked = box(x, y, width, label.sides().get(s), DISTANCES[d]);
+          Rectangle2D box = intoPlot(asked);
+          double moved = box.equals(asked) ? 0 : MOVED;
+          double cost = cost(box) + moved + 0.5 * p + 1.5 * s + 6 * d;
           if (cost < least) {
             least = cost;
             best = box;
@@ -92,7 +96,15 @@ final class Placement {
       return Optional.empty();
     }
     taken.add(best);
-    return Optional.of(new Placed(label, best.getX(), best.getY() + ASCENT * Style.LETTERS));
+    return Optional.of(new Placed(text, best.getX(), best.getY() + ASCENT * Style.LETTERS));
+  }
+
+  /** The nearest place inside the plot. */
+  private Rectangle2D intoPlot(Rectangle2D box) {
+    double x = Math.min(box.getX(), plot.getMaxX() - box.getWidth());
+    double y = Math.min(box.getY(), plot.getMaxY() - box.getHeight());
+    return new Rectangle2D.Double(
+        Math.max(x, plot.getX()), Math.max(y, plot.getY()), box.getWidth(), box.getHeight());
   }
 
   private boolean covers(Rectangle2D box) {
@@ -111,14 +123,6 @@ final class Placement {
 
   private double cost(Rectangle2D box) {
     double cost = 0;
-    if (!plot.contains(box)) {
-      Rectangle2D inside = plot.createIntersection(box);
-      double kept =
-          inside.isEmpty()
-              ? 0
-              : inside.getWidth() * inside.getHeight() / (box.getWidth() * box.getHeight());
-      cost += OUTSIDE * (1.5 - kept);
-    }
     for (Rectangle2D other : taken) {
       if (grown(other, 3).intersects(box)) {
         cost += ON_LABEL;

@@ -36,6 +36,9 @@ final class TickLabels implements Canvas.Reader {
   /** Height of a digit in em: half of it lies below the middle of the line. */
   private static final double DIGIT_HEIGHT = 0.73;
 
+  /** Beyond so many decades, labels are powers of ten, and no more than so many. */
+  private static final int MANY_DECADES = 6;
+
   private record Seen(double value, double x, double y, Anchor anchor) {}
 
   private final Font font = Style.font(Style.LETTERS, false);
@@ -62,22 +65,35 @@ final class TickLabels implements Canvas.Reader {
   }
 
   private String words(Axis axis, double value) {
-    double clean = Math.abs(value) < 1e-9 * (axis.high() - axis.low()) ? 0 : value;
+    double span = axis.inPower(axis.high()) - axis.inPower(axis.low());
+    double clean = Math.abs(value) < 1e-9 * span ? 0 : value;
     if (axis.logarithmic() && !labelled(axis, clean)) {
       return "";
     }
-    String words = Numbers.decimals(clean, Numbers.decimalsOf(clean));
+    String words = print(axis, clean, Numbers.decimalsOf(clean));
     asked.put(words, clean);
     return words;
   }
 
+  /** A label as a number, or as a power of ten on an axis of many decades. */
+  private static String print(Axis axis, double value, int decimals) {
+    return axis.logarithmic() && decades(axis) > MANY_DECADES
+        ? Numbers.powerOfTen((int) Math.round(Math.log10(value)))
+        : Numbers.decimals(value, decimals);
+  }
+
+  private static double decades(Axis axis) {
+    return Math.log10(axis.high() / axis.low());
+  }
+
   /** On a logarithmic axis, 1, 2, 5, 10, … or fewer over many decades, more within one. */
   private static boolean labelled(Axis axis, double value) {
-    double decades = Math.log10(axis.high() / axis.low());
+    double decades = decades(axis);
     double power = Math.pow(10, Math.floor(Math.log10(value) + 1e-9));
     long digit = Math.round(value / power);
     if (decades > 4) {
-      return digit == 1;
+      int step = (int) Math.ceil(decades / MANY_DECADES);
+      return digit == 1 && Math.floorMod(Math.round(Math.log10(value)), step) == 0;
     }
     return digit == 1 || digit == 2 || digit == 5 || (decades < 1.3 && digit == 3);
   }
@@ -125,7 +141,7 @@ final class TickLabels implements Canvas.Reader {
       int places =
           axis.logarithmic() ? Numbers.decimalsOf(s.value()) : decimals.getOrDefault(s.anchor(), 0);
       recording.lettering(
-          Numbers.decimals(s.value(), places),
+          print(axis, s.value(), places),
           s.x(),
           isVertical ? s.y() : lowest,
           s.anchor(),
