@@ -190,10 +190,21 @@ final class DraftText {
         .map(most -> BigDecimal.valueOf(most).stripTrailingZeros().toPlainString());
   }
 
+  /** The forms that need no more than a name, the first three of them. */
+  private static List<String> proposed() {
+    return Form.all().stream()
+        .filter(form -> !form.needsNests())
+        .map(Form::name)
+        .limit(FORMS_PROPOSED)
+        .toList();
+  }
+
+  private static final int FORMS_PROPOSED = 3;
+
   private void technologies() {
     add(
         "",
-        "technologies: [" + String.join(", ", Form.names()) + "]",
+        "technologies: [" + String.join(", ", proposed()) + "]",
         "",
         "# estimation:",
         "#   plant-effects: within      # lasting differences between plants removed; needs a plant column",

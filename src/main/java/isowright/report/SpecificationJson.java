@@ -65,9 +65,15 @@ final class SpecificationJson {
     file.text("technology", predicted.technology());
     file.text("judged", predicted.judged());
     file.number("error", predicted.error());
-    file.number("levelError", predicted.levelError().orElse(Double.NaN));
-    file.number("spread", predicted.spread().orElse(Double.NaN));
-    file.figure("difference", predicted.difference());
+    if (predicted.levelError().isPresent()) {
+      file.number("levelError", predicted.levelError().get());
+    }
+    if (predicted.spread().isPresent()) {
+      file.number("spread", predicted.spread().get());
+    }
+    if (predicted.difference().isPresent()) {
+      file.figure("difference", predicted.difference());
+    }
     file.whole("plants", predicted.plants());
     file.whole("folds", predicted.folds());
     file.whole("failed", predicted.failed());

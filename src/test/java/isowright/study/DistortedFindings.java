@@ -330,6 +330,7 @@ public final class DistortedFindings {
         f.smearing(),
         points,
         f.influence(),
+        f.robustness(),
         f.remarks());
   }
 }
