@@ -33,7 +33,7 @@ final class PngWriter {
   private static final int DOTS_PER_METRE = 7559;
 
   /** Fast: pictures are mostly paper, and higher levels save little. */
-  private static final int LEVEL = 2;
+  private static final int LEVEL = Deflater.BEST_SPEED;
 
   private static final byte[] SIGNATURE = {(byte) 0x89, 'P', 'N', 'G', 13, 10, 26, 10};
 

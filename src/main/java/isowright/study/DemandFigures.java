@@ -20,7 +20,7 @@ import java.util.Map;
 final class DemandFigures {
 
   /** Prices from half to twice the plan's, evenly spaced in logs. */
-  private static final int POINTS = 21;
+  private static final int POINTS = 11;
 
   private static final double SPAN = Math.log(2);
 
