@@ -65,11 +65,14 @@ class CostStudyTest {
             "electricity-1970.csv",
             electricity("  technologies: [cobb-douglas-cost-squared-output]\n  system: false"));
     CostFindings.Efficient efficient = findings.costs().fits().get(0).efficient().orElseThrow();
+    // printed to one decimal
     assertThat(efficient.output().value()).isCloseTo(17_309.9, within(.05));
     Figure.Uncertainty sure = efficient.output().uncertainty().orElseThrow();
+    // ends printed to the unit: half of one in 10,560 moves the log by 5e-5
     double half = Math.log(28_373 / 10_560.0) / 2;
     assertThat(Math.log(sure.high() / sure.low()) / 2)
         .isCloseTo(half * 1.980272 / 1.959964, within(1e-4));
+    // printed as a whole per cent
     assertThat(efficient.below()).isCloseTo(.85, within(.005));
   }
 
