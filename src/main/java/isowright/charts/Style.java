@@ -7,7 +7,7 @@ import java.awt.Font;
 /**
  * The one visual language of all charts: colours, strokes, dots, letters, sizes.
  *
- * <p>Three colours carry data. They differ in lightness (L* about 25, 46 and 56), so that they can
+ * <p>Three colours carry data. They differ in lightness (L* about 24, 48 and 56), so that they can
  * be told apart in grey, and stay apart for readers who confuse red and green; strokes and dots
  * differ as well, so that nothing depends on colour alone. Text has a contrast of at least 4.5 to
  * 1, lines and dots of at least 3 to 1 on white (WCAG 2.1, success criteria 1.4.3 and 1.4.11).

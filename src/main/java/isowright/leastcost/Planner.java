@@ -20,8 +20,8 @@ import java.util.Optional;
  * (a translog), a stationary point at which it is regular is proved a local best, other starts are
  * tried, and the outcome says so.
  *
- * <p>Immutable, safe to share between threads. Tested in {@code PlannerTest}, {@code
- * WholeUnitsTest}, {@code PriceBandsTest}, {@code BudgetTest}, {@code ProfitTest}.
+ * <p>Immutable, safe to share between threads. Tested in {@code WholeUnitsTest}, {@code
+ * PriceBandsTest}, {@code BudgetTest}, {@code ProfitTest}.
  */
 public final class Planner {
 

@@ -18,7 +18,7 @@ import java.util.Locale;
  * counts, so that S is lower semicontinuous and a cheapest quantity exists.
  *
  * <p>Quantities in the unit of the input, prices in money per unit, steps in money. Immutable.
- * Tested in {@code PriceScheduleTest}.
+ * Tested in {@code PriceBandsTest}.
  */
 public final class PriceSchedule {
 

@@ -6,7 +6,9 @@ import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
+import java.util.HashSet;
 import java.util.List;
+import java.util.Set;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 import java.util.stream.Stream;
@@ -56,6 +58,29 @@ class SourcesTest {
     }
     assertThat(bare).as("public types whose comment says next to nothing").isEmpty();
     assertThat(seen).as("public types seen").isGreaterThan(40);
+  }
+
+  /** A comment that names a test promises that there is one. */
+  @Test
+  void everyTestNamedInACommentExists() throws IOException {
+    Set<String> tests = new HashSet<>();
+    for (Path test : sources(TESTS)) {
+      tests.add(String.valueOf(test.getFileName()).replace(".java", ""));
+    }
+    Pattern named = Pattern.compile("@code\\s+(?:\\*\\s*)?(\\w+Test)\\}");
+    int seen = 0;
+    List<String> missing = new ArrayList<>();
+    for (Path source : sources(MAIN)) {
+      Matcher name = named.matcher(Files.readString(source));
+      while (name.find()) {
+        seen++;
+        if (!tests.contains(name.group(1))) {
+          missing.add(source.getFileName() + ": " + name.group(1));
+        }
+      }
+    }
+    assertThat(seen).as("tests named").isGreaterThan(100);
+    assertThat(missing).isEmpty();
   }
 
   @Test
