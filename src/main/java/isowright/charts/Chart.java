@@ -52,7 +52,13 @@ public record Chart(
     /** Actual against predicted output. */
     ACTUAL_PREDICTED,
     /** Filed against least cost. */
-    FILING
+    FILING,
+    /** The gap between them in parts. */
+    GAP_PARTS,
+    /** Plants in order of filed over least cost. */
+    ORDERED_RATIOS,
+    /** An allowance year by year. */
+    ALLOWANCE_PATH
   }
 
   /** Copies the tables. */

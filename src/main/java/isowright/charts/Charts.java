@@ -19,7 +19,8 @@ public final class Charts {
   /**
    * The charts that findings give rise to, in the order of a report: elasticities, curvature,
    * residuals and fit of each technology; isoquant, expansion path and cost curves of each answer;
-   * filed against least cost. What has no answer has no chart.
+   * filed against least cost, the gap in parts, plants in order, allowances. What has no answer has
+   * no chart.
    */
   public static List<Chart> of(Findings findings) {
     Setting setting = Setting.of(findings);
@@ -37,6 +38,9 @@ public final class Charts {
       CostCurveCharts.of(plan, setting).ifPresent(charts::add);
     }
     charts.addAll(FilingCharts.of(findings.reviews(), setting));
+    charts.addAll(GapPartsCharts.of(findings.reviews(), setting));
+    charts.addAll(RatioCharts.of(findings.review().orders(), setting));
+    charts.addAll(AllowanceCharts.of(findings.review().allowances(), setting));
     return List.copyOf(charts);
   }
 }

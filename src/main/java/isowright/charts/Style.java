@@ -88,6 +88,18 @@ final class Style {
     MAIN_EDGE(DEEP, 0.8f),
     /** The edge of a band of the second curve. */
     SECOND_EDGE(WARM, 0.8f, 4f, 3f),
+    /** A bar of the first part of a sum: filled. */
+    PART_FIRST(DEEP, 11f),
+    /** A bar of the second part: filled, lighter. */
+    PART_SECOND(WARM, 11f),
+    /** A bar of the third part: striped. */
+    PART_THIRD(SLATE, 11f, 3f, 1.5f),
+    /** A bar of the fourth part: widely striped. */
+    PART_FOURTH(AXIS, 11f, 1.5f, 3.5f),
+    /** An interval beside a bar. */
+    FINE_INTERVAL(DEEP, 1.4f),
+    /** A bracket around what belongs together. */
+    BRACKET(WARM, 2f),
     /** Nothing. */
     NONE(PAPER, 1f);
 
@@ -120,6 +132,8 @@ final class Style {
     ESTIMATE(DEEP, 10, Form.DISC_WITH_RING),
     /** A step on a curve. */
     STEP(DEEP, 7, Form.DISC_WITH_RING),
+    /** A sum beneath the bars of its parts. */
+    TOTAL(DEEP, 6, Form.DISC),
     /** An exact number. */
     EXACT(DEEP, 11, Form.DIAMOND),
     /** An observation that counts here. */

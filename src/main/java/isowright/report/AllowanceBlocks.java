@@ -1,5 +1,6 @@
 package isowright.report;
 
+import isowright.charts.Chart;
 import isowright.report.Document.Block;
 import isowright.report.Document.Cell;
 import isowright.report.Document.Column;
@@ -46,6 +47,7 @@ final class AllowanceBlocks {
         review.allowances().stream().map(Allowed::technology).distinct().toList()) {
       List<Allowed> own =
           review.allowances().stream().filter(a -> a.technology().equals(technology)).toList();
+      blocks.addAll(material.drawings(Chart.Kind.ALLOWANCE_PATH, technology));
       blocks.add(table(material, technology, own));
     }
     return Optional.of(new Section("filing-allowance", "From gap to allowance", blocks));
@@ -76,8 +78,8 @@ final class AllowanceBlocks {
     List<Text> notes = new ArrayList<>();
     notes.add(
         Text.of(
-            "Year 0 is as filed. The sum adds up the plants; the sum of quantiles is not the quantile"
-                + " of the sum."));
+            "Year 0 is as filed; the index is laid on top of the money of year 0. The sum adds up"
+                + " the plants; the sum of quantiles is not the quantile of the sum."));
     if (allowed.size() - 1 > LONGEST) {
       notes.add(
           Text.of(

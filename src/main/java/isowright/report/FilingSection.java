@@ -34,10 +34,10 @@ final class FilingSection {
     List<Block> blocks = new ArrayList<>();
     blocks.add(
         Paragraph.of(
-            "The gap is filed cost less least cost of the same output at the same prices. Its parts add"
-                + " up: what the filing does not reconcile with price times quantity, what a"
-                + " proportional cut of all inputs would save (technical), and what another mix would"
-                + " save (mix)."));
+            "The gap is filed cost less least cost of the same output at the same prices. Its parts"
+                + " add up: what the filing does not reconcile with price times quantity, what a"
+                + " proportional cut of all inputs would save (technical), and what another mix"
+                + " would save (mix)."));
     blocks.add(
         new Notice(
             Weight.WARNING,
@@ -52,8 +52,8 @@ final class FilingSection {
               "Held against "
                   + material.findings().review().reference()
                   + ". Intervals hold the uncertainty of the technology; the filing, its quantities"
-                  + " and its prices are taken as they stand. A single year's chance in a plant's own"
-                  + " output is part of its gap."));
+                  + " and its prices are taken as they stand. A single year's chance in a plant's"
+                  + " own output is part of its gap."));
     }
     blocks.addAll(Material.notices(material.findings().review().remarks()));
     for (String technology : technologies(material)) {
@@ -81,6 +81,7 @@ final class FilingSection {
     List<Block> blocks = new ArrayList<>();
     blocks.add(Paragraph.of(counts(reviews)));
     blocks.addAll(material.drawings(Chart.Kind.FILING, technology));
+    blocks.addAll(material.drawings(Chart.Kind.GAP_PARTS, technology));
     reviews.sort(Comparator.comparingDouble(FilingSection::size).reversed());
     int shown = Math.min(LONGEST, reviews.size());
     blocks.add(table(material, technology, reviews.subList(0, shown), reviews.size()));

@@ -1,5 +1,6 @@
 package isowright.report;
 
+import isowright.charts.Chart;
 import isowright.report.Document.Block;
 import isowright.report.Document.Cell;
 import isowright.report.Document.Column;
@@ -38,7 +39,7 @@ final class ReviewBlocks {
 
   /** The order of plants by one technology, period by period. */
   static List<Block> orders(Material material, String technology) {
-    List<Block> blocks = new ArrayList<>();
+    List<Block> blocks = new ArrayList<>(material.drawings(Chart.Kind.ORDERED_RATIOS, technology));
     for (Order order : material.findings().review().orders()) {
       if (order.technology().equals(technology)) {
         blocks.add(order(order));
@@ -152,8 +153,8 @@ final class ReviewBlocks {
                 Text.of(
                     "One thing at a time, all else as recorded and estimated. Beneath: what it is."
                         + " Prices and productivity are sought from a hundredth to a hundred times"
-                        + " what they are, substitution from 0.01 to 100; \u201cno value\u201d means"
-                        + " that none in these bounds makes the filed cost least cost."))));
+                        + " what they are, substitution from 0.01 to 100; \u201cno value\u201d"
+                        + " means that none in these bounds makes the filed cost least cost."))));
   }
 
   private static String what(Needed needed) {
