@@ -9,7 +9,9 @@ public enum ExitCode {
   /** A mistake in what was given: arguments, study file, records; nothing was written. */
   MISTAKE(2),
   /** The records cannot carry what was asked; nothing could be estimated. */
-  UNFIT(3);
+  UNFIT(3),
+  /** Checked, and something is not as it was. */
+  DIFFERENT(4);
 
   private final int number;
 

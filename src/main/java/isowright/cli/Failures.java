@@ -4,6 +4,7 @@ import isowright.estimation.Unfit;
 import isowright.records.RecordsRefused;
 import isowright.records.Remark;
 import isowright.report.Publication;
+import isowright.runs.RunRefused;
 import isowright.study.Mistake;
 import isowright.study.StudyRefused;
 import java.io.IOException;
@@ -40,6 +41,12 @@ final class Failures {
     }
     if (failure instanceof RecordsRefused refused) {
       return records(refused, err);
+    }
+    if (failure instanceof RunRefused refused) {
+      err.println("isowright: " + count(refused.reasons().size(), "reason") + " not to go on.");
+      refused.reasons().forEach(reason -> err.println("  - " + reason));
+      err.println("Nothing was written.");
+      return ExitCode.MISTAKE;
     }
     if (failure instanceof Publication.Refused refused) {
       err.println("isowright: " + refused.getMessage());

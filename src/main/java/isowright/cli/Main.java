@@ -29,7 +29,7 @@ import picocli.CommandLine.Spec;
  */
 @Command(
     name = "isowright",
-    subcommands = {Draft.class, Check.class, Run.class, Help.class},
+    subcommands = {Draft.class, Check.class, Run.class, Verify.class, Compare.class, Help.class},
     versionProvider = Version.class,
     sortOptions = false,
     header = {
@@ -50,13 +50,16 @@ import picocli.CommandLine.Spec;
       "  isowright draft plants.csv --into study.yaml   propose a study of these records",
       "  isowright check study.yaml                     see what is wrong with study or records",
       "  isowright run study.yaml                       fit, test, plan, and write the report",
+      "  isowright verify reports/study                 is the report as it was made?",
+      "  isowright compare reports/a reports/b          what changed between two runs, and why",
       "  isowright help run                             more on one command",
       "",
       "Exit codes",
       "  0  done",
       "  1  a defect of this program; the message says where the details were written",
       "  2  a mistake in what was given (arguments, study file, records); nothing was written",
-      "  3  the records cannot carry what was asked; the audit says why"
+      "  3  the records cannot carry what was asked; the audit says why",
+      "  4  verify: something is not as it was"
     })
 public final class Main implements Callable<Integer> {
 

@@ -17,8 +17,9 @@ import picocli.CommandLine.ParentCommand;
     header = {"carry out a study: fit, test, plan, review, and write the report", ""},
     description = {
       "",
-      "Writes report.html, findings.json, technology.json and charts/ into a folder, and",
-      "prints the answer in brief. The folder is replaced as a whole when everything has",
+      "Writes report.html, findings.json, technology.json, run-record.json and charts/ into",
+      "a folder, and prints the answer in brief. The folder is replaced as a whole when everything"
+          + " has",
       "been computed: a run that fails leaves an earlier report as it was."
     },
     synopsisHeading = "Use it so:%n",

@@ -8,6 +8,7 @@ import isowright.report.FindingsJson;
 import isowright.report.HtmlReport;
 import isowright.report.Publication;
 import isowright.report.TechnologyJson;
+import isowright.runs.RunRecord;
 import isowright.study.Findings;
 import isowright.study.Pipeline;
 import isowright.study.Progress;
@@ -16,6 +17,7 @@ import isowright.study.StudyFile;
 import isowright.study.StudyRefused;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Path;
+import java.time.Instant;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
@@ -31,7 +33,14 @@ final class RunCommand {
   static ExitCode run(Path file, Optional<Path> into, boolean quiet, Main main)
       throws StudyRefused, RecordsRefused, Unfit, Publication.Refused {
     Study study = StudyFile.read(file);
-    Publication publication = Publication.into(into.orElseGet(() -> usualFolder(file)));
+    try (Publication publication = Publication.into(into.orElseGet(() -> usualFolder(file)))) {
+      return published(study, publication, quiet, main);
+    }
+  }
+
+  private static ExitCode published(Study study, Publication publication, boolean quiet, Main main)
+      throws StudyRefused, RecordsRefused, Unfit, Publication.Refused {
+    Instant start = Instant.now();
     Progress progress = ProgressLine.on(main.terminal(), main.err(), quiet);
     WithLastStage stages = new WithLastStage(progress);
     Findings findings;
@@ -40,6 +49,9 @@ final class RunCommand {
       findings = Pipeline.run(study, stages);
       stages.last("drawing charts and writing the report");
       files = files(findings);
+      RunRecord record =
+          RunRecord.of(study, findings, publication.folder(), files, start, Instant.now());
+      files.put(RunRecord.NAME, record.write(findings.run().title()));
     } catch (Unfit unfit) {
       progress.done();
       new AuditText(main.out()).print(study);

@@ -30,19 +30,28 @@ import java.util.stream.Stream;
  * {@code findings.json}: no other folder is ever emptied. Names of files lie inside the folder by
  * their form, see {@link #write}.
  *
+ * <p>While a publication is open, the folder is its own: a second one into the same folder is
+ * refused, see {@link FolderClaim}. What a killed run left is mended by the next: an earlier report
+ * that had already been moved aside comes back, half-written files go.
+ *
  * <p>Tested in {@code PublicationTest}.
  */
-public final class Publication {
+public final class Publication implements AutoCloseable {
 
   /** The file by which a folder is known to hold a report. */
   public static final String MARK = "findings.json";
 
+  /** The end of the names under which a run writes before it shows anything. */
+  private static final Pattern OF_A_RUN = Pattern.compile("\\.(new|old)-[0-9a-f-]{36}$");
+
   private static final Pattern NAME = Pattern.compile("([a-z0-9][a-z0-9-]*/)?[a-z0-9][a-z0-9.-]*");
 
   private final Path folder;
+  private final FolderClaim claim;
 
-  private Publication(Path folder) {
+  private Publication(Path folder, FolderClaim claim) {
     this.folder = folder;
+    this.claim = claim;
   }
 
   /** A report cannot be put where it was asked to go; the message says why and what to do. */
@@ -61,6 +70,16 @@ public final class Publication {
    * @param folder the folder of the report
    */
   public static Publication into(Path folder) throws Refused {
+    return into(folder, MARK);
+  }
+
+  /**
+   * A publication of another kind than a report.
+   *
+   * @param folder the folder
+   * @param mark the file by which a folder is known to hold an earlier one of this kind
+   */
+  public static Publication into(Path folder, String mark) throws Refused {
     Path target = folder.toAbsolutePath().normalize();
     if (target.getFileName() == null || target.getParent() == null) {
       throw new Refused(folder + " cannot be the folder of a report; name one inside it.");
@@ -68,24 +87,72 @@ public final class Publication {
     try {
       if (Files.exists(target)) {
         target = target.toRealPath();
-        replaceable(folder, target);
       }
-      Path above = existing(target.getParent());
-      if (!Files.isDirectory(above)) {
-        throw new Refused(
-            above + " is a file, so " + folder + " cannot be a folder; choose another folder.");
-      }
-      if (!Files.isWritable(above)) {
-        throw new Refused(above + " cannot be written to; choose another folder for the report.");
+      FolderClaim claim =
+          FolderClaim.of(target)
+              .orElseThrow(
+                  () ->
+                      new Refused(
+                          "another run is writing into "
+                              + folder
+                              + " just now; wait until it is done, or name another folder."));
+      try {
+        return claimed(folder, target, mark, claim);
+      } catch (IOException | Refused failed) {
+        claim.close();
+        throw failed;
       }
     } catch (IOException unreadable) {
       throw new Refused(
           folder + " cannot be used (" + words(unreadable) + "); choose another folder.");
     }
-    return new Publication(target);
   }
 
-  private static void replaceable(Path asked, Path target) throws IOException, Refused {
+  private static Publication claimed(Path folder, Path target, String mark, FolderClaim claim)
+      throws IOException, Refused {
+    mend(target);
+    if (Files.exists(target)) {
+      replaceable(folder, target, mark);
+    }
+    Path above = existing(target.getParent());
+    if (!Files.isDirectory(above)) {
+      throw new Refused(
+          above + " is a file, so " + folder + " cannot be a folder; choose another folder.");
+    }
+    if (!Files.isWritable(above)) {
+      throw new Refused(above + " cannot be written to; choose another folder for the report.");
+    }
+    return new Publication(target, claim);
+  }
+
+  /** Mends what a killed run left beside the folder; only its claimant may. */
+  private static void mend(Path target) throws IOException {
+    Path parent = Objects.requireNonNull(target.getParent());
+    if (!Files.isDirectory(parent)) {
+      return;
+    }
+    String name = "." + target.getFileName() + ".";
+    List<Path> left;
+    try (Stream<Path> entries = Files.list(parent)) {
+      left =
+          entries
+              .filter(entry -> String.valueOf(entry.getFileName()).startsWith(name))
+              .filter(entry -> OF_A_RUN.matcher(entry.toString()).find())
+              .sorted()
+              .toList();
+    }
+    for (Path entry : left) {
+      boolean old = String.valueOf(entry.getFileName()).startsWith(name + "old-");
+      if (old && !Files.exists(target)) {
+        move(entry, target);
+      } else if (!old) {
+        removeQuietly(entry);
+      }
+    }
+  }
+
+  private static void replaceable(Path asked, Path target, String mark)
+      throws IOException, Refused {
     if (!Files.isDirectory(target)) {
       throw new Refused(asked + " is a file; name a folder for the report.");
     }
@@ -93,11 +160,11 @@ public final class Publication {
       throw new Refused(
           asked + " is the folder you work in, and a report replaces its folder; name another.");
     }
-    if (!Files.exists(target.resolve(MARK)) && !isEmpty(target)) {
+    if (!Files.exists(target.resolve(mark)) && !isEmpty(target)) {
       throw new Refused(
           asked
               + " holds other files and no earlier report (no "
-              + MARK
+              + mark
               + "), so it is left alone; name a new or an empty folder.");
     }
   }
@@ -107,8 +174,14 @@ public final class Publication {
     return folder;
   }
 
+  /** Gives the folder free for other runs. */
+  @Override
+  public void close() {
+    claim.close();
+  }
+
   /**
-   * Puts the files in place and takes an earlier report away.
+   * Puts the files in place, takes an earlier report away, and gives the folder free.
    *
    * @param files contents by name: lower-case letters, digits, points and hyphens, at most one
    *     folder deep, such as {@code charts/profile-ces.svg}
@@ -123,6 +196,8 @@ public final class Publication {
     Path parent = Objects.requireNonNull(folder.getParent());
     Path fresh = beside("new");
     Optional<Path> firstMade = firstMissing(parent);
+    Thread whenEnded = new Thread(() -> removeQuietly(fresh), "half-written report");
+    Runtime.getRuntime().addShutdownHook(whenEnded);
     try {
       Files.createDirectories(parent);
       Files.createDirectory(fresh);
@@ -141,6 +216,17 @@ public final class Publication {
               + " ("
               + words(failed)
               + "); choose another folder.");
+    } finally {
+      forget(whenEnded);
+      close();
+    }
+  }
+
+  private static void forget(Thread whenEnded) {
+    try {
+      Runtime.getRuntime().removeShutdownHook(whenEnded);
+    } catch (IllegalStateException ending) {
+      return; // the process is being ended: the hook is at work already
     }
   }
 

@@ -29,13 +29,15 @@ final class RecordsBinder {
   private static final List<String> TEXT_ENDINGS = List.of(".csv", ".tsv", ".txt");
 
   private final Path studyFile;
+  private final Optional<Source> instead;
   private final YamlSection root;
   private final boolean present;
   private final Optional<YamlSection> records;
   private final ColumnUses uses = new ColumnUses();
 
-  RecordsBinder(Path studyFile, YamlSection root) {
+  RecordsBinder(Path studyFile, YamlSection root, Optional<Source> instead) {
     this.studyFile = studyFile;
+    this.instead = instead;
     this.root = root;
     this.present = root.has("records");
     this.records = root.section("records");
@@ -124,7 +126,8 @@ final class RecordsBinder {
           "number-format", "a workbook holds numbers, not written ones; take `number-format` out");
     }
     try {
-      return Optional.of(new Source(studyFile.resolveSibling(name.get()), sheet, format));
+      return instead.or(
+          () -> Optional.of(new Source(studyFile.resolveSibling(name.get()), sheet, format)));
     } catch (InvalidPathException invalid) {
       value.get().refuse("this is not a file name: " + invalid.getReason());
       return Optional.empty();

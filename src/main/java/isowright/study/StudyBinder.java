@@ -3,6 +3,7 @@ package isowright.study;
 import isowright.estimation.Specification.PlantEffects;
 import isowright.estimation.Specification.StandardErrors;
 import isowright.estimation.Specification.Time;
+import isowright.records.Source;
 import isowright.study.Study.Estimation;
 import isowright.study.Study.Filing;
 import isowright.study.Study.Given;
@@ -61,10 +62,12 @@ final class StudyBinder {
       List.of("zeros", "regularity", "instruments", "proxy", "frontier");
 
   private final Path file;
+  private final Optional<Source> recordsInstead;
   private final String sha256;
 
-  StudyBinder(Path file, String sha256) {
+  StudyBinder(Path file, String sha256, Optional<Source> recordsInstead) {
     this.file = file;
+    this.recordsInstead = recordsInstead;
     this.sha256 = sha256;
   }
 
@@ -78,7 +81,8 @@ final class StudyBinder {
     CapitalBinder capitalBinder = new CapitalBinder(root);
     Capital capital = capitalBinder.bind();
     Declared declared =
-        new RecordsBinder(file, root).bind(filedCost, capital, capitalBinder.further());
+        new RecordsBinder(file, root, recordsInstead)
+            .bind(filedCost, capital, capitalBinder.further());
     capitalBinder.check(declared);
     needRecordsOrGiven(root, declared);
     GivenBinder givenBinder = new GivenBinder(root, declared.inputs());

@@ -1,5 +1,6 @@
 package isowright.study;
 
+import isowright.records.Source;
 import java.io.IOException;
 import java.nio.ByteBuffer;
 import java.nio.CharBuffer;
@@ -14,6 +15,7 @@ import java.security.NoSuchAlgorithmException;
 import java.util.HexFormat;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 
 /**
  * Reads a study file: what does it ask, and is it free of mistakes of its own?
@@ -40,10 +42,25 @@ public final class StudyFile {
    * @throws StudyRefused with every mistake, in the order of the file
    */
   public static Study read(Path file) throws StudyRefused {
+    return read(file, Optional.empty());
+  }
+
+  /**
+   * What a study file asks, put to the records of another study: so that it can be told what in a
+   * result comes from records and what from settings.
+   *
+   * @param file the study file
+   * @param records the records that stand in place of its own
+   */
+  public static Study readOn(Path file, Source records) throws StudyRefused {
+    return read(file, Optional.of(records));
+  }
+
+  private static Study read(Path file, Optional<Source> instead) throws StudyRefused {
     byte[] bytes = bytes(file);
     String text = text(file, bytes);
     Mistakes mistakes = new Mistakes();
-    StudyBinder binder = new StudyBinder(file, sha256(bytes));
+    StudyBinder binder = new StudyBinder(file, sha256(bytes), instead);
     var study = YamlNodes.root(text, mistakes).flatMap(YamlValue::section).flatMap(binder::bind);
     if (!mistakes.none() || study.isEmpty()) {
       throw new StudyRefused(file, mistakes.inOrder());

@@ -116,13 +116,18 @@ class ArchitectureTest {
             List.of("org.knowm.xchart..", "javax.imageio..", "org.w3c.dom.."),
             "a chart shows findings; one that reaches below would compute"),
         new Room(
+            "runs",
+            List.of("study", "records", "estimation"),
+            List.of("com.fasterxml.jackson..", "org.snakeyaml.."),
+            "two runs are compared by what their folders say; nothing is estimated here"),
+        new Room(
             "report",
-            List.of("study", "charts"),
+            List.of("study", "charts", "runs"),
             List.of("com.fasterxml.jackson.."),
             "a report shows findings; one that reaches below would compute"),
         new Room(
             "cli",
-            with(with(with(reviewing, "study"), "charts"), "report"),
+            with(with(with(with(reviewing, "study"), "charts"), "runs"), "report"),
             List.of("picocli.."),
             "commands may use everything, and are used by nothing"));
   }

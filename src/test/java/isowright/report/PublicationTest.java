@@ -9,6 +9,7 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Map;
+import java.util.UUID;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
@@ -139,5 +140,31 @@ class PublicationTest {
     assertThatThrownBy(() -> publication.write(Map.of(name, new byte[0])))
         .isInstanceOf(IllegalArgumentException.class);
     assertThat(folder).isEmptyDirectory();
+  }
+
+  @Test
+  void aSecondRunIntoTheSameFolderIsRefusedUntilTheFirstIsDone() throws Exception {
+    Path target = folder.resolve("report");
+    try (Publication first = Publication.into(target)) {
+      assertRefused(target, "another run is writing into");
+      assertThat(first.folder()).isEqualTo(target.toAbsolutePath());
+    }
+    Publication.into(target).write(FIRST);
+    assertThat(target.resolve("report.html")).hasContent("first");
+  }
+
+  /** As if a run had been killed between moving the earlier report aside and putting its own. */
+  @Test
+  void whatAKilledRunLeftIsMended() throws Exception {
+    Path target = folder.resolve("report");
+    Publication.into(target).write(FIRST);
+    String run = UUID.randomUUID().toString();
+    Files.move(target, folder.resolve(".report.old-" + run));
+    Files.createDirectories(folder.resolve(".report.new-" + run + "/charts"));
+    Files.createDirectories(folder.resolve(".report.new-of-mine"));
+    Publication.into(target).close();
+    assertThat(target.resolve("report.html")).hasContent("first");
+    assertThat(folder.resolve(".report.new-" + run)).doesNotExist();
+    assertThat(folder.resolve(".report.new-of-mine")).as("nothing of a run").exists();
   }
 }
