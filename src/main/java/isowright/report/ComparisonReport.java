@@ -229,9 +229,9 @@ public final class ComparisonReport {
         List.of(
             cell(change.before()),
             cell(change.after()),
-            amount(change, change.difference()),
-            amount(change, change.fromRecords()),
-            amount(change, change.fromSettings())));
+            amount(change.difference()),
+            amount(change.fromRecords()),
+            amount(change.fromSettings())));
   }
 
   private static Cell cell(Optional<Figure> figure) {
@@ -240,25 +240,9 @@ public final class ComparisonReport {
         .orElse(Cell.of("not in this run"));
   }
 
-  /** A change is shown to the place of the figures beside it: nothing finer can be read there. */
-  private static Cell amount(Change change, Optional<Double> value) {
-    if (value.isEmpty()) {
-      return Cell.none();
-    }
-    if (value.get() == 0) {
-      return Cell.of("0");
-    }
-    double error =
-        change
-            .after()
-            .flatMap(Figure::uncertainty)
-            .map(Figure.Uncertainty::standardError)
-            .filter(Double::isFinite)
-            .orElse(Double.NaN);
-    return Cell.of(
-        error > 0
-            ? Numbers.value(Figure.estimated(value.get(), error, Double.NaN, Double.NaN, ""))
-            : Numbers.significant(value.get(), 3));
+  /** Two significant digits, however small: that a figure moved at all is what is asked here. */
+  private static Cell amount(Optional<Double> value) {
+    return value.map(v -> Cell.of(Numbers.significant(v, 2))).orElse(Cell.none());
   }
 
   private static Section method(Comparison comparison) {
