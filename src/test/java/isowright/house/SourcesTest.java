@@ -23,9 +23,11 @@ class SourcesTest {
   /** A public type at the top of its file, with the comment before it, annotations between. */
   private static final Pattern PUBLIC_TYPE =
       Pattern.compile(
-          "(?s)(?:/\\*\\*(?<comment>(?:(?!\\*/).)*)\\*/\\s*)?"
-              + "(?<annotations>(?:@\\w+(?:\\((?:[^()\"]|\"(?:[^\"\\\\]|\\\\.)*\"|\\([^()]*\\))*\\))?\\s*)*)"
-              + "public (?:abstract |final |sealed |non-sealed )*(?:class|interface|record|enum) (?<name>\\w+)");
+          // possessive throughout: a long comment or annotation must not exhaust the stack
+          "(?s)(?:/\\*\\*(?<comment>[^*]*+(?:\\*(?!/)[^*]*+)*+)\\*/\\s*)?"
+              + "(?<annotations>(?:@\\w+(?:\\((?:[^()\"]++|\"(?:[^\"\\\\]++|\\\\.)*+\"|\\([^()]*+\\))*+\\))?\\s*)*+)public"
+              + " (?:abstract |final |sealed |non-sealed )*(?:class|interface|record|enum)"
+              + " (?<name>\\w+)");
 
   /** Fewer words than this cannot say what question a type answers. */
   private static final int LEAST_WORDS = 6;
@@ -122,7 +124,9 @@ class SourcesTest {
   void numbersAreFormattedForNoParticularCountry() throws IOException {
     Pattern number =
         Pattern.compile(
-            "\"(?:[^\"\\\\\n]|\\\\.)*%[-+0#, (]*\\d*(?:\\.\\d+)?[fgeEG](?:[^\"\\\\\n]|\\\\.)*\"\\s*\\.formatted\\(");
+            "\"(?:[^\"\\\\\n"
+                + "]|\\\\.)*%[-+0#, (]*\\d*(?:\\.\\d+)?[fgeEG](?:[^\"\\\\\n"
+                + "]|\\\\.)*\"\\s*\\.formatted\\(");
     Pattern withoutLocale = Pattern.compile("String\\.format\\(\\s*\"");
     for (Path source : sources(MAIN)) {
       assertThat(Files.readString(source))
