@@ -23,7 +23,7 @@ import org.apache.commons.math3.linear.SingularValueDecomposition;
  */
 public final class Support {
 
-  private final Panel panel;
+  private final List<String> names;
   private final double[] mean;
   private final double[] least;
   private final double[] most;
@@ -31,13 +31,13 @@ public final class Support {
   private final double farthest;
 
   private Support(
-      Panel panel,
+      List<String> names,
       double[] mean,
       double[] least,
       double[] most,
       double[][] inverse,
       double farthest) {
-    this.panel = panel;
+    this.names = List.copyOf(names);
     this.mean = mean;
     this.least = least;
     this.most = most;
@@ -48,8 +48,19 @@ public final class Support {
   /** The support of a panel's inputs. */
   public static Support of(Panel panel) {
     List<Column> logs = panel.logQuantities();
-    int n = logs.size();
-    int rows = panel.rows();
+    return of(panel.inputs(), panel.rows(), (i, r) -> logs.get(i).get(r));
+  }
+
+  /** A logged quantity of a row. */
+  @FunctionalInterface
+  public interface Logs {
+    /** The log of quantity i in a row. */
+    double get(int i, int row);
+  }
+
+  /** The support of any quantities, in logs. */
+  public static Support of(List<String> names, int rows, Logs logs) {
+    int n = names.size();
     double[] mean = new double[n];
     double[] least = new double[n];
     double[] most = new double[n];
@@ -57,7 +68,7 @@ public final class Support {
       least[i] = Double.POSITIVE_INFINITY;
       most[i] = Double.NEGATIVE_INFINITY;
       for (int r = 0; r < rows; r++) {
-        double z = logs.get(i).get(r);
+        double z = logs.get(i, r);
         mean[i] += z / rows;
         least[i] = Math.min(least[i], z);
         most[i] = Math.max(most[i], z);
@@ -67,23 +78,23 @@ public final class Support {
     for (int r = 0; r < rows; r++) {
       for (int i = 0; i < n; i++) {
         for (int j = 0; j <= i; j++) {
-          spread[i][j] += (logs.get(i).get(r) - mean[i]) * (logs.get(j).get(r) - mean[j]) / rows;
+          spread[i][j] += (logs.get(i, r) - mean[i]) * (logs.get(j, r) - mean[j]) / rows;
           spread[j][i] = spread[i][j];
         }
       }
     }
     RealMatrix inverse =
         new SingularValueDecomposition(new Array2DRowRealMatrix(spread)).getSolver().getInverse();
-    Support support = new Support(panel, mean, least, most, inverse.getData(), 0);
+    Support support = new Support(names, mean, least, most, inverse.getData(), 0);
     double farthest = 0;
     double[] z = new double[n];
     for (int r = 0; r < rows; r++) {
       for (int i = 0; i < n; i++) {
-        z[i] = logs.get(i).get(r);
+        z[i] = logs.get(i, r);
       }
       farthest = Math.max(farthest, support.distance(z));
     }
-    return new Support(panel, mean, least, most, inverse.getData(), farthest);
+    return new Support(names, mean, least, most, inverse.getData(), farthest);
   }
 
   /** Whether a mix (in its own units) lies inside the records. */
@@ -104,7 +115,7 @@ public final class Support {
             String.format(
                 Locale.ROOT,
                 "%s of %,.4g lies %s the records (%,.4g to %,.4g)",
-                panel.inputs().get(i),
+                names.get(i),
                 mix[i],
                 below ? "below" : "above",
                 Math.exp(least[i]),
@@ -113,7 +124,8 @@ public final class Support {
     }
     if (reasons.isEmpty() && distance(z) > farthest * (1 + TINY)) {
       reasons.add(
-          "each input lies within its own range, but no record comes near this combination of them");
+          "each input lies within its own range, but no record comes near this combination of"
+              + " them");
     }
     return reasons;
   }

@@ -73,8 +73,8 @@ final class BriefSection {
                     + (records.rows() - records.used() == 1 ? " was" : " were")
                     + " set aside.")
         .orElse(
-            "This rests on technologies taken as known; no records were read, and no figure carries an"
-                + " interval.");
+            "This rests on technologies taken as known; no records were read, and no figure carries"
+                + " an interval.");
   }
 
   private static Paragraph asked(Material material, List<Planned> plans, boolean samePrices) {
@@ -84,7 +84,7 @@ final class BriefSection {
         Text.strong(plan.question() + ". ")
             .then(
                 "What mix of "
-                    + Phrases.list(material.inputs())
+                    + Phrases.list(PlansSection.inputs(material, plans))
                     + " makes "
                     + Numbers.unit(Numbers.amount(plan.target()), material.outputUnit())
                     + " at least cost"
@@ -169,14 +169,15 @@ final class BriefSection {
   private static String sure(Material material) {
     Findings findings = material.findings();
     if (findings.fits().isEmpty() && findings.costs().fits().isEmpty()) {
-      return "The figures are exact for the technologies as stated. How far those are from the truth is"
-          + " not known from this study.";
+      return "The figures are exact for the technologies as stated. How far those are from the"
+                 + " truth is not known from this study.";
     }
     return "Intervals are "
         + Numbers.level(material.confidence())
-        + " intervals. They cover what sampling of plants explains; they do not cover a wrong form, a"
-        + " wrong column, or inputs chosen knowing productivity. Where technologies differ by more than"
-        + " their intervals, the form matters as much as the records. Unexplained cost is not waste, and"
-        + " safe staffing, law, agreements and licensed practice come before any figure here.";
+        + " intervals. They cover what sampling of plants explains; they do not cover a wrong form,"
+        + " a wrong column, or inputs chosen knowing productivity. Where technologies differ by"
+        + " more than their intervals, the form matters as much as the records. Unexplained cost is"
+        + " not waste, and safe staffing, law, agreements and licensed practice come before any"
+        + " figure here.";
   }
 }

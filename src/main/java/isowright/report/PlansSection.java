@@ -34,9 +34,9 @@ final class PlansSection {
     List<Block> blocks = new ArrayList<>();
     blocks.add(
         Paragraph.of(
-            "The mix of inputs that reaches a target at least cost, at given prices. Marginal cost is"
-                + " what one more unit of output costs; at the least-cost mix the price of every input"
-                + " in use equals marginal cost times its marginal product."));
+            "The mix of inputs that reaches a target at least cost, at given prices. Marginal cost"
+                + " is what one more unit of output costs; at the least-cost mix the price of every"
+                + " input in use equals marginal cost times its marginal product."));
     int number = 1;
     for (String question : material.questions()) {
       blocks.add(question(material, question, number++));
@@ -134,7 +134,7 @@ final class PlansSection {
             p -> Cells.figure(p.averageCost())));
     List<Row> mix = new ArrayList<>();
     List<Row> shares = new ArrayList<>();
-    for (String input : material.inputs()) {
+    for (String input : inputs(material, plans)) {
       mix.add(
           row(
               material.inputAndUnit(input),
@@ -163,9 +163,20 @@ final class PlansSection {
         List.of(
             Text.of(
                 Phrases.sentence(material.interval())
-                    + "s beneath; figures of a technology taken as known carry none. The check is the"
-                    + " largest relative departure, found again from the technology and not taken from"
-                    + " the search.")));
+                    + "s beneath; figures of a technology taken as known carry none. The check is"
+                    + " the largest relative departure, found again from the technology and not"
+                    + " taken from the search.")));
+  }
+
+  /** The inputs of the study, then those that only some answers have. */
+  static List<String> inputs(Material material, List<Planned> plans) {
+    List<String> all = new ArrayList<>(material.inputs());
+    plans.stream()
+        .flatMap(plan -> plan.mix().keySet().stream())
+        .filter(input -> !material.inputs().contains(input))
+        .distinct()
+        .forEach(all::add);
+    return all;
   }
 
   private static Row row(String heading, List<Planned> plans, Function<Planned, Cell> cell) {
@@ -177,13 +188,16 @@ final class PlansSection {
     columns.add(Column.ofNumbers("Least cost", material.money()));
     columns.add(Column.ofNumbers("Marginal cost", material.moneyPerOutput()));
     columns.add(Column.ofNumbers("Average cost", material.moneyPerOutput()));
-    for (String input : material.inputs()) {
+    for (String input : inputs(material, List.of(plan))) {
       columns.add(Column.ofNumbers(Phrases.sentence(input), material.unit(input)));
     }
     columns.add(Column.ofWords("Inside the records"));
     List<Row> rows = new ArrayList<>();
     for (CurvePoint point : thinned(plan.curve())) {
-      rows.add(new Row(Text.of(Numbers.amount(point.target())), cells(material, point)));
+      rows.add(
+          new Row(
+              Text.of(Numbers.amount(point.target())),
+              cells(material, point, inputs(material, List.of(plan)))));
     }
     String unit = material.outputUnit().isEmpty() ? "" : " (" + material.outputUnit() + ")";
     return new Table(
@@ -204,12 +218,12 @@ final class PlansSection {
             : List.of());
   }
 
-  private static List<Cell> cells(Material material, CurvePoint point) {
+  private static List<Cell> cells(Material material, CurvePoint point, List<String> inputs) {
     List<Cell> cells = new ArrayList<>();
     cells.add(Cells.figure(point.cost()));
     cells.add(Cells.figure(point.marginalCost()));
     cells.add(Cells.figure(point.averageCost()));
-    for (String input : material.inputs()) {
+    for (String input : inputs) {
       Double quantity = point.mix().get(input);
       cells.add(quantity == null ? Cell.none() : Cell.of(Numbers.significant(quantity, 4)));
     }

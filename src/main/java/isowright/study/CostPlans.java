@@ -1,183 +1,199 @@
 package isowright.study;
 
 import isowright.cost.CostElasticities;
-import isowright.cost.TranslogCost;
+import isowright.cost.CostFunction;
 import isowright.estimation.CostData;
 import isowright.estimation.CostFit;
 import isowright.estimation.CostSpecification.Equations;
+import isowright.estimation.EstimatedCost;
 import isowright.inference.DeltaMethod;
+import isowright.inference.Propagation;
 import isowright.records.Panel;
+import isowright.study.CostTask.Settled;
 import isowright.study.Findings.Said;
 import isowright.study.PlanFindings.CurvePoint;
 import isowright.study.PlanFindings.Planned;
+import isowright.study.Study.LeastCostQuestion;
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.LinkedHashMap;
 import java.util.List;
-import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
+import java.util.function.Function;
 
 /**
  * Answers the least-cost questions of a study with fitted cost functions: demands by Shephard's
- * lemma, marginal cost as the derivative of cost, with the same figures and states as answers from
- * production functions.
+ * lemma, marginal cost as the derivative of cost, the short run of what is held and the long run of
+ * fixed inputs that have a price, with the same figures and states as answers from production
+ * functions.
  */
 final class CostPlans {
 
   private final Study study;
   private final Costs asked;
-  private final Panel panel;
   private final CostData data;
+  private final CostCircumstances circumstances;
 
   CostPlans(Study study, Costs asked, Panel panel, CostData data) {
     this.study = study;
     this.asked = asked;
-    this.panel = panel;
     this.data = data;
+    this.circumstances = new CostCircumstances(asked, panel, data);
+  }
+
+  /** One question to one cost function, with what is needed to say how sure its answer is. */
+  private record Put(
+      LeastCostQuestion question,
+      CostFit fit,
+      CostTask task,
+      CostFunction function,
+      Propagation<CostFunction> propagation) {
+
+    List<Figure> figures(Function<CostFunction, double[]> numbers, DeltaMethod.Scale scale) {
+      return propagation.estimates(numbers, scale).stream().map(FitStage::figure).toList();
+    }
   }
 
   /** The answers of these fits, question by question. */
   List<Planned> plans(List<CostFit> fits) {
     List<Planned> plans = new ArrayList<>();
-    for (Study.LeastCostQuestion question : study.leastCost()) {
+    for (LeastCostQuestion question : study.leastCost()) {
       for (CostFit fit : fits) {
         String name = fit.function().form();
         boolean wanted =
             question.technologies().isEmpty() || question.technologies().contains(name);
         if (wanted && fit.specification().equations() != Equations.SHARES) {
-          plans.add(answer(question, fit));
+          plans.add(answer(put(question, fit)));
         }
       }
     }
     return plans;
   }
 
-  private Planned answer(Study.LeastCostQuestion question, CostFit fit) {
+  private Put put(LeastCostQuestion question, CostFit fit) {
+    EstimatedCost estimated = EstimatedCost.of(data, fit, circumstances.productivity(question));
+    Propagation<CostFunction> propagation =
+        new Propagation<>(
+            estimated.centre(),
+            estimated.covariance(),
+            fit.degreesOfFreedom(),
+            fit.specification().confidence(),
+            estimated::at);
+    return new Put(question, fit, circumstances.task(question), estimated.function(), propagation);
+  }
+
+  private Planned answer(Put put) {
     List<Said> remarks = new ArrayList<>();
-    double[] v = point(question);
-    String status = status(question, fit, v, remarks);
-    boolean answered = status.equals("solved") || status.equals("outside-records");
-    CostFigures figures = new CostFigures(data, fit);
-    int n = data.arguments().inputs().size();
+    LeastCostQuestion question = put.question();
+    Settled settled = put.task().settle(put.function(), question.target());
+    String status = status(put, settled, remarks);
+    boolean answered = !status.equals("infeasible") && !status.equals("irregular");
     List<Figure> money =
         answered
-            ? figures.figures(f -> money(f, v, question.target()), DeltaMethod.Scale.LOG)
+            ? put.figures(f -> put.task().numbers(f, settled), DeltaMethod.Scale.LOG)
             : List.of();
-    List<Figure> shares =
+    PlanDetail detail =
         answered
-            ? figures.figures(f -> CostElasticities.at(f, v).shares(), DeltaMethod.Scale.LINEAR)
-            : List.of();
+            ? new CostPlanDetail(put.task(), settled, put::figures)
+                .detail(question, CurveSpan.targets(question, question.target()), put.function())
+            : CostPlanDetail.bare(question);
     return new Planned(
         question.name(),
-        fit.function().form(),
+        put.fit().function().form(),
         true,
         question.target(),
-        prices(v),
-        whose(fit, question),
-        held(question),
+        prices(put.task()),
+        circumstances.whose(put.fit(), question),
+        circumstances.limitWords(question, put.task()),
         status,
-        answered ? named(money.subList(3, 3 + n)) : Map.of(),
+        answered ? mix(put.task(), settled, money) : Map.of(),
         answered ? Optional.of(money.get(0)) : Optional.empty(),
         answered ? Optional.of(money.get(1)) : Optional.empty(),
         answered ? Optional.of(money.get(2)) : Optional.empty(),
-        answered ? named(shares) : Map.of(),
-        answered ? departure(fit, v) : Double.NaN,
-        answered ? curve(question, figures, fit) : List.of(),
+        answered ? shares(put, settled) : Map.of(),
+        answered ? departure(put, settled) : Double.NaN,
+        answered ? curve(put) : List.of(),
         List.of(),
         List.of(),
-        remarks);
+        remarks,
+        detail);
   }
 
-  /** Cost, marginal cost, average cost, demands. */
-  private static double[] money(TranslogCost f, double[] v, double target) {
-    CostElasticities at = CostElasticities.at(f, v);
-    double[] demands = at.demands();
-    double[] all = new double[3 + demands.length];
-    all[0] = at.cost();
-    all[1] = at.marginalCost(0, target);
-    all[2] = at.cost() / target;
-    System.arraycopy(demands, 0, all, 3, demands.length);
-    return all;
-  }
-
-  /** By how much Σ w x departs from cost, relatively: zero where homogeneity holds. */
-  private static double departure(CostFit fit, double[] v) {
-    double sum = Arrays.stream(CostElasticities.at(fit.function(), v).shares()).sum();
-    return Math.abs(sum - 1);
-  }
-
-  private double[] point(Study.LeastCostQuestion question) {
-    List<String> inputs = data.arguments().inputs();
-    double[] v = new double[data.arguments().size()];
-    int last = panel.periods().size() - 1;
-    int period = question.period().map(panel.periods()::indexOf).filter(p -> p >= 0).orElse(last);
-    for (int i = 0; i < inputs.size(); i++) {
-      Double stated = question.prices().get(inputs.get(i));
-      v[i] = stated != null ? Math.log(stated) : meanOf(i, period);
+  /** Quantities; one that is bound is known without error. */
+  private static Map<String, Figure> mix(CostTask task, Settled settled, List<Figure> money) {
+    Map<String, Figure> mix = new LinkedHashMap<>();
+    for (int q = 0; q < task.names().size(); q++) {
+      double bound = settled.bound()[q];
+      mix.put(task.names().get(q), Double.isNaN(bound) ? money.get(3 + q) : Figure.exact(bound));
     }
-    v[inputs.size()] = Math.log(question.target());
-    for (int k = inputs.size() + 1; k < data.points().length; k++) {
-      v[k] = meanOf(k, period);
-    }
-    for (int f = 0; f < asked.fixed().size(); f++) {
-      Double held = question.hold().get(asked.fixed().get(f).name());
-      if (held != null) {
-        v[inputs.size() + asked.outputs().size() + f] = Math.log(held);
+    return mix;
+  }
+
+  private static Map<String, Figure> shares(Put put, Settled settled) {
+    CostTask task = put.task();
+    List<Figure> all =
+        put.figures(
+            f -> {
+              double[] numbers = task.numbers(f, settled);
+              double[] shares = new double[task.names().size()];
+              for (int q = 0; q < shares.length; q++) {
+                shares[q] = price(task, q) * numbers[3 + q] / numbers[0];
+              }
+              return shares;
+            },
+            DeltaMethod.Scale.LINEAR);
+    Map<String, Figure> shares = new LinkedHashMap<>();
+    for (int q = 0; q < all.size(); q++) {
+      if (!Double.isNaN(price(task, q))) {
+        shares.put(task.names().get(q), all.get(q));
       }
     }
-    return v;
+    return shares;
   }
 
-  /** The mean of an argument over the rows of a period. */
-  private double meanOf(int argument, int period) {
+  /** The price of a quantity; NaN where a fixed input has none. */
+  private static double price(CostTask task, int q) {
+    return q < task.inputs() ? Math.exp(task.v()[q]) : task.fixedPrices()[q - task.inputs()];
+  }
+
+  /** How far Σ w x is from cost (homogeneity) and the fixed inputs from their best, relatively. */
+  private static double departure(Put put, Settled settled) {
     double sum = 0;
-    int count = 0;
-    for (int r = 0; r < panel.rows(); r++) {
-      if (panel.rowPeriods().get(r) == period) {
-        sum += data.points()[argument][r];
-        count++;
-      }
+    for (double share : CostElasticities.at(put.function(), settled.at()).shares()) {
+      sum += share;
     }
-    return sum / count;
+    return Math.max(Math.abs(sum - 1), settled.departure());
   }
 
-  private String status(
-      Study.LeastCostQuestion question, CostFit fit, double[] v, List<Said> remarks) {
-    List<String> unheard = new ArrayList<>();
+  private String status(Put put, Settled settled, List<Said> remarks) {
     if (asked.outputs().size() != 1) {
-      unheard.add("one target is asked of " + asked.outputs().size() + " outputs");
-    }
-    if (!question.limits().isEmpty()) {
-      unheard.add("limits on inputs");
-    }
-    question.hold().keySet().stream()
-        .filter(name -> asked.fixed().stream().noneMatch(q -> q.name().equals(name)))
-        .forEach(name -> unheard.add(name + " held, which is no fixed input of the cost function"));
-    if (!unheard.isEmpty()) {
       remarks.add(
           Said.of(
               "warning",
               "infeasible",
-              "A cost function has its inputs at their least cost and cannot answer this question: "
-                  + String.join("; ", unheard)
-                  + "."));
+              "One target is asked of "
+                  + asked.outputs().size()
+                  + " outputs; a least-cost question answers for a cost function of one output."));
       return "infeasible";
     }
-    CostElasticities at = CostElasticities.at(fit.function(), v);
-    if (!at.monotone() || !at.concave()) {
+    if (settled.reason().isPresent()) {
+      remarks.add(
+          Said.of("warning", "infeasible", "There is no plan: " + settled.reason().get() + "."));
+      return "infeasible";
+    }
+    String irregular = irregular(put.function(), settled.at());
+    if (!irregular.isEmpty()) {
       remarks.add(
           Said.of(
               "warning",
               "irregular",
               "At these prices and this target the fitted function is no cost function ("
-                  + (at.monotone() ? "" : "a share or marginal cost is not positive")
-                  + (at.monotone() || at.concave() ? "" : "; ")
-                  + (at.concave() ? "" : "it is not concave in prices")
+                  + irregular
                   + "), so there is no plan."));
       return "irregular";
     }
-    List<String> outside = outside(v);
+    fixedInputs(put, settled, remarks);
+    List<String> outside = circumstances.outside(settled.at());
     if (!outside.isEmpty()) {
       remarks.add(
           Said.of(
@@ -186,50 +202,76 @@ final class CostPlans {
               "This answer is a guess beyond the records: " + String.join("; ", outside) + "."));
       return "outside-records";
     }
-    return "solved";
+    return settled.limited() ? "corner" : "solved";
   }
 
-  private List<String> outside(double[] v) {
+  private static String irregular(CostFunction function, double[] v) {
+    CostElasticities at = CostElasticities.at(function, v);
     List<String> reasons = new ArrayList<>();
-    for (int k = 0; k < data.arguments().base().length; k++) {
-      double least = Arrays.stream(data.points()[k]).min().orElse(Double.NaN);
-      double most = Arrays.stream(data.points()[k]).max().orElse(Double.NaN);
-      if (v[k] < least || v[k] > most) {
-        reasons.add(
-            String.format(
-                Locale.ROOT,
-                "%s of %,.6g lies outside those recorded (%,.6g to %,.6g)",
-                (data.arguments().price(k) ? "a price of " : "") + data.arguments().names().get(k),
-                Math.exp(v[k]),
-                Math.exp(least),
-                Math.exp(most)));
-      }
+    if (!at.monotone()) {
+      reasons.add("a share or marginal cost is not positive");
     }
-    return reasons;
+    if (!at.concave()) {
+      reasons.add("it is not concave in prices");
+    }
+    return String.join("; ", reasons);
   }
 
-  private List<CurvePoint> curve(
-      Study.LeastCostQuestion question, CostFigures figures, CostFit fit) {
-    double[] targets = CurveSpan.targets(question, question.target());
-    double[] v = point(question);
-    int place = data.arguments().inputs().size();
-    List<Double> kept = new ArrayList<>();
-    for (double target : targets) {
-      v[place] = Math.log(target);
-      CostElasticities at = CostElasticities.at(fit.function(), v);
-      if (at.monotone() && at.concave()) {
-        kept.add(target);
+  /** What must be said of inputs that are fixed. */
+  private void fixedInputs(Put put, Settled settled, List<Said> remarks) {
+    CostTask task = put.task();
+    List<String> unpriced = new ArrayList<>();
+    double[] gradient = new double[task.v().length];
+    put.function().gradient(settled.at(), gradient);
+    for (int f = 0; f < asked.fixed().size(); f++) {
+      String name = asked.fixed().get(f).name();
+      if (Double.isNaN(task.fixedPrices()[f])) {
+        unpriced.add(name);
+      }
+      double slope = gradient[task.inputs() + asked.outputs().size() + f];
+      if (slope > 0) {
+        remarks.add(
+            Said.of(
+                "warning",
+                "fixed-input-raises-cost",
+                "More of the fixed input "
+                    + name
+                    + " raises variable cost here, where it could be left idle: variable cost rises"
+                    + " by "
+                    + PlanWords.number(slope)
+                    + " per cent with a per cent of it."));
       }
     }
-    int width = 3 + place;
+    if (!unpriced.isEmpty()) {
+      remarks.add(
+          Said.of(
+              "note",
+              "variable-cost",
+              "Costs are variable costs: what "
+                  + String.join(" and ", unpriced)
+                  + " cost is not among them. State a price to have it counted and, where the"
+                  + " quantity is not held, chosen."));
+    }
+  }
+
+  private List<CurvePoint> curve(Put put) {
+    CostTask task = put.task();
+    List<Settled> kept = new ArrayList<>();
+    List<Double> targets = new ArrayList<>();
+    for (double target : CurveSpan.targets(put.question(), put.question().target())) {
+      Settled settled = task.settle(put.function(), target);
+      if (settled.reason().isEmpty() && irregular(put.function(), settled.at()).isEmpty()) {
+        kept.add(settled);
+        targets.add(target);
+      }
+    }
+    int width = 3 + task.names().size();
     List<Figure> all =
-        figures.figures(
+        put.figures(
             f -> {
               double[] rows = new double[kept.size() * width];
-              double[] w = v.clone();
               for (int k = 0; k < kept.size(); k++) {
-                w[place] = Math.log(kept.get(k));
-                System.arraycopy(money(f, w, kept.get(k)), 0, rows, k * width, width);
+                System.arraycopy(task.numbers(f, kept.get(k)), 0, rows, k * width, width);
               }
               return rows;
             },
@@ -238,51 +280,22 @@ final class CostPlans {
     for (int k = 0; k < kept.size(); k++) {
       List<Figure> row = all.subList(k * width, (k + 1) * width);
       Map<String, Double> mix = new LinkedHashMap<>();
-      for (int i = 0; i < place; i++) {
-        mix.put(data.arguments().inputs().get(i), row.get(3 + i).value());
+      for (int q = 0; q < task.names().size(); q++) {
+        mix.put(task.names().get(q), row.get(3 + q).value());
       }
-      v[place] = Math.log(kept.get(k));
-      points.add(
-          new CurvePoint(
-              kept.get(k), row.get(0), row.get(1), row.get(2), mix, outside(v).isEmpty()));
+      boolean inside = circumstances.outside(kept.get(k).at()).isEmpty();
+      points.add(new CurvePoint(targets.get(k), row.get(0), row.get(1), row.get(2), mix, inside));
     }
     return points;
   }
 
-  private Map<String, Double> prices(double[] v) {
+  private static Map<String, Double> prices(CostTask task) {
     Map<String, Double> prices = new LinkedHashMap<>();
-    for (int i = 0; i < data.arguments().inputs().size(); i++) {
-      prices.put(data.arguments().inputs().get(i), Math.exp(v[i]));
+    for (int q = 0; q < task.names().size(); q++) {
+      if (!Double.isNaN(price(task, q))) {
+        prices.put(task.names().get(q), price(task, q));
+      }
     }
     return prices;
-  }
-
-  private Map<String, Figure> named(List<Figure> figures) {
-    Map<String, Figure> named = new LinkedHashMap<>();
-    for (int i = 0; i < figures.size(); i++) {
-      named.put(data.arguments().inputs().get(i), figures.get(i));
-    }
-    return named;
-  }
-
-  private static Map<String, String> held(Study.LeastCostQuestion question) {
-    Map<String, String> words = new LinkedHashMap<>();
-    question
-        .hold()
-        .forEach(
-            (name, quantity) ->
-                words.put(name, String.format(Locale.ROOT, "held at %,.6g", quantity)));
-    return words;
-  }
-
-  private String whose(CostFit fit, Study.LeastCostQuestion question) {
-    String when =
-        data.arguments().time()
-            ? " in " + question.period().orElse(panel.periods().get(panel.periods().size() - 1))
-            : "";
-    return (fit.specification().plantEffects()
-            ? "the typical plant"
-            : "the plants of the records on average")
-        + when;
   }
 }

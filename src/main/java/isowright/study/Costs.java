@@ -5,6 +5,7 @@ import isowright.estimation.CostSpecification.Equations;
 import isowright.estimation.CostSpecification.Restriction;
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.Stream;
 
 /**
  * What a study asks of the cost side: cost functions fitted to filed or recorded costs at the
@@ -72,5 +73,18 @@ public record Costs(
   /** The names of the inputs, in order. */
   public List<String> inputNames() {
     return inputs.stream().map(Input::name).toList();
+  }
+
+  /** The names of its inputs, fixed ones last, that are not among these. */
+  List<String> others(List<String> names) {
+    return Stream.concat(inputs.stream().map(Input::name), fixed.stream().map(Quantity::name))
+        .filter(name -> !names.contains(name))
+        .toList();
+  }
+
+  /** Whether it has an input of this name, variable or fixed. */
+  boolean has(String name) {
+    return inputs.stream().anyMatch(input -> input.name().equals(name))
+        || fixed.stream().anyMatch(quantity -> quantity.name().equals(name));
   }
 }

@@ -8,6 +8,8 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
+import java.util.Set;
+import java.util.TreeSet;
 import java.util.stream.Collectors;
 import java.util.stream.Stream;
 
@@ -104,6 +106,7 @@ final class Demands {
             || terms.jumps()
             || !terms.takeAtLeast().isEmpty()
             || !terms.across().isEmpty();
+    heldAbroad(key, asked, forms, wanted);
     if (wanted && more) {
       mistake(
           key,
@@ -111,6 +114,38 @@ final class Demands {
               + " units, price bands, commitments and plants need a technology: name one under"
               + " `technology`, fitted or given, and none of "
               + String.join(", ", forms));
+    }
+  }
+
+  /** What is held or limited must be an input of every technology that is asked. */
+  private void heldAbroad(
+      String key, Study.LeastCostQuestion asked, List<String> forms, boolean costs) {
+    if (forms.isEmpty()) {
+      return;
+    }
+    boolean production =
+        asked.technologies().isEmpty()
+            ? !study.technologies().isEmpty() || !study.given().isEmpty()
+            : asked.technologies().stream().anyMatch(name -> !forms.contains(name));
+    Set<String> bound = new TreeSet<>(asked.hold().keySet());
+    bound.addAll(asked.limits().keySet());
+    bound.addAll(asked.terms().shortRun());
+    for (String name : bound) {
+      if (production && !study.inputs().contains(name)) {
+        mistake(
+            key,
+            name
+                + " is an input of the cost functions alone; name only these under `technology`: "
+                + String.join(", ", forms));
+      }
+      if (costs && study.costs().filter(c -> c.has(name)).isEmpty()) {
+        mistake(
+            key,
+            name
+                + " is no input of the cost functions; name other technologies under `technology`,"
+                + " and none of "
+                + String.join(", ", forms));
+      }
     }
   }
 

@@ -47,6 +47,7 @@ final class PlanBinder {
   private final Declared declared;
   private final List<String> technologies;
   private final InputNumbers numbers;
+  private final List<String> further;
   private final LimitBinder limits;
   private final PurchaseBinder purchases;
   private final AcrossBinder across;
@@ -62,8 +63,11 @@ final class PlanBinder {
   PlanBinder(Declared declared, List<String> technologies) {
     this.declared = declared;
     this.technologies = List.copyOf(technologies);
-    this.numbers = new InputNumbers(declared.inputs());
-    this.limits = new LimitBinder(declared.inputs());
+    this.further = declared.costs().map(costs -> costs.others(declared.inputs())).orElse(List.of());
+    List<String> names = new ArrayList<>(declared.inputs());
+    names.addAll(further);
+    this.numbers = new InputNumbers(names);
+    this.limits = new LimitBinder(names);
     this.purchases = new PurchaseBinder(declared.inputs());
     this.across = new AcrossBinder(declared, technologies);
   }
@@ -234,7 +238,7 @@ final class PlanBinder {
         declared.inputs().stream().filter(name -> !banded.contains(name)).toList();
     if (section.has("prices")) {
       Map<String, Double> prices = new LinkedHashMap<>();
-      if (banded.isEmpty()) {
+      if (banded.isEmpty() && further.isEmpty()) {
         Optional<double[]> all = numbers.positive(section, "prices");
         for (int i = 0; all.isPresent() && i < declared.inputs().size(); i++) {
           prices.put(declared.inputs().get(i), all.get()[i]);
@@ -287,7 +291,7 @@ final class PlanBinder {
   private List<String> shortRun(YamlSection curve, Map<String, Double> hold) {
     List<String> names = curve.get("short-run").map(YamlValue::texts).orElse(List.of());
     for (String name : names) {
-      if (!declared.inputs().contains(name)) {
+      if (!declared.inputs().contains(name) && !further.contains(name)) {
         curve.refuse(
             "short-run",
             "`"
