@@ -114,7 +114,7 @@ public final class Publication implements AutoCloseable {
     if (Files.exists(target)) {
       replaceable(folder, target, mark);
     }
-    Path above = existing(target.getParent());
+    Path above = existing(Objects.requireNonNull(target.getParent()));
     if (!Files.isDirectory(above)) {
       throw new Refused(
           above + " is a file, so " + folder + " cannot be a folder; choose another folder.");
