@@ -24,9 +24,11 @@ final class CostJson {
               costs.sides(),
               false,
               side -> {
-                file.text("name", side.name());
+                file.text("measure", side.measure());
+                file.text("of", side.of());
                 file.figures("production", side.production());
                 file.figures("cost", side.cost());
+                file.truth("apart", side.apart());
               });
           file.remarks("remarks", costs.remarks());
         });

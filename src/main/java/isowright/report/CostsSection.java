@@ -41,13 +41,16 @@ final class CostsSection {
         Paragraph.of(
             "A cost function says what output costs at given prices when inputs are mixed at least"
                 + " cost; the share of an input in cost is its derivative. Homogeneity in prices is"
-                + " imposed. Plants are taken to face the prices as given and to mix inputs at least"
-                + " cost up to chance."));
-    material.findings().costs().remarks().forEach(said -> blocks.add(notice("", said)));
+                + " imposed. Plants are taken to face the prices as given and to mix inputs at"
+                + " least cost up to chance."));
+    material.findings().costs().remarks().stream()
+        .filter(said -> !said.code().equals("sides-differ"))
+        .forEach(said -> blocks.add(notice("", said)));
     for (Fitted fit : fits) {
       fit.remarks().forEach(said -> blocks.add(notice(title(fit.technology()) + ". ", said)));
       inWords(fit, material, blocks);
     }
+    CostSidesBlocks.add(material, blocks);
     List<Fitted> usable = fits.stream().filter(Fitted::usable).toList();
     if (!usable.isEmpty()) {
       blocks.add(CostTables.parameters(usable));

@@ -4,6 +4,8 @@ import isowright.study.Findings.Said;
 import isowright.study.FitFindings.Pair;
 import isowright.study.FitFindings.Parameter;
 import isowright.study.FitFindings.Tested;
+import java.util.Collections;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -131,9 +133,24 @@ public record CostFindings(List<Fitted> fits, List<Said> remarks, List<Side> sid
   /**
    * A figure found from both sides.
    *
-   * @param name what it is
+   * @param measure {@code scale}, {@code allen}, {@code demand} (own price), {@code least-cost} or
+   *     {@code marginal-cost}
+   * @param of the inputs or the question it concerns; empty for scale
    * @param production the figure by technology fitted to quantities
    * @param cost the figure by cost function
+   * @param apart whether some interval of one side and some of the other do not meet
    */
-  public record Side(String name, Map<String, Figure> production, Map<String, Figure> cost) {}
+  public record Side(
+      String measure,
+      String of,
+      Map<String, Figure> production,
+      Map<String, Figure> cost,
+      boolean apart) {
+
+    /** Copies the maps, keeping their order. */
+    public Side {
+      production = Collections.unmodifiableMap(new LinkedHashMap<>(production));
+      cost = Collections.unmodifiableMap(new LinkedHashMap<>(cost));
+    }
+  }
 }

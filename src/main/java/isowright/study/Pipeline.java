@@ -95,6 +95,7 @@ public final class Pipeline {
     study.given().forEach(given -> candidates.add(Candidate.given(given)));
     List<Planned> plans = new ArrayList<>(new PlanStage(study, panel, candidates).plans());
     plans.addAll(costPlans);
+    CostFindings bothSides = CostSides.in(costs, fitted, plans);
 
     progress.stage("holding filed costs against least cost", 4, STAGES);
     ReviewStage.Review review = ReviewStage.of(study, priced, candidates);
@@ -119,7 +120,7 @@ public final class Pipeline {
         review.reviews(),
         review.findings(),
         SpecificationStage.findings(study, fits, fitted),
-        costs,
+        bothSides,
         remarks(fitted, plans));
   }
 
