@@ -11,6 +11,7 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Function;
+import java.util.function.Supplier;
 import java.util.stream.IntStream;
 
 /**
@@ -37,14 +38,16 @@ public final class ReplicatedIntervals implements Intervals {
   /** A standard error below this part of the value is rounding of a figure that nothing moves. */
   private static final double ROUNDING = 1e-9;
 
-  private final Technology technology;
   private final Replicas replicas;
+  private final Without withoutPlants;
+  private final Without withoutPeriods;
   private final DeltaMethod delta;
   private final double level;
 
   ReplicatedIntervals(EstimatedTechnology estimated, DeltaMethod delta, double level) {
-    this.technology = estimated.technology();
     this.replicas = estimated.replicas();
+    this.withoutPlants = Without.of(replicas.withoutPlants(), estimated.technology());
+    this.withoutPeriods = Without.of(replicas.withoutPeriods(), estimated.technology());
     this.delta = delta;
     this.level = level;
   }
@@ -80,9 +83,22 @@ public final class ReplicatedIntervals implements Intervals {
    */
   public List<Estimate> refitted(
       List<Estimate> analytic, Function<Technology, double[]> functions) {
+    return refitted(analytic, functions, () -> delta.gradients(functions));
+  }
+
+  /**
+   * The same where the gradients are known, too.
+   *
+   * @param gradients in the technology's parameters, [function][parameter]; asked for where there
+   *     are more than {@link #EXACT} to leave out
+   */
+  public List<Estimate> refitted(
+      List<Estimate> analytic,
+      Function<Technology, double[]> functions,
+      Supplier<double[][]> gradients) {
     double[][] drawn = values(replicas.drawn(), functions, analytic.size());
-    Moves plants = moves(replicas.withoutPlants(), functions, analytic);
-    Moves periods = moves(replicas.withoutPeriods(), functions, analytic);
+    Moves plants = moves(withoutPlants, functions, analytic, gradients);
+    Moves periods = moves(withoutPeriods, functions, analytic, gradients);
     List<Estimate> all = new ArrayList<>();
     for (int f = 0; f < analytic.size(); f++) {
       Estimate own = analytic.get(f);
@@ -165,65 +181,107 @@ public final class ReplicatedIntervals implements Intervals {
   }
 
   private Moves moves(
-      Technologies without, Function<Technology, double[]> functions, List<Estimate> analytic) {
-    int count = without.count();
-    if (count <= EXACT) {
-      boolean[] exact = new boolean[count];
-      Arrays.fill(exact, true);
-      return new Moves(without, values(without, functions, analytic.size()), exact);
-    }
-    double[][] near = linear(without, functions, analytic);
+      Without without,
+      Function<Technology, double[]> functions,
+      List<Estimate> analytic,
+      Supplier<double[][]> gradients) {
+    int count = without.refits().count();
     boolean[] exact = new boolean[count];
+    if (count <= EXACT) {
+      Arrays.fill(exact, true);
+      return new Moves(
+          without.refits(), values(without.refits(), functions, analytic.size()), exact);
+    }
+    double[][] near = without.linear(gradients.get(), analytic);
     for (int f = 0; f < analytic.size(); f++) {
-      int figure = f;
-      double centre = analytic.get(f).value();
-      IntStream.range(0, count)
-          .boxed()
-          .filter(i -> !Double.isNaN(near[i][figure]))
-          .sorted(
-              (i, j) ->
-                  Double.compare(size(near[j][figure], centre), size(near[i][figure], centre)))
-          .limit(SCREENED)
-          .forEach(i -> exact[i] = true);
+      furthest(near, f, analytic.get(f).value(), exact);
     }
     IntStream.range(0, count)
         .parallel()
         .filter(i -> exact[i])
         .forEach(
-            i -> near[i] = without.get(i).map(functions).orElseGet(() -> missing(analytic.size())));
-    return new Moves(without, near, exact);
+            i ->
+                near[i] =
+                    without
+                        .refits()
+                        .get(i)
+                        .map(functions)
+                        .orElseGet(() -> missing(analytic.size())));
+    return new Moves(without.refits(), near, exact);
+  }
+
+  /** Marks the {@link #SCREENED} refits that move figure f most; of equals the earlier. */
+  private static void furthest(double[][] near, int f, double centre, boolean[] marked) {
+    int[] kept = new int[SCREENED];
+    double[] sizes = new double[SCREENED];
+    int count = 0;
+    for (int i = 0; i < near.length; i++) {
+      double size = size(near[i][f], centre);
+      if (Double.isNaN(size) || count == SCREENED && size <= sizes[count - 1]) {
+        continue;
+      }
+      int at = count < SCREENED ? count++ : count - 1;
+      while (at > 0 && sizes[at - 1] < size) {
+        sizes[at] = sizes[at - 1];
+        kept[at] = kept[at - 1];
+        at--;
+      }
+      sizes[at] = size;
+      kept[at] = i;
+    }
+    for (int k = 0; k < count; k++) {
+      marked[kept[k]] = true;
+    }
   }
 
   private static double size(double value, double centre) {
     return Math.abs(value - centre);
   }
 
-  /** The functions without each plant by their gradients. */
-  private double[][] linear(
-      Technologies without, Function<Technology, double[]> functions, List<Estimate> analytic) {
-    double[][] gradients = delta.gradients(functions);
-    double[] centre = technology.parameters();
-    return IntStream.range(0, without.count())
-        .parallel()
-        .mapToObj(
-            i ->
-                without
-                    .get(i)
-                    .map(t -> linear(t.parameters(), centre, gradients, analytic))
-                    .orElseGet(() -> missing(analytic.size())))
-        .toArray(double[][]::new);
-  }
+  /**
+   * Refits, and how far their parameters lie from the estimate's.
+   *
+   * @param refits the refits
+   * @param departures by refit; empty where there is none, or where all are refitted anyway
+   */
+  private record Without(Technologies refits, double[][] departures) {
 
-  private static double[] linear(
-      double[] parameters, double[] centre, double[][] gradients, List<Estimate> analytic) {
-    double[] values = new double[analytic.size()];
-    for (int f = 0; f < values.length; f++) {
-      values[f] = analytic.get(f).value();
-      for (int k = 0; k < centre.length; k++) {
-        values[f] += gradients[f][k] * (parameters[k] - centre[k]);
-      }
+    static Without of(Technologies refits, Technology technology) {
+      double[] centre = technology.parameters();
+      int screened = refits.count() > EXACT ? refits.count() : 0;
+      return new Without(
+          refits,
+          IntStream.range(0, screened)
+              .mapToObj(i -> refits.get(i).map(t -> less(t.parameters(), centre)))
+              .map(departure -> departure.orElse(new double[0]))
+              .toArray(double[][]::new));
     }
-    return values;
+
+    private static double[] less(double[] parameters, double[] centre) {
+      double[] departure = new double[centre.length];
+      for (int k = 0; k < departure.length; k++) {
+        departure[k] = parameters[k] - centre[k];
+      }
+      return departure;
+    }
+
+    /** The functions without each plant by their gradients. */
+    double[][] linear(double[][] gradients, List<Estimate> analytic) {
+      int count = analytic.size();
+      double[][] values = new double[departures.length][];
+      for (int i = 0; i < values.length; i++) {
+        double[] departure = departures[i];
+        double[] own = missing(count);
+        for (int f = 0; f < count && departure.length > 0; f++) {
+          own[f] = analytic.get(f).value();
+          for (int k = 0; k < departure.length; k++) {
+            own[f] += gradients[f][k] * departure[k];
+          }
+        }
+        values[i] = own;
+      }
+      return values;
+    }
   }
 
   /** The figures without each plant or period, and which of them were refitted. */

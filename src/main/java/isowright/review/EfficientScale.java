@@ -9,6 +9,7 @@ import isowright.leastcost.Minimiser;
 import isowright.leastcost.Plan;
 import isowright.leastcost.Question;
 import java.util.Optional;
+import java.util.function.DoubleUnaryOperator;
 
 /**
  * How far is an output from the efficient scale, at which a unit costs least, and what is that
@@ -43,6 +44,11 @@ public final class EfficientScale {
 
   /** Scale elasticities that agree to this over a doubling of output are the same. */
   private static final double SAME = 1e-9;
+
+  private static final double LN2 = Math.log(2);
+
+  /** The search for the efficient scale takes no longer step in ln Q, so as to pass nothing by. */
+  private static final double LONGEST_STEP = 0.8;
 
   /** What was found. */
   public enum State {
@@ -119,13 +125,15 @@ public final class EfficientScale {
     double q = question.target();
     double here = logElasticity(question, plan);
     Estimate elasticity = elasticity(question, plan);
-    double up = logElasticity(question, Math.log(q) + Math.log(2) / 2, plan);
-    double down = logElasticity(question, Math.log(q) - Math.log(2) / 2, plan);
+    double up = logElasticity(question, Math.log(q) + LN2 / 2, plan);
+    double down = logElasticity(question, Math.log(q) - LN2 / 2, plan);
     if (Math.abs(up - here) <= SAME && Math.abs(down - here) <= SAME) {
       return none(State.SAME_RETURNS, elasticity);
     }
     double bound = Math.log(here > 0 ? Math.max(largest, q) : Math.min(smallest, q));
-    LogRoot root = LogRoot.from(log -> logElasticity(question, log, plan), Math.log(q), bound);
+    LogRoot root =
+        LogRoot.from(
+            new Nearby(question, plan), Math.log(q), here, bound, reach(here, (up - down) / LN2));
     if (root.state() == LogRoot.State.NO_VALUE) {
       return none(State.NO_ANSWER, elasticity);
     }
@@ -133,6 +141,31 @@ public final class EfficientScale {
       return none(here > 0 ? State.STILL_FALLING : State.STILL_RISING, elasticity);
     }
     return found(question, plan, elasticity, root.at());
+  }
+
+  /** A little further than where ln e would be nought if it went on as it does here. */
+  private static double reach(double here, double slope) {
+    double distance = 1.02 * Math.abs(here / slope);
+    return Double.isFinite(distance) ? Math.min(distance, LONGEST_STEP) : 0;
+  }
+
+  /** ln e at other outputs, each plan sought from the one before. */
+  private final class Nearby implements DoubleUnaryOperator {
+    private final Question question;
+    private Plan near;
+
+    Nearby(Question question, Plan near) {
+      this.question = question;
+      this.near = near;
+    }
+
+    @Override
+    public double applyAsDouble(double logOutput) {
+      Question asked = question.at(Math.exp(logOutput));
+      Plan plan = leastCost.plan(asked, near);
+      near = plan.answered() ? plan : near;
+      return logElasticity(asked, plan);
+    }
   }
 
   private Found found(Question question, Plan plan, Estimate elasticity, double logOutput) {

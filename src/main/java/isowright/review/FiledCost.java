@@ -87,13 +87,36 @@ public final class FiledCost {
   /** The gap and the least-cost plan from which it follows. */
   Measured measured(double[] mix, Question question, double filed) {
     require(mix, question, filed);
+    Plan plan = leastCost.plan(question);
+    double atPrices = atPrices(mix, question);
+    return measured(mix, question, filed, plan, mixRatioAtOwnOutput(mix, question, atPrices, plan));
+  }
+
+  /**
+   * Least cost, the gap, its technical and its mix part by another technology that is not far from
+   * one whose plan is known; NaN where there is none.
+   *
+   * @param near that plan
+   */
+  public double[] parts(double[] mix, Question question, double filed, Plan near) {
+    Plan plan = leastCost.plan(question, near);
+    Gap gap = measured(mix, question, filed, plan, Double.NaN).gap();
+    return new double[] {gap.leastCost(), gap.gap(), gap.technical(), gap.mix()};
+  }
+
+  private static double atPrices(double[] mix, Question question) {
     double atPrices = 0;
     for (int i = 0; i < mix.length; i++) {
       atPrices += question.price(i) * mix[i];
     }
+    return atPrices;
+  }
+
+  private Measured measured(
+      double[] mix, Question question, double filed, Plan plan, double mixRatioAtOwnOutput) {
+    double atPrices = atPrices(mix, question);
     double unreconciled = filed - atPrices;
     OptionalDouble theta = Contraction.onto(reference, mix, question.target());
-    Plan plan = leastCost.plan(question);
     double contraction = theta.orElse(Double.NaN);
     double technical = atPrices - contraction * atPrices;
     double inMix = contraction * atPrices - plan.cost();
@@ -110,7 +133,7 @@ public final class FiledCost {
             inMix,
             plan.answered() ? remainder : Double.NaN,
             contraction,
-            mixRatioAtOwnOutput(mix, question, atPrices, plan),
+            mixRatioAtOwnOutput,
             plan.status(),
             reason(plan, theta));
     return new Measured(gap, plan);

@@ -4,8 +4,12 @@ import isowright.estimation.EstimatedTechnology;
 import isowright.inference.DeltaMethod;
 import isowright.inference.DeltaMethod.Scale;
 import isowright.inference.Estimate;
+import isowright.leastcost.LeastCost;
+import isowright.leastcost.Minimiser;
+import isowright.leastcost.Plan;
 import isowright.leastcost.Question;
 import java.util.List;
+import java.util.Optional;
 
 /**
  * How sure is the gap between a filed cost and least cost, and how sure are its parts? First-order
@@ -31,11 +35,13 @@ import java.util.List;
 public final class GapEstimates {
 
   private final FiledCost filedCost;
+  private final LeastCost leastCost;
   private final CostSlopes slopes;
   private final DeltaMethod delta;
 
   private GapEstimates(EstimatedTechnology reference, double level) {
     this.filedCost = FiledCost.against(reference.technology());
+    this.leastCost = Minimiser.of(reference.technology());
     this.slopes = new CostSlopes(reference.technology());
     this.delta = DeltaMethod.of(reference, level);
   }
@@ -65,11 +71,7 @@ public final class GapEstimates {
     double[] contraction = slopes.ofContraction(mix, gap.contraction());
     double[] technical = new double[cost.length];
     double[] inMix = new double[cost.length];
-    for (int k = 0; k < cost.length; k++) {
-      double saved = gap.atPrices() * gap.contraction() * contraction[k];
-      technical[k] = -saved;
-      inMix[k] = saved - cost[k];
-    }
+    ofParts(gap, cost, contraction, technical, inMix);
     double ratio = filed / gap.leastCost();
     double relative = error / gap.leastCost();
     return new GapEstimate(
@@ -83,6 +85,35 @@ public final class GapEstimates {
         delta.estimate(ratio, ratio * relative, Scale.LOG),
         efficiency(gap, contraction, inLogs, relative),
         inLogs);
+  }
+
+  private static void ofParts(
+      Gap gap, double[] cost, double[] contraction, double[] technical, double[] inMix) {
+    for (int k = 0; k < cost.length; k++) {
+      double saved = gap.atPrices() * gap.contraction() * contraction[k];
+      technical[k] = -saved;
+      inMix[k] = saved - cost[k];
+    }
+  }
+
+  /**
+   * How least cost, the gap, its technical and its mix part move with the parameters; [4][p].
+   *
+   * @param mix the inputs used
+   * @param estimate the gap of that mix
+   */
+  public double[][] gradients(double[] mix, GapEstimate estimate) {
+    Gap gap = estimate.gap();
+    double[] cost = estimate.slopes();
+    double[] ofGap = new double[cost.length];
+    for (int k = 0; k < cost.length; k++) {
+      cost[k] *= gap.leastCost();
+      ofGap[k] = -cost[k];
+    }
+    double[] technical = new double[cost.length];
+    double[] inMix = new double[cost.length];
+    ofParts(gap, cost, slopes.ofContraction(mix, gap.contraction()), technical, inMix);
+    return new double[][] {cost, ofGap, technical, inMix};
   }
 
   /** Ratios on the log scale; that of the mix is cut at one, which it cannot pass. */
@@ -108,21 +139,46 @@ public final class GapEstimates {
   }
 
   /**
-   * The total over several filings in one period: the least costs, whose parameters are the same,
-   * and what is filed.
+   * Filed cost and least cost alone.
    *
-   * @param estimates the filings, each with a least cost
+   * @param filed what is filed
+   * @param leastCost least cost
+   * @param slopes how ln of least cost moves with the parameters, shape p
    */
-  public Total total(List<GapEstimate> estimates) {
+  public record Least(double filed, double leastCost, double[] slopes) {}
+
+  /**
+   * Least cost alone, without the parts of the gap; absent where there is none, or no interval.
+   *
+   * @param near a plan of the same filing by a technology not far away, where one is known
+   */
+  public Optional<Least> least(Question question, double filed, Optional<Plan> near) {
+    Plan plan =
+        near.filter(Plan::answered)
+            .map(known -> leastCost.plan(question, known))
+            .orElseGet(() -> leastCost.plan(question));
+    if (!plan.answered()) {
+      return Optional.empty();
+    }
+    double[] moved = slopes.ofCost(question, plan);
+    for (int k = 0; k < moved.length; k++) {
+      moved[k] /= plan.cost();
+    }
+    return Double.isFinite(delta.standardError(moved))
+        ? Optional.of(new Least(filed, plan.cost(), moved))
+        : Optional.empty();
+  }
+
+  /** The total over several filings in one period, whose parameters are the same. */
+  public Total total(List<Least> filings) {
     double filed = 0;
     double least = 0;
     double[] moved = new double[slopes.parameters()];
-    for (GapEstimate estimate : estimates) {
-      filed += estimate.gap().filed();
-      least += estimate.gap().leastCost();
-      double[] own = estimate.slopes();
+    for (Least each : filings) {
+      filed += each.filed();
+      least += each.leastCost();
       for (int k = 0; k < moved.length; k++) {
-        moved[k] += own[k] * estimate.gap().leastCost();
+        moved[k] += each.slopes()[k] * each.leastCost();
       }
     }
     Estimate cost = delta.estimate(least, delta.standardError(moved), Scale.LOG);

@@ -42,13 +42,23 @@ record LogRoot(State state, double at, double value) {
    * @param bound the log at which it ends
    */
   static LogRoot from(DoubleUnaryOperator function, double start, double bound) {
+    return from(function, start, function.applyAsDouble(start), bound, FIRST_STEP);
+  }
+
+  /**
+   * The same where something is known already.
+   *
+   * @param value the function at the start
+   * @param firstStep by how much to go out first
+   */
+  static LogRoot from(
+      DoubleUnaryOperator function, double start, double value, double bound, double firstStep) {
     double at = start;
-    double value = function.applyAsDouble(at);
     if (value == 0 || Double.isNaN(value)) {
       return new LogRoot(value == 0 ? State.FOUND : State.NO_VALUE, at, value);
     }
     double direction = Math.signum(bound - start);
-    double step = FIRST_STEP;
+    double step = Math.max(FIRST_STEP, firstStep);
     int halvings = 0;
     while (at != bound) {
       double next = at + direction * step;

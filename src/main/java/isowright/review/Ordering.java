@@ -6,6 +6,7 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
+import java.util.Objects;
 import java.util.stream.IntStream;
 
 /**
@@ -128,11 +129,16 @@ public final class Ordering {
     boolean known =
         Arrays.stream(reference.covariance()).flatMapToDouble(Arrays::stream).allMatch(v -> v == 0);
     ParameterDraws parameters = ParameterDraws.of(reference, known ? 1 : draws, seed);
-    RatioDraws ratios = RatioDraws.of(order, parameters, known);
+    ParameterDraws.Draw[] made =
+        IntStream.range(0, parameters.count())
+            .parallel()
+            .mapToObj(parameters::draw)
+            .toArray(ParameterDraws.Draw[]::new);
+    RatioDraws ratios = RatioDraws.of(order, parameters, made, known);
     boolean year = order.stream().anyMatch(e -> e.yearSpread() > 0);
-    RankBands bands = RankBands.of(ratios.rows(), level);
+    RankBands bands = RankBands.of(ratios.ranks(), level);
     List<RankBands> withYear =
-        year ? List.of(RankBands.of(ratios.withYear(), level)) : List.<RankBands>of();
+        year ? List.of(RankBands.of(ratios.ranksWithYear(), level)) : List.<RankBands>of();
     List<Ranked> ranked = new ArrayList<>();
     for (int i = 0; i < order.size(); i++) {
       int place = i;
@@ -142,14 +148,14 @@ public final class Ordering {
               i + 1,
               bands.band(i),
               withYear.stream().map(b -> b.band(place)).toList(),
-              order.size() <= MOST_PROBABILITIES ? bands.probabilities(i) : List.of()));
+              bands.probabilities(i)));
     }
     return new Ordering(
         ratios.simulation(),
         ratios.without(),
         ranked,
-        ToldApart.of(order, reference, parameters, level, false),
-        year ? ToldApart.of(order, reference, parameters, level, true) : ToldApart.NONE);
+        ToldApart.of(order, reference, made, level, false),
+        year ? ToldApart.of(order, reference, made, level, true) : ToldApart.NONE);
   }
 
   /** How least cost was moved with the parameters. */
@@ -177,40 +183,52 @@ public final class Ordering {
     return apartWithYear;
   }
 
-  /** Draws of ln ratio. */
+  /** Draws of ln ratio, as ranks. */
   private record RatioDraws(
-      Simulation simulation, int without, double[][] rows, double[][] withYear) {
+      Simulation simulation, int without, int[][] ranks, int[][] ranksWithYear) {
 
-    static RatioDraws of(List<Entrant> order, ParameterDraws draws, boolean known) {
+    /** So many draws share their work space. */
+    private static final int TOGETHER = 64;
+
+    static RatioDraws of(
+        List<Entrant> order, ParameterDraws draws, ParameterDraws.Draw[] made, boolean known) {
       Simulation simulation =
           known
               ? Simulation.EXACT
-              : (long) order.size() * draws.count() <= MOST_PLANS
+              : (long) order.size() * made.length <= MOST_PLANS
                   ? Simulation.SOLVED
                   : Simulation.FIRST_ORDER;
-      double[][] rows = rows(order, draws, simulation);
-      int without = (int) Arrays.stream(rows).filter(row -> row.length == 0).count();
-      if (without > MOST_WITHOUT * draws.count()) {
-        simulation = Simulation.FIRST_ORDER;
-        rows = rows(order, draws, simulation);
-      }
-      double[][] drawn = rows;
-      int[] kept = IntStream.range(0, rows.length).filter(r -> drawn[r].length > 0).toArray();
-      double[][] plain = Arrays.stream(kept).mapToObj(r -> drawn[r]).toArray(double[][]::new);
-      double[][] withYear =
-          Arrays.stream(kept)
-              .parallel()
-              .mapToObj(r -> Year.added(order, drawn[r], draws.draw(r)))
-              .toArray(double[][]::new);
-      return new RatioDraws(simulation, without, plain, withYear);
+      RatioDraws ranked = of(RatioRow.of(order, draws, simulation), made);
+      return ranked.without > MOST_WITHOUT * made.length
+          ? of(RatioRow.of(order, draws, Simulation.FIRST_ORDER), made)
+          : ranked;
     }
 
-    private static double[][] rows(
-        List<Entrant> order, ParameterDraws draws, Simulation simulation) {
-      return IntStream.range(0, draws.count())
+    /** Ranks of all draws in which every plant has an answer. */
+    private static RatioDraws of(RatioRow rows, ParameterDraws.Draw[] made) {
+      int[][] plain = new int[made.length][];
+      int[][] year = new int[made.length][];
+      IntStream.range(0, (made.length + TOGETHER - 1) / TOGETHER)
           .parallel()
-          .mapToObj(r -> RatioRow.of(order, draws, r, simulation))
-          .toArray(double[][]::new);
+          .forEach(
+              block -> {
+                Ranks ranks = new Ranks(rows.plants());
+                int end = Math.min(made.length, (block + 1) * TOGETHER);
+                for (int r = block * TOGETHER; r < end; r++) {
+                  double[] row = rows.of(made[r]);
+                  if (row.length > 0) {
+                    plain[r] = ranks.of(row);
+                    rows.addYear(row, made[r]);
+                    year[r] = ranks.of(row);
+                  }
+                }
+              });
+      int[][] kept = Arrays.stream(plain).filter(Objects::nonNull).toArray(int[][]::new);
+      return new RatioDraws(
+          rows.simulation(),
+          made.length - kept.length,
+          kept,
+          Arrays.stream(year).filter(Objects::nonNull).toArray(int[][]::new));
     }
   }
 }

@@ -1,19 +1,21 @@
 package isowright.review;
 
 import java.util.ArrayList;
-import java.util.Arrays;
 import java.util.List;
 import java.util.stream.IntStream;
 
 /** Ranks of plants over many draws: how often each, and between which the middle of them lies. */
 public final class RankBands {
 
-  private final int[][] ranks;
-  private final double level;
+  /** Ranks of so many plants are gathered at once: their counts stay in the processor's cache. */
+  private static final int TOGETHER = 64;
 
-  private RankBands(int[][] ranks, double level) {
-    this.ranks = ranks;
-    this.level = level;
+  private final Band[] bands;
+  private final List<List<Double>> probabilities;
+
+  private RankBands(Band[] bands, List<List<Double>> probabilities) {
+    this.bands = bands;
+    this.probabilities = probabilities;
   }
 
   /**
@@ -25,56 +27,75 @@ public final class RankBands {
   public record Band(int low, int high) {}
 
   /**
-   * Ranks in every draw.
+   * Bands of ranks.
    *
-   * @param rows a row for each draw, a value for each plant; the least has rank 1
+   * @param byDraw the rank of every plant in every draw, [draw][plant]
    */
-  static RankBands of(double[][] rows, double level) {
-    int plants = rows.length == 0 ? 0 : rows[0].length;
-    int[][] byDraw = Arrays.stream(rows).parallel().map(RankBands::ranks).toArray(int[][]::new);
-    int[][] byPlant =
-        IntStream.range(0, plants)
-            .parallel()
-            .mapToObj(i -> Arrays.stream(byDraw).mapToInt(row -> row[i]).sorted().toArray())
-            .toArray(int[][]::new);
-    return new RankBands(byPlant, level);
+  static RankBands of(int[][] byDraw, double level) {
+    int plants = byDraw.length == 0 ? 0 : byDraw[0].length;
+    Band[] bands = new Band[plants];
+    boolean all = plants <= Ordering.MOST_PROBABILITIES;
+    List<List<Double>> probabilities = new ArrayList<>();
+    if (all) {
+      IntStream.range(0, plants).forEach(i -> probabilities.add(shares(byDraw, i)));
+    }
+    IntStream.range(0, (plants + TOGETHER - 1) / TOGETHER)
+        .parallel()
+        .forEach(block -> bands(byDraw, block * TOGETHER, level, bands));
+    return new RankBands(bands, probabilities);
   }
 
-  private static int[] ranks(double[] row) {
-    double[] sorted = row.clone();
-    Arrays.sort(sorted);
-    int[] ranks = new int[row.length];
-    for (int i = 0; i < row.length; i++) {
-      ranks[i] = 1 + first(sorted, row[i]);
+  /** The bands of {@link #TOGETHER} plants from one on: their ranks in order, the ends cut off. */
+  private static void bands(int[][] byDraw, int from, double level, Band[] bands) {
+    int to = Math.min(from + TOGETHER, bands.length);
+    int draws = byDraw.length;
+    int[][] own = new int[to - from][draws];
+    for (int r = 0; r < draws; r++) {
+      for (int i = from; i < to; i++) {
+        own[i - from][r] = byDraw[r][i];
+      }
     }
-    return ranks;
+    // a share that is whole but for rounding counts as whole
+    int cut = (int) Math.floor((1 - level) / 2 * draws + 1e-9);
+    int[] counts = new int[bands.length + 2];
+    for (int i = from; i < to; i++) {
+      for (int rank : own[i - from]) {
+        counts[rank]++;
+      }
+      bands[i] = new Band(at(counts, cut), at(counts, draws - 1 - cut));
+      for (int rank : own[i - from]) {
+        counts[rank] = 0;
+      }
+    }
   }
 
-  /** The first place of a value that is there; equal values share the rank. */
-  private static int first(double[] sorted, double value) {
-    int at = Arrays.binarySearch(sorted, value);
-    while (at > 0 && sorted[at - 1] == value) {
-      at--;
+  /** The rank at a place, from 0, of the ranks in order. */
+  private static int at(int[] counts, int place) {
+    int rank = 0;
+    for (int before = 0; before <= place; before += counts[rank]) {
+      rank++;
     }
-    return at;
+    return rank;
   }
 
   /** The band of a plant: the ranks between which the middle {@code level} of the draws lies. */
   Band band(int plant) {
-    int[] own = ranks[plant];
-    int cut = (int) Math.floor((1 - level) / 2 * own.length);
-    return new Band(own[cut], own[own.length - 1 - cut]);
+    return bands[plant];
   }
 
-  /** The probability of every rank. */
+  /** The probability of every rank; none of more than so many plants. */
   List<Double> probabilities(int plant) {
-    double[] counts = new double[ranks.length];
-    for (int rank : ranks[plant]) {
-      counts[rank - 1]++;
+    return probabilities.isEmpty() ? List.of() : probabilities.get(plant);
+  }
+
+  private static List<Double> shares(int[][] byDraw, int plant) {
+    double[] counts = new double[byDraw[0].length];
+    for (int[] draw : byDraw) {
+      counts[draw[plant] - 1]++;
     }
     List<Double> all = new ArrayList<>();
     for (double count : counts) {
-      all.add(count / ranks[plant].length);
+      all.add(count / byDraw.length);
     }
     return all;
   }

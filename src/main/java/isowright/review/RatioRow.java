@@ -5,24 +5,46 @@ import isowright.leastcost.LeastCost;
 import isowright.leastcost.Minimiser;
 import java.util.List;
 
-/** The ln of filed over least cost of every plant in one draw of the parameters. */
+/** The ln of filed over least cost of every plant in a draw of the parameters. */
 final class RatioRow {
 
-  private RatioRow() {}
+  private final List<Entrant> order;
+  private final ParameterDraws draws;
+  private final Ordering.Simulation simulation;
+  private final double[] logRatios;
+  private final double[][] slopes;
+  private final double[] yearSpreads;
+
+  private RatioRow(List<Entrant> order, ParameterDraws draws, Ordering.Simulation simulation) {
+    this.order = order;
+    this.draws = draws;
+    this.simulation = simulation;
+    this.logRatios = order.stream().mapToDouble(Entrant::logRatio).toArray();
+    this.slopes = order.stream().map(Entrant::slopes).toArray(double[][]::new);
+    this.yearSpreads = order.stream().mapToDouble(Entrant::yearSpread).toArray();
+  }
+
+  /** For plants, and how their least cost moves with the parameters. */
+  static RatioRow of(List<Entrant> order, ParameterDraws draws, Ordering.Simulation simulation) {
+    return new RatioRow(order, draws, simulation);
+  }
+
+  int plants() {
+    return logRatios.length;
+  }
+
+  Ordering.Simulation simulation() {
+    return simulation;
+  }
 
   /** One row; empty where some plant has no least cost in this draw. */
-  static double[] of(
-      List<Entrant> order, ParameterDraws draws, int r, Ordering.Simulation simulation) {
-    ParameterDraws.Draw draw = draws.draw(r);
-    double[] row = new double[order.size()];
-    for (int i = 0; i < row.length; i++) {
-      row[i] = order.get(i).logRatio();
-    }
+  double[] of(ParameterDraws.Draw draw) {
+    double[] row = logRatios.clone();
     switch (simulation) {
       case EXACT -> {}
       case FIRST_ORDER -> {
         for (int i = 0; i < row.length; i++) {
-          row[i] -= draw.along(order.get(i).slopes());
+          row[i] -= draw.along(slopes[i]);
         }
       }
       case SOLVED -> {
@@ -38,5 +60,10 @@ final class RatioRow {
       }
     }
     return row;
+  }
+
+  /** Adds the chance of the year to every plant. */
+  void addYear(double[] row, ParameterDraws.Draw draw) {
+    Year.add(yearSpreads, row, draw);
   }
 }

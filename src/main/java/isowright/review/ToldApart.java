@@ -39,18 +39,20 @@ public record ToldApart(OptionalDouble critical, List<List<String>> groups) {
   static ToldApart of(
       List<Entrant> order,
       EstimatedTechnology reference,
-      ParameterDraws draws,
+      ParameterDraws.Draw[] draws,
       double level,
       boolean year) {
     int n = order.size();
     if (n < 2 || n > Ordering.MOST_GROUPED) {
       return NONE;
     }
-    double[][] spread = spreads(order, DeltaMethod.of(reference, level), year);
+    double[][] slopes = order.stream().map(Entrant::slopes).toArray(double[][]::new);
+    double[] years = order.stream().mapToDouble(Entrant::yearSpread).toArray();
+    double[][] spread = spreads(order, slopes, DeltaMethod.of(reference, level), year);
     double[] largest =
-        IntStream.range(0, draws.count())
+        Arrays.stream(draws)
             .parallel()
-            .mapToDouble(r -> largest(order, draws.draw(r), spread, year))
+            .mapToDouble(draw -> largest(years, slopes, draw, spread, year))
             .sorted()
             .toArray();
     int at = Math.min(largest.length - 1, (int) Math.ceil(level * largest.length) - 1);
@@ -59,9 +61,9 @@ public record ToldApart(OptionalDouble critical, List<List<String>> groups) {
   }
 
   /** s_ij, symmetric; zero where a pair has no uncertainty. */
-  private static double[][] spreads(List<Entrant> order, DeltaMethod delta, boolean year) {
+  private static double[][] spreads(
+      List<Entrant> order, double[][] slopes, DeltaMethod delta, boolean year) {
     int n = order.size();
-    double[][] slopes = order.stream().map(Entrant::slopes).toArray(double[][]::new);
     double[][] spread = new double[n][n];
     for (int i = 0; i < n; i++) {
       for (int j = 0; j < i; j++) {
@@ -80,13 +82,17 @@ public record ToldApart(OptionalDouble critical, List<List<String>> groups) {
 
   /** The largest studentised difference over all pairs in one draw, without any true difference. */
   private static double largest(
-      List<Entrant> order, ParameterDraws.Draw draw, double[][] spread, boolean year) {
-    double[] moved = new double[order.size()];
+      double[] years,
+      double[][] slopes,
+      ParameterDraws.Draw draw,
+      double[][] spread,
+      boolean year) {
+    double[] moved = new double[years.length];
     for (int i = 0; i < moved.length; i++) {
-      moved[i] = draw.along(order.get(i).slopes());
+      moved[i] = draw.along(slopes[i]);
     }
     if (year) {
-      moved = Year.added(order, moved, draw);
+      Year.add(years, moved, draw);
     }
     double largest = 0;
     for (int i = 0; i < moved.length; i++) {

@@ -1,7 +1,6 @@
 package isowright.review;
 
 import isowright.inference.ParameterDraws;
-import java.util.List;
 import java.util.SplittableRandom;
 import java.util.random.RandomGenerator;
 
@@ -13,13 +12,15 @@ final class Year {
 
   private Year() {}
 
-  /** A row with the chance of the year added to every plant. */
-  static double[] added(List<Entrant> order, double[] row, ParameterDraws.Draw draw) {
+  /**
+   * Adds the chance of the year to every plant of a row.
+   *
+   * @param spreads the standard deviation of each plant's ln C
+   */
+  static void add(double[] spreads, double[] row, ParameterDraws.Draw draw) {
     RandomGenerator random = new SplittableRandom(draw.seed());
-    double[] with = row.clone();
-    for (int i = 0; i < with.length; i++) {
-      with[i] += order.get(i).yearSpread() * draw.stretch() * random.nextGaussian();
+    for (int i = 0; i < row.length; i++) {
+      row[i] += spreads[i] * draw.stretch() * random.nextGaussian();
     }
-    return with;
   }
 }

@@ -22,27 +22,17 @@ final class GapSpread {
   /** By row of the panel, so that spreads come in the order of the records. */
   private final TreeMap<Integer, Range> ranges = new TreeMap<>();
 
-  /** Notes the gaps of filings under one technology and choice. */
-  void note(String technology, String words, List<HeldFiling> held) {
-    List<HeldFiling> answered = held.stream().filter(HeldFiling::answered).toList();
-    noteShares(
-        technology,
-        words,
-        answered,
-        answered.stream().mapToDouble(h -> h.gap().gap().gap() / h.gap().gap().filed()).toArray());
-  }
-
   /**
-   * Notes the gaps of filings.
+   * Notes the gaps of filings under one technology and choice.
    *
+   * @param rows the rows of the filings in the panel
    * @param shares the gap of each as a share of what is filed; NaN where there is none
    */
-  void noteShares(String technology, String words, List<HeldFiling> filings, double[] shares) {
+  void note(String technology, String words, int[] rows, double[] shares) {
     for (int i = 0; i < shares.length; i++) {
       double share = shares[i];
       if (!Double.isNaN(share)) {
-        HeldFiling filing = filings.get(i);
-        Range range = ranges.computeIfAbsent(filing.filing().row(), row -> new Range());
+        Range range = ranges.computeIfAbsent(rows[i], row -> new Range());
         range.choices++;
         if (share < range.low - SAME) {
           range.low = share;

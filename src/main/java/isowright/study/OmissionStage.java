@@ -55,12 +55,13 @@ final class OmissionStage {
             .mapToObj(p -> refits.get(p).map(t -> shares(t, candidate, reference, answered)))
             .map(found -> found.orElse(new double[0]))
             .toList();
+    int[] rows = answered.stream().mapToInt(h -> h.filing().row()).toArray();
     List<Omission> omissions = new ArrayList<>();
     for (int p = 0; p < shares.size(); p++) {
       double[] own = shares.get(p);
       if (own.length > 0) {
         String plant = panel.plants().get(p);
-        spread.noteShares(candidate.name(), "estimated without " + plant, answered, own);
+        spread.note(candidate.name(), "estimated without " + plant, rows, own);
         omission(candidate, period, plant, answered, own).ifPresent(omissions::add);
       }
     }

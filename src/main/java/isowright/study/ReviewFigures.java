@@ -12,6 +12,7 @@ import isowright.review.EfficientScale;
 import isowright.review.FiledCost;
 import isowright.review.Gap;
 import isowright.review.GapEstimate;
+import isowright.review.GapEstimates;
 import isowright.study.Findings.Said;
 import isowright.study.PlanFindings.Detail;
 import isowright.study.PlanFindings.Efficiency;
@@ -25,23 +26,25 @@ import java.util.Optional;
 /** Turns filings held against one technology in one period into findings. */
 final class ReviewFigures {
 
-  /** Of more filings in a period the gaps are not worked out again for every refit. */
-  private static final int MOST_REFITTED = 2_000;
+  /** Of more filings in all the gaps are not worked out again for every refit. */
+  static final int MOST_REFITTED = 2_000;
 
   private final Candidate candidate;
   private final String period;
   private final Support support;
   private final EfficientScale scale;
   private final Conditions conditions;
+  private final GapEstimates estimates;
   private final Optional<ReplicatedIntervals> refits;
-  private final int filings;
 
   ReviewFigures(
       Panel panel,
       Candidate candidate,
       int period,
       EstimatedTechnology reference,
+      GapEstimates estimates,
       Support support,
+      boolean refitted,
       double level) {
     this.candidate = candidate;
     this.period = panel.periods().get(period);
@@ -54,9 +57,8 @@ final class ReviewFigures {
     }
     this.scale = EfficientScale.of(reference, level, smallest, largest);
     this.conditions = Conditions.on(reference, level);
-    this.filings = FilingRows.of(panel, period).length;
-    this.refits =
-        filings <= MOST_REFITTED ? ReplicatedIntervals.of(reference, level) : Optional.empty();
+    this.estimates = estimates;
+    this.refits = refitted ? ReplicatedIntervals.of(reference, level) : Optional.empty();
   }
 
   /**
@@ -115,30 +117,12 @@ final class ReviewFigures {
             r ->
                 r.refitted(
                     four,
-                    t -> {
-                      Gap gap =
-                          FiledCost.against(t).gap(filing.mix(), filing.question(), filing.filed());
-                      return new double[] {gap.leastCost(), gap.gap(), gap.technical(), gap.mix()};
-                    }))
+                    t ->
+                        FiledCost.against(t)
+                            .parts(
+                                filing.mix(), filing.question(), filing.filed(), estimate.plan()),
+                    () -> estimates.gradients(filing.mix(), estimate)))
         .orElse(four);
-  }
-
-  /** Said where there are too many filings for refits. */
-  Optional<Said> unrefitted() {
-    return filings > MOST_REFITTED && candidate.replication().isPresent()
-        ? Optional.of(
-            Said.of(
-                "note",
-                "gaps-not-refitted",
-                "There are "
-                    + filings
-                    + " filings in "
-                    + period
-                    + "; of more than "
-                    + MOST_REFITTED
-                    + " the gaps are not worked out again for plants drawn anew or left out, and"
-                    + " their intervals are those of propagation."))
-        : Optional.empty();
   }
 
   private Reviewed without(HeldFiling held, String status, List<Said> remarks) {
@@ -235,8 +219,8 @@ final class ReviewFigures {
             "split-depends-on-direction",
             String.format(
                 java.util.Locale.ROOT,
-                "By %s the isoquants of %s are not parallel in %d of %d filings, so the split of the"
-                    + " gap into technical and mix is that of shrinking inputs at the recorded"
+                "By %s the isoquants of %s are not parallel in %d of %d filings, so the split of"
+                    + " the gap into technical and mix is that of shrinking inputs at the recorded"
                     + " output; judged at the output that the inputs would yield, the efficiency of"
                     + " the mix would differ by up to %.4f. The gap itself does not depend on it"
                     + " (Kopp and Diewert 1982).",

@@ -3,6 +3,7 @@ package isowright.study;
 import isowright.estimation.EstimatedTechnology;
 import isowright.inference.Support;
 import isowright.records.Panel;
+import isowright.review.GapEstimate;
 import isowright.review.GapEstimates;
 import isowright.study.Findings.Said;
 import isowright.study.PlanFindings.Reviewed;
@@ -26,7 +27,7 @@ import java.util.stream.IntStream;
  */
 final class ReviewStage {
 
-  /** For so many filings of a technology and period it is asked what would have to be true. */
+  /** For about so many filings of a technology it is asked what would have to be true. */
   private static final int MOST_NEEDED = 500;
 
   /**
@@ -45,6 +46,10 @@ final class ReviewStage {
   private final List<Candidate> candidates;
   private final List<Choice> choices;
   private final double level;
+  private final int filings;
+
+  /** Of so many filings of a technology and period it is asked what would have to be true. */
+  private final int needed;
 
   private final List<Reviewed> reviews = new ArrayList<>();
   private final List<Order> orders = new ArrayList<>();
@@ -62,6 +67,9 @@ final class ReviewStage {
     this.candidates = candidates.stream().filter(Candidate::usable).toList();
     this.choices = new ReviewChoices(study, filing, priced).all();
     this.level = study.estimation().confidence();
+    this.filings =
+        Arrays.stream(periods(filing, panel)).map(p -> FilingRows.of(panel, p).length).sum();
+    this.needed = Math.max(1, MOST_NEEDED / periods(filing, panel).length);
     this.omitted = new OmissionStage(panel, spread);
   }
 
@@ -107,21 +115,29 @@ final class ReviewStage {
     EstimatedTechnology reference = asked.reference().of(candidate, period);
     GapEstimates estimates = GapEstimates.against(reference, level);
     List<HeldFiling> held = held(asked, estimates, period);
-    ReviewFigures figures = new ReviewFigures(panel, candidate, period, reference, support, level);
-    double threshold = smallestNeeded(held);
+    ReviewFigures figures =
+        new ReviewFigures(
+            panel,
+            candidate,
+            period,
+            reference,
+            estimates,
+            support,
+            filings <= ReviewFigures.MOST_REFITTED,
+            level);
+    double threshold = smallestNeeded(held, needed);
     reviews.addAll(
         held.parallelStream()
             .map(h -> figures.reviewed(h, size(h) >= threshold))
             .collect(Collectors.toList()));
     figures.direction(held).ifPresent(remarks::add);
-    figures.unrefitted().ifPresent(remarks::add);
     String name = panel.periods().get(period);
     new OrderStage(filing.simulation(), level)
         .order(candidate, name, reference, held)
         .ifPresent(orders::add);
     for (Choice choice : choices) {
       if (choice == asked || choice.forGiven() || candidate.fit().isPresent()) {
-        vary(candidate, period, choice);
+        vary(candidate, period, choice, held);
       }
     }
     omissions.addAll(omitted.omissions(candidate, period, asked.reference(), held));
@@ -131,15 +147,24 @@ final class ReviewStage {
     }
   }
 
-  private void vary(Candidate candidate, int period, Choice choice) {
+  /** A filing by another choice: its row, and its least cost. */
+  private record Varied(int row, GapEstimates.Least least) {}
+
+  private void vary(Candidate candidate, int period, Choice choice, List<HeldFiling> asked) {
     GapEstimates estimates = GapEstimates.against(choice.reference().of(candidate, period), level);
-    List<HeldFiling> held = held(choice, estimates, period);
-    spread.note(candidate.name(), choice.words(), held);
-    List<HeldFiling> answered = held.stream().filter(HeldFiling::answered).toList();
-    if (answered.isEmpty()) {
+    List<Varied> varied =
+        asked.parallelStream()
+            .flatMap(h -> varied(choice, estimates, h).stream())
+            .collect(Collectors.toList());
+    if (varied.isEmpty()) {
       return;
     }
-    GapEstimates.Total total = estimates.total(answered.stream().map(HeldFiling::gap).toList());
+    spread.note(
+        candidate.name(),
+        choice.words(),
+        varied.stream().mapToInt(Varied::row).toArray(),
+        varied.stream().mapToDouble(v -> 1 - v.least().leastCost() / v.least().filed()).toArray());
+    GapEstimates.Total total = estimates.total(varied.stream().map(Varied::least).toList());
     variants.add(
         new Variant(
             candidate.name(),
@@ -147,11 +172,21 @@ final class ReviewStage {
             choice.code(),
             choice.words(),
             choice.money(),
-            answered.size(),
+            varied.size(),
             total.filed(),
             ReviewFigures.figure(candidate, total.leastCost()),
             ReviewFigures.figure(candidate, total.gap()),
             ReviewFigures.figure(candidate, total.share())));
+  }
+
+  private Optional<Varied> varied(Choice choice, GapEstimates estimates, HeldFiling asked) {
+    FilingRows.Filing row = choice.rows().filing(asked.filing().row());
+    if (!row.known()) {
+      return Optional.empty();
+    }
+    return estimates
+        .least(row.question(), row.filed(), asked.estimate().map(GapEstimate::plan))
+        .map(least -> new Varied(row.row(), least));
   }
 
   private List<HeldFiling> held(Choice choice, GapEstimates estimates, int period) {
@@ -171,13 +206,13 @@ final class ReviewStage {
   }
 
   /** The size of the gap below which it is not asked what would have to be true. */
-  private static double smallestNeeded(List<HeldFiling> held) {
+  private static double smallestNeeded(List<HeldFiling> held, int needed) {
     OptionalDouble at =
         held.stream()
             .map(ReviewStage::size)
             .sorted(Comparator.reverseOrder())
             .mapToDouble(size -> size)
-            .limit(MOST_NEEDED)
+            .limit(needed)
             .min();
     return at.orElse(0);
   }
@@ -201,16 +236,29 @@ final class ReviewStage {
                 "The smearing factor of " + candidate.name() + " " + factor + "."));
       }
     }
+    if (filings > ReviewFigures.MOST_REFITTED
+        && candidates.stream().anyMatch(c -> c.replication().isPresent())) {
+      all.add(
+          Said.of(
+              "note",
+              "gaps-not-refitted",
+              "There are "
+                  + filings
+                  + " filings; of more than "
+                  + ReviewFigures.MOST_REFITTED
+                  + " the gaps are not worked out again for plants drawn anew or left out, and"
+                  + " their intervals are those of propagation."));
+    }
     boolean many =
         Arrays.stream(periods(filing, panel))
-            .anyMatch(period -> FilingRows.of(panel, period).length > MOST_NEEDED);
+            .anyMatch(period -> FilingRows.of(panel, period).length > needed);
     if (many) {
       all.add(
           Said.of(
               "note",
               "needed-for-largest",
               "What would have to be true is asked of the "
-                  + MOST_NEEDED
+                  + needed
                   + " largest gaps of each technology and period."));
     }
     return all;

@@ -25,6 +25,7 @@ public final class Benchmark {
             Runtime.getRuntime().maxMemory() >> 20));
     WideStudy.report(steps);
     LeastCostRate.report(steps);
+    ReviewTimes.report(steps);
     ProcessTimes.report(steps);
   }
 }

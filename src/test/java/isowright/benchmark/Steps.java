@@ -31,15 +31,27 @@ final class Steps {
 
   /** Runs a step once, prints its times, hands back its result. */
   <T> T time(String name, Callable<T> step) throws Exception {
-    long startProcessor = system.getProcessCpuTime();
-    long start = System.nanoTime();
+    Mark start = mark();
     T result = step.call();
-    double seconds = (System.nanoTime() - start) * 1e-9;
-    double processor = (system.getProcessCpuTime() - startProcessor) * 1e-9;
+    since(start, name);
+    return result;
+  }
+
+  /** A moment: of the clock and of the processor, in nanoseconds. */
+  record Mark(long clock, long processor) {}
+
+  /** Now. */
+  Mark mark() {
+    return new Mark(System.nanoTime(), system.getProcessCpuTime());
+  }
+
+  /** Prints the times since a moment. */
+  void since(Mark start, String name) {
+    double processor = (system.getProcessCpuTime() - start.processor()) * 1e-9;
+    double seconds = (System.nanoTime() - start.clock()) * 1e-9;
     total += seconds;
     totalProcessor += processor;
     seconds(name, seconds, processor);
-    return result;
   }
 
   /** Prints the sums of the steps since the last heading. */

@@ -64,6 +64,66 @@ class GapEstimatesTest {
     assertThat(compared).isEqualTo(360);
   }
 
+  /**
+   * The closed gradients of least cost, gap, technical and mix part are those of central
+   * differences. A step of 1e-5 loses its square times third derivatives (1e-10 of the figure) and
+   * rounding of 1e-13 over the step: 1e-7 of cost leaves room for both.
+   */
+  @Test
+  void gradientsAreThoseOfDifferences() {
+    double[] mix = {105_000, 39_000, 260_000};
+    Question question = Question.of(29_000, Glass.PRICES);
+    for (Technology technology : Glass.all()) {
+      GapEstimates estimates = GapEstimates.against(Glass.estimated(technology, .02, 5), .95);
+      GapEstimate estimate = estimates.of(mix, question, 9e6);
+      double[][] closed = estimates.gradients(mix, estimate);
+      double[] centre = technology.parameters();
+      for (int k = 0; k < centre.length; k++) {
+        double[] above = moved(technology, k, 1e-5, mix, question, estimate);
+        double[] below = moved(technology, k, -1e-5, mix, question, estimate);
+        for (int f = 0; f < 4; f++) {
+          assertThat(closed[f][k])
+              .as(technology.form() + " " + technology.parameterNames().get(k) + " " + f)
+              .isCloseTo((above[f] - below[f]) / 2e-5, within(1e-7 * estimate.gap().leastCost()));
+        }
+      }
+    }
+  }
+
+  private static double[] moved(
+      Technology technology,
+      int k,
+      double by,
+      double[] mix,
+      Question question,
+      GapEstimate estimate) {
+    double[] parameters = technology.parameters();
+    parameters[k] += by;
+    return FiledCost.against(technology.withParameters(parameters))
+        .parts(mix, question, 9e6, estimate.plan());
+  }
+
+  /** Least cost alone is that of the whole estimate, and so is its total. */
+  @Test
+  void leastCostAloneIsTheSame() {
+    for (Technology technology : Glass.all()) {
+      GapEstimates estimates = GapEstimates.against(Glass.estimated(technology, .02, 5), .95);
+      Question question = Question.of(29_000, Glass.PRICES);
+      GapEstimate whole = estimates.of(Glass.BASE, question, 9e6);
+      GapEstimates.Least least =
+          estimates.least(question, 9e6, java.util.Optional.of(whole.plan())).orElseThrow();
+      // a plan sought from itself ends within 1e-13 of the cost
+      double cost = whole.gap().leastCost();
+      assertThat(least.leastCost()).isCloseTo(cost, within(1e-12 * cost));
+      GapEstimates.Total total = estimates.total(List.of(least, least));
+      assertThat(total.leastCost().value()).isCloseTo(2 * cost, within(1e-11 * cost));
+      assertThat(total.gap().standardError())
+          .isCloseTo(
+              2 * whole.leastCost().standardError(),
+              within(1e-8 * whole.leastCost().standardError()));
+    }
+  }
+
   @Test
   void intervalsHangTogether() {
     GapEstimates estimates = GapEstimates.against(Glass.estimated(Glass.ces(), .02, 5), .95);

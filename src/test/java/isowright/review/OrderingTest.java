@@ -149,7 +149,8 @@ class OrderingTest {
     for (int trial = 0; trial < trials; trial++) {
       var draw = isowright.inference.ParameterDraws.of(reference, 1, random.nextLong()).draw(0);
       List<Entrant> equal = new ArrayList<>();
-      double[] noise = Year.added(entrants, new double[entrants.size()], draw);
+      double[] noise = new double[entrants.size()];
+      Year.add(entrants.stream().mapToDouble(Entrant::yearSpread).toArray(), noise, draw);
       for (int i = 0; i < entrants.size(); i++) {
         Entrant e = entrants.get(i);
         double moved = Math.exp(draw.along(e.slopes()) + noise[i]);
