@@ -58,7 +58,9 @@ public record Chart(
     /** Plants in order of filed over least cost. */
     ORDERED_RATIOS,
     /** An allowance year by year. */
-    ALLOWANCE_PATH
+    ALLOWANCE_PATH,
+    /** A figure across the combinations of a specification matrix. */
+    SPECIFICATIONS
   }
 
   /** Copies the tables. */

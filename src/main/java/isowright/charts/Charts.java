@@ -19,8 +19,8 @@ public final class Charts {
   /**
    * The charts that findings give rise to, in the order of a report: elasticities, curvature,
    * residuals and fit of each technology; isoquant, expansion path and cost curves of each answer;
-   * filed against least cost, the gap in parts, plants in order, allowances. What has no answer has
-   * no chart.
+   * filed against least cost, the gap in parts, plants in order, allowances; figures across
+   * specifications. What has no answer has no chart.
    */
   public static List<Chart> of(Findings findings) {
     Setting setting = Setting.of(findings);
@@ -41,6 +41,10 @@ public final class Charts {
     charts.addAll(GapPartsCharts.of(findings.reviews(), setting));
     charts.addAll(RatioCharts.of(findings.review().orders(), setting));
     charts.addAll(AllowanceCharts.of(findings.review().allowances(), setting));
+    findings
+        .specification()
+        .matrix()
+        .ifPresent(matrix -> charts.addAll(MatrixCharts.of(matrix, setting)));
     return List.copyOf(charts);
   }
 }

@@ -29,7 +29,7 @@ final class Painter implements Placement.Screen {
   /** Room below the library's part; its own margin comes on top. */
   private static final int BELOW = 16;
 
-  /** How much of the width the labels of rows may take, and the values at the other side. */
+  /** How much of the width the values at the end of rows may take. */
   private static final double ROW_SHARE = 0.34;
 
   private final Plot plot;
@@ -85,7 +85,7 @@ final class Painter implements Placement.Screen {
 
   /** The label of a row, as much of it as leaves room for the plot. */
   private static String text(Plot plot, Row row) {
-    double room = ROW_SHARE * plot.width() - indent(row);
+    double room = plot.rowShare() * plot.width() - indent(row);
     return Letters.shortened(row.text(), room, Style.LETTERS, row.heading());
   }
 

@@ -96,6 +96,7 @@ final class Plot {
   private final List<Label> labels = new ArrayList<>();
   private final List<Key> keys = new ArrayList<>();
   private final List<Row> rows = new ArrayList<>();
+  private double rowShare = 0.34;
 
   /** An empty plot of the usual size. */
   Plot(Axis x, Axis y) {
@@ -203,6 +204,17 @@ final class Plot {
   Plot rows(List<Row> value) {
     rows.addAll(value);
     return this;
+  }
+
+  /** Lets the labels of rows take so much of the width, where they are long. */
+  Plot rowShare(double share) {
+    rowShare = share;
+    return this;
+  }
+
+  /** How much of the width the labels of rows may take. */
+  double rowShare() {
+    return rowShare;
   }
 
   /** Where row i lies on the vertical axis of n rows, which runs from 0 to n. */

@@ -141,7 +141,9 @@ final class Style {
     /** Another observation. */
     FAR(SLATE, 6, Form.CIRCLE),
     /** An observation marked out. */
-    MARKED(WARM, 7, Form.DIAMOND);
+    MARKED(WARM, 7, Form.DIAMOND),
+    /** An estimate marked out. */
+    CHOSEN(WARM, 13, Form.DIAMOND);
 
     private final Color color;
     private final int size;

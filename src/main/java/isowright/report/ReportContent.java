@@ -56,6 +56,7 @@ public final class ReportContent {
     DecisionsSection.of(material).ifPresent(sections::add);
     sections.add(CautionsSection.of(material));
     SpecificationSection.of(material).ifPresent(sections::add);
+    MatrixSection.of(material).ifPresent(sections::add);
     RobustnessSection.of(material).ifPresent(sections::add);
     sections.add(MethodSection.of(material));
     sections.add(RunSection.of(material));

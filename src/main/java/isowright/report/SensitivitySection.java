@@ -41,6 +41,7 @@ final class SensitivitySection {
     if (!lines.isEmpty()) {
       blocks.add(new Points(false, lines));
     }
+    MatrixSection.line(material).ifPresent(line -> blocks.add(new Paragraph(line)));
     blocks.addAll(FormsBlocks.brief(material));
     blocks.addAll(Material.notices(material.findings().remarks()));
     return new Section(ID, "Sensitivity to the technology", blocks);

@@ -2,15 +2,19 @@ package isowright.study;
 
 import isowright.cost.CostForm;
 import isowright.records.Column;
+import isowright.records.KeptPart;
 import isowright.records.Nearest;
 import isowright.records.Panel;
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.BitSet;
 import java.util.List;
 import java.util.Optional;
 import java.util.Set;
 import java.util.TreeSet;
+import java.util.function.IntPredicate;
 import java.util.stream.Collectors;
+import java.util.stream.IntStream;
 import java.util.stream.Stream;
 
 /**
@@ -37,6 +41,7 @@ final class Demands {
       demands.leastCost("least-cost[" + asked.terms().place() + "]", asked);
     }
     study.filing().ifPresent(demands::filing);
+    study.protocol().matrix().ifPresent(demands::matrix);
     if (demands.mistakes.isEmpty()) {
       demands.mistakes.addAll(new OutOfReach(study, panel).mistakes());
     }
@@ -229,6 +234,43 @@ final class Demands {
               + periods.get(0)
               + " to "
               + periods.get(periods.size() - 1));
+    }
+  }
+
+  /** Samples that name what the records do not hold, keep no row, or keep the rows of another. */
+  private void matrix(Matrix matrix) {
+    if (panel.isEmpty()) {
+      return;
+    }
+    Panel records = panel.get();
+    List<BitSet> seen = new ArrayList<>();
+    for (Matrix.Sample sample : matrix.samples()) {
+      String key = "matrix.samples." + sample.name();
+      List<String> faults = KeptPart.of(records, sample.keep()).faults();
+      faults.forEach(fault -> mistake(key, fault));
+      IntPredicate keeps = MatrixStage.rows(sample, records);
+      BitSet rows = new BitSet();
+      IntStream.range(0, records.rows()).filter(keeps).forEach(rows::set);
+      if (faults.isEmpty() && rows.isEmpty()) {
+        mistake(
+            key,
+            "the sample "
+                + sample.name()
+                + " keeps no row of the records used, which run from "
+                + records.periods().get(0)
+                + " to "
+                + records.periods().get(records.periods().size() - 1)
+                + "; widen it or take it out");
+      } else if (faults.isEmpty() && seen.contains(rows) && !matrix.usual()) {
+        mistake(
+            key,
+            "the sample "
+                + sample.name()
+                + " keeps the same rows as "
+                + matrix.samples().get(seen.indexOf(rows)).name()
+                + "; take one of them out");
+      }
+      seen.add(rows);
     }
   }
 

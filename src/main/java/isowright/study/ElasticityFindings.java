@@ -76,6 +76,38 @@ final class ElasticityFindings {
     return pairs;
   }
 
+  /**
+   * One number for how well inputs replace one another: Hicks's σ of the only pair; of more inputs
+   * the mean of Morishima's over all ordered pairs, which is the σ of a CES technology. Its interval
+   * is by the rules of {@link #substitution}.
+   */
+  Figure meanSubstitution() {
+    Figure mean =
+        figures(
+                t -> {
+                  Elasticities at = Elasticities.at(t, this.mean);
+                  return new double[] {
+                    inputs.size() == 2 ? hicks(at)[1] : offDiagonalMean(at.morishima())
+                  };
+                })
+            .get(0);
+    if (profiles.size() == 1 && !EstimatedFigures.resampled(mean)) {
+      CurvatureProfile only = profiles.get(0);
+      return EstimatedFigures.profiled(mean, only.substitutionLow(), only.substitutionHigh());
+    }
+    return fixedByTheForm(mean) ? exact(mean.value()) : mean;
+  }
+
+  private static double offDiagonalMean(double[][] square) {
+    double sum = 0;
+    for (int i = 0; i < square.length; i++) {
+      for (int j = 0; j < square.length; j++) {
+        sum += i == j ? 0 : square[i][j];
+      }
+    }
+    return sum / (square.length * (square.length - 1.0));
+  }
+
   /** ε_ij: what the quantity of i does, in percent, when the price of j rises by one percent. */
   List<Pair> demand() {
     int n = inputs.size();

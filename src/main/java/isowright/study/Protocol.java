@@ -6,16 +6,18 @@ import java.util.Optional;
 
 /**
  * What a study lays down before anything is fitted: what is expected of the results, and which
- * decisions were taken about the records. It is printed beside the results and changes none of
- * them.
+ * decisions were taken about the records, and which specifications are to stand beside one another.
+ * It is printed beside the results and changes none of them.
  *
  * @param expectations the ranges in which figures are expected
  * @param decisions the decisions taken, in the order of the file
+ * @param matrix the specifications to be set side by side, with the criteria of choice
  */
-public record Protocol(List<Expectation> expectations, List<Decision> decisions) {
+public record Protocol(
+    List<Expectation> expectations, List<Decision> decisions, Optional<Matrix> matrix) {
 
   /** Nothing laid down. */
-  public static final Protocol NONE = new Protocol(List.of(), List.of());
+  public static final Protocol NONE = new Protocol(List.of(), List.of(), Optional.empty());
 
   /** Copies the lists. */
   public Protocol {

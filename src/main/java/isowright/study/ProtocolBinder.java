@@ -12,7 +12,10 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.regex.Pattern;
 
-/** Reads what a study file lays down before fitting: {@code expect} and {@code decisions}. */
+/**
+ * Reads what a study file lays down before fitting: {@code expect}, {@code decisions} and, with its
+ * reader, {@code matrix}.
+ */
 final class ProtocolBinder {
 
   private static final List<String> DECISION_KEYS = List.of("date", "by", "what", "why");
@@ -22,20 +25,25 @@ final class ProtocolBinder {
   private final YamlSection root;
   private final Declared declared;
   private final boolean fitted;
+  private final Study.Estimation estimation;
 
   /**
    * A reader.
    *
    * @param fitted whether any technology is fitted to records
+   * @param estimation how
    */
-  ProtocolBinder(YamlSection root, Declared declared, boolean fitted) {
+  ProtocolBinder(
+      YamlSection root, Declared declared, boolean fitted, Study.Estimation estimation) {
     this.root = root;
     this.declared = declared;
     this.fitted = fitted;
+    this.estimation = estimation;
   }
 
   Protocol bind() {
-    return new Protocol(expectations(), decisions());
+    return new Protocol(
+        expectations(), decisions(), new MatrixBinder(root, declared, estimation).bind());
   }
 
   private List<Expectation> expectations() {

@@ -1,12 +1,15 @@
 package isowright.study;
 
+import isowright.estimation.Specification;
 import isowright.records.Source;
 import java.io.IOException;
 import java.io.InputStream;
 import java.io.UncheckedIOException;
 import java.util.LinkedHashMap;
+import java.util.List;
 import java.util.Map;
 import java.util.Properties;
+import java.util.function.Function;
 import java.util.stream.Collectors;
 
 /** What a run was made with: version, hashes, and every setting in force, defaults included. */
@@ -116,8 +119,29 @@ final class Settings {
               + expected.input().map(input -> "." + input).orElse(""),
           expected.low() + " to " + expected.high());
     }
+    protocol.matrix().ifPresent(matrix -> matrix(matrix, settings));
     if (!protocol.decisions().isEmpty()) {
       settings.put("decisions", Integer.toString(protocol.decisions().size()));
     }
+  }
+
+  private static void matrix(Matrix matrix, Map<String, String> settings) {
+    settings.put("matrix.technologies", String.join(", ", matrix.technologies()));
+    settings.put(
+        "matrix.plant-effects", words(matrix.plantEffects(), Specification.PlantEffects::word));
+    settings.put("matrix.time", words(matrix.times(), Specification.Time::word));
+    if (!matrix.standardErrors().isEmpty()) {
+      settings.put(
+          "matrix.standard-errors",
+          words(matrix.standardErrors(), Specification.StandardErrors::word));
+    }
+    settings.put("matrix.samples", words(matrix.samples(), Matrix.Sample::name));
+    settings.put(
+        "matrix.choose-by",
+        matrix.chooseBy().isEmpty() ? "none" : words(matrix.chooseBy(), Matrix.Criterion::word));
+  }
+
+  private static <T> String words(List<T> values, Function<T, String> word) {
+    return values.stream().map(word).collect(Collectors.joining(", "));
   }
 }

@@ -16,17 +16,20 @@ import java.util.Optional;
  * @param predictions how well each form predicts plants that were left out
  * @param expectations what was expected and what was found, fit by fit
  * @param decisions the decisions stated in the study file
+ * @param matrix other specifications side by side, where asked
  */
 public record SpecificationFindings(
     List<Inflation> inflation,
     List<Comparison> comparisons,
     List<Predicted> predictions,
     List<Expected> expectations,
-    List<Decision> decisions) {
+    List<Decision> decisions,
+    Optional<MatrixFindings> matrix) {
 
   /** Nothing asked, nothing found. */
   public static final SpecificationFindings NONE =
-      new SpecificationFindings(List.of(), List.of(), List.of(), List.of(), List.of());
+      new SpecificationFindings(
+          List.of(), List.of(), List.of(), List.of(), List.of(), Optional.empty());
 
   /** The names of the tests of the specification among the tests of a fit. */
   public static final List<String> TESTS = SpecificationTests.NAMES;

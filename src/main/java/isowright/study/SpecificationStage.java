@@ -3,6 +3,7 @@ package isowright.study;
 import isowright.estimation.Fit;
 import isowright.inference.FormComparison;
 import isowright.inference.PlantPrediction;
+import isowright.records.Panel;
 import isowright.study.FitFindings.Fitted;
 import isowright.study.SpecificationFindings.Comparison;
 import isowright.study.SpecificationFindings.Inflation;
@@ -17,13 +18,15 @@ final class SpecificationStage {
 
   private SpecificationStage() {}
 
-  static SpecificationFindings findings(Study study, List<Fit> fits, List<Fitted> fitted) {
+  static SpecificationFindings findings(
+      Study study, Optional<Panel> panel, List<Fit> fits, List<Fitted> fitted) {
     return new SpecificationFindings(
         inflation(fits),
         comparisons(fits),
         predictions(fits, study.estimation().confidence()),
         ExpectationStage.held(study.protocol().expectations(), fitted),
-        study.protocol().decisions());
+        study.protocol().decisions(),
+        MatrixStage.findings(study, panel));
   }
 
   private static List<Inflation> inflation(List<Fit> fits) {

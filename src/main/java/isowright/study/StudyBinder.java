@@ -44,8 +44,9 @@ final class StudyBinder {
           "owner",
           "expect",
           "decisions",
-          "costs");
-  private static final List<String> LATER = List.of("matrix");
+          "costs",
+          "matrix");
+  private static final List<String> LATER = List.of();
 
   private static final List<String> ESTIMATION_KEYS =
       List.of(
@@ -103,7 +104,7 @@ final class StudyBinder {
     Questions questions = questions(root.section("questions"));
     var leastCost = new PlanBinder(declared, names).bind(root);
     Optional<Filing> filing = new FilingBinder(declared).bind(root);
-    Protocol protocol = new ProtocolBinder(root, declared, !fitted.isEmpty()).bind();
+    Protocol protocol = new ProtocolBinder(root, declared, !fitted.isEmpty(), estimation).bind();
     return Optional.of(
         new Study(
             file,

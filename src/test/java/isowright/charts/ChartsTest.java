@@ -55,13 +55,34 @@ class ChartsTest {
   void everyFamilyIsDrawn() {
     Set<Kind> demo = new HashSet<>();
     Charts.of(RealFindings.of(RealFindings.Study.DEMO)).forEach(c -> demo.add(c.kind()));
-    // the demo asks for no allowance, the invented findings hold no order either
-    Set<Kind> asked = EnumSet.complementOf(EnumSet.of(Kind.ALLOWANCE_PATH));
+    // the demo asks for no allowance and no matrix, the invented findings hold no order either
+    Set<Kind> asked =
+        EnumSet.complementOf(EnumSet.of(Kind.ALLOWANCE_PATH, Kind.SPECIFICATIONS));
     assertThat(demo).containsExactlyInAnyOrderElementsOf(asked);
     Set<Kind> invented = new HashSet<>();
     Charts.of(FindingsFixture.glassworks()).forEach(c -> invented.add(c.kind()));
     asked.remove(Kind.ORDERED_RATIOS);
     assertThat(invented).containsExactlyInAnyOrderElementsOf(asked);
+  }
+
+  /** Four headline figures, the chosen specification named in every picture's text. */
+  @Test
+  void everyHeadlineOfAMatrixIsDrawn() {
+    Findings findings = RealFindings.of(RealFindings.Study.SPECIFICATIONS);
+    List<Chart> drawn =
+        Charts.of(findings).stream().filter(c -> c.kind() == Kind.SPECIFICATIONS).toList();
+    assertThat(drawn)
+        .extracting(Chart::name)
+        .containsExactly(
+            "specifications-returns-to-scale",
+            "specifications-substitution",
+            "specifications-least-cost",
+            "specifications-gap");
+    for (Chart chart : drawn) {
+      assertThat(chart.rows()).hasSize(24);
+      assertThat(chart.rows()).filteredOn(row -> row.get(4).startsWith("chosen")).hasSize(1);
+      assertThat(chart.alternative()).contains("laid down beforehand choose ", "diamond");
+    }
   }
 
   /** A chart for every answer, and none where there is no answer. */

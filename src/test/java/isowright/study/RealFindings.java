@@ -42,7 +42,9 @@ public final class RealFindings {
      */
     STATES_WITHIN,
     /** Munnell 1990, pooled, with a plan. */
-    STATES_POOLED
+    STATES_POOLED,
+    /** The demo's records under many specifications, some of which cannot be carried out. */
+    SPECIFICATIONS
   }
 
   /** The findings of a study. */
@@ -81,6 +83,7 @@ public final class RealFindings {
       case THIRTY_POINTS -> written("ces-30-points", THIRTY_POINTS);
       case STATES_WITHIN -> written("us-states-public-capital", STATES.formatted("within"));
       case STATES_POOLED -> written("us-states-public-capital", STATES.formatted("none"));
+      case SPECIFICATIONS -> DEMO.resolve("glassworks-specifications.yaml");
     };
   }
 

@@ -56,7 +56,7 @@ class StudyMistakesTest {
 
   static List<Bad> table() throws IOException {
     List<Bad> all = new ArrayList<>();
-    for (String file : List.of("mistakes.txt", "filing-mistakes.txt")) {
+    for (String file : List.of("mistakes.txt", "filing-mistakes.txt", "matrix-mistakes.txt")) {
       all.addAll(table(file));
     }
     return all;
