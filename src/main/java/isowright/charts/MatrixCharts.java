@@ -207,9 +207,7 @@ final class MatrixCharts {
 
   /** The interval with open ends taken far out, where the picture cuts them. */
   private static Optional<Figure.Uncertainty> ends(Figure figure) {
-    return figure
-        .uncertainty()
-        .filter(u -> !Double.isNaN(u.low()) && !Double.isNaN(u.high()));
+    return figure.uncertainty().filter(u -> !Double.isNaN(u.low()) && !Double.isNaN(u.high()));
   }
 
   private OptionalDouble reference() {
@@ -222,8 +220,8 @@ final class MatrixCharts {
 
   /**
    * From the least to the greatest value, the line of reference included, and as much of the
-   * intervals as adds no more than that span again on either side: one wide interval must not
-   * press all others together.
+   * intervals as adds no more than that span again on either side: one wide interval must not press
+   * all others together.
    */
   private Axis extent() {
     double least = figure(headline.order().get(0)).value();

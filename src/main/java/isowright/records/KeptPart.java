@@ -10,7 +10,7 @@ import java.util.Set;
  * Which rows of records that were read a {@link Keep} keeps, by the rules by which the reader keeps
  * rows of a file; and what it names that the records do not hold.
  *
- * <p>Tested in {@code KeptPartTest}.
+ * <p>Tested in {@code MatrixSamplesTest}.
  */
 public final class KeptPart {
 

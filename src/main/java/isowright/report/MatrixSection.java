@@ -10,7 +10,6 @@ import isowright.report.Document.Points;
 import isowright.report.Document.Row;
 import isowright.report.Document.Section;
 import isowright.report.Document.Table;
-import isowright.study.Figure;
 import isowright.study.MatrixFindings;
 import isowright.study.MatrixFindings.Headline;
 import java.util.ArrayList;
@@ -155,23 +154,28 @@ final class MatrixSection {
                                     + Phrases.count(s.plants(), "plant")
                                     + ")")
                         .toList())
-                + ". Returns to scale and substitution stand at the geometric mean of the sample."));
+                + ". Returns to scale and substitution stand at the geometric mean of the"
+                + " sample."));
     notes.add(
         Text.of(
-            "BIC = −2 ln L + p ln N can be compared only where the likelihood is of the same numbers:"
-                + " the rows of one sample, and one response. The mean of a plant and the difference"
-                + " of two periods are other numbers than rows, and other rows are other numbers,"
-                + " whatever the fit. Plant effects are counted among p, each one."));
+            "BIC = −2 ln L + p ln N can be compared only where the likelihood is of the same"
+                + " numbers: the rows of one sample, and one response. The mean of a plant and the"
+                + " difference of two periods are other numbers than rows, and other rows are other"
+                + " numbers, whatever the fit. Plant effects are counted among p, each one."));
     return new Table(
-        "Headline figures, specification by specification", "Specification", columns,
-        List.of(Group.of(rows)), notes);
+        "Headline figures, specification by specification",
+        "Specification",
+        columns,
+        List.of(Group.of(rows)),
+        notes);
   }
 
   private static Row row(MatrixFindings matrix, int cell) {
     MatrixFindings.Cell found = matrix.cells().get(cell);
     List<Cell> cells = new ArrayList<>();
     for (Headline headline : matrix.headlines()) {
-      cells.add(Cells.figure(found.figure(headline.name()).filter(f -> Double.isFinite(f.value()))));
+      cells.add(
+          Cells.figure(found.figure(headline.name()).filter(f -> Double.isFinite(f.value()))));
     }
     cells.add(
         found
@@ -188,9 +192,7 @@ final class MatrixSection {
                         : Cell.of(Numbers.fixed(c.bic(), 1), "of " + c.of()))
             .orElse(Cell.none()));
     String standing =
-        found.estimated()
-            ? found.standing()
-            : Phrases.sentence(Terms.state(found.state()));
+        found.estimated() ? found.standing() : Phrases.sentence(Terms.state(found.state()));
     cells.add(matrix.isChosen(cell) ? new Cell(List.of(Text.strong("Chosen"))) : Cell.of(standing));
     Text heading = Text.of(name(matrix, cell));
     if (matrix.isChosen(cell)) {
@@ -217,8 +219,7 @@ final class MatrixSection {
     }
     List<Text> texts = new ArrayList<>();
     byReason.forEach(
-        (reason, names) ->
-            texts.add(Text.strong(String.join("; ", names) + ": ").then(reason)));
+        (reason, names) -> texts.add(Text.strong(String.join("; ", names) + ": ").then(reason)));
     return texts;
   }
 

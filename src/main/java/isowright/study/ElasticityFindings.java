@@ -78,8 +78,8 @@ final class ElasticityFindings {
 
   /**
    * One number for how well inputs replace one another: Hicks's σ of the only pair; of more inputs
-   * the mean of Morishima's over all ordered pairs, which is the σ of a CES technology. Its interval
-   * is by the rules of {@link #substitution}.
+   * the mean of Morishima's over all ordered pairs, which is the σ of a CES technology. Its
+   * interval is by the rules of {@link #substitution}.
    */
   Figure meanSubstitution() {
     Figure mean =

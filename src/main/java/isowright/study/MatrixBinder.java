@@ -263,8 +263,7 @@ final class MatrixBinder {
       section.refuse("half", "`periods` and `half` both choose periods; take one of them out");
     }
     Optional<List<String>> span = RecordsBinder.periods(section);
-    List<String> without =
-        section.get("without-plants").map(YamlValue::texts).orElse(List.of());
+    List<String> without = section.get("without-plants").map(YamlValue::texts).orElse(List.of());
     return new Sample(
         name,
         new Keep(span.map(s -> s.get(0)), span.map(s -> s.get(1)), without),

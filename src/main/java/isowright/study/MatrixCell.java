@@ -55,8 +55,7 @@ record MatrixCell(
 
   /** Forms that are searched for take longest. */
   boolean searched(Study study) {
-    return !(study.estimation().held().form(technology, panel.inputs())
-        instanceof LinearForm);
+    return !(study.estimation().held().form(technology, panel.inputs()) instanceof LinearForm);
   }
 
   Found found(Study study, MatrixHeadlines headlines, List<Criterion> chooseBy) {

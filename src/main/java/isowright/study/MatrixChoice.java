@@ -31,8 +31,7 @@ final class MatrixChoice {
   private MatrixChoice(List<MatrixCell.Found> found) {
     this.found = found;
     this.standing = new String[found.size()];
-    this.left =
-        IntStream.range(0, found.size()).filter(c -> cell(c).estimated()).boxed().toList();
+    this.left = IntStream.range(0, found.size()).filter(c -> cell(c).estimated()).boxed().toList();
   }
 
   static MatrixChoice of(List<Criterion> criteria, List<MatrixCell.Found> found) {
@@ -86,7 +85,8 @@ final class MatrixChoice {
           case REGULAR_EVERYWHERE -> kept.size() + " of these are regular at every row";
           case REGULAR_AT_MEAN ->
               kept.size() + " of these are regular at the geometric mean of their rows";
-          default -> kept.size() + " of these are not rejected by RESET (or it is not made of them)";
+          default ->
+              kept.size() + " of these are not rejected by RESET (or it is not made of them)";
         });
   }
 
@@ -109,9 +109,7 @@ final class MatrixChoice {
     List<Integer> compared =
         candidates.stream().filter(c -> incomparable(c, first).isEmpty()).toList();
     int best =
-        compared.stream()
-            .min(Comparator.comparingDouble(c -> value(criterion, c)))
-            .orElse(first);
+        compared.stream().min(Comparator.comparingDouble(c -> value(criterion, c))).orElse(first);
     for (int c : candidates) {
       standing[c] =
           incomparable(c, first)
@@ -147,10 +145,7 @@ final class MatrixChoice {
     return criteria(c).of().equals(criteria(first).of())
         ? Optional.empty()
         : Optional.of(
-            "not compared: its likelihood is of "
-                + numbers(c)
-                + ", not of "
-                + numbers(first));
+            "not compared: its likelihood is of " + numbers(c) + ", not of " + numbers(first));
   }
 
   private String numbers(int c) {

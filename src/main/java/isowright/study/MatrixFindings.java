@@ -192,6 +192,5 @@ public record MatrixFindings(
    * @param aic Akaike's
    * @param bic Schwarz's
    */
-  public record Criteria(
-      String of, int parameters, double logLikelihood, double aic, double bic) {}
+  public record Criteria(String of, int parameters, double logLikelihood, double aic, double bic) {}
 }

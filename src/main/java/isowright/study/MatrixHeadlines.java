@@ -133,7 +133,11 @@ final class MatrixHeadlines {
       Map<String, String> without) {
     PlanAnswer answer =
         PlanAnswer.of(
-            study, a.question(), Candidate.fitted(fit, Optional.empty()), estimated, a.task().orElseThrow());
+            study,
+            a.question(),
+            Candidate.fitted(fit, Optional.empty()),
+            estimated,
+            a.task().orElseThrow());
     PlanFigures.Main main = new PlanFigures(answer, study.estimation().confidence()).main();
     Optional<Figure> figure =
         a.question()
@@ -187,8 +191,8 @@ final class MatrixHeadlines {
           lost
               + " of "
               + h.rows().size()
-              + " filings have no least cost by this technology, so that the total would not be that"
-              + " of the others");
+              + " filings have no least cost by this technology, so that the total would not be"
+              + " that of the others");
     }
   }
 

@@ -73,7 +73,8 @@ final class MatrixStage {
     return new MatrixFindings(
         matrix.samples().stream()
             .filter(s -> panels.containsKey(s.name()))
-            .map(s -> described(s, panels.get(s.name()))).toList(),
+            .map(s -> described(s, panels.get(s.name())))
+            .toList(),
         matrix.chooseBy().stream().map(Matrix.Criterion::word).toList(),
         headlines(headlines, choice.cells()),
         choice.cells(),
@@ -145,8 +146,7 @@ final class MatrixStage {
     asked
         .costWords()
         .ifPresent(
-            words ->
-                all.add(headline(MatrixFindings.LEAST_COST, words, asked.costUnit(), cells)));
+            words -> all.add(headline(MatrixFindings.LEAST_COST, words, asked.costUnit(), cells)));
     asked.gapWords().ifPresent(words -> all.add(headline(MatrixFindings.GAP, words, "", cells)));
     return all;
   }
@@ -156,8 +156,7 @@ final class MatrixStage {
     List<Integer> order =
         IntStream.range(0, cells.size())
             .filter(
-                c ->
-                    cells.get(c).figure(name).filter(f -> Double.isFinite(f.value())).isPresent())
+                c -> cells.get(c).figure(name).filter(f -> Double.isFinite(f.value())).isPresent())
             .boxed()
             .sorted(
                 Comparator.comparingDouble(c -> cells.get(c).figure(name).orElseThrow().value()))

@@ -33,8 +33,7 @@ final class ProtocolBinder {
    * @param fitted whether any technology is fitted to records
    * @param estimation how
    */
-  ProtocolBinder(
-      YamlSection root, Declared declared, boolean fitted, Study.Estimation estimation) {
+  ProtocolBinder(YamlSection root, Declared declared, boolean fitted, Study.Estimation estimation) {
     this.root = root;
     this.declared = declared;
     this.fitted = fitted;

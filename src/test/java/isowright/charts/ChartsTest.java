@@ -56,8 +56,7 @@ class ChartsTest {
     Set<Kind> demo = new HashSet<>();
     Charts.of(RealFindings.of(RealFindings.Study.DEMO)).forEach(c -> demo.add(c.kind()));
     // the demo asks for no allowance and no matrix, the invented findings hold no order either
-    Set<Kind> asked =
-        EnumSet.complementOf(EnumSet.of(Kind.ALLOWANCE_PATH, Kind.SPECIFICATIONS));
+    Set<Kind> asked = EnumSet.complementOf(EnumSet.of(Kind.ALLOWANCE_PATH, Kind.SPECIFICATIONS));
     assertThat(demo).containsExactlyInAnyOrderElementsOf(asked);
     Set<Kind> invented = new HashSet<>();
     Charts.of(FindingsFixture.glassworks()).forEach(c -> invented.add(c.kind()));

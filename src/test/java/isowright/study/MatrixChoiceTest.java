@@ -93,18 +93,15 @@ class MatrixChoiceTest {
             found("all", "rows", -25, Map.of(Criterion.RESET, "RESET rejects the form")),
             found("all", "rows", -10, Map.of()));
     assertThat(MatrixChoice.of(List.of(Criterion.BIC), all).chosen()).hasValue(0);
-    assertThat(
-            MatrixChoice.of(List.of(Criterion.REGULAR_EVERYWHERE, Criterion.BIC), all).chosen())
+    assertThat(MatrixChoice.of(List.of(Criterion.REGULAR_EVERYWHERE, Criterion.BIC), all).chosen())
         .hasValue(2);
     MatrixChoice three =
-        MatrixChoice.of(
-            List.of(Criterion.REGULAR_EVERYWHERE, Criterion.RESET, Criterion.AIC), all);
+        MatrixChoice.of(List.of(Criterion.REGULAR_EVERYWHERE, Criterion.RESET, Criterion.AIC), all);
     assertThat(three.chosen()).hasValue(1);
     assertThat(standings(three))
         .containsExactly("not regular", "chosen", "RESET rejects the form", "AIC higher by 10.0");
     // The order itself is no criterion that looks at numbers: BIC first leaves one alone.
-    assertThat(
-            MatrixChoice.of(List.of(Criterion.BIC, Criterion.REGULAR_EVERYWHERE), all).chosen())
+    assertThat(MatrixChoice.of(List.of(Criterion.BIC, Criterion.REGULAR_EVERYWHERE), all).chosen())
         .isEmpty();
   }
 
@@ -124,8 +121,7 @@ class MatrixChoiceTest {
 
   @Test
   void noneIsChosen() {
-    MatrixChoice without =
-        MatrixChoice.of(List.of(), List.of(found("all", "rows", -1, Map.of())));
+    MatrixChoice without = MatrixChoice.of(List.of(), List.of(found("all", "rows", -1, Map.of())));
     assertThat(without.chosen()).isEmpty();
     assertThat(without.words()).startsWith("No criteria were laid down");
     assertThat(standings(without)).containsExactly("");

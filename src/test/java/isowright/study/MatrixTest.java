@@ -24,7 +24,10 @@ class MatrixTest {
   @TempDir Path folder;
 
   private static MatrixFindings matrix() {
-    return RealFindings.of(RealFindings.Study.SPECIFICATIONS).specification().matrix().orElseThrow();
+    return RealFindings.of(RealFindings.Study.SPECIFICATIONS)
+        .specification()
+        .matrix()
+        .orElseThrow();
   }
 
   /**
@@ -63,8 +66,7 @@ class MatrixTest {
     assertThat(cell.regular()).isEqualTo(fit.regularity());
     List<Pair> morishima =
         fit.substitution().stream().filter(p -> p.measure().equals("morishima")).toList();
-    double mean =
-        morishima.stream().mapToDouble(p -> p.figure().value()).sum() / morishima.size();
+    double mean = morishima.stream().mapToDouble(p -> p.figure().value()).sum() / morishima.size();
     // the sum is taken in the same order; of a fixed elasticity the last digit is rounded away
     assertThat(cell.figures().get(MatrixFindings.SUBSTITUTION).value())
         .isCloseTo(mean, org.assertj.core.api.Assertions.within(1e-9));
