@@ -32,10 +32,10 @@ final class SensitivitySection {
         Paragraph.of(
             fits.size() + given.size() < 2
                 ? "One technology was asked, so that no other form stands beside it. An answer that"
-                      + " rests on one form alone should be asked again of another."
+                    + " rests on one form alone should be asked again of another."
                 : "Each row is one figure, each column one technology. Where a row differs by more"
-                      + " than its intervals, the answer rests on the form chosen as much as on the"
-                      + " records."));
+                    + " than its intervals, the answer rests on the form chosen as much as on the"
+                    + " records."));
     blocks.add(table(material, fits, given));
     List<Text> lines =
         material.usable().stream().map(RobustnessSection::line).flatMap(Optional::stream).toList();

@@ -6,7 +6,6 @@ import isowright.estimation.Productivity;
 import isowright.estimation.Specification.Time;
 import isowright.leastcost.PlanTask;
 import isowright.records.Panel;
-import isowright.review.GapEstimate;
 import isowright.review.GapEstimates;
 import java.util.ArrayList;
 import java.util.List;
@@ -23,7 +22,6 @@ import java.util.OptionalInt;
 final class MatrixHeadlines {
 
   private final Study study;
-  private final Panel panel;
   private final Optional<Asked> asked;
   private final Optional<Held> held;
 
@@ -33,7 +31,6 @@ final class MatrixHeadlines {
 
   MatrixHeadlines(Study study, Panel panel) {
     this.study = study;
-    this.panel = panel;
     PlanCircumstances circumstances = new PlanCircumstances(study, Optional.of(panel));
     this.asked =
         study.leastCost().stream()
@@ -170,16 +167,9 @@ final class MatrixHeadlines {
         GapEstimates.against(
             ReviewReference.asked(h.filing()).of(candidate, period.getAsInt()),
             study.estimation().confidence());
-    List<GapEstimate> answered = new ArrayList<>();
+    List<GapEstimates.Least> answered = new ArrayList<>();
     for (FilingRows.Filing filed : h.rows()) {
-      HeldFiling one =
-          new HeldFiling(
-              filed,
-              panel.plants().get(panel.plantOf(filed.row())),
-              Optional.of(estimates.of(filed.mix(), filed.question(), filed.filed())));
-      if (one.answered()) {
-        answered.add(one.gap());
-      }
+      estimates.least(filed.question(), filed.filed(), Optional.empty()).ifPresent(answered::add);
     }
     int lost = h.rows().size() - answered.size();
     if (lost == 0) {
