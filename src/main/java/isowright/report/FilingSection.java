@@ -11,6 +11,7 @@ import isowright.report.Document.Row;
 import isowright.report.Document.Section;
 import isowright.report.Document.Table;
 import isowright.report.Document.Weight;
+import isowright.study.PlanFindings.Detail;
 import isowright.study.PlanFindings.Reviewed;
 import java.util.ArrayList;
 import java.util.Comparator;
@@ -85,6 +86,7 @@ final class FilingSection {
     reviews.sort(Comparator.comparingDouble(FilingSection::size).reversed());
     int shown = Math.min(LONGEST, reviews.size());
     blocks.add(table(material, technology, reviews.subList(0, shown), reviews.size()));
+    EfficiencyBlocks.table(material, technology, reviews.subList(0, shown)).ifPresent(blocks::add);
     blocks.addAll(ReviewBlocks.orders(material, technology));
     blocks.addAll(ReviewBlocks.needed(material, technology, reviews));
     reviews.stream()
@@ -139,6 +141,7 @@ final class FilingSection {
 
   private static Table table(
       Material material, String technology, List<Reviewed> reviews, int all) {
+    boolean undivided = reviews.stream().anyMatch(FilingSection::undivided);
     List<Column> columns = new ArrayList<>();
     columns.add(Column.ofWords("Period"));
     for (String head :
@@ -146,18 +149,22 @@ final class FilingSection {
             "Filed", "Price × quantity", "Least cost", "Gap", "Unreconciled", "Technical", "Mix")) {
       columns.add(Column.ofNumbers(head, ""));
     }
+    if (undivided) {
+      columns.add(Column.ofNumbers("Remainder", "undivided"));
+    }
     columns.add(Column.ofWords("Filed cost is"));
     columns.add(Column.ofWords("Least cost"));
     List<Row> rows = new ArrayList<>();
     for (Reviewed review : reviews) {
-      rows.add(new Row(Text.of(review.plant()), cells(review)));
+      rows.add(new Row(Text.of(review.plant()), cells(review, undivided)));
     }
     List<Text> notes = new ArrayList<>();
     notes.add(
         Text.of(
             "Largest gap first. "
                 + Phrases.sentence(material.interval())
-                + "s beneath. Gap = filed − least cost = unreconciled + technical + mix."));
+                + "s beneath. Gap = filed − least cost = unreconciled + technical + mix"
+                + (undivided ? " + remainder." : ".")));
     if (reviews.size() < all) {
       notes.add(
           Text.of(
@@ -174,17 +181,25 @@ final class FilingSection {
         notes);
   }
 
-  private static List<Cell> cells(Reviewed review) {
-    return List.of(
-        Cell.of(review.period()),
-        Cell.of(Numbers.whole(review.filed())),
-        Cell.of(Numbers.whole(review.atPrices())),
-        Cells.figure(review.leastCost()),
-        Cells.figure(review.gap()),
-        Cell.of(Numbers.whole(review.unreconciled())),
-        Cells.figure(review.technical()),
-        Cells.figure(review.mix()),
-        Cell.of(Phrases.gapWord(relation(review))),
-        Cell.of(Terms.status(review.status())));
+  private static boolean undivided(Reviewed review) {
+    return review.detail().filter(d -> d.remainder().value() != 0).isPresent();
+  }
+
+  private static List<Cell> cells(Reviewed review, boolean undivided) {
+    List<Cell> cells = new ArrayList<>();
+    cells.add(Cell.of(review.period()));
+    cells.add(Cell.of(Numbers.whole(review.filed())));
+    cells.add(Cell.of(Numbers.whole(review.atPrices())));
+    cells.add(Cells.figure(review.leastCost()));
+    cells.add(Cells.figure(review.gap()));
+    cells.add(Cell.of(Numbers.whole(review.unreconciled())));
+    cells.add(Cells.figure(review.technical()));
+    cells.add(Cells.figure(review.mix()));
+    if (undivided) {
+      cells.add(Cells.figure(review.detail().map(Detail::remainder)));
+    }
+    cells.add(Cell.of(Phrases.gapWord(relation(review))));
+    cells.add(Cell.of(Terms.status(review.status())));
+    return cells;
   }
 }

@@ -45,6 +45,9 @@ final class MethodSection {
     if (!material.findings().plans().isEmpty() && !CostsSection.alone(material.findings())) {
       blocks.add(method.leastCost());
     }
+    if (!material.findings().reviews().isEmpty()) {
+      blocks.add(ReviewMethod.of(material, method::cite));
+    }
     blocks.add(method.references());
     return new Section(ID, "Method and references", blocks);
   }
@@ -123,7 +126,8 @@ final class MethodSection {
                     + "; the factor ½ makes second-order coefficients second derivatives:"));
         blocks.add(
             Display.of(
-                "ln Q = ln A + Σ_i β_i z_i + {1}/{2} Σ_i Σ_j β_{ij} z_i z_j + τ t, β_{ij} = β_{ji}"));
+                "ln Q = ln A + Σ_i β_i z_i + {1}/{2} Σ_i Σ_j β_{ij} z_i z_j + τ t, β_{ij} ="
+                    + " β_{ji}"));
       }
       default -> blocks.add(Paragraph.of("The form " + name + "."));
     }
@@ -183,21 +187,21 @@ final class MethodSection {
     List<Text> points = new ArrayList<>();
     points.add(
         Text.of(
-            "Forms linear in their parameters by least squares through an orthogonal decomposition, with"
-                + " collinear columns found and named."));
+            "Forms linear in their parameters by least squares through an orthogonal decomposition,"
+                + " with collinear columns found and named."));
     if (any("ces")) {
       points.add(
           Text.of(
-              "CES along a grid of curvature, nonlinear least squares at every point, so that a flat or"
-                  + " inadmissible optimum is seen; the interval of the elasticity of substitution"
-                  + " comes from the profile of the sum of squares."));
+              "CES along a grid of curvature, nonlinear least squares at every point, so that a"
+                  + " flat or inadmissible optimum is seen; the interval of the elasticity of"
+                  + " substitution comes from the profile of the sum of squares."));
     }
     points.addAll(PanelMethod.points(material, this::cite));
     if (with("clustered")) {
       points.add(
           Text.of(
-              "Covariance clustered by plant, factor G/(G − 1) · (N − 1)/(N − K), with t quantiles on"
-                  + " G − 1 degrees of freedom "
+              "Covariance clustered by plant, factor G/(G − 1) · (N − 1)/(N − K), with t quantiles"
+                  + " on G − 1 degrees of freedom "
                   + cite(Source.LIANG, Source.CAMERON)
                   + "."));
     }
@@ -207,8 +211,8 @@ final class MethodSection {
     if (with("clustered-two-way")) {
       points.add(
           Text.of(
-              "Covariance clustered by plant and by period: the sum of the two less that of their cells,"
-                  + " with t quantiles on the smaller number of clusters less one "
+              "Covariance clustered by plant and by period: the sum of the two less that of their"
+                  + " cells, with t quantiles on the smaller number of clusters less one "
                   + cite(Source.CAMERON_GELBACH)
                   + "."));
     }
@@ -222,16 +226,16 @@ final class MethodSection {
     if (with("driscoll-kraay")) {
       points.add(
           Text.of(
-              "Covariance for rows of all plants that move together and depend on one another less and"
-                  + " less over time "
+              "Covariance for rows of all plants that move together and depend on one another less"
+                  + " and less over time "
                   + cite(Source.DRISCOLL)
                   + lags()));
     }
     points.add(
         Text.of(
-            "Standard errors of derived figures by first-order propagation of the parameter covariance;"
-                + " intervals of positive figures on the log scale, so that they stay positive. Figures"
-                + " are rounded by their standard error "
+            "Standard errors of derived figures by first-order propagation of the parameter"
+                + " covariance; intervals of positive figures on the log scale, so that they stay"
+                + " positive. Figures are rounded by their standard error "
                 + cite(Source.GUM)
                 + "."));
     if (material.findings().fits().stream().anyMatch(fit -> fit.smearing().isPresent())) {
@@ -269,14 +273,6 @@ final class MethodSection {
                 + ":"));
     blocks.add(Display.of("C(w, Q) = min_x Σ_i w_i x_i, f(x) = Q"));
     blocks.add(Display.of("w_i = λ f_i, λ = {∂ C}/{∂ Q}"));
-    if (!material.findings().reviews().isEmpty()) {
-      blocks.add(
-          Paragraph.of(
-              "The technical part of a gap draws the recorded mix back onto the isoquant in proportion;"
-                  + " the mix part is what remains "
-                  + cite(Source.FARRELL, Source.KOPP)
-                  + "."));
-    }
     return new Section(ID + "-least-cost", "Least cost", blocks);
   }
 

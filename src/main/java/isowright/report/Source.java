@@ -134,13 +134,33 @@ enum Source {
       "JCGM (2008)",
       "Evaluation of Measurement Data: Guide to the Expression of Uncertainty in Measurement",
       "JCGM 100:2008"),
+  HALL(
+      "Hall and Jorgenson 1967",
+      "Hall, R. E. and Jorgenson, D. W. (1967)",
+      "Tax Policy and Investment Behavior",
+      "American Economic Review 57, 391–414"),
+  HANOCH(
+      "Hanoch 1975",
+      "Hanoch, G. (1975)",
+      "The Elasticity of Scale and the Shape of Average Costs",
+      "American Economic Review 65, 492–497"),
   HAUSMAN(
       "Hausman 1978",
       "Hausman, J. A. (1978)",
       "Specification Tests in Econometrics",
       "Econometrica 46, 1251–1271"),
   HICKS("Hicks 1932", "Hicks, J. R. (1932)", "The Theory of Wages", "London: Macmillan"),
+  HOTHORN(
+      "Hothorn, Bretz and Westfall 2008",
+      "Hothorn, T., Bretz, F. and Westfall, P. (2008)",
+      "Simultaneous Inference in General Parametric Models",
+      "Biometrical Journal 50, 346–363"),
   HUBER("Huber 1981", "Huber, P. J. (1981)", "Robust Statistics", "New York: Wiley"),
+  JORGENSON(
+      "Jorgenson 1963",
+      "Jorgenson, D. W. (1963)",
+      "Capital Theory and Investment Behavior",
+      "American Economic Review 53 (2), 247–259"),
   KLUMP(
       "Klump and de La Grandville 2000",
       "Klump, R. and de La Grandville, O. (2000)",
@@ -152,6 +172,11 @@ enum Source {
       "The Decomposition of Frontier Cost Function Deviations into Measures of Technical and"
           + " Allocative Efficiency",
       "Journal of Econometrics 19, 319–331"),
+  DE_LA_GRANDVILLE(
+      "de La Grandville 1989",
+      "de La Grandville, O. (1989)",
+      "In Quest of the Slutsky Diamond",
+      "American Economic Review 79, 468–481"),
   LIANG(
       "Liang and Zeger 1986",
       "Liang, K.-Y. and Zeger, S. L. (1986)",
@@ -168,6 +193,12 @@ enum Source {
       "Marschak, J. and Andrews, W. H. (1944)",
       "Random Simultaneous Equations and the Theory of Production",
       "Econometrica 12, 143–205"),
+  MARSHALL(
+      "Marshall and Spiegelhalter 1998",
+      "Marshall, E. C. and Spiegelhalter, D. J. (1998)",
+      "League Tables of In Vitro Fertilisation Clinics: How Confident Can We Be About the"
+          + " Rankings?",
+      "British Medical Journal 316, 1701–1705"),
   MUNDLAK(
       "Mundlak 1978",
       "Mundlak, Y. (1978)",
@@ -176,8 +207,8 @@ enum Source {
   NEWEY(
       "Newey and West 1987",
       "Newey, W. K. and West, K. D. (1987)",
-      "A Simple, Positive Semi-Definite, Heteroskedasticity and Autocorrelation Consistent Covariance"
-          + " Matrix",
+      "A Simple, Positive Semi-Definite, Heteroskedasticity and Autocorrelation Consistent"
+          + " Covariance Matrix",
       "Econometrica 55, 703–708"),
   NEWEY_LAGS(
       "Newey and West 1994",

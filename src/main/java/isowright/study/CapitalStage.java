@@ -40,12 +40,14 @@ final class CapitalStage {
   /**
    * The records of a study with their prices.
    *
-   * @throws StudyRefused where a user cost is not positive, naming the rows
+   * @throws StudyRefused where a user cost is not positive, naming the rows, and with them whatever
+   *     else the records do not hold
    */
   static Priced price(Study study, Panel panel) throws StudyRefused {
     CapitalStage stage = new CapitalStage(study.capital(), panel);
     List<Optional<Column>> used = stage.userCosts();
     if (!stage.mistakes.isEmpty()) {
+      stage.mistakes.addAll(Demands.mistakes(study, Optional.of(panel.withPrices(used))));
       throw new StudyRefused(study.file(), KeyPlaces.of(study.file()).located(stage.mistakes));
     }
     boolean owner = study.capital().owner().isPresent();

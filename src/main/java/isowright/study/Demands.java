@@ -35,19 +35,30 @@ final class Demands {
     this.panel = panel;
   }
 
+  /** What the records do not hold. */
+  static List<Mistake> mistakes(Study study, Optional<Panel> panel) {
+    Demands demands = new Demands(study, panel);
+    demands.all();
+    return demands.mistakes;
+  }
+
   static void check(Study study, Optional<Panel> panel) throws StudyRefused {
     Demands demands = new Demands(study, panel);
-    for (Study.LeastCostQuestion asked : study.leastCost()) {
-      demands.leastCost("least-cost[" + asked.terms().place() + "]", asked);
-    }
-    study.filing().ifPresent(demands::filing);
-    study.protocol().matrix().ifPresent(demands::matrix);
+    demands.all();
     if (demands.mistakes.isEmpty()) {
       demands.mistakes.addAll(new OutOfReach(study, panel).mistakes());
     }
     if (!demands.mistakes.isEmpty()) {
       throw new StudyRefused(study.file(), KeyPlaces.of(study.file()).located(demands.mistakes));
     }
+  }
+
+  private void all() {
+    for (Study.LeastCostQuestion asked : study.leastCost()) {
+      leastCost("least-cost[" + asked.terms().place() + "]", asked);
+    }
+    study.filing().ifPresent(this::filing);
+    study.protocol().matrix().ifPresent(this::matrix);
   }
 
   /** The mean price of an input in the last period in which any is recorded. */

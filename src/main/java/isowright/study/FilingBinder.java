@@ -70,15 +70,35 @@ final class FilingBinder {
             .get("against")
             .map(value -> ProductivityWords.read(value, false))
             .orElse(Productivity.TYPICAL);
+    boolean smearing = section.get("smearing").flatMap(YamlValue::flag).orElse(false);
+    contradictions(root, section, against, smearing);
     return Optional.of(
         new Filing(
             section.text("cost"),
             span.map(s -> s.get(0)),
             span.map(s -> s.get(1)),
             against,
-            section.get("smearing").flatMap(YamlValue::flag).orElse(false),
+            smearing,
             section.section("simulation").map(FilingBinder::simulation).orElse(Simulation.USUAL),
             section.section("allowance").flatMap(FilingBinder::allowance)));
+  }
+
+  /** What follows from residuals and from plants' levels is known of a fit alone. */
+  private static void contradictions(
+      YamlSection root, YamlSection section, Productivity against, boolean smearing) {
+    boolean fitted = root.has("technologies") || root.has("costs");
+    if (fitted) {
+      return;
+    }
+    String remedy =
+        " is known only of a technology that is fitted to the records, and this study has given"
+            + " ones alone; name a form under `technologies` or take this out";
+    if (against.kind() == Productivity.Kind.BEST_QUARTER) {
+      section.refuse("against", "the productivity of the best quarter of plants" + remedy);
+    }
+    if (smearing) {
+      section.refuse("smearing", "a smearing factor" + remedy);
+    }
   }
 
   private static Simulation simulation(YamlSection section) {

@@ -93,4 +93,40 @@ class CapitalReviewTest {
               assertThat(mistake.message()).contains("row 3");
             });
   }
+
+  /** A user cost that is no price and a filed cost that is missing are told together. */
+  @Test
+  void whatTheRecordsLackIsToldInOneGo() throws Exception {
+    Study study = study("A,2024,10,20,4,21,100,0.3,6,500\nB,2024,10,20,4,21,100,0.02,6,\n");
+    assertThatThrownBy(() -> Pipeline.run(study, Progress.SILENT))
+        .isInstanceOfSatisfying(
+            StudyRefused.class,
+            refused ->
+                assertThat(refused.mistakes())
+                    .extracting(Mistake::key)
+                    .containsExactly("capital.machines", "filing.cost"));
+  }
+
+  /** Given technologies alone have no residuals and no plants, hence no quartile, no smearing. */
+  @Test
+  void aReferenceThatOnlyAFitKnowsIsRefused() throws Exception {
+    String contradictory =
+        STUDY.replace(
+            "  cost: cost\n", "  cost: cost\n  against: best-quarter\n  smearing: true\n");
+    Files.writeString(
+        folder.resolve("plants.csv"),
+        "plant,year,q,hours,wage,units,price,change,own,cost\nA,2024,10,20,4,21,100,0.02,6,500\n");
+    Path file = Files.writeString(folder.resolve("study.yaml"), contradictory);
+    assertThatThrownBy(() -> StudyFile.read(file))
+        .isInstanceOfSatisfying(
+            StudyRefused.class,
+            refused -> {
+              assertThat(refused.mistakes())
+                  .extracting(Mistake::key)
+                  .containsExactly("filing.against", "filing.smearing");
+              assertThat(refused.mistakes().get(0).line()).isEqualTo(14);
+              assertThat(refused.mistakes().get(0).message())
+                  .contains("known only of a technology that is fitted");
+            });
+  }
 }
