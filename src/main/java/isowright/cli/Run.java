@@ -1,14 +1,18 @@
 package isowright.cli;
 
 import java.nio.file.Path;
+import java.util.List;
 import java.util.Objects;
 import java.util.Optional;
 import java.util.concurrent.Callable;
 import org.jspecify.annotations.Nullable;
 import picocli.CommandLine.Command;
+import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
+import picocli.CommandLine.ParameterException;
 import picocli.CommandLine.Parameters;
 import picocli.CommandLine.ParentCommand;
+import picocli.CommandLine.Spec;
 
 /** {@code run}: carries out a study. The work is done in {@link RunCommand}. */
 @Command(
@@ -17,13 +21,13 @@ import picocli.CommandLine.ParentCommand;
     header = {"carry out a study: fit, test, plan, review, and write the report", ""},
     description = {
       "",
-      "Writes report.html, findings.json, technology.json, run-record.json and charts/ into",
-      "a folder, and prints the answer in brief. The folder is replaced as a whole when everything"
-          + " has",
-      "been computed: a run that fails leaves an earlier report as it was."
+      "Writes report.html, findings.json, technology.json, run-record.json and charts/",
+      "into a folder, and prints the answer in brief. The folder is replaced as a whole",
+      "when everything has been computed: a run that fails leaves an earlier report as it",
+      "was."
     },
     synopsisHeading = "Use it so:%n",
-    customSynopsis = "  isowright run STUDY [--into DIR] [--quiet]",
+    customSynopsis = "  isowright run STUDY [--into DIR] [--also FORMAT,...] [--quiet]",
     parameterListHeading = "%nWhat to give%n",
     optionListHeading = "%nOptions%n",
     footer = {
@@ -31,11 +35,14 @@ import picocli.CommandLine.ParentCommand;
       "Examples",
       "  isowright run study.yaml                        the report goes to reports/study",
       "  isowright run study.yaml --into filing-2024",
+      "  isowright run study.yaml --also docx            the report for a word processor too",
       "  isowright run study.yaml --quiet > answer.txt"
     })
 final class Run implements Callable<Integer> {
 
   @ParentCommand private @Nullable Main main;
+
+  @Spec private @Nullable CommandSpec spec;
 
   @Parameters(paramLabel = "STUDY", description = "the study file")
   private @Nullable Path study;
@@ -45,6 +52,13 @@ final class Run implements Callable<Integer> {
       paramLabel = "DIR",
       description = "the folder of the report; reports/ and the name of the study if left out")
   private @Nullable Path into;
+
+  @Option(
+      names = "--also",
+      paramLabel = "FORMAT",
+      split = ",",
+      description = "write the report as docx (for a word processor) as well")
+  private List<String> also = List.of();
 
   @Option(names = "--quiet", description = "show no progress")
   private boolean quiet;
@@ -58,9 +72,15 @@ final class Run implements Callable<Integer> {
 
   @Override
   public Integer call() throws Exception {
+    Optional<String> mistake = Format.mistake(also);
+    if (mistake.isPresent()) {
+      throw new ParameterException(
+          Objects.requireNonNull(spec).commandLine(), "`--also`: " + mistake.get());
+    }
     return RunCommand.run(
             Objects.requireNonNull(study),
             Optional.ofNullable(into),
+            Format.of(also),
             quiet,
             Objects.requireNonNull(main))
         .number();

@@ -4,9 +4,11 @@ import isowright.charts.Chart;
 import isowright.charts.Charts;
 import isowright.estimation.Unfit;
 import isowright.records.RecordsRefused;
+import isowright.report.Document;
 import isowright.report.FindingsJson;
 import isowright.report.HtmlReport;
 import isowright.report.Publication;
+import isowright.report.ReportContent;
 import isowright.report.TechnologyJson;
 import isowright.runs.RunRecord;
 import isowright.study.Findings;
@@ -23,6 +25,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
+import java.util.concurrent.atomic.AtomicReference;
 
 /** Does the work of {@link Run}; loaded only when it is asked for. */
 final class RunCommand {
@@ -30,15 +33,16 @@ final class RunCommand {
   private RunCommand() {}
 
   /** Carries out a study and publishes its report. */
-  static ExitCode run(Path file, Optional<Path> into, boolean quiet, Main main)
+  static ExitCode run(Path file, Optional<Path> into, List<Format> also, boolean quiet, Main main)
       throws StudyRefused, RecordsRefused, Unfit, Publication.Refused {
     Study study = StudyFile.read(file);
     try (Publication publication = Publication.into(into.orElseGet(() -> usualFolder(file)))) {
-      return published(study, publication, quiet, main);
+      return published(study, publication, also, quiet, main);
     }
   }
 
-  private static ExitCode published(Study study, Publication publication, boolean quiet, Main main)
+  private static ExitCode published(
+      Study study, Publication publication, List<Format> also, boolean quiet, Main main)
       throws StudyRefused, RecordsRefused, Unfit, Publication.Refused {
     Instant start = Instant.now();
     Progress progress = ProgressLine.on(main.terminal(), main.err(), quiet);
@@ -48,7 +52,7 @@ final class RunCommand {
     try {
       findings = Pipeline.run(study, stages);
       stages.last("drawing charts and writing the report");
-      files = files(findings);
+      files = files(findings, also);
       RunRecord record =
           RunRecord.of(study, findings, publication.folder(), files, start, Instant.now());
       files.put(RunRecord.NAME, record.write(findings.run().title()));
@@ -72,13 +76,17 @@ final class RunCommand {
   }
 
   /** Every file of the report, by name; charts are drawn on all cores. */
-  private static Map<String, byte[]> files(Findings findings) {
-    List<Chart> charts = Charts.of(findings);
+  private static Map<String, byte[]> files(Findings findings, List<Format> also) {
+    List<Chart> charts = Charts.of(findings).stream().map(RunCommand::drawnOnce).toList();
     Map<String, byte[]> files = new LinkedHashMap<>();
     List<Drawn> drawn = charts.parallelStream().map(Drawn::of).toList();
     files.put("report.html", HtmlReport.write(findings, charts).getBytes(StandardCharsets.UTF_8));
     files.put(Publication.MARK, FindingsJson.write(findings));
     files.put("technology.json", TechnologyJson.write(findings));
+    if (!also.isEmpty()) {
+      Document document = ReportContent.of(findings, charts);
+      also.forEach(format -> files.put(format.file(), format.write(document)));
+    }
     for (Drawn chart : drawn) {
       String name = chart.name();
       for (int other = 2; files.containsKey("charts/" + name + ".svg"); other++) {
@@ -88,6 +96,23 @@ final class RunCommand {
       files.put("charts/" + name + ".png", chart.png());
     }
     return files;
+  }
+
+  /** The same chart, whose picture is kept: more than one file may want it. */
+  private static Chart drawnOnce(Chart chart) {
+    AtomicReference<byte[]> drawn = new AtomicReference<>();
+    return new Chart(
+        chart.kind(),
+        chart.subject(),
+        chart.name(),
+        chart.title(),
+        chart.caption(),
+        chart.alternative(),
+        chart.header(),
+        chart.rows(),
+        chart.svg(),
+        () -> drawn.updateAndGet(png -> png == null ? chart.png().get() : png),
+        chart.figure());
   }
 
   /** A chart in both formats under a name that is fit for a file. */

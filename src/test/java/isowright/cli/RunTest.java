@@ -144,6 +144,16 @@ class RunTest {
   }
 
   @Test
+  void furtherFormatsAreWrittenWhereAsked() throws IOException {
+    assertThat(run("--also", "docx").code()).isZero();
+    assertThat(report().get("report.docx")).startsWith("PK");
+    Invocation unknown = run("--also", "docs,page");
+    assertThat(unknown.code()).isEqualTo(2);
+    assertThat(unknown.err())
+        .contains("`docs` is not a format; the nearest is `docx`", "`page` is not a format");
+  }
+
+  @Test
   void aFailedRunLeavesTheEarlierReportAndNoTraces() throws IOException {
     run();
     Map<String, String> earlier = report();

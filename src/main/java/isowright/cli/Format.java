@@ -1,0 +1,71 @@
+package isowright.cli;
+
+import isowright.handover.WordReport;
+import isowright.records.Nearest;
+import isowright.report.Document;
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import java.util.Optional;
+import java.util.function.Function;
+import java.util.stream.Collectors;
+
+/** A format in which a report is written beside the page, where asked. */
+enum Format {
+  /** For a word processor. */
+  DOCX("docx", "report.docx", WordReport::write);
+
+  private final String word;
+  private final String file;
+  private final Function<Document, byte[]> writer;
+
+  Format(String word, String file, Function<Document, byte[]> writer) {
+    this.word = word;
+    this.file = file;
+    this.writer = writer;
+  }
+
+  /** The file's name. */
+  String file() {
+    return file;
+  }
+
+  /** The file of a document. */
+  byte[] write(Document document) {
+    return writer.apply(document);
+  }
+
+  /** The words for all formats. */
+  static String words() {
+    return Arrays.stream(values()).map(f -> f.word).collect(Collectors.joining(", "));
+  }
+
+  /** The formats of these words; what is wrong with them, in a sentence, where anything is. */
+  static Optional<String> mistake(List<String> words) {
+    List<String> unknown = words.stream().filter(word -> named(word).isEmpty()).toList();
+    if (unknown.isEmpty()) {
+      return Optional.empty();
+    }
+    List<String> known = Arrays.stream(values()).map(f -> f.word).toList();
+    List<String> sentences = new ArrayList<>();
+    for (String word : unknown) {
+      sentences.add(
+          "`"
+              + word
+              + "` is not a format"
+              + Nearest.word(word, known)
+                  .map(near -> "; the nearest is `" + near + "`.")
+                  .orElse("."));
+    }
+    return Optional.of(String.join(" ", sentences) + " Formats: " + words() + ".");
+  }
+
+  /** The formats of these words, each once; words without a format are left out. */
+  static List<Format> of(List<String> words) {
+    return words.stream().map(Format::named).flatMap(Optional::stream).distinct().toList();
+  }
+
+  private static Optional<Format> named(String word) {
+    return Arrays.stream(values()).filter(f -> f.word.equals(word)).findFirst();
+  }
+}
