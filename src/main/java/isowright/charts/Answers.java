@@ -1,6 +1,7 @@
 package isowright.charts;
 
 import isowright.study.Figure;
+import isowright.study.PlanDetail.Change;
 import isowright.study.PlanFindings.Planned;
 import java.util.ArrayList;
 import java.util.List;
@@ -70,5 +71,53 @@ final class Answers {
   static double value(Planned plan, String input) {
     Figure figure = plan.mix().get(input);
     return figure == null ? Double.NaN : figure.value();
+  }
+
+  /** What a plan seeks: "cost", "output" for a budget, "profit". */
+  static String result(Planned plan) {
+    return switch (plan.detail().goal()) {
+      case "budget" -> "output";
+      case "profit" -> "profit";
+      default -> "cost";
+    };
+  }
+
+  /** What is moved: "the price of labour", "the target". */
+  static String moved(Change change) {
+    return switch (change.what()) {
+      case "price" -> "price of " + change.input();
+      case "output-price" -> "price of output";
+      default -> change.what();
+    };
+  }
+
+  /** The output of a plan: as stated where it is a target, rounded where it was found. */
+  static String planned(Planned plan, Setting setting) {
+    return plan.detail().goal().equals("target")
+        ? output(plan.target(), setting)
+        : Words.with(Numbers.brief(plan.target()), setting.units().output());
+  }
+
+  /** "target 40,000 t", or "plan 38,400 t" where the output was found. */
+  static String aim(Planned plan, Setting setting) {
+    return (plan.detail().goal().equals("target") ? "target " : "plan ") + planned(plan, setting);
+  }
+
+  /** The finding of a plan: least cost for a target, most output for a budget, most profit. */
+  static String finding(Planned plan, Setting setting) {
+    String money = setting.units().money();
+    String output = planned(plan, setting);
+    double stated = plan.detail().stated().orElse(Double.NaN);
+    return switch (plan.detail().goal()) {
+      case "budget" -> "the most output for " + Numbers.money(stated, money) + " is " + output;
+      case "profit" ->
+          "profit is greatest at "
+              + output
+              + plan.detail().profit().map(p -> ", " + Numbers.money(p.value(), money)).orElse("");
+      default ->
+          "least cost for "
+              + output
+              + plan.cost().map(c -> " is " + Numbers.money(c.value(), money)).orElse("");
+    };
   }
 }

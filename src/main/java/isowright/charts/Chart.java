@@ -51,6 +51,16 @@ public record Chart(
     RESIDUALS,
     /** Actual against predicted output. */
     ACTUAL_PREDICTED,
+    /** Average cost in the short run beside that in the long run. */
+    ENVELOPE,
+    /** What an input is demanded at each of its prices. */
+    DEMAND,
+    /** What other prices, goals and productivity change. */
+    CHANGES,
+    /** What each plant makes of a target that is split. */
+    SPLIT,
+    /** Where average cost is least, answer by answer. */
+    EFFICIENT_SCALE,
     /** Filed against least cost. */
     FILING,
     /** The gap between them in parts. */

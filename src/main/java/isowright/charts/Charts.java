@@ -4,7 +4,9 @@ import isowright.study.Findings;
 import isowright.study.FitFindings.Fitted;
 import isowright.study.PlanFindings.Planned;
 import java.util.ArrayList;
+import java.util.HashSet;
 import java.util.List;
+import java.util.Set;
 
 /**
  * The charts of a study.
@@ -32,11 +34,15 @@ public final class Charts {
       ResidualCharts.of(fit, setting).ifPresent(charts::add);
       ActualPredictedCharts.of(fit, setting).ifPresent(charts::add);
     }
+    Set<String> curves = new HashSet<>(); // several targets of a question share them
     for (Planned plan : findings.plans()) {
       IsoquantCharts.of(plan, setting).ifPresent(charts::add);
-      ExpansionPathCharts.of(plan, setting).ifPresent(charts::add);
-      CostCurveCharts.of(plan, setting).ifPresent(charts::add);
+      if (!plan.answered() || curves.add(QuestionCharts.asked(plan) + "\0" + plan.technology())) {
+        ExpansionPathCharts.of(plan, setting).ifPresent(charts::add);
+        CostCurveCharts.of(plan, setting).ifPresent(charts::add);
+      }
     }
+    charts.addAll(QuestionCharts.of(findings.plans(), setting));
     charts.addAll(FilingCharts.of(findings.reviews(), setting));
     charts.addAll(GapPartsCharts.of(findings.reviews(), setting));
     charts.addAll(RatioCharts.of(findings.review().orders(), setting));

@@ -98,8 +98,11 @@ final class CostCurveCharts {
         .ifPresent(
             figure ->
                 words
-                    .append(" At the target of ")
-                    .append(Answers.output(plan.target(), setting))
+                    .append(
+                        (plan.detail().goal().equals("target")
+                            ? " At the target of "
+                            : " At the plan, "))
+                    .append(Answers.planned(plan, setting))
                     .append(" average cost is ")
                     .append(Words.interval(figure))
                     .append(' ')
@@ -145,7 +148,7 @@ final class CostCurveCharts {
             Axis.around(Words.output(setting.units()), targets[0], targets[targets.length - 1]),
             Axis.around(
                 Words.perOutput(setting.units()), Math.min(low, least), Math.max(high, most)));
-    outside(plot);
+    Shades.outside(plot, targets, curve.stream().map(CurvePoint::inside).toList());
     band(plot, "interval of average cost", CurvePoint::averageCost, Style.DEEP, Pen.MAIN_EDGE);
     band(plot, "interval of marginal cost", CurvePoint::marginalCost, Style.WARM, Pen.SECOND_EDGE);
     plot.line("marginal cost", targets, marginal, Pen.SECOND);
@@ -227,32 +230,11 @@ final class CostCurveCharts {
             cost ->
                 plot.dots("target", new double[] {plan.target()}, new double[] {cost}, Dot.ANSWER));
     plot.label(
-        "target " + Answers.output(plan.target(), setting),
+        Answers.aim(plan, setting),
         plan.target(),
         plot.y().high(),
         Style.QUIET_TEXT,
         Side.SOUTH_EAST,
         Side.SOUTH_WEST);
-  }
-
-  /** Shades the stretches whose mixes lie outside the records. */
-  private void outside(Plot plot) {
-    boolean any = false;
-    for (int i = 0; i < curve.size(); i++) {
-      if (curve.get(i).inside()) {
-        continue;
-      }
-      int from = i;
-      while (i + 1 < curve.size() && !curve.get(i + 1).inside()) {
-        i++;
-      }
-      double left = from == 0 ? plot.x().low() : (targets[from - 1] + targets[from]) / 2;
-      double right = i + 1 == curve.size() ? plot.x().high() : (targets[i] + targets[i + 1]) / 2;
-      plot.region("outside the records", left, right);
-      any = true;
-    }
-    if (any) {
-      plot.keyOfShade("outside the records");
-    }
   }
 }

@@ -214,7 +214,7 @@ final class ExpansionPathCharts {
     double[] answerY = {Answers.value(plan, second)};
     plot.dots("target", answerX, answerY, Dot.ANSWER);
     plot.label(
-        "target " + Answers.output(plan.target(), setting),
+        Answers.aim(plan, setting),
         answerX[0],
         answerY[0],
         Style.WARM,

@@ -57,11 +57,8 @@ final class IsoquantCharts {
   private Chart chart() {
     String title =
         Answers.who(plan)
-            + ": least cost for "
-            + Answers.output(plan.target(), setting)
-            + plan.cost()
-                .map(c -> " is " + Numbers.money(c.value(), setting.units().money()))
-                .orElse("")
+            + ": "
+            + Answers.finding(plan, setting)
             + ", with "
             + Answers.mix(plan, setting);
     return Drawn.chart(
@@ -191,7 +188,7 @@ final class IsoquantCharts {
         "least-cost mix", planFirst, planSecond, Style.WARM, Side.NORTH_EAST, Side.SOUTH_WEST);
     if (isoquantX.length > 0) {
       plot.labelAlong(
-          "isoquant, " + Answers.output(plan.target(), setting),
+          "isoquant, " + Answers.planned(plan, setting),
           Curves.ends(isoquantX),
           Curves.ends(isoquantY),
           Style.DEEP,

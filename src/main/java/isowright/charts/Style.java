@@ -82,6 +82,12 @@ final class Style {
     REFERENCE(AXIS, 1.4f, 2f, 4f),
     /** An interval. */
     INTERVAL(DEEP, 2f),
+    /** A bar. */
+    BAR(DEEP, 11f),
+    /** A bar that is told apart from the first by its colour and width. */
+    SECOND_BAR(WARM, 6f),
+    /** An interval over a bar. */
+    BAR_INTERVAL(WARM, 2f),
     /** A thin interval behind many dots. */
     THIN_INTERVAL(SLATE, 1.2f),
     /** The edge of a band of the first curve. */

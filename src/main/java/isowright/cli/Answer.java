@@ -1,6 +1,7 @@
 package isowright.cli;
 
 import isowright.report.Numbers;
+import isowright.report.PlanWording;
 import isowright.study.CostFindings;
 import isowright.study.Figure;
 import isowright.study.Findings;
@@ -126,22 +127,25 @@ final class Answer {
     Findings.Units units = findings.units();
     Planned first = plans.get(0);
     out.println();
-    out.println(
-        question
-            + ": "
-            + Numbers.unit(Numbers.amount(first.target()), units.output())
-            + " at least cost");
+    out.println(question + ": " + PlanWording.sought(first, units.money(), units.output()));
     List<String> inputs = List.copyOf(first.prices().keySet());
     List<String> headings = new ArrayList<>(List.of("technology", "status"));
     inputs.forEach(input -> headings.add(withUnit(input, units.inputs().getOrDefault(input, ""))));
-    headings.add("cost, " + units.money());
+    String goal = first.detail().goal();
+    headings.add(
+        switch (goal) {
+          case "budget" -> withUnit("output", units.output());
+          case "profit" -> "profit, " + units.money();
+          default -> "cost, " + units.money();
+        });
     headings.add("interval");
     TextTable table = new TextTable(2, headings.toArray(String[]::new));
     for (Planned plan : plans) {
       List<String> row = new ArrayList<>(List.of(plan.technology(), plan.status()));
       inputs.forEach(input -> row.add(value(Optional.ofNullable(plan.mix().get(input)))));
-      row.add(value(plan.cost()));
-      row.add(plan.cost().map(Numbers::interval).orElse(""));
+      Optional<Figure> answer = PlanWording.answer(plan);
+      row.add(value(answer));
+      row.add(answer.map(Numbers::interval).orElse(""));
       table.row(row.toArray(String[]::new));
     }
     table.lines("  ").forEach(out::println);

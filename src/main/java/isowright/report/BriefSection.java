@@ -6,6 +6,7 @@ import isowright.report.Document.Block;
 import isowright.report.Document.Paragraph;
 import isowright.report.Document.Points;
 import isowright.report.Document.Section;
+import isowright.study.Figure;
 import isowright.study.Findings;
 import isowright.study.PlanFindings.Planned;
 import isowright.study.PlanFindings.Reviewed;
@@ -30,11 +31,11 @@ final class BriefSection {
     List<Block> blocks = new ArrayList<>();
     blocks.add(Paragraph.of(rests(material.findings())));
     Map<String, Double> before = Map.of();
-    for (String question : material.questions()) {
-      List<Planned> plans = material.plans(question);
+    for (List<Planned> plans : PlansSection.asked(material)) {
       Planned first = plans.get(0);
+      boolean several = PlansSection.several(plans);
       blocks.add(asked(material, plans, first.prices().equals(before)));
-      blocks.add(new Answers(plans.stream().map(plan -> answer(material, plan)).toList()));
+      blocks.add(new Answers(plans.stream().map(plan -> answer(material, plan, several)).toList()));
       before = first.prices();
     }
     gap(material, blocks);
@@ -81,42 +82,49 @@ final class BriefSection {
     Planned plan = plans.get(0);
     List<String> limits = PlansSection.limits(plans);
     return new Paragraph(
-        Text.strong(plan.question() + ". ")
+        Text.strong(PlanWording.asked(plan) + ". ")
             .then(
-                "What mix of "
-                    + Phrases.list(PlansSection.inputs(material, plans))
-                    + " makes "
-                    + Numbers.unit(Numbers.amount(plan.target()), material.outputUnit())
-                    + " at least cost"
+                PlanWording.question(material, plans)
                     + (samePrices ? " at the same prices" : "")
                     + "? "
-                    + (samePrices ? "" : "Prices, " + PlansSection.prices(material, plan) + ". ")
+                    + (samePrices || plan.prices().isEmpty()
+                        ? ""
+                        : "Prices, " + PlansSection.prices(material, plan) + ". ")
                     + (limits.isEmpty() ? "" : "Limits: " + Phrases.list(limits) + ". ")
                     + "Productivity: "
                     + plan.productivity()
                     + "."));
   }
 
-  private static Answer answer(Material material, Planned plan) {
-    String technology = "Least cost by " + Terms.technology(plan.technology());
+  private static Answer answer(Material material, Planned plan, boolean several) {
+    String technology =
+        PlanWording.best(plan) + " by " + PlanWording.column(material, plan, several);
     String status = Phrases.sentence(Terms.status(plan.status()));
-    if (plan.cost().isEmpty() || !plan.answered()) {
+    Optional<Figure> answer = PlanWording.answer(plan);
+    if (answer.isEmpty() || !plan.answered()) {
       String why = Phrases.sentence(Terms.status(plan.status()).replace("no plan: ", ""));
       return new Answer(technology, "No plan", "", "", "", why);
     }
     List<String> mix = new ArrayList<>();
+    if (plan.detail().goal().equals("profit")) {
+      plan.detail()
+          .output()
+          .ifPresent(
+              output ->
+                  mix.add("output " + Numbers.unit(Numbers.value(output), material.outputUnit())));
+    }
     plan.mix()
         .forEach(
             (input, figure) ->
                 mix.add(input + " " + Numbers.unit(Numbers.value(figure), material.unit(input))));
-    String sure = Phrases.sure(plan.cost().get(), material.confidence());
+    String sure = Phrases.sure(answer.get(), material.confidence());
     return new Answer(
         technology,
-        Numbers.value(plan.cost().get()),
-        material.money(),
+        Numbers.value(answer.get()),
+        PlanWording.answerUnit(material, plan),
         sure.isEmpty() ? "Taken as known: no interval" : sure,
         Phrases.sentence(Phrases.list(mix)),
-        Terms.cautionary(plan.status()) ? status : "");
+        plan.status().equals("solved") ? "" : status);
   }
 
   private static void gap(Material material, List<Block> blocks) {
@@ -170,7 +178,7 @@ final class BriefSection {
     Findings findings = material.findings();
     if (findings.fits().isEmpty() && findings.costs().fits().isEmpty()) {
       return "The figures are exact for the technologies as stated. How far those are from the"
-                 + " truth is not known from this study.";
+          + " truth is not known from this study.";
     }
     return "Intervals are "
         + Numbers.level(material.confidence())

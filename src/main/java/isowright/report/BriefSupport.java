@@ -50,12 +50,12 @@ final class BriefSupport {
     CostsSection.supported(material, points);
     List<String> inside =
         material.findings().plans().stream()
-            .filter(plan -> plan.status().equals("solved"))
+            .filter(plan -> material.findings().records().isPresent())
+            .filter(plan -> plan.answered() && !Terms.cautionary(plan.status()))
             .map(BriefSupport::named)
             .toList();
     if (!inside.isEmpty()) {
-      points.add(
-          Text.of("A least-cost mix inside what was seen: " + String.join("; ", inside) + "."));
+      points.add(Text.of("A plan inside what was seen: " + String.join("; ", inside) + "."));
     }
     return points;
   }

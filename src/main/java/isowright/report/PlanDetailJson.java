@@ -56,6 +56,18 @@ final class PlanDetailJson {
     file.list("demand", detail.demands(), false, demand -> demand(file, demand));
     file.list("changes", detail.changes(), false, change -> change(file, change));
     file.list("across", detail.across(), false, part -> part(file, part));
+    file.list(
+        "withoutPlan",
+        detail.withoutPlan(),
+        true,
+        point -> {
+          file.number("target", point.target());
+          file.text("status", point.status());
+          file.text("reason", point.reason());
+        });
+    if (detail.nearest().isPresent()) {
+      file.object("nearestRegular", () -> PlanJson.point(file, detail.nearest().get()));
+    }
   }
 
   /** What there is nothing to say of is left out: null would say that it could not be had. */
@@ -123,6 +135,10 @@ final class PlanDetailJson {
                 file.figure("shortRunMarginalCost", Optional.of(point.shortRunMarginal()));
                 file.figure("longRunCost", Optional.of(point.longRun()));
                 file.figure("longRunMarginalCost", Optional.of(point.longRunMarginal()));
+                file.figure("shortRunAverageCost", Optional.of(point.shortRunAverage()));
+                file.figure("longRunAverageCost", Optional.of(point.longRunAverage()));
+                file.truth("shortRunInside", point.shortRunInside());
+                file.truth("longRunInside", point.longRunInside());
               });
         });
   }
@@ -154,6 +170,7 @@ final class PlanDetailJson {
           file.number("price", point.price());
           file.figures("mix", point.mix());
           file.figure("cost", Optional.of(point.cost()));
+          file.truth("inside", point.inside());
         });
   }
 

@@ -1,5 +1,6 @@
 package isowright.report;
 
+import isowright.study.PlanFindings.CurvePoint;
 import isowright.study.PlanFindings.Detail;
 import isowright.study.PlanFindings.Planned;
 import isowright.study.PlanFindings.Reviewed;
@@ -26,22 +27,21 @@ final class PlanJson {
     file.figure("averageCost", plan.averageCost());
     file.figures("shares", plan.shares());
     file.number("optimality", plan.optimality());
-    file.list(
-        "curve",
-        plan.curve(),
-        false,
-        point -> {
-          file.number("target", point.target());
-          file.figure("cost", Optional.of(point.cost()));
-          file.figure("marginalCost", Optional.of(point.marginalCost()));
-          file.figure("averageCost", Optional.of(point.averageCost()));
-          file.numbersByName("mix", point.mix());
-          file.truth("inside", point.inside());
-        });
+    file.list("curve", plan.curve(), false, point -> point(file, point));
     file.matrix("isoquant", plan.isoquant().toArray(new double[0][]));
     RefitJson.write(file, plan);
     PlanDetailJson.write(file, plan.detail());
     file.remarks("remarks", plan.remarks());
+  }
+
+  static void point(JsonFile file, CurvePoint point) throws IOException {
+    file.number("target", point.target());
+    file.figure("cost", Optional.of(point.cost()));
+    file.figure("marginalCost", Optional.of(point.marginalCost()));
+    file.figure("averageCost", Optional.of(point.averageCost()));
+    file.numbersByName("mix", point.mix());
+    file.truth("inside", point.inside());
+    file.truth("regular", point.regular());
   }
 
   static void write(JsonFile file, Reviewed review) throws IOException {

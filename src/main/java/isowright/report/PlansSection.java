@@ -9,24 +9,26 @@ import isowright.report.Document.Entry;
 import isowright.report.Document.Group;
 import isowright.report.Document.Notice;
 import isowright.report.Document.Paragraph;
+import isowright.report.Document.Points;
 import isowright.report.Document.Row;
 import isowright.report.Document.Section;
 import isowright.report.Document.Table;
 import isowright.report.Document.Weight;
-import isowright.study.PlanFindings.CurvePoint;
 import isowright.study.PlanFindings.Planned;
 import java.util.ArrayList;
+import java.util.LinkedHashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.function.Function;
 
-/** Least-cost plans: one part a question, technologies side by side, then curves and drawings. */
+/**
+ * Least-cost plans: one part a question, technologies side by side, what its limits are worth, then
+ * the drawings on which a decision rests. The annex has the rest.
+ */
 final class PlansSection {
 
   static final String ID = "plans";
-
-  /** So many points of a cost curve are printed; the chart's table has them all. */
-  private static final int CURVE_ROWS = 9;
 
   private PlansSection() {}
 
@@ -34,43 +36,70 @@ final class PlansSection {
     List<Block> blocks = new ArrayList<>();
     blocks.add(
         Paragraph.of(
-            "The mix of inputs that reaches a target at least cost, at given prices. Marginal cost"
-                + " is what one more unit of output costs; at the least-cost mix the price of every"
-                + " input in use equals marginal cost times its marginal product."));
+            "The mix of inputs that meets a question at the given prices. Marginal cost is what one"
+                + " more unit of output costs; at the least-cost mix the price of every input in"
+                + " use that is free to change equals marginal cost times its marginal product."));
     int number = 1;
-    for (String question : material.questions()) {
-      blocks.add(question(material, question, number++));
+    for (List<Planned> plans : asked(material)) {
+      blocks.add(question(material, plans, number++));
     }
     return new Section(ID, "Least-cost plans", blocks);
   }
 
-  private static Section question(Material material, String question, int number) {
-    List<Planned> plans = material.plans(question);
+  /** The answers to each question of the study file, all its targets together. */
+  static List<List<Planned>> asked(Material material) {
+    Map<String, List<Planned>> asked = new LinkedHashMap<>();
+    for (Planned plan : material.findings().plans()) {
+      asked.computeIfAbsent(PlanWording.asked(plan), name -> new ArrayList<>()).add(plan);
+    }
+    return List.copyOf(asked.values());
+  }
+
+  /** Whether a question has several targets. */
+  static boolean several(List<Planned> plans) {
+    return plans.stream().map(Planned::question).distinct().count() > 1;
+  }
+
+  private static Section question(Material material, List<Planned> plans, int number) {
     List<Block> blocks = new ArrayList<>();
+    boolean several = several(plans);
     blocks.add(asked(material, plans));
-    plans.forEach(plan -> status(plan, blocks));
+    plans.forEach(plan -> status(material, plan, several, blocks));
     plans.forEach(
         plan ->
-            blocks.addAll(Material.notices(Terms.technology(plan.technology()), plan.remarks())));
-    blocks.add(answers(material, question, plans));
-    for (Planned plan : plans) {
-      String subject = question + ", " + plan.technology();
-      blocks.addAll(material.drawings(Chart.Kind.ISOQUANT, subject));
-      blocks.addAll(material.drawings(Chart.Kind.EXPANSION_PATH, subject));
-      blocks.addAll(material.drawings(Chart.Kind.COST_CURVES, subject));
-      if (!plan.curve().isEmpty()) {
-        blocks.add(curve(material, plan));
-      }
+            blocks.addAll(
+                Material.notices(
+                    PlanWording.column(material, plan, several),
+                    plan.remarks().stream()
+                        .filter(said -> !said.code().equals("corner")) // told with its worth
+                        .toList())));
+    blocks.add(answers(material, plans, several));
+    List<Text> worths = PlanWording.worths(material, plans, several);
+    if (!worths.isEmpty()) {
+      blocks.add(Paragraph.of("What the limits are worth:"));
+      blocks.add(new Points(false, worths));
     }
-    return new Section(ID + "-" + number, question, blocks);
+    PlanWording.proof(plans).ifPresent(words -> blocks.add(Paragraph.of(words)));
+    for (Planned plan : plans) {
+      String subject = plan.question() + ", " + plan.technology();
+      blocks.addAll(material.drawings(Chart.Kind.SPLIT, subject));
+      blocks.addAll(material.drawings(Chart.Kind.ISOQUANT, subject));
+      blocks.addAll(material.drawings(Chart.Kind.COST_CURVES, subject));
+      blocks.addAll(material.drawings(Chart.Kind.ENVELOPE, subject));
+      blocks.addAll(material.drawings(Chart.Kind.CHANGES, subject));
+    }
+    return new Section(ID + "-" + number, PlanWording.asked(plans.get(0)), blocks);
   }
 
   private static Definitions asked(Material material, List<Planned> plans) {
     Planned first = plans.get(0);
     List<Entry> entries = new ArrayList<>();
-    entries.add(
-        Entry.of("Target", Numbers.unit(Numbers.amount(first.target()), material.outputUnit())));
-    entries.add(Entry.of("Prices", Phrases.sentence(prices(material, first))));
+    entries.add(PlanWording.goal(material, plans));
+    if (first.prices().isEmpty()) {
+      entries.add(Entry.of("Prices", "each plant its own"));
+    } else {
+      entries.add(Entry.of("Prices", Phrases.sentence(prices(material, first))));
+    }
     entries.add(Entry.of("Productivity", first.productivity()));
     List<String> limits = limits(plans);
     entries.add(Entry.of("Limits", limits.isEmpty() ? "none" : String.join("; ", limits)));
@@ -98,13 +127,15 @@ final class PlansSection {
         .toList();
   }
 
-  private static void status(Planned plan, List<Block> blocks) {
-    if (Terms.cautionary(plan.status())) {
+  /** States that change what the figures are worth; a limit that binds is told with its worth. */
+  private static void status(Material material, Planned plan, boolean several, List<Block> blocks) {
+    if (!plan.status().equals("solved")) {
+      Weight answered = Terms.cautionary(plan.status()) ? Weight.WARNING : Weight.NOTE;
       blocks.add(
           new Notice(
-              plan.answered() ? Weight.WARNING : Weight.ERROR,
+              plan.answered() ? answered : Weight.ERROR,
               Text.strong(
-                      Terms.technology(plan.technology())
+                      PlanWording.column(material, plan, several)
                           + ": "
                           + Terms.status(plan.status())
                           + ". ")
@@ -112,26 +143,19 @@ final class PlansSection {
     }
   }
 
-  private static Table answers(Material material, String question, List<Planned> plans) {
+  private static Table answers(Material material, List<Planned> plans, boolean several) {
     List<Column> columns =
         plans.stream()
             .map(
                 plan ->
                     Column.ofNumbers(
-                        Terms.technology(plan.technology()), Terms.status(plan.status())))
+                        PlanWording.column(material, plan, several), Terms.status(plan.status())))
             .toList();
-    List<Row> totals = new ArrayList<>();
-    totals.add(row("Least cost, " + material.money(), plans, p -> Cells.figure(p.cost())));
-    totals.add(
-        row(
-            "Marginal cost, " + material.moneyPerOutput(),
-            plans,
-            p -> Cells.figure(p.marginalCost())));
-    totals.add(
-        row(
-            "Average cost, " + material.moneyPerOutput(),
-            plans,
-            p -> Cells.figure(p.averageCost())));
+    List<Group> groups = new ArrayList<>();
+    if (!plans.get(0).detail().goal().equals("target")) {
+      groups.add(new Group(Optional.of(PlanWording.best(plans.get(0))), best(material, plans)));
+    }
+    groups.add(new Group(Optional.of("Cost"), totals(material, plans)));
     List<Row> mix = new ArrayList<>();
     List<Row> shares = new ArrayList<>();
     for (String input : inputs(material, plans)) {
@@ -142,30 +166,15 @@ final class PlansSection {
               p -> Cells.figure(Optional.ofNullable(p.mix().get(input)))));
       shares.add(row(input, plans, p -> Cells.figure(Optional.ofNullable(p.shares().get(input)))));
     }
-    List<Row> check =
-        List.of(
-            row(
-                "Departure from the first-order conditions",
-                plans,
-                p ->
-                    Double.isNaN(p.optimality())
-                        ? Cell.none()
-                        : Cell.of(Numbers.small(p.optimality()))));
+    groups.add(new Group(Optional.of("Mix"), mix));
+    groups.add(new Group(Optional.of("Share of cost"), shares));
     return new Table(
-        "Least-cost plan: " + question,
+        (plans.get(0).detail().goal().equals("target") ? "Least-cost plan: " : "Plan: ")
+            + PlanWording.asked(plans.get(0)),
         "Figure",
         columns,
-        List.of(
-            new Group(Optional.of("Cost"), totals),
-            new Group(Optional.of("Mix"), mix),
-            new Group(Optional.of("Share of cost"), shares),
-            new Group(Optional.of("Check"), check)),
-        List.of(
-            Text.of(
-                Phrases.sentence(material.interval())
-                    + "s beneath; figures of a technology taken as known carry none. The check is"
-                    + " the largest relative departure, found again from the technology and not"
-                    + " taken from the search.")));
+        groups,
+        List.of(note(material)));
   }
 
   /** The inputs of the study, then those that only some answers have. */
@@ -179,67 +188,43 @@ final class PlansSection {
     return all;
   }
 
+  private static Text note(Material material) {
+    Text note =
+        Text.of(
+            Phrases.sentence(material.interval())
+                + "s beneath; figures of a technology taken as known carry none.");
+    return PlanAnnexSection.exists(material)
+        ? note.then(" Every plan was checked again from the technology; the checks are ")
+            .thenReference("in the annex", PlanAnnexSection.ID)
+            .then(".")
+        : note;
+  }
+
+  private static List<Row> best(Material material, List<Planned> plans) {
+    List<Row> rows = new ArrayList<>();
+    if (plans.get(0).detail().goal().equals("profit")) {
+      rows.add(row("Profit, " + material.money(), plans, p -> Cells.figure(p.detail().profit())));
+    }
+    String unit = material.outputUnit().isEmpty() ? "" : ", " + material.outputUnit();
+    rows.add(row("Output" + unit, plans, p -> Cells.figure(p.detail().output())));
+    return rows;
+  }
+
+  private static List<Row> totals(Material material, List<Planned> plans) {
+    String cost = plans.get(0).detail().goal().equals("target") ? "Least cost, " : "Cost, ";
+    return List.of(
+        row(cost + material.money(), plans, p -> Cells.figure(p.cost())),
+        row(
+            "Marginal cost, " + material.moneyPerOutput(),
+            plans,
+            p -> Cells.figure(p.marginalCost())),
+        row(
+            "Average cost, " + material.moneyPerOutput(),
+            plans,
+            p -> Cells.figure(p.averageCost())));
+  }
+
   private static Row row(String heading, List<Planned> plans, Function<Planned, Cell> cell) {
     return new Row(Text.of(heading), plans.stream().map(cell).toList());
-  }
-
-  private static Table curve(Material material, Planned plan) {
-    List<Column> columns = new ArrayList<>();
-    columns.add(Column.ofNumbers("Least cost", material.money()));
-    columns.add(Column.ofNumbers("Marginal cost", material.moneyPerOutput()));
-    columns.add(Column.ofNumbers("Average cost", material.moneyPerOutput()));
-    for (String input : inputs(material, List.of(plan))) {
-      columns.add(Column.ofNumbers(Phrases.sentence(input), material.unit(input)));
-    }
-    columns.add(Column.ofWords("Inside the records"));
-    List<Row> rows = new ArrayList<>();
-    for (CurvePoint point : thinned(plan.curve())) {
-      rows.add(
-          new Row(
-              Text.of(Numbers.amount(point.target())),
-              cells(material, point, inputs(material, List.of(plan)))));
-    }
-    String unit = material.outputUnit().isEmpty() ? "" : " (" + material.outputUnit() + ")";
-    return new Table(
-        "Cost curve and expansion path, "
-            + Terms.technology(plan.technology())
-            + ": "
-            + plan.question(),
-        "Target" + unit,
-        columns,
-        List.of(Group.of(rows)),
-        rows.size() < plan.curve().size()
-            ? List.of(
-                Text.of(
-                    Numbers.count(rows.size())
-                        + " of "
-                        + Phrases.count(plan.curve().size(), "point")
-                        + "; the findings file has them all."))
-            : List.of());
-  }
-
-  private static List<Cell> cells(Material material, CurvePoint point, List<String> inputs) {
-    List<Cell> cells = new ArrayList<>();
-    cells.add(Cells.figure(point.cost()));
-    cells.add(Cells.figure(point.marginalCost()));
-    cells.add(Cells.figure(point.averageCost()));
-    for (String input : inputs) {
-      Double quantity = point.mix().get(input);
-      cells.add(quantity == null ? Cell.none() : Cell.of(Numbers.significant(quantity, 4)));
-    }
-    cells.add(Cell.of(point.inside() ? "yes" : "outside"));
-    return cells;
-  }
-
-  /** Evenly chosen points, the first and the last among them. */
-  static List<CurvePoint> thinned(List<CurvePoint> curve) {
-    if (curve.size() <= CURVE_ROWS) {
-      return curve;
-    }
-    List<CurvePoint> chosen = new ArrayList<>();
-    for (int i = 0; i < CURVE_ROWS; i++) {
-      chosen.add(curve.get((int) Math.round(i * (curve.size() - 1.0) / (CURVE_ROWS - 1))));
-    }
-    return chosen;
   }
 }

@@ -58,6 +58,7 @@ public final class ReportContent {
     SpecificationSection.of(material).ifPresent(sections::add);
     MatrixSection.of(material).ifPresent(sections::add);
     RobustnessSection.of(material).ifPresent(sections::add);
+    PlanAnnexSection.of(material).ifPresent(sections::add);
     sections.add(MethodSection.of(material));
     sections.add(RunSection.of(material));
     String title = findings.run().title().isBlank() ? "Study" : findings.run().title();

@@ -87,8 +87,8 @@ final class Terms {
       case "not-converged" ->
           "The search did not end at an optimum, and no figure is printed for it.";
       case "rank-deficient" ->
-          "Columns are collinear, so that the parameters are not identified, and no figure is printed"
-              + " for it.";
+          "Columns are collinear, so that the parameters are not identified, and no figure is"
+              + " printed for it.";
       default -> "";
     };
   }
@@ -97,10 +97,12 @@ final class Terms {
   static String status(String status) {
     return switch (status) {
       case "solved" -> "solved";
-      case "corner" -> "at a corner";
+      case "corner" -> "at a limit";
       case "irregular" -> "no plan: irregular technology";
       case "outside-records" -> "outside the records";
       case "infeasible" -> "no plan: out of reach";
+      case "unbounded" -> "no plan: more is always better";
+      case "nothing" -> "no plan: nothing is best";
       default -> status;
     };
   }
@@ -110,21 +112,26 @@ final class Terms {
     return switch (status) {
       case "solved" -> "Every first-order condition is met, inside the ranges of the records.";
       case "corner" ->
-          "The least-cost mix lies at a corner: an input is not used, or a limit binds, so that the"
-              + " first-order condition of that input does not hold as an equation.";
+          "The best mix lies at a limit: an input is not used or held, a capacity, contract or"
+              + " price band binds, or a plant runs full; what the limit is worth stands beneath.";
       case "irregular" ->
           "The technology is not regular where the answer would lie, so that no mix is given.";
+      case "unbounded" ->
+          "Profit grows with output without end, because returns do not decrease: prices alone do"
+              + " not determine an output. State a target, a budget or limits.";
+      case "nothing" ->
+          "At these prices no output covers its cost, so that it is best to make none.";
       case "outside-records" ->
-          "The mix or the target lies outside the ranges of the records: the figures rest on the form"
-              + " of the technology and not on anything seen.";
+          "The mix or the target lies outside the ranges of the records: the figures rest on the"
+              + " form of the technology and not on anything seen.";
       case "infeasible" -> "No mix within the limits reaches the target.";
       default -> "";
     };
   }
 
-  /** Whether a status needs a warning beside the result. */
+  /** Whether a status needs a warning beside the result; a plan at a limit is as good as any. */
   static boolean cautionary(String status) {
-    return !status.equals("solved");
+    return !status.equals("solved") && !status.equals("corner");
   }
 
   /** What was done about lasting differences between plants. */

@@ -14,6 +14,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.function.Function;
+import java.util.function.Predicate;
 
 /** What the answer of a cost function says beside mix and cost. */
 final class CostPlanDetail {
@@ -33,11 +34,13 @@ final class CostPlanDetail {
   private final CostTask task;
   private final Settled settled;
   private final Figures figures;
+  private final Predicate<double[]> inside;
 
-  CostPlanDetail(CostTask task, Settled settled, Figures figures) {
+  CostPlanDetail(CostTask task, Settled settled, Figures figures, Predicate<double[]> inside) {
     this.task = task;
     this.settled = settled;
     this.figures = figures;
+    this.inside = inside;
   }
 
   /** The question's name, and nothing else. */
@@ -67,7 +70,9 @@ final class CostPlanDetail {
         none.changes(),
         costElasticities,
         demandElasticities,
-        none.across());
+        none.across(),
+        none.withoutPlan(),
+        none.nearest());
   }
 
   PlanDetail detail(LeastCostQuestion question, double[] targets, CostFunction function) {
@@ -230,7 +235,14 @@ final class CostPlanDetail {
     for (int k = 0; k < answered.size(); k++) {
       List<Figure> row = all.subList(4 * k, 4 * k + 4);
       points.add(
-          new EnvelopePoint(answered.get(k), row.get(0), row.get(1), row.get(2), row.get(3)));
+          new EnvelopePoint(
+              answered.get(k),
+              row.get(0),
+              row.get(1),
+              row.get(2),
+              row.get(3),
+              inside.test(held.get(k).at()),
+              inside.test(free.get(k).at())));
     }
     return points;
   }

@@ -94,7 +94,8 @@ final class CostPlans {
             : List.of();
     PlanDetail detail =
         answered
-            ? new CostPlanDetail(put.task(), settled, put::figures)
+            ? new CostPlanDetail(
+                    put.task(), settled, put::figures, v -> circumstances.outside(v).isEmpty())
                 .detail(question, CurveSpan.targets(question, question.target()), put.function())
             : CostPlanDetail.bare(question);
     return new Planned(

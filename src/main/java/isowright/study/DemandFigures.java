@@ -12,6 +12,7 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.function.Predicate;
 
 /**
  * How the mix of a plan answers to prices at the same target: demand against each price, and
@@ -36,15 +37,15 @@ final class DemandFigures {
   }
 
   /** Demand against the price of each input. */
-  List<Demand> demands() {
+  List<Demand> demands(Predicate<double[]> inside) {
     List<Demand> demands = new ArrayList<>();
     for (int j = 0; j < n; j++) {
-      demands.add(demand(j));
+      demands.add(demand(j, inside));
     }
     return demands;
   }
 
-  private Demand demand(int j) {
+  private Demand demand(int j, Predicate<double[]> inside) {
     Question question = answer.settled();
     List<Question> asked = new ArrayList<>();
     List<Plan> plans = new ArrayList<>();
@@ -64,7 +65,11 @@ final class DemandFigures {
     for (int k = 0; k < plans.size(); k++) {
       List<Figure> row = all.subList(k * (n + 1), (k + 1) * (n + 1));
       points.add(
-          new DemandPoint(asked.get(k).price(j), answer.named(row.subList(0, n)), row.get(n)));
+          new DemandPoint(
+              asked.get(k).price(j),
+              answer.named(row.subList(0, n)),
+              row.get(n),
+              inside.test(plans.get(k).mix())));
     }
     return new Demand(answer.inputs().get(j), points);
   }

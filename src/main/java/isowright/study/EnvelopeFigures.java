@@ -30,7 +30,7 @@ final class EnvelopeFigures {
   }
 
   /** The envelope; none where nothing is held and no short run is asked. */
-  Optional<Envelope> envelope(double[] targets) {
+  Optional<Envelope> envelope(double[] targets, Predicate<double[]> inside) {
     Map<String, Double> held = held();
     if (held.isEmpty()) {
       return Optional.empty();
@@ -47,7 +47,7 @@ final class EnvelopeFigures {
               : longRun.limiting(i, limit.low(), limit.high());
       shortRun = shortRun.holding(i, entry.getValue());
     }
-    List<EnvelopePoint> points = points(targets, shortRun, longRun);
+    List<EnvelopePoint> points = points(targets, shortRun, longRun, inside);
     return points.isEmpty()
         ? Optional.empty()
         : Optional.of(new Envelope(held, points, touch(held, longRun)));
@@ -67,7 +67,8 @@ final class EnvelopeFigures {
     return held;
   }
 
-  private List<EnvelopePoint> points(double[] targets, Question shortRun, Question longRun) {
+  private List<EnvelopePoint> points(
+      double[] targets, Question shortRun, Question longRun, Predicate<double[]> inside) {
     LeastCost leastCost = Minimiser.of(answer.technology());
     List<Double> answered = new ArrayList<>();
     List<Plan> shortPlans = new ArrayList<>();
@@ -105,7 +106,14 @@ final class EnvelopeFigures {
     for (int k = 0; k < answered.size(); k++) {
       List<Figure> row = all.subList(4 * k, 4 * k + 4);
       points.add(
-          new EnvelopePoint(answered.get(k), row.get(0), row.get(1), row.get(2), row.get(3)));
+          new EnvelopePoint(
+              answered.get(k),
+              row.get(0),
+              row.get(1),
+              row.get(2),
+              row.get(3),
+              inside.test(shortPlans.get(k).mix()),
+              inside.test(longPlans.get(k).mix())));
     }
     return points;
   }

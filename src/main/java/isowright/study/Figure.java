@@ -106,6 +106,16 @@ public record Figure(double value, Optional<Uncertainty> uncertainty) {
             u -> new Uncertainty(u.standardError(), u.low(), u.high(), u.method(), refits)));
   }
 
+  /** The same divided by an exact positive number, such as cost by a target. */
+  Figure per(double units) {
+    return new Figure(
+        value / units,
+        uncertainty.map(
+            u ->
+                new Uncertainty(
+                    u.standardError() / units, u.low() / units, u.high() / units, u.method())));
+  }
+
   /** What it is in refits. */
   public Refits refits() {
     return uncertainty.map(Uncertainty::refits).orElse(Refits.NONE);

@@ -1,5 +1,6 @@
 package isowright.study;
 
+import isowright.study.PlanFindings.CurvePoint;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -25,6 +26,9 @@ import java.util.Optional;
  * @param demandElasticities by input, then by the input whose price moves; empty where there are
  *     none
  * @param across what each plant makes, where the target is split
+ * @param withoutPlan targets of the curve at which there is no plan, and why
+ * @param nearest where the target has no plan because the technology is irregular there: the
+ *     nearest target that has one
  */
 public record PlanDetail(
     String asked,
@@ -41,7 +45,9 @@ public record PlanDetail(
     List<Change> changes,
     Map<String, Figure> costElasticities,
     Map<String, Map<String, Figure>> demandElasticities,
-    List<PlantPart> across) {
+    List<PlantPart> across,
+    List<Unanswered> withoutPlan,
+    Optional<CurvePoint> nearest) {
 
   /** Nothing beside mix and cost. */
   public static final PlanDetail NONE =
@@ -60,7 +66,9 @@ public record PlanDetail(
           List.of(),
           Map.of(),
           Map.of(),
-          List.of());
+          List.of(),
+          List.of(),
+          Optional.empty());
 
   /** Copies the lists. */
   public PlanDetail {
@@ -68,7 +76,17 @@ public record PlanDetail(
     demands = List.copyOf(demands);
     changes = List.copyOf(changes);
     across = List.copyOf(across);
+    withoutPlan = List.copyOf(withoutPlan);
   }
+
+  /**
+   * A target of a curve without a plan.
+   *
+   * @param target the output
+   * @param status {@code irregular} or {@code infeasible}
+   * @param reason why
+   */
+  public record Unanswered(double target, String status, String reason) {}
 
   /**
    * What one more unit of a constraint is worth.
@@ -136,13 +154,28 @@ public record PlanDetail(
    * @param shortRunMarginal its marginal cost
    * @param longRun cost with all inputs free
    * @param longRunMarginal its marginal cost
+   * @param shortRunInside whether the mix of the short run lies inside the records
+   * @param longRunInside whether that of the long run does
    */
   public record EnvelopePoint(
       double target,
       Figure shortRun,
       Figure shortRunMarginal,
       Figure longRun,
-      Figure longRunMarginal) {}
+      Figure longRunMarginal,
+      boolean shortRunInside,
+      boolean longRunInside) {
+
+    /** Average cost with the held inputs. */
+    public Figure shortRunAverage() {
+      return shortRun.per(target);
+    }
+
+    /** Average cost with all inputs free. */
+    public Figure longRunAverage() {
+      return longRun.per(target);
+    }
+  }
 
   /**
    * Where average cost is least.
@@ -182,8 +215,9 @@ public record PlanDetail(
    * @param price money per unit
    * @param mix by input
    * @param cost least cost
+   * @param inside whether the mix lies inside the records
    */
-  public record DemandPoint(double price, Map<String, Figure> mix, Figure cost) {}
+  public record DemandPoint(double price, Map<String, Figure> mix, Figure cost, boolean inside) {}
 
   /**
    * What moving one thing down and up does to the result: cost, or output for a budget, or profit.

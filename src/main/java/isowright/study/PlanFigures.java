@@ -2,24 +2,17 @@ package isowright.study;
 
 import isowright.inference.DeltaMethod.Scale;
 import isowright.inference.Simulation;
-import isowright.leastcost.CostCurve;
-import isowright.leastcost.LeastCost;
-import isowright.leastcost.Minimiser;
-import isowright.leastcost.Plan;
 import isowright.leastcost.PlanOutcome;
 import isowright.leastcost.PlanTask;
 import isowright.leastcost.Planner;
 import isowright.leastcost.Question;
 import isowright.study.Findings.Said;
-import isowright.study.PlanFindings.CurvePoint;
 import isowright.technology.Technology;
 import java.util.ArrayList;
-import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
-import java.util.function.Predicate;
 import java.util.stream.Stream;
 
 /**
@@ -229,79 +222,6 @@ final class PlanFigures {
     System.arraycopy(first, 0, both, 0, first.length);
     System.arraycopy(second, 0, both, first.length, second.length);
     return both;
-  }
-
-  /** The cost curve over those targets that have an answer. */
-  List<CurvePoint> curve(double[] targets, Predicate<double[]> inside) {
-    return answer.smooth() ? smoothCurve(targets, inside) : jumpingCurve(targets, inside);
-  }
-
-  private List<CurvePoint> smoothCurve(double[] targets, Predicate<double[]> inside) {
-    Technology technology = answer.technology();
-    Question question = question(answer.task());
-    CostCurve whole = CostCurve.at(Minimiser.of(technology), question, targets);
-    List<Plan> plans = new ArrayList<>();
-    List<Double> answered = new ArrayList<>();
-    for (int k = 0; k < targets.length; k++) {
-      Plan plan = whole.plans().get(k);
-      if (plan.answered() && Double.isFinite(plan.marginalCost())) {
-        plans.add(plan);
-        answered.add(targets[k]);
-      }
-    }
-    List<Figure> all =
-        answer
-            .figures()
-            .figures(
-                technology,
-                t -> {
-                  LeastCost leastCost = Minimiser.of(t);
-                  double[] rows = new double[plans.size() * 3];
-                  for (int k = 0; k < plans.size(); k++) {
-                    Plan plan = leastCost.plan(question.at(answered.get(k)), plans.get(k));
-                    rows[3 * k] = plan.cost();
-                    rows[3 * k + 1] = plan.marginalCost();
-                    rows[3 * k + 2] = plan.cost() / answered.get(k);
-                  }
-                  return rows;
-                },
-                Scale.LOG);
-    List<CurvePoint> points = new ArrayList<>();
-    for (int k = 0; k < plans.size(); k++) {
-      List<Figure> figures = all.subList(3 * k, 3 * k + 3);
-      points.add(point(answered.get(k), figures, plans.get(k).mix(), inside));
-    }
-    return points;
-  }
-
-  /** With whole units and bands the curve is drawn without intervals. */
-  private List<CurvePoint> jumpingCurve(double[] targets, Predicate<double[]> inside) {
-    Planner planner = Planner.of(answer.technology());
-    List<CurvePoint> points = new ArrayList<>();
-    for (double target : targets) {
-      PlanTask task = answer.task().towards(new isowright.leastcost.Goal.Target(target));
-      PlanOutcome outcome = planner.plan(task);
-      if (outcome.planned() && Double.isFinite(outcome.plan().marginalCost())) {
-        double cost = outcome.plan().cost();
-        List<Figure> figures =
-            List.of(
-                answer.figures().bare(cost),
-                answer.figures().bare(outcome.plan().marginalCost()),
-                answer.figures().bare(cost / target));
-        points.add(point(target, figures, outcome.plan().mix(), inside));
-      }
-    }
-    return points;
-  }
-
-  private CurvePoint point(
-      double target, List<Figure> figures, double[] quantities, Predicate<double[]> inside) {
-    Map<String, Double> mix = new LinkedHashMap<>();
-    for (int i = 0; i < n; i++) {
-      mix.put(answer.inputs().get(i), quantities[i]);
-    }
-    return new CurvePoint(
-        target, figures.get(0), figures.get(1), figures.get(2), mix, inside.test(quantities));
   }
 
   /** The prices and limits of a task with single prices, as a question about any target. */

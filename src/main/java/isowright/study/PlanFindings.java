@@ -115,6 +115,7 @@ public final class PlanFindings {
    * @param averageCost average cost
    * @param mix by input
    * @param inside whether the mix lies within the ranges of the records
+   * @param regular whether the technology, checked again at the mix, is regular there
    */
   public record CurvePoint(
       double target,
@@ -122,7 +123,20 @@ public final class PlanFindings {
       Figure marginalCost,
       Figure averageCost,
       Map<String, Double> mix,
-      boolean inside) {}
+      boolean inside,
+      boolean regular) {
+
+    /** A point at which the technology is regular. */
+    public CurvePoint(
+        double target,
+        Figure cost,
+        Figure marginalCost,
+        Figure averageCost,
+        Map<String, Double> mix,
+        boolean inside) {
+      this(target, cost, marginalCost, averageCost, mix, inside, true);
+    }
+  }
 
   /**
    * A mix seen in the records.

@@ -87,8 +87,13 @@ final class PlanStage {
         Double.isNaN(around) && asked.curve().isEmpty()
             ? new double[0]
             : CurveSpan.targets(asked, around);
-    List<CurvePoint> curve = figures.curve(targets, circumstances::inside);
-    PlanDetail detail = outcome.planned() ? detail(answer, candidate, main, targets) : bare(answer);
+    PlanCurve curves = new PlanCurve(answer, circumstances::inside);
+    PlanCurve.Found curve = curves.over(targets);
+    PlanDetail detail =
+        outcome.planned()
+            ? detail(answer, candidate, main, targets, curve)
+            : bare(answer, curve, curves.nearest(curve.points()));
+    detail.nearest().ifPresent(point -> remarks.add(nearest(point)));
     detail
         .proof()
         .map(Proved::reason)
@@ -119,7 +124,7 @@ final class PlanStage {
         main.averageCost(),
         main.shares(),
         outcome.plan().optimality(),
-        curve,
+        curve.points(),
         outcome.planned() ? isoquant(answer) : List.of(),
         seen(asked),
         remarks,
@@ -166,7 +171,23 @@ final class PlanStage {
     return named;
   }
 
-  private static PlanDetail bare(PlanAnswer answer) {
+  /** What can be said where the technology is irregular at the target. */
+  private Said nearest(CurvePoint point) {
+    Findings.Units units = Settings.units(study);
+    return Said.of(
+        "note",
+        "nearest-regular",
+        "The nearest target at which the technology is regular and has a plan is "
+            + PlanWords.number(point.target(), units.output())
+            + ": least cost "
+            + PlanWords.number(point.cost().value())
+            + " "
+            + units.money()
+            + (point.inside() ? ", a mix inside the records." : ", a mix outside the records."));
+  }
+
+  private static PlanDetail bare(
+      PlanAnswer answer, PlanCurve.Found curve, Optional<CurvePoint> nearest) {
     PlanTerms terms = answer.asked().terms();
     PlanDetail none = PlanDetail.NONE;
     return new PlanDetail(
@@ -184,7 +205,9 @@ final class PlanStage {
         none.changes(),
         none.costElasticities(),
         none.demandElasticities(),
-        none.across());
+        none.across(),
+        curve.without(),
+        nearest);
   }
 
   static String goal(PlanTerms terms) {
@@ -201,7 +224,11 @@ final class PlanStage {
   }
 
   private PlanDetail detail(
-      PlanAnswer answer, Candidate candidate, PlanFigures.Main main, double[] targets) {
+      PlanAnswer answer,
+      Candidate candidate,
+      PlanFigures.Main main,
+      double[] targets,
+      PlanCurve.Found curve) {
     PlanTerms terms = answer.asked().terms();
     Findings.Units units = Settings.units(study);
     List<Worth> worths = new ArrayList<>(new WorthWords(units, answer).all());
@@ -221,13 +248,15 @@ final class PlanStage {
         worths,
         Optional.of(checks(answer)),
         Optional.of(proved(answer.outcome().proof())),
-        plain ? envelope.envelope(targets) : Optional.empty(),
+        plain ? envelope.envelope(targets, circumstances::inside) : Optional.empty(),
         plain ? Optional.of(efficientScale(envelope, targets)) : Optional.empty(),
-        plain ? demand.demands() : List.of(),
+        plain ? demand.demands(circumstances::inside) : List.of(),
         changes.changes(),
         answer.leastCost() ? demand.costElasticities() : Map.of(),
         plain ? demand.demandElasticities() : Map.of(),
-        List.of());
+        List.of(),
+        curve.without(),
+        Optional.empty());
   }
 
   private PlanDetail.EfficientScale efficientScale(EnvelopeFigures envelope, double[] targets) {

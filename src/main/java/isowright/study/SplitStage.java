@@ -195,7 +195,9 @@ final class SplitStage {
         none.changes(),
         none.costElasticities(),
         none.demandElasticities(),
-        main.parts());
+        main.parts(),
+        none.withoutPlan(),
+        none.nearest());
   }
 
   private List<Worth> worths(SplitFigures.Main main) {
@@ -231,7 +233,7 @@ final class SplitStage {
                         plant
                             + " makes all it can: one more "
                             + unit
-                            + " of its capacity would save "
+                            + " of its capacity would lower cost by "
                             + PlanWords.number(value.value())
                             + " "
                             + units.money()

@@ -5,6 +5,8 @@ import isowright.leastcost.Multiplier;
 import isowright.leastcost.PlanOutcome;
 import isowright.leastcost.Planner;
 import isowright.study.PlanDetail.Worth;
+import java.math.BigDecimal;
+import java.math.MathContext;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
@@ -15,6 +17,8 @@ final class WorthWords {
 
   /** A limit worth less than this part of the price of its input is worth nothing. */
   private static final double NOTHING = 1e-9;
+
+  private static final MathContext THREE = new MathContext(3);
 
   private final Findings.Units units;
   private final PlanAnswer answer;
@@ -75,18 +79,12 @@ final class WorthWords {
               ? "More output cannot be had: no input is free to grow."
               : value == 0
                   ? "More output costs nothing at first: what is taken yields more than the target."
-                  : "One more "
-                      + output
-                      + " costs "
-                      + PlanWords.number(value)
-                      + " "
-                      + units.money()
-                      + ".";
+                  : "One more " + output + " costs " + number(value) + " " + units.money() + ".";
       case BUDGET ->
           "One more "
               + (units.money().equals("money") ? "unit of money" : units.money())
               + " yields "
-              + PlanWords.number(value, units.output())
+              + withUnit(value)
               + " more output.";
       default -> limit(multiplier, of);
     };
@@ -96,11 +94,11 @@ final class WorthWords {
     String unit = units.inputs().getOrDefault(of, "");
     String where =
         switch (multiplier.kind()) {
-          case HELD -> "is held at ";
-          case UPPER -> "is at its upper limit of ";
-          case LOWER -> "is at its lower limit of ";
-          case COMMITMENT -> "must be paid for up to ";
-          default -> "stays at the end of a price band, ";
+          case HELD -> "held at ";
+          case UPPER -> "at its upper limit of ";
+          case LOWER -> "at its lower limit of ";
+          case COMMITMENT -> "paid for up to ";
+          default -> "at the end of a price band, ";
         };
     String start = of + " " + where + PlanWords.number(multiplier.bound(), unit) + ": ";
     double value = multiplier.value();
@@ -108,8 +106,8 @@ final class WorthWords {
     if (Math.abs(value) <= NOTHING * answer.settled().price(i)) {
       return start + "it would be so without.";
     }
-    String more = "one more " + (unit.isEmpty() ? "unit" : unit);
-    String less = "one " + (unit.isEmpty() ? "unit" : unit) + " less";
+    String more = "one more " + (unit.isEmpty() ? "unit" : unit) + " of " + of;
+    String less = "one " + (unit.isEmpty() ? "unit" : unit) + " of " + of + " less";
     if (multiplier.kind() == Multiplier.Kind.BAND) {
       more += " at the price before";
     }
@@ -117,16 +115,27 @@ final class WorthWords {
     return start + verb + " would " + gain(Math.abs(value)) + ".";
   }
 
-  /** What is gained: money saved, output added or profit added. */
+  /** An estimate to three digits: more of them its interval does not bear out. */
+  private String number(double value) {
+    return answer.figures().estimated()
+        ? PlanWords.number(new BigDecimal(value).round(THREE).doubleValue())
+        : PlanWords.number(value);
+  }
+
+  private String withUnit(double value) {
+    return units.output().isEmpty() ? number(value) : number(value) + " " + units.output();
+  }
+
+  /** What is gained: cost lowered, output added or profit added. */
   private String gain(double value) {
     return answer
         .asked()
         .terms()
         .goal()
         .fold(
-            target -> "save " + PlanWords.number(value) + " " + units.money(),
-            budget -> "add " + PlanWords.number(value, units.output()) + " of output",
-            profit -> "add " + PlanWords.number(value) + " " + units.money() + " of profit");
+            target -> "lower cost by " + number(value) + " " + units.money(),
+            budget -> "add " + withUnit(value) + " of output",
+            profit -> "add " + number(value) + " " + units.money() + " of profit");
   }
 
   /** What whole units cost, against the same task without them; none where none are asked. */

@@ -27,12 +27,19 @@ final class ChartsFixture {
       }
     }
     charts.add(chart(Kind.ELASTICITIES, ""));
+    if (findings.plans().stream().anyMatch(Planned::answered)) {
+      charts.add(chart(Kind.EFFICIENT_SCALE, ""));
+    }
     for (Planned plan : findings.plans()) {
       if (plan.answered()) {
         String subject = plan.question() + ", " + plan.technology();
         charts.add(chart(Kind.ISOQUANT, subject));
         charts.add(chart(Kind.EXPANSION_PATH, subject));
         charts.add(chart(Kind.COST_CURVES, subject));
+        charts.add(chart(Kind.ENVELOPE, subject));
+        charts.add(chart(Kind.CHANGES, subject));
+        charts.add(chart(Kind.DEMAND, subject));
+        charts.add(chart(Kind.SPLIT, subject));
       }
     }
     findings.reviews().stream()
