@@ -10,6 +10,9 @@ package isowright.charts;
  */
 record Axis(String title, double low, double high, boolean logarithmic) {
 
+  /** The title of an axis of periods. */
+  static final String PERIOD = "period";
+
   /** How much room is left beside the outermost values, as a share of the range. */
   private static final double ROOM = 0.05;
 

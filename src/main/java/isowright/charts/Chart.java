@@ -45,6 +45,14 @@ public record Chart(
     COST_CURVES,
     /** Output elasticities with intervals across technologies. */
     ELASTICITIES,
+    /** Average cost along output, by a cost function, with the rows about it. */
+    AVERAGE_COST,
+    /** Scale economies of all rows in ascending order. */
+    SCALE_ECONOMIES,
+    /** Recorded against fitted cost shares. */
+    COST_SHARES,
+    /** Price elasticities of demand and elasticities of substitution by cost functions. */
+    PRICE_ELASTICITIES,
     /** The sum of squares along a curvature parameter. */
     PROFILE,
     /** Residuals against fitted values. */

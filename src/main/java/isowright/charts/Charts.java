@@ -1,5 +1,6 @@
 package isowright.charts;
 
+import isowright.study.CostFindings;
 import isowright.study.Findings;
 import isowright.study.FitFindings.Fitted;
 import isowright.study.PlanFindings.Planned;
@@ -20,9 +21,9 @@ public final class Charts {
 
   /**
    * The charts that findings give rise to, in the order of a report: elasticities, curvature,
-   * residuals and fit of each technology; isoquant, expansion path and cost curves of each answer;
-   * filed against least cost, the gap in parts, plants in order, allowances; figures across
-   * specifications. What has no answer has no chart.
+   * residuals and fit of each technology; what cost functions say; isoquant, expansion path and
+   * cost curves of each answer; filed against least cost, the gap in parts, plants in order,
+   * allowances; figures across specifications. What has no answer has no chart.
    */
   public static List<Chart> of(Findings findings) {
     Setting setting = Setting.of(findings);
@@ -33,6 +34,12 @@ public final class Charts {
     for (Fitted fit : findings.fits()) {
       ResidualCharts.of(fit, setting).ifPresent(charts::add);
       ActualPredictedCharts.of(fit, setting).ifPresent(charts::add);
+    }
+    charts.addAll(CostElasticityCharts.of(findings, setting));
+    for (CostFindings.Fitted fit : findings.costs().fits()) {
+      AverageCostCharts.of(fit, setting).ifPresent(charts::add);
+      ScaleEconomiesCharts.of(fit, setting).ifPresent(charts::add);
+      CostShareCharts.of(fit, setting).ifPresent(charts::add);
     }
     Set<String> curves = new HashSet<>(); // several targets of a question share them
     for (Planned plan : findings.plans()) {

@@ -25,7 +25,7 @@ final class ElasticityCharts {
   private static final int FRAME_HEIGHT = 92;
 
   /** A row: whose figure it is. */
-  private record Item(String group, String technology, Figure figure) {}
+  record Item(String group, String technology, Figure figure) {}
 
   private ElasticityCharts() {}
 
@@ -192,11 +192,11 @@ final class ElasticityCharts {
     }
   }
 
-  private static boolean covers(Figure figure, double value) {
+  static boolean covers(Figure figure, double value) {
     return figure.uncertainty().filter(u -> u.low() <= value && value <= u.high()).isPresent();
   }
 
-  private static String alternative(String title, List<Item> items) {
+  static String alternative(String title, List<Item> items) {
     List<String> parts = new ArrayList<>();
     for (Item item : items) {
       parts.add(
@@ -208,7 +208,7 @@ final class ElasticityCharts {
     return title + ". " + Words.sentence(String.join("; ", parts)) + ".";
   }
 
-  private static Table table(List<Item> items, String what, Setting setting) {
+  static Table table(List<Item> items, String what, Setting setting) {
     Table table =
         Table.of("input", "technology", what, setting.level() + " low", setting.level() + " high");
     for (Item item : items) {
@@ -221,7 +221,7 @@ final class ElasticityCharts {
     return table;
   }
 
-  private static Plot plot(List<Item> items, String what, double reference) {
+  static Plot plot(List<Item> items, String what, double reference) {
     List<Row> rows = new ArrayList<>();
     List<Optional<Item>> figures = new ArrayList<>();
     String group = "";

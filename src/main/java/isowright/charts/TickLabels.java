@@ -77,6 +77,9 @@ final class TickLabels implements Canvas.Reader {
 
   /** A label as a number, or as a power of ten on an axis of many decades. */
   private static String print(Axis axis, double value, int decimals) {
+    if (axis.title().equals(Axis.PERIOD)) {
+      return Numbers.decimals(value, decimals).replace(",", ""); // years are not set off
+    }
     return axis.logarithmic() && decades(axis) > MANY_DECADES
         ? Numbers.powerOfTen((int) Math.round(Math.log10(value)))
         : Numbers.decimals(value, decimals);

@@ -19,6 +19,9 @@ final class Words {
       case "ces" -> "CES";
       case "nested-ces" -> "nested CES";
       case "generalised-leontief" -> "generalised Leontief";
+      case "cobb-douglas-cost" -> "Cobb-Douglas cost";
+      case "cobb-douglas-cost-squared-output" -> "Cobb-Douglas cost with output squared";
+      case "translog-cost" -> "translog cost";
       default -> name;
     };
   }

@@ -4,6 +4,7 @@ import isowright.charts.Chart;
 import isowright.charts.Charts;
 import isowright.estimation.Unfit;
 import isowright.records.RecordsRefused;
+import isowright.report.CostRowsCsv;
 import isowright.report.Document;
 import isowright.report.FindingsJson;
 import isowright.report.HtmlReport;
@@ -83,6 +84,7 @@ final class RunCommand {
     files.put("report.html", HtmlReport.write(findings, charts).getBytes(StandardCharsets.UTF_8));
     files.put(Publication.MARK, FindingsJson.write(findings));
     files.put("technology.json", TechnologyJson.write(findings));
+    files.putAll(CostRowsCsv.write(findings));
     if (!also.isEmpty()) {
       Document document = ReportContent.of(findings, charts);
       also.forEach(format -> files.put(format.file(), format.write(document)));

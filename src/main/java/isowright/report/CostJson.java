@@ -3,7 +3,9 @@ package isowright.report;
 import isowright.study.CostFindings;
 import isowright.study.CostFindings.AtMean;
 import isowright.study.CostFindings.Fitted;
+import isowright.study.CostRows;
 import java.io.IOException;
+import java.util.Optional;
 
 /** Cost functions, as they stand in the findings file under {@code costs}. */
 final class CostJson {
@@ -83,8 +85,51 @@ final class CostJson {
           file.number("output", row.output());
           file.uncertain("scale economies of row " + row.row(), row.economies());
         });
+    rows(file, fit.rows());
     FitJson.tests(file, fit.tests());
     file.remarks("remarks", fit.remarks());
+  }
+
+  private static void rows(JsonFile file, CostRows rows) throws IOException {
+    CostRows.Told told = rows.told();
+    if (told.known() > 0) {
+      file.line(
+          "scaleCounts",
+          () -> {
+            file.whole("rows", told.known());
+            file.whole("economies", told.economies());
+            file.whole("above", told.above());
+            file.whole("unclear", told.unclear());
+            file.whole("below", told.below());
+          });
+    }
+    if (!rows.average().isEmpty()) {
+      file.list(
+          "averageCost",
+          rows.average(),
+          true,
+          point -> {
+            file.number("output", point.output());
+            file.figure("cost", Optional.of(point.cost()));
+          });
+    }
+    if (!rows.spreads().isEmpty()) {
+      file.list(
+          "overRows",
+          rows.spreads(),
+          true,
+          spread -> {
+            file.text("measure", spread.measure());
+            file.text("of", spread.of());
+            file.number("least", spread.least());
+            file.number("tenth", spread.tenth());
+            file.number("quarter", spread.quarter());
+            file.number("median", spread.median());
+            file.number("threeQuarters", spread.threeQuarters());
+            file.number("nineTenths", spread.nineTenths());
+            file.number("most", spread.most());
+          });
+    }
   }
 
   private static void atMean(JsonFile file, AtMean at) throws IOException {

@@ -7,6 +7,7 @@ import isowright.report.Document.Group;
 import isowright.report.Document.Paragraph;
 import isowright.report.Document.Points;
 import isowright.report.Document.Row;
+import isowright.report.Document.Section;
 import isowright.report.Document.Table;
 import isowright.study.CostFindings.Side;
 import isowright.study.Figure;
@@ -24,16 +25,17 @@ final class CostSidesBlocks {
 
   private CostSidesBlocks() {}
 
-  /** Nothing where the study has one side only. */
-  static void add(Material material, List<Block> blocks) {
+  /** Absent where the study has one side only. */
+  static Optional<Section> section(Material material) {
     List<Side> sides = material.findings().costs().sides();
     if (sides.isEmpty()) {
-      return;
+      return Optional.empty();
     }
-    blocks.add(Paragraph.of(inWords(sides)));
+    List<Block> blocks = new ArrayList<>();
     blocks.add(table(material, sides));
     blocks.add(Paragraph.of("Why the two sides may differ although they describe one technology:"));
     blocks.add(new Points(false, reasons(material)));
+    return Optional.of(new Section(CostsSection.ID + "-sides", "Quantities and costs", blocks));
   }
 
   /** What both sides say together. */

@@ -248,12 +248,12 @@ final class CostTables {
                         + " take errors as alike and independent over rows."))));
   }
 
-  /** Scale economies of the first rows; the findings file holds all. */
+  /** Scale economies row by row, where the rows are few enough to be read. */
   static Optional<Table> scale(List<Fitted> fits, Material material) {
     List<Group> groups = new ArrayList<>();
     for (Fitted fit : fits) {
       List<Row> rows = new ArrayList<>();
-      int shown = Math.min(fit.scale().size(), MOST_ROWS);
+      int shown = fit.scale().size() <= MOST_ROWS ? fit.scale().size() : 0;
       for (var row : fit.scale().subList(0, shown)) {
         rows.add(
             new Row(
@@ -280,9 +280,6 @@ final class CostTables {
                 Column.ofNumbers("Scale economies", "")),
             groups,
             List.of(
-                Text.of(
-                    "Above one: a per cent more output costs less than a per cent more. At most "
-                        + MOST_ROWS
-                        + " rows a technology; the findings file holds them all."))));
+                Text.of("Above one: a per cent more output costs less than a per cent more."))));
   }
 }

@@ -1,5 +1,6 @@
 package isowright.report;
 
+import isowright.charts.Chart;
 import isowright.report.Document.Block;
 import isowright.report.Document.Notice;
 import isowright.report.Document.Paragraph;
@@ -7,9 +8,11 @@ import isowright.report.Document.Section;
 import isowright.report.Document.Weight;
 import isowright.study.CostFindings.AtMean;
 import isowright.study.CostFindings.Fitted;
+import isowright.study.CostRows;
 import isowright.study.Figure;
 import isowright.study.Findings;
 import isowright.study.Findings.Said;
+import isowright.study.FitFindings.Pair;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -37,29 +40,74 @@ final class CostsSection {
       return Optional.empty();
     }
     List<Block> blocks = new ArrayList<>();
+    List<Fitted> usable = fits.stream().filter(Fitted::usable).toList();
+    usable.forEach(fit -> blocks.add(Paragraph.of(inWords(fit, material))));
+    if (!material.findings().costs().sides().isEmpty()) {
+      blocks.add(Paragraph.of(CostSidesBlocks.inWords(material.findings().costs().sides())));
+    }
+    material.findings().costs().remarks().stream()
+        .filter(said -> !said.code().equals("sides-differ"))
+        .forEach(said -> blocks.add(notice("", said)));
+    for (Fitted fit : fits) {
+      fit.remarks().forEach(said -> blocks.add(notice(title(fit.technology()) + ". ", said)));
+    }
     blocks.add(
         Paragraph.of(
             "A cost function says what output costs at given prices when inputs are mixed at least"
                 + " cost; the share of an input in cost is its derivative. Homogeneity in prices is"
                 + " imposed. Plants are taken to face the prices as given and to mix inputs at"
                 + " least cost up to chance."));
-    material.findings().costs().remarks().stream()
-        .filter(said -> !said.code().equals("sides-differ"))
-        .forEach(said -> blocks.add(notice("", said)));
-    for (Fitted fit : fits) {
-      fit.remarks().forEach(said -> blocks.add(notice(title(fit.technology()) + ". ", said)));
-      inWords(fit, material, blocks);
-    }
-    CostSidesBlocks.add(material, blocks);
-    List<Fitted> usable = fits.stream().filter(Fitted::usable).toList();
     if (!usable.isEmpty()) {
-      blocks.add(CostTables.parameters(usable));
-      blocks.add(CostTables.figures(usable));
-      blocks.add(CostTables.regularity(usable));
-      CostTables.tests(usable, material).ifPresent(blocks::add);
-      CostTables.scale(usable, material).ifPresent(blocks::add);
+      scale(usable, material).ifPresent(blocks::add);
+      blocks.add(substitution(usable, material));
+      shares(usable, material).ifPresent(blocks::add);
+      CostSidesBlocks.section(material).ifPresent(blocks::add);
+      blocks.add(trust(usable, material));
     }
     return Optional.of(new Section(ID, "The cost side", blocks));
+  }
+
+  private static Optional<Section> scale(List<Fitted> usable, Material material) {
+    List<Block> blocks = new ArrayList<>();
+    for (Fitted fit : usable) {
+      blocks.addAll(material.drawings(Chart.Kind.AVERAGE_COST, fit.technology()));
+      blocks.addAll(material.drawings(Chart.Kind.SCALE_ECONOMIES, fit.technology()));
+    }
+    CostSpreads.scale(usable, material).ifPresent(blocks::add);
+    CostTables.scale(usable, material).ifPresent(blocks::add);
+    return blocks.isEmpty()
+        ? Optional.empty()
+        : Optional.of(new Section(ID + "-scale", "Scale", blocks));
+  }
+
+  private static Section substitution(List<Fitted> usable, Material material) {
+    List<Block> blocks = new ArrayList<>(material.drawings(Chart.Kind.PRICE_ELASTICITIES));
+    blocks.add(CostTables.figures(usable));
+    CostSpreads.elasticities(usable).ifPresent(blocks::add);
+    blocks.add(
+        Paragraph.of(
+            "The elasticities of every row, each with its interval, stand beside this report in "
+                + Phrases.list(usable.stream().map(CostRowsCsv::name).toList())
+                + "."));
+    return new Section(ID + "-substitution", "Substitution and demand", blocks);
+  }
+
+  private static Optional<Section> shares(List<Fitted> usable, Material material) {
+    List<Block> blocks = new ArrayList<>();
+    for (Fitted fit : usable) {
+      blocks.addAll(material.drawings(Chart.Kind.COST_SHARES, fit.technology()));
+    }
+    return blocks.isEmpty()
+        ? Optional.empty()
+        : Optional.of(new Section(ID + "-shares", "Recorded and fitted shares", blocks));
+  }
+
+  private static Section trust(List<Fitted> usable, Material material) {
+    List<Block> blocks = new ArrayList<>();
+    blocks.add(CostTables.regularity(usable));
+    CostTables.tests(usable, material).ifPresent(blocks::add);
+    blocks.add(CostTables.parameters(usable));
+    return new Section(ID + "-trust", "Regularity, tests, parameters", blocks);
   }
 
   private static String title(String word) {
@@ -146,32 +194,75 @@ final class CostsSection {
     return new Notice(weight, Text.strong(who).then(said.message()));
   }
 
-  private static void inWords(Fitted fit, Material material, List<Block> blocks) {
-    String name = title(fit.technology());
-    fit.at()
-        .flatMap(AtMean::scaleEconomies)
-        .ifPresent(
-            figure ->
-                blocks.add(
-                    Paragraph.of(
-                        name
-                            + ": "
-                            + economies(figure)
-                            + " ("
-                            + Numbers.valueAndInterval(figure)
-                            + " at the mean of the records).")));
+  /** What one cost function answers, in a paragraph. */
+  private static String inWords(Fitted fit, Material material) {
+    StringBuilder words = new StringBuilder(title(fit.technology())).append(": ");
+    Optional<Figure> scale = fit.at().flatMap(AtMean::scaleEconomies);
+    scale.ifPresent(
+        figure ->
+            words
+                .append(economies(figure))
+                .append(" (scale economies ")
+                .append(Numbers.valueAndInterval(figure))
+                .append(" at the mean of the records). "));
     fit.efficient()
         .ifPresent(
             efficient ->
-                blocks.add(
-                    Paragraph.of(
-                        name
-                            + ": average cost is least at an output of "
-                            + Numbers.unit(
-                                Numbers.valueAndInterval(efficient.output()),
-                                material.findings().units().output())
-                            + ", other things at their means; "
-                            + Numbers.percent(efficient.below())
-                            + " of the rows produce less.")));
+                words
+                    .append("Average cost is least at an output of ")
+                    .append(
+                        Numbers.unit(
+                            Numbers.valueAndInterval(efficient.output()),
+                            material.findings().units().output()))
+                    .append(", other things at their means; ")
+                    .append(Numbers.percent(efficient.below()))
+                    .append(" of the rows produce less. "));
+    CostRows.Told told = fit.rows().told();
+    if (told.known() > 0 && fit.efficient().isPresent()) {
+      words
+          .append("In ")
+          .append(Numbers.count(told.above()))
+          .append(" of ")
+          .append(Phrases.count(told.known(), "row"))
+          .append(" the whole interval of scale economies lies above one, in ")
+          .append(Numbers.count(told.below()))
+          .append(" below; in ")
+          .append(Numbers.count(told.unclear()))
+          .append(" it cannot be told. ");
+    }
+    words.append(scale.isPresent() ? "The" : "the").append(demand(fit));
+    fit.at().flatMap(AtMean::technicalChange).ifPresent(figure -> words.append(change(figure)));
+    return words.toString();
+  }
+
+  /** Which inputs answer to their own price, and which go together. */
+  private static String demand(Fitted fit) {
+    List<Pair> own =
+        fit.at().map(AtMean::demand).orElse(List.of()).stream()
+            .filter(pair -> pair.first().equals(pair.second()))
+            .toList();
+    List<Pair> complements =
+        fit.at().map(AtMean::substitution).orElse(List.of()).stream()
+            .filter(pair -> pair.measure().equals("allen") && pair.figure().value() < 0)
+            .toList();
+    return " own price elasticity of demand is "
+        + Phrases.list(
+            own.stream()
+                .map(pair -> Numbers.value(pair.figure()) + " for " + pair.first())
+                .toList())
+        + (complements.isEmpty()
+            ? "; all inputs are substitutes."
+            : "; complements, the demand for which falls together, are "
+                + Phrases.list(
+                    complements.stream()
+                        .map(pair -> pair.first() + " and " + pair.second())
+                        .toList())
+                + ".");
+  }
+
+  private static String change(Figure figure) {
+    return " Cost falls by "
+        + Numbers.valueAndInterval(figure)
+        + " of itself a period at unchanged prices and output.";
   }
 }

@@ -173,6 +173,11 @@ final class CostFigures {
     return pairs;
   }
 
+  /** What the cost function says over the rows. */
+  CostRows rows(Panel panel) {
+    return new CostRowFigures(data, fit, panel, mean).rows(propagation);
+  }
+
   /** Scale economies of every row, thinned where there are many. */
   List<RowScale> scale(Panel panel) {
     List<String> outputs = data.arguments().outputs();

@@ -42,6 +42,7 @@ public record CostFindings(List<Fitted> fits, List<Said> remarks, List<Side> sid
    * @param efficient the output at which average cost is least, at mean prices
    * @param regularity at how many rows it is a cost function
    * @param tests the tests
+   * @param rows what it says over the records
    * @param remarks what must be said of this fit
    */
   public record Fitted(
@@ -55,6 +56,7 @@ public record CostFindings(List<Fitted> fits, List<Said> remarks, List<Side> sid
       Optional<Efficient> efficient,
       Optional<Regular> regularity,
       List<Tested> tests,
+      CostRows rows,
       List<Said> remarks) {
 
     /** Whether later stages may use the numbers. */

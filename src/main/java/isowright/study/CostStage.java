@@ -61,7 +61,8 @@ final class CostStage {
               + data.rows()
               + " rows (first in row "
               + missing.get(0)
-              + "): enter it, set these rows aside, or fit the cost equation alone (system: false).");
+              + "): enter it, set these rows aside, or fit the cost equation alone (system:"
+              + " false).");
     }
     List<String> still = made.withoutVariation(data);
     String last = data.arguments().inputs().get(data.arguments().inputs().size() - 1);
@@ -71,8 +72,8 @@ final class CostStage {
               + input
               + " over that of "
               + last
-              + " is the same in every row, so that nothing can be learnt of their substitution: give"
-              + " records in which they move apart, or leave one of them out.");
+              + " is the same in every row, so that nothing can be learnt of their substitution:"
+              + " give records in which they move apart, or leave one of them out.");
     }
     if (!reasons.isEmpty()) {
       throw new Unfit(reasons);
@@ -126,6 +127,7 @@ final class CostStage {
           Optional.empty(),
           Optional.empty(),
           List.of(),
+          CostRows.NONE,
           remarks);
     }
     usable.add(fit);
@@ -143,6 +145,7 @@ final class CostStage {
         figures.efficient(),
         Optional.of(regular),
         CostHypotheses.of(data, fit).stream().map(CostStage::tested).toList(),
+        figures.rows(panel),
         remarks);
   }
 
@@ -178,8 +181,8 @@ final class CostStage {
               "not-converged",
               "The equations did not settle after "
                   + fit.system().iterations()
-                  + " renewals: the errors of one equation may be determined by the others. Check the"
-                  + " shares, or fit fewer equations."));
+                  + " renewals: the errors of one equation may be determined by the others. Check"
+                  + " the shares, or fit fewer equations."));
       return "not-converged";
     }
     return "estimated";
@@ -194,8 +197,9 @@ final class CostStage {
               "depends-on-share-left-out",
               String.format(
                   Locale.ROOT,
-                  "Estimates depend on which share equation is left out, by up to %.2g: where shares"
-                      + " add up to one they would not. Correct the shares that do not add up.",
+                  "Estimates depend on which share equation is left out, by up to %.2g: where"
+                      + " shares add up to one they would not. Correct the shares that do not add"
+                      + " up.",
                   dependence)));
     }
     if (regular.both() < regular.rows()) {
@@ -205,8 +209,8 @@ final class CostStage {
               "irregular-rows",
               String.format(
                   Locale.ROOT,
-                  "Not a cost function at %d of %d rows (rising in prices and outputs at %d, concave"
-                      + " in prices at %d): elasticities and plans there are no economics.",
+                  "Not a cost function at %d of %d rows (rising in prices and outputs at %d,"
+                      + " concave in prices at %d): elasticities and plans there are no economics.",
                   regular.rows() - regular.both(),
                   regular.rows(),
                   regular.monotone(),

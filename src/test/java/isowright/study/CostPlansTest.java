@@ -50,6 +50,10 @@ class CostPlansTest {
   }
 
   private Planned only(String effects, String question) throws Exception {
+    return findings(effects, question).plans().get(0);
+  }
+
+  private Findings findings(String effects, String question) throws Exception {
     Random random = new Random(3);
     StringBuilder csv = new StringBuilder("works,year,cost,wage,clay,bricks,kiln\n");
     for (int plant = 0; plant < 9; plant++) {
@@ -76,7 +80,7 @@ class CostPlansTest {
     Path file =
         Files.writeString(
             folder.resolve("study.yaml"), String.format(Locale.ROOT, STUDY, effects, question));
-    return Pipeline.run(StudyFile.read(file), Progress.SILENT).plans().get(0);
+    return Pipeline.run(StudyFile.read(file), Progress.SILENT);
   }
 
   /** Held without a price: variable cost, said to be so; figures written to twelve digits. */
@@ -150,6 +154,30 @@ class CostPlansTest {
     }
     double touch = 80 / Math.pow(variable(20, 5, 1, 1) / 100, 2.0 / 3);
     assertThat(envelope.touch().orElseThrow().value()).isCloseTo(touch, within(1e-7 * touch));
+  }
+
+  /** Rows carried to the same prices: average variable cost of one plant moves with Q^0.5 alone. */
+  @Test
+  void averageCostAtMeanPrices() throws Exception {
+    CostRows rows =
+        findings("within", "{name: Now, target: 400, prices: {labour: 20, materials: 5}}")
+            .costs()
+            .fits()
+            .get(0)
+            .rows();
+    for (int k = 1; k < 6; k++) {
+      CostRows.Row one = rows.rows().get(0);
+      CostRows.Row other = rows.rows().get(k);
+      assertThat(other.plant()).isEqualTo(one.plant());
+      double ratio = Math.sqrt(other.output() / one.output());
+      // figures written to twelve digits
+      assertThat(other.averageCost() / one.averageCost()).isCloseTo(ratio, within(1e-9));
+    }
+    // the typical plant is the fifth, so that its rows lie on the curve at the same power
+    CostRows.Row typical = rows.rows().get(4 * 6);
+    CostRows.AveragePoint point = rows.average().get(0);
+    assertThat(typical.averageCost() / point.cost().value())
+        .isCloseTo(Math.sqrt(typical.output() / point.output()), within(1e-9));
   }
 
   /** Neither held nor priced: at the mean of the period, and said so. */

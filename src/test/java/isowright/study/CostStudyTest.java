@@ -35,21 +35,21 @@ class CostStudyTest {
             .mapToObj(Integer::toString)
             .collect(Collectors.joining(","));
     return """
-        title: Electricity companies, 1970
-        records:
-          file: electricity-1970.csv
-          plant: observation
-          keep: {without-plants: [%s]}
-        costs:
-          total: cost
-          outputs: {power: {column: output}}
-          inputs:
-            capital: {price: capital, share: capitalshare}
-            labour: {price: labor, share: laborshare}
-            fuel: {price: fuel, share: fuelshare}
-        %s
-        estimation: {standard-errors: classical, scaling: none}
-        """
+    title: Electricity companies, 1970
+    records:
+      file: electricity-1970.csv
+      plant: observation
+      keep: {without-plants: [%s]}
+    costs:
+      total: cost
+      outputs: {power: {column: output}}
+      inputs:
+        capital: {price: capital, share: capitalshare}
+        labour: {price: labor, share: laborshare}
+        fuel: {price: fuel, share: fuelshare}
+    %s
+    estimation: {standard-errors: classical, scaling: none}
+    """
         .formatted(aggregates, more);
   }
 
@@ -84,6 +84,14 @@ class CostStudyTest {
     assertThat(fit.how().equations()).isEqualTo("system");
     assertThat(fit.scale()).hasSize(123);
     assertThat(fit.scale()).filteredOn(row -> row.economies().value() > 1).hasSize(116);
+    CostRows.Told told = fit.rows().told();
+    assertThat(told.economies()).isEqualTo(116);
+    assertThat(told.above() + told.unclear() + told.below()).isEqualTo(123);
+    CostRows.Spread spread = fit.rows().spreads().get(0);
+    assertThat(spread.measure()).isEqualTo("scale");
+    // seven of 123 lie below one, so the tenth percentile of rows does not
+    assertThat(spread.least()).isLessThan(1);
+    assertThat(spread.tenth()).isGreaterThan(1);
     Said slip = findings.costs().remarks().get(0);
     assertThat(slip.code()).isEqualTo("shares-not-one");
     assertThat(slip.rows()).contains(63); // the headings are row 1
@@ -102,6 +110,34 @@ class CostStudyTest {
     assertThat(findings.records().orElseThrow().columns())
         .extracting(Findings.Described::role)
         .contains("cost", "price of energy");
+  }
+
+  /** The same source, 1959: elasticities of a row, printed to three and four decimals. */
+  @Test
+  void elasticitiesOfAYear() throws Exception {
+    CostRows rows = run("us-manufacturing-klem.csv", MANUFACTURING).costs().fits().get(0).rows();
+    CostRows.Row year =
+        rows.rows().stream().filter(row -> row.period().equals("1959")).findFirst().orElseThrow();
+    assertThat(year.fitted().values().stream().mapToDouble(s -> s).toArray())
+        .containsExactly(new double[] {.0564, .2745, .0439, .6252}, within(.5e-4));
+    assertThat(elasticity(year, "allen", "capital", "capital")).isCloseTo(-7.462, within(.5e-3));
+    assertThat(elasticity(year, "allen", "capital", "energy")).isCloseTo(-3.313, within(.5e-3));
+    assertThat(elasticity(year, "allen", "labour", "materials")).isCloseTo(.588, within(.5e-3));
+    assertThat(elasticity(year, "demand", "capital", "capital")).isCloseTo(-.4208, within(.5e-4));
+    assertThat(elasticity(year, "demand", "labour", "labour")).isCloseTo(-.4507, within(.5e-4));
+    assertThat(year.concave()).isTrue();
+    assertThat(rows.average()).isEmpty();
+    assertThat(rows.spreads()).extracting(CostRows.Spread::measure).doesNotContain("scale");
+  }
+
+  private static double elasticity(CostRows.Row row, String measure, String first, String second) {
+    return row.elasticities().stream()
+        .filter(pair -> pair.measure().equals(measure))
+        .filter(pair -> pair.first().equals(first) && pair.second().equals(second))
+        .findFirst()
+        .orElseThrow()
+        .figure()
+        .value();
   }
 
   private static final String MANUFACTURING =
