@@ -7,8 +7,13 @@ import java.util.Arrays;
 import java.util.List;
 
 /**
- * What besides inputs moves output in a panel: controls, technical change, or a constant for each
- * period.
+ * What besides inputs moves output in a panel: controls, that an input is not used at all,
+ * technical change, or a constant for each period.
+ *
+ * <p>Where the records keep zeros, an input x_i that some rows do not use enters as ln max(x_i,
+ * D_i), D_i being one where x_i is zero, and D_i is a regressor of its own: Battese, G. E. (1997),
+ * <i>Journal of Agricultural Economics</i> 48, 250–252. With inputs divided by a base, it is the
+ * quotient that takes the place of x_i. Tested in {@code ZerosTest}.
  *
  * <p>With t = period − first period of the records and z_i the logged, divided inputs, what time
  * adds to ln Q is τ t (trend), τ t + ½ τ₂ t² (quadratic trend), τ t + ½ τ₂ t² + Σ_i τ_i z_i t
@@ -21,6 +26,9 @@ final class Circumstances {
   /** The parameter of t. */
   static final String TREND = "trend";
 
+  /** Begins the parameter of D_i, which is one where input i is not used. */
+  static final String ZERO = "zero:";
+
   /** The parameter of ½ t². */
   static final String TREND_SQUARED = "trend*trend";
 
@@ -28,13 +36,19 @@ final class Circumstances {
   private final Specification.Time time;
   private final List<String> names;
   private final double[] controlMeans;
+  private final List<Integer> unused;
 
   private Circumstances(
-      Panel panel, Specification.Time time, List<String> names, double[] controlMeans) {
+      Panel panel,
+      Specification.Time time,
+      List<String> names,
+      double[] controlMeans,
+      List<Integer> unused) {
     this.panel = panel;
     this.time = time;
     this.names = names;
     this.controlMeans = controlMeans;
+    this.unused = List.copyOf(unused);
   }
 
   static Circumstances of(Panel panel, Specification.Time time) {
@@ -49,6 +63,13 @@ final class Circumstances {
       }
       means[c] = sum / control.size();
     }
+    List<Integer> unused = new ArrayList<>();
+    for (int i = 0; i < panel.quantities().size(); i++) {
+      if (panel.zeros(i) > 0) {
+        unused.add(i);
+        names.add(ZERO + panel.inputs().get(i));
+      }
+    }
     if (time.trending()) {
       names.add(TREND);
     }
@@ -61,7 +82,7 @@ final class Circumstances {
     if (time.byPeriod()) {
       panel.periods().stream().skip(1).forEach(period -> names.add("period:" + period));
     }
-    return new Circumstances(panel, time, List.copyOf(names), means);
+    return new Circumstances(panel, time, List.copyOf(names), means, unused);
   }
 
   /** The parameter of z_i t. */
@@ -87,6 +108,12 @@ final class Circumstances {
     int k = offset;
     for (Column control : panel.controls()) {
       control.copy(from, to, into[k++]);
+    }
+    for (int input : unused) {
+      double[] dummy = into[k++];
+      for (int r = from; r < to; r++) {
+        dummy[r - from] = panel.zero(input, r) ? 1 : 0;
+      }
     }
     if (time.byPeriod()) {
       periods(from, to, into, k);
@@ -131,11 +158,11 @@ final class Circumstances {
 
   /**
    * What a unit of each parameter adds to ln Q at a period whatever the mix, controls at their
-   * means over the records; zero for parameters that work through an input.
+   * means over the records and every input in use; zero for parameters that work through an input.
    */
   double[] at(int period) {
     double[] values = Arrays.copyOf(controlMeans, names.size());
-    int k = controlMeans.length;
+    int k = controlMeans.length + unused.size();
     if (time.byPeriod() && period > 0) {
       values[k + period - 1] = 1;
     } else if (time.trending()) {
@@ -150,7 +177,9 @@ final class Circumstances {
 
   /** The place of the parameter through which time works on input i; −1 where there is none. */
   int bias(int input) {
-    return time == Specification.Time.BIASED_TREND ? controlMeans.length + 2 + input : -1;
+    return time == Specification.Time.BIASED_TREND
+        ? controlMeans.length + unused.size() + 2 + input
+        : -1;
   }
 
   /** t: the distance of a period from the first one, in the unit of the periods. */

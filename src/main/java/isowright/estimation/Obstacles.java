@@ -28,6 +28,7 @@ final class Obstacles {
   static List<String> of(Panel panel, Specification specification) {
     Obstacles obstacles = new Obstacles(panel, specification);
     obstacles.form();
+    obstacles.zeros();
     obstacles.estimator();
     obstacles.plants();
     obstacles.time();
@@ -61,8 +62,41 @@ final class Obstacles {
       found.add(
           "The form "
               + form.name()
-              + " is not linear in its parameters, and a biased trend is defined here for forms that"
-              + " are. Set time to trend or quadratic-trend, or ask for cobb-douglas or translog.");
+              + " is not linear in its parameters, and a biased trend is defined here for forms"
+              + " that are. Set time to trend or quadratic-trend, or ask for cobb-douglas or"
+              + " translog.");
+    }
+  }
+
+  private void zeros() {
+    List<String> unused = new ArrayList<>();
+    for (int i = 0; i < panel.inputs().size(); i++) {
+      if (panel.zeros(i) > 0) {
+        unused.add(panel.inputs().get(i));
+      }
+    }
+    if (unused.isEmpty()) {
+      return;
+    }
+    Form form = specification.form();
+    boolean logs =
+        form instanceof LinearForm linear && linear.firstOrder(panel.inputs().size()).length > 0;
+    if (!logs) {
+      found.add(
+          "The form "
+              + form.name()
+              + " says itself what is made without "
+              + String.join(" or ", unused)
+              + ", and a dummy in its place, which takes the part of a log, would contradict it."
+              + " Set zeros to drop, or ask for cobb-douglas or translog.");
+    }
+    if (!(specification.estimator() instanceof Estimator.LeastSquares)) {
+      found.add(
+          "Rows without "
+              + String.join(" or ", unused)
+              + " are kept by a dummy, which is carried out for least squares and not for "
+              + specification.estimator().word()
+              + ". Set zeros to drop.");
     }
   }
 
@@ -165,8 +199,8 @@ final class Obstacles {
     found.add(
         "Differences need a plant with rows in two successive periods; no row comes one step (the"
             + " least distance between periods of the records) after another row of its plant, and"
-            + " no difference is taken across a gap. Set plant-effects to within, or add the missing"
-            + " periods.");
+            + " no difference is taken across a gap. Set plant-effects to within, or add the"
+            + " missing periods.");
   }
 
   private static String needs(PlantEffects effects) {
@@ -195,7 +229,8 @@ final class Obstacles {
     if (effects == PlantEffects.BETWEEN) {
       found.add(
           "The regression between plants uses the mean of each plant over its periods, in which no"
-              + " change over time is left. Set time to none, or plant-effects to random or within.");
+              + " change over time is left. Set time to none, or plant-effects to random or"
+              + " within.");
     }
     if (periods < 2) {
       found.add(

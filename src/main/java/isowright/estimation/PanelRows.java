@@ -14,11 +14,13 @@ final class PanelRows {
   private final Panel panel;
   private final double[] logBase;
   private final Groups groups;
+  private final boolean zeros;
 
   private PanelRows(Panel panel, double[] logBase, Groups groups) {
     this.panel = panel;
     this.logBase = logBase;
     this.groups = groups;
+    this.zeros = panel.roles().keepsZeros();
   }
 
   static PanelRows of(Panel panel, double[] base) {
@@ -81,8 +83,16 @@ final class PanelRows {
       for (int r = 0; r < column.length; r++) {
         column[r] -= shift;
       }
+      for (int r = 0; zeros && r < column.length; r++) {
+        column[r] = panel.zero(i, from + r) ? 0 : column[r];
+      }
     }
     return z;
+  }
+
+  /** The log of a quantity, undivided; of none, that of the base, as in {@link #logInputs}. */
+  double logQuantity(int input, int row) {
+    return panel.zero(input, row) ? logBase[input] : panel.logQuantities().get(input).get(row);
   }
 
   /** Copies a block of logged output. */

@@ -92,7 +92,7 @@ final class RowLevels {
     double[] levels = new double[to - from];
     for (int row = from; row < to; row++) {
       for (int i = 0; i < logs.length; i++) {
-        logs[i] = panel.logQuantities().get(i).get(row);
+        logs[i] = rows.logQuantity(i, row);
       }
       double explained = technology.logOutput(logs) - reported[0];
       for (int c = 0; c < columns.length; c++) {

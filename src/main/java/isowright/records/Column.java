@@ -46,6 +46,36 @@ public final class Column {
     return values.clone();
   }
 
+  /** The natural logs of this column, with the mean of the others in the place of those of zero. */
+  Column logsWithZeros() {
+    double[] logs = logs().toArray();
+    double sum = 0;
+    int positive = 0;
+    for (int r = 0; r < logs.length; r++) {
+      if (values[r] > 0) {
+        sum += logs[r];
+        positive++;
+      }
+    }
+    for (int r = 0; r < logs.length; r++) {
+      if (values[r] == 0) {
+        logs[r] = sum / positive;
+      }
+    }
+    return new Column("ln " + name, logs);
+  }
+
+  /** The same column without its zeros: NaN in their place. */
+  Column positive() {
+    double[] positive = values.clone();
+    for (int r = 0; r < positive.length; r++) {
+      if (positive[r] == 0) {
+        positive[r] = Double.NaN;
+      }
+    }
+    return new Column(name, positive);
+  }
+
   /** The natural logs of this column (NaN where a value is not positive). */
   public Column logs() {
     double[] logs = new double[values.length];

@@ -44,6 +44,7 @@ final class Conclusion {
     if (rules.store().rows() == 0) {
       throw nothingLeft(place, rules);
     }
+    nothingUsed(place, roles, slots, rules.store());
     List<Remark> all = new ArrayList<>(remarks);
     Optional<Double> base = money.baseDeflator(place, slots, rules.deflator(), all);
     all.addAll(rules.setAside().remarks(place));
@@ -131,6 +132,33 @@ final class Conclusion {
         "no-usable-rows",
         "%s: none of %s can be used: %s. Correct the file, or the roles and records.keep in the study file."
             .formatted(place.words(), Shown.count(rules.rows(), "row"), reasons));
+  }
+
+  /** An input of which no row uses anything explains nothing. */
+  private static void nothingUsed(Place place, Roles roles, Slots slots, RowStore store)
+      throws RecordsRefused {
+    List<Remark> errors = new ArrayList<>();
+    for (int i = 0; roles.keepsZeros() && i < roles.inputs().size(); i++) {
+      boolean used = false;
+      for (int r = 0; r < store.rows() && !used; r++) {
+        used = store.number(slots.quantity(i), r) > 0;
+      }
+      if (!used) {
+        errors.add(
+            new Remark(
+                Severity.ERROR,
+                "all-zero",
+                "%s, %s: zero in every one of %s used, so that nothing can be learnt of this input. Take it out of the inputs, or correct the column."
+                    .formatted(
+                        place.words(),
+                        slots.get(slots.quantity(i)).words(),
+                        Shown.count(store.rows(), "row")),
+                List.of()));
+      }
+    }
+    if (!errors.isEmpty()) {
+      throw new RecordsRefused(errors);
+    }
   }
 
   private static void unknownMoney(Place place, Slots slots, RowStore store, List<Remark> remarks) {

@@ -9,8 +9,9 @@ import java.util.Optional;
  * by {@link RecordsReader}.
  *
  * <p>Every row is usable: output and all input quantities are finite and positive (rows that were
- * not are set aside by the reader, which says so). Money columns are in the money of the base
- * period where a deflator was declared.
+ * not are set aside by the reader, which says so). Where the roles keep zeros a quantity may be
+ * zero; the mean of the logs of the others then stands in the place of its log. Money columns are
+ * in the money of the base period where a deflator was declared.
  *
  * @param roles what the columns are
  * @param plants the plants' names in order
@@ -24,7 +25,7 @@ import java.util.Optional;
  * @param output output Q
  * @param logOutput ln Q
  * @param quantities quantity of each input, in the order of the roles
- * @param logQuantities natural logs of the quantities
+ * @param logQuantities natural logs of the quantities; see above for those of zero
  * @param prices price of each input; absent where neither price nor spending was declared
  * @param spending money spent on each input; absent where not declared
  * @param controls each control as it enters (logged where declared)
@@ -154,16 +155,44 @@ public record Panel(
     return plants.size() < rows();
   }
 
-  /** The geometric mean of each input over all rows, shape n. */
+  /** Whether no quantity of an input was used in a row; never where the roles keep no zeros. */
+  public boolean zero(int input, int row) {
+    return roles.keepsZeros() && quantities.get(input).get(row) == 0;
+  }
+
+  /** In how many rows no quantity of an input was used. */
+  public int zeros(int input) {
+    int count = 0;
+    for (int row = 0; roles.keepsZeros() && row < rows(); row++) {
+      count += zero(input, row) ? 1 : 0;
+    }
+    return count;
+  }
+
+  /** Whether any quantity in a row is zero. */
+  public boolean anyZero(int row) {
+    for (int i = 0; roles.keepsZeros() && i < quantities.size(); i++) {
+      if (zero(i, row)) {
+        return true;
+      }
+    }
+    return false;
+  }
+
+  /** The geometric mean of each input over all rows in which it is positive, shape n. */
   public double[] geometricMeans() {
     double[] means = new double[logQuantities.size()];
     for (int i = 0; i < means.length; i++) {
       Column logs = logQuantities.get(i);
       double sum = 0;
+      int positive = 0;
       for (int r = 0; r < logs.size(); r++) {
-        sum += logs.get(r);
+        if (!zero(i, r)) {
+          sum += logs.get(r);
+          positive++;
+        }
       }
-      means[i] = Math.exp(sum / logs.size());
+      means[i] = Math.exp(sum / positive);
     }
     return means;
   }

@@ -149,7 +149,7 @@ final class PanelAssembly {
     for (int i = 0; i < roles.inputs().size(); i++) {
       Column quantity = column(slots.quantity(i));
       quantities.add(quantity);
-      logQuantities.add(quantity.logs());
+      logQuantities.add(roles.keepsZeros() ? quantity.logsWithZeros() : quantity.logs());
       Optional<Column> spent = money(slots.spending(i), factor);
       spending.add(spent);
       prices.add(money(slots.price(i), factor).or(() -> spent.map(s -> ratio(s, quantity))));

@@ -61,7 +61,12 @@ record PanelColumn(
       String name = declared.name();
       all.add(
           new PanelColumn(
-              panel.quantities().get(i), Kind.QUANTITY, "quantity of " + name, unit, i, false));
+              roles.keepsZeros() ? panel.quantities().get(i).positive() : panel.quantities().get(i),
+              Kind.QUANTITY,
+              "quantity of " + name,
+              unit,
+              i,
+              false));
       String perUnit = unit.isEmpty() ? money : money + " per " + unit;
       boolean computed = declared.price().isEmpty();
       panel

@@ -19,6 +19,7 @@ import java.util.Optional;
  *     at, such as what shifts an input, or the price of an asset
  * @param explained what the first column is called in messages: output, or cost where the records
  *     are of costs and prices, which then stand among the controls
+ * @param keepsZeros whether rows in which a quantity of an input is zero are kept
  */
 public record Roles(
     Optional<String> plant,
@@ -30,7 +31,8 @@ public record Roles(
     Optional<Deflator> deflator,
     Optional<String> filedCost,
     List<Further> further,
-    String explained) {
+    String explained,
+    boolean keepsZeros) {
 
   /** What the column that is explained is called, where the records are those of production. */
   public static final String OUTPUT = "output";
@@ -62,7 +64,24 @@ public record Roles(
         deflator,
         filedCost,
         List.of(),
-        OUTPUT);
+        OUTPUT,
+        false);
+  }
+
+  /** The same with rows kept in which a quantity of an input is zero, or not. */
+  public Roles keepingZeros(boolean keep) {
+    return new Roles(
+        plant,
+        period,
+        output,
+        outputUnit,
+        inputs,
+        controls,
+        deflator,
+        filedCost,
+        further,
+        explained,
+        keep);
   }
 
   /**
@@ -86,7 +105,8 @@ public record Roles(
         Optional.empty(),
         Optional.empty(),
         further,
-        "cost");
+        "cost",
+        false);
   }
 
   /** The same with these columns, which an estimator uses, beside its further ones. */
@@ -105,7 +125,17 @@ public record Roles(
   /** The same with these further columns and no others. */
   public Roles withAllFurther(List<Further> all) {
     return new Roles(
-        plant, period, output, outputUnit, inputs, controls, deflator, filedCost, all, explained);
+        plant,
+        period,
+        output,
+        outputUnit,
+        inputs,
+        controls,
+        deflator,
+        filedCost,
+        all,
+        explained,
+        keepsZeros);
   }
 
   /**

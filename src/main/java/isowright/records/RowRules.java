@@ -17,9 +17,9 @@ import org.jspecify.annotations.Nullable;
  * <p>In this order: a row outside {@link Keep} is set aside and its other cells are not judged (so
  * that rows known to be wrong can be left out by the study file); a cell that is not what its
  * column must hold is an error, and so is an output that is not positive; a row with a blank where
- * every row needs a value, or with a quantity of an input that is not positive, is set aside; in
- * the rows that remain a price, a deflator, a filed cost or a logged control that is not positive
- * is an error.
+ * every row needs a value, or with a quantity of an input that is not positive (zero is let pass
+ * where the roles keep zeros, and so is spending of zero beside it), is set aside; in the rows that
+ * remain a price, a deflator, a filed cost or a logged control that is not positive is an error.
  */
 final class RowRules {
 
@@ -42,6 +42,8 @@ final class RowRules {
   private final int[] quantities;
   private final int[] positive;
   private final boolean[] givesPrice;
+  private final int[] quantityOf;
+  private final boolean keepsZeros;
   private final int period;
   private final int plant;
   private final int deflated;
@@ -61,6 +63,8 @@ final class RowRules {
     this.quantities = where(k -> k == Kind.QUANTITY);
     this.positive = where(k -> k.numeric() && !ANY_SIGN.contains(k));
     this.givesPrice = new boolean[kinds.length];
+    this.quantityOf = new int[kinds.length];
+    this.keepsZeros = slots.keepsZeros();
     this.period = slots.period().orElse(NONE);
     this.plant = slots.plant().orElse(NONE);
     this.deflated = slots.deflator().orElse(NONE);
@@ -68,6 +72,7 @@ final class RowRules {
     this.notPositive = new Reason[slots.size()];
     for (int s = 0; s < slots.size(); s++) {
       givesPrice[s] = slots.givesPrice(s);
+      quantityOf[s] = slots.quantityBoughtBy(s).orElse(NONE);
       blank[s] = Reason.blank(slots.get(s));
       notPositive[s] = Reason.quantityNotPositive(slots.get(s));
     }
@@ -162,7 +167,8 @@ final class RowRules {
       }
     }
     for (int s : quantities) {
-      if (!(row.value(s) > 0)) {
+      boolean zero = keepsZeros && row.value(s) == 0;
+      if (!(row.value(s) > 0 || zero)) {
         return notPositive[s];
       }
     }
@@ -171,10 +177,18 @@ final class RowRules {
 
   private void outOfRange(Row row) {
     for (int s : positive) {
-      if (row.present(s) && !inRange(row.value(s), s)) {
+      if (row.present(s) && !inRange(row.value(s), s) && !nothingBought(row, s)) {
         complainOfValue(row, s);
       }
     }
+  }
+
+  /** Zero spent on a quantity of zero. */
+  private boolean nothingBought(Row row, int slot) {
+    return keepsZeros
+        && quantityOf[slot] != NONE
+        && row.value(slot) == 0
+        && row.value(quantityOf[slot]) == 0;
   }
 
   private boolean inRange(double value, int slot) {

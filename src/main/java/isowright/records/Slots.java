@@ -21,9 +21,11 @@ final class Slots {
   private final OptionalInt deflator;
   private final OptionalInt filedCost;
   private final int[] further;
+  private final boolean keepsZeros;
 
   /** The slots that these roles declare. */
   Slots(Roles roles) {
+    keepsZeros = roles.keepsZeros();
     plant = roles.plant().map(c -> add(c, Kind.PLANT, "plant")).orElse(OptionalInt.empty());
     period = roles.period().map(c -> add(c, Kind.PERIOD, "period")).orElse(OptionalInt.empty());
     output = add(roles.output(), Kind.OUTPUT, roles.explained()).getAsInt();
@@ -123,6 +125,21 @@ final class Slots {
       }
     }
     return false;
+  }
+
+  /** The quantity on which a column of spending says what was spent. */
+  OptionalInt quantityBoughtBy(int slot) {
+    for (int i = 0; i < spending.length; i++) {
+      if (spending[i].isPresent() && spending[i].getAsInt() == slot) {
+        return OptionalInt.of(quantities[i]);
+      }
+    }
+    return OptionalInt.empty();
+  }
+
+  /** Whether rows with a quantity of zero are kept. */
+  boolean keepsZeros() {
+    return keepsZeros;
   }
 
   int control(int k) {

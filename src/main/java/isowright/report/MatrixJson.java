@@ -4,8 +4,10 @@ import isowright.study.Figure;
 import isowright.study.MatrixFindings;
 import isowright.study.MatrixFindings.Cell;
 import isowright.study.MatrixFindings.Headline;
+import isowright.study.ZerosFindings;
 import java.io.IOException;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 
 /** The specification matrix as it stands in the findings file; cells are numbered from 0. */
@@ -31,7 +33,22 @@ final class MatrixJson {
     }
     file.text("choice", found.choice());
     file.list("headlines", found.headlines(), false, headline -> headline(file, headline));
-    file.list("cells", found.cells(), false, cell -> cell(file, found, cell));
+    file.list("cells", found.cells(), false, cell -> cell(file, found.headlines(), cell));
+    file.remarks("remarks", List.of());
+  }
+
+  /** Both policies for zeros; the sample of a cell is the policy. */
+  static void zeros(JsonFile file, ZerosFindings found) throws IOException {
+    file.text("policy", found.policy());
+    file.object(
+        "rows",
+        () -> {
+          for (Map.Entry<String, Integer> rows : found.rows().entrySet()) {
+            file.whole(rows.getKey(), rows.getValue());
+          }
+        });
+    file.list("headlines", found.headlines(), false, headline -> headline(file, headline));
+    file.list("cells", found.cells(), false, cell -> cell(file, found.headlines(), cell));
     file.remarks("remarks", List.of());
   }
 
@@ -42,7 +59,7 @@ final class MatrixJson {
     file.wholes("order", headline.order());
   }
 
-  private static void cell(JsonFile file, MatrixFindings found, Cell cell) throws IOException {
+  private static void cell(JsonFile file, List<Headline> headlines, Cell cell) throws IOException {
     file.text("technology", cell.technology());
     file.text("plantEffects", cell.plantEffects());
     file.text("time", cell.time());
@@ -75,7 +92,7 @@ final class MatrixJson {
             file.whole("both", cell.regular().get().both());
           });
     }
-    for (Headline headline : found.headlines()) {
+    for (Headline headline : headlines) {
       Optional<Figure> figure =
           cell.figure(headline.name()).filter(f -> Double.isFinite(f.value()));
       if (figure.isPresent()) {

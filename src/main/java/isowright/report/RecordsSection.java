@@ -13,6 +13,7 @@ import isowright.study.Findings.Records;
 import isowright.study.Findings.SetAside;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
 
 /**
  * Records and provenance: which file, how it was read, what was set aside, what the audit found.
@@ -29,16 +30,16 @@ final class RecordsSection {
         .findings()
         .records()
         .ifPresentOrElse(
-            records -> tell(records, blocks),
+            records -> tell(records, material.findings().run().settings(), blocks),
             () ->
                 blocks.add(
                     Paragraph.of(
-                        "No records were read. Every answer rests on technologies taken as known, so"
-                            + " that no figure carries an interval.")));
+                        "No records were read. Every answer rests on technologies taken as known,"
+                            + " so that no figure carries an interval.")));
     return new Section(ID, "Records and provenance", blocks);
   }
 
-  private static void tell(Records records, List<Block> blocks) {
+  private static void tell(Records records, Map<String, String> settings, List<Block> blocks) {
     List<Entry> entries = new ArrayList<>();
     entries.add(Entry.of("File", records.file()));
     entries.add(new Entry(Text.of("SHA-256"), Text.typed(records.sha256())));
@@ -47,9 +48,23 @@ final class RecordsSection {
     entries.add(Entry.of("Plants", Numbers.count(records.plants())));
     entries.add(Entry.of("Periods", span(records)));
     records.facts().forEach((name, fact) -> entries.add(Entry.of(Phrases.sentence(name), fact)));
+    policies(settings, entries);
     blocks.add(new Definitions(entries));
     blocks.add(new Section(ID + "-set-aside", "Rows set aside", setAside(records)));
     blocks.add(new Section(ID + "-audit", "What the audit found", audit(records)));
+  }
+
+  /** What is done where the records lack something. */
+  private static void policies(Map<String, String> settings, List<Entry> entries) {
+    if (settings.containsKey("estimation.zeros")) {
+      boolean dummy = "dummy".equals(settings.get("estimation.zeros"));
+      entries.add(
+          Entry.of(
+              "Inputs that a row does not use",
+              dummy ? "policy dummy: the row is kept" : "policy drop: the row is set aside"));
+      entries.add(
+          Entry.of("Missing values", "policy drop: the row is set aside, nothing is filled in"));
+    }
   }
 
   /** "2012 to 2024 (13 periods)". */

@@ -43,6 +43,7 @@ final class SensitivitySection {
       blocks.add(new Points(false, lines));
     }
     MatrixSection.line(material).ifPresent(line -> blocks.add(new Paragraph(line)));
+    blocks.addAll(ZerosBlocks.of(material));
     blocks.addAll(FormsBlocks.brief(material));
     blocks.addAll(Material.notices(material.findings().remarks()));
     return new Section(ID, "Sensitivity to the technology", blocks);

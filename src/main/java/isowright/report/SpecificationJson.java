@@ -35,6 +35,9 @@ final class SpecificationJson {
           file.text("what", decision.what());
           file.text("why", decision.why());
         });
+    if (found.zeros().isPresent()) {
+      file.object("zeros", () -> MatrixJson.zeros(file, found.zeros().get()));
+    }
     if (found.matrix().isPresent()) {
       file.object("matrix", () -> MatrixJson.write(file, found.matrix().get()));
     }

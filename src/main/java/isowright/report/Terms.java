@@ -34,6 +34,7 @@ final class Terms {
         case "rho" -> "Curvature ρ within " + rest.replace("+", " and ");
         case "weight" -> "Weight of " + product(rest);
         case "control" -> "Control: " + rest;
+        case "zero" -> "No " + rest + " used";
         case "mean" -> "Plant mean of " + parameter(rest).toLowerCase(java.util.Locale.ROOT);
         case "period" -> "Period " + rest;
         default -> name;

@@ -44,6 +44,14 @@ record Declared(
         present, more, plant, period, inputs, units, unpriced, outputUnit, money, costs);
   }
 
+  /** The same with rows kept in which an input is not used. */
+  Declared keepingZeros() {
+    Optional<Study.Records> more =
+        records.map(r -> new Study.Records(r.source(), r.roles().keepingZeros(true), r.keep()));
+    return new Declared(
+        present, more, plant, period, inputs, units, unpriced, outputUnit, money, costs);
+  }
+
   /** The same with inputs whose names come from given technologies. */
   Declared withInputs(List<String> names) {
     List<Optional<String>> none = names.stream().map(name -> Optional.<String>empty()).toList();

@@ -3,6 +3,7 @@ package isowright.study;
 import isowright.leastcost.Question;
 import isowright.records.Column;
 import isowright.records.Panel;
+import java.util.Arrays;
 import java.util.Optional;
 import java.util.stream.IntStream;
 
@@ -25,9 +26,11 @@ final class FilingRows {
   record Filing(
       int row, double[] mix, double[] prices, double output, double atPrices, double filed) {
 
-    /** Whether every price and the filed cost are known. */
+    /** Whether every price and the filed cost are known, and every input was used. */
     boolean known() {
-      return Double.isFinite(atPrices) && Double.isFinite(filed);
+      return Double.isFinite(atPrices)
+          && Double.isFinite(filed)
+          && Arrays.stream(mix).allMatch(quantity -> quantity > 0);
     }
 
     Question question() {

@@ -4,6 +4,7 @@ import isowright.study.Matrix.Criterion;
 import isowright.study.MatrixFindings.Cell;
 import isowright.study.MatrixFindings.Criteria;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Locale;
@@ -31,6 +32,7 @@ final class MatrixChoice {
   private MatrixChoice(List<MatrixCell.Found> found) {
     this.found = found;
     this.standing = new String[found.size()];
+    Arrays.fill(standing, "");
     this.left = IntStream.range(0, found.size()).filter(c -> cell(c).estimated()).boxed().toList();
   }
 
@@ -167,9 +169,7 @@ final class MatrixChoice {
 
   /** The combinations with their standing. */
   List<Cell> cells() {
-    return IntStream.range(0, found.size())
-        .mapToObj(c -> standing[c] == null ? cell(c) : cell(c).standing(standing[c]))
-        .toList();
+    return IntStream.range(0, found.size()).mapToObj(c -> cell(c).standing(standing[c])).toList();
   }
 
   /** The one that is marked. */

@@ -53,11 +53,11 @@ final class MatrixStage {
   }
 
   private MatrixFindings findings() {
-    Map<String, Panel> panels = new LinkedHashMap<>();
+    Map<Matrix.Sample, Panel> panels = new LinkedHashMap<>();
     for (Matrix.Sample sample : matrix.samples()) {
       Panel rows = PanelSample.of(panel, rows(sample, panel));
       if (!(matrix.usual() && panels.containsValue(rows))) { // a half of one period is the whole
-        panels.put(sample.name(), rows);
+        panels.put(sample, rows);
       }
     }
     List<MatrixCell> cells = cells(panels);
@@ -71,18 +71,15 @@ final class MatrixStage {
         .forEach(c -> found[c] = cells.get(c).found(study, headlines, matrix.chooseBy()));
     MatrixChoice choice = MatrixChoice.of(matrix.chooseBy(), List.of(found));
     return new MatrixFindings(
-        matrix.samples().stream()
-            .filter(s -> panels.containsKey(s.name()))
-            .map(s -> described(s, panels.get(s.name())))
-            .toList(),
+        panels.entrySet().stream().map(e -> described(e.getKey(), e.getValue())).toList(),
         matrix.chooseBy().stream().map(Matrix.Criterion::word).toList(),
-        headlines(headlines, choice.cells()),
+        headlines(study, headlines, choice.cells()),
         choice.cells(),
         choice.chosen(),
         choice.words());
   }
 
-  private List<MatrixCell> cells(Map<String, Panel> panels) {
+  private List<MatrixCell> cells(Map<Matrix.Sample, Panel> panels) {
     StandardErrors own = FitStage.standardErrors(study);
     List<StandardErrors> errors =
         matrix.standardErrors().isEmpty() ? List.of(own) : matrix.standardErrors();
@@ -99,7 +96,7 @@ final class MatrixStage {
                             effects,
                             time,
                             kind,
-                            sample,
+                            sample.name(),
                             rows,
                             study.technologies().contains(technology)
                                 && effects == study.estimation().plantEffects()
@@ -132,7 +129,8 @@ final class MatrixStage {
         rows.periods().size());
   }
 
-  private List<Headline> headlines(MatrixHeadlines asked, List<Cell> cells) {
+  /** The headline figures of combinations, each in order. */
+  static List<Headline> headlines(Study study, MatrixHeadlines asked, List<Cell> cells) {
     List<Headline> all = new ArrayList<>();
     all.add(headline(MatrixFindings.SCALE, "returns to scale", "", cells));
     all.add(

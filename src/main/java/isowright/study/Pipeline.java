@@ -119,7 +119,7 @@ public final class Pipeline {
         plans,
         review.reviews(),
         review.findings(),
-        SpecificationStage.findings(study, panel, fits, fitted),
+        SpecificationStage.findings(study, reading, panel, fits, fitted),
         bothSides,
         remarks(fitted, plans));
   }

@@ -13,7 +13,10 @@ import java.util.List;
 import java.util.Map;
 import java.util.stream.IntStream;
 
-/** At how many rows of the records a fitted technology is regular. */
+/**
+ * At how many rows of the records a fitted technology is regular; rows that do without an input
+ * have no log of it and are not looked at.
+ */
 final class RegularityFindings {
 
   private RegularityFindings() {}
@@ -23,6 +26,12 @@ final class RegularityFindings {
     double[][] logs = panel.logQuantities().stream().map(Column::toArray).toArray(double[][]::new);
     if (fit.specification().time() == Specification.Time.BIASED_TREND) {
       return byPeriod(fit, logs);
+    }
+    if (panel.roles().keepsZeros()) {
+      int[] rows = IntStream.range(0, panel.rows()).filter(r -> !panel.anyZero(r)).toArray();
+      return named(
+          panel,
+          List.of(Regularity.count(fit.numbers().technology(), some(logs, rows), rows.length)));
     }
     return named(panel, List.of(Regularity.count(fit.numbers().technology(), logs, panel.rows())));
   }
@@ -34,16 +43,23 @@ final class RegularityFindings {
     List<Regularity.Count> counts = new ArrayList<>();
     for (int p = 0; p < panel.periods().size(); p++) {
       int period = p;
-      int[] rows = IntStream.range(0, periods.length).filter(r -> periods[r] == period).toArray();
-      double[][] some =
-          Arrays.stream(logs)
-              .map(column -> Arrays.stream(rows).mapToDouble(r -> column[r]).toArray())
-              .toArray(double[][]::new);
+      int[] rows =
+          IntStream.range(0, periods.length)
+              .filter(r -> periods[r] == period && !panel.anyZero(r))
+              .toArray();
       counts.add(
           Regularity.count(
-              fit.at(period, new Productivity.Typical()).technology(), some, rows.length));
+              fit.at(period, new Productivity.Typical()).technology(),
+              some(logs, rows),
+              rows.length));
     }
     return named(panel, counts);
+  }
+
+  private static double[][] some(double[][] logs, int[] rows) {
+    return Arrays.stream(logs)
+        .map(column -> Arrays.stream(rows).mapToDouble(r -> column[r]).toArray())
+        .toArray(double[][]::new);
   }
 
   private static FitFindings.Regular named(Panel panel, List<Regularity.Count> counts) {

@@ -81,6 +81,9 @@ final class Settings {
       }
       settings.put("estimation.scaling", how.scaled() ? "geometric-mean" : "none");
       settings.put("estimation.standard-errors", FitStage.standardErrors(study).word());
+      boolean keeps = study.records().map(r -> r.roles().keepsZeros()).orElse(false);
+      settings.put("estimation.zeros", keeps ? "dummy" : "drop");
+      settings.put("estimation.missing-values", "drop");
       held(how.held(), settings);
       how.resampling()
           .ifPresent(

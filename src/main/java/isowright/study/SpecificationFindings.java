@@ -17,6 +17,7 @@ import java.util.Optional;
  * @param expectations what was expected and what was found, fit by fit
  * @param decisions the decisions stated in the study file
  * @param matrix other specifications side by side, where asked
+ * @param zeros what the other policy for zeros does, where the records hold any
  */
 public record SpecificationFindings(
     List<Inflation> inflation,
@@ -24,12 +25,19 @@ public record SpecificationFindings(
     List<Predicted> predictions,
     List<Expected> expectations,
     List<Decision> decisions,
-    Optional<MatrixFindings> matrix) {
+    Optional<MatrixFindings> matrix,
+    Optional<ZerosFindings> zeros) {
 
   /** Nothing asked, nothing found. */
   public static final SpecificationFindings NONE =
       new SpecificationFindings(
-          List.of(), List.of(), List.of(), List.of(), List.of(), Optional.empty());
+          List.of(),
+          List.of(),
+          List.of(),
+          List.of(),
+          List.of(),
+          Optional.empty(),
+          Optional.empty());
 
   /** The names of the tests of the specification among the tests of a fit. */
   public static final List<String> TESTS = SpecificationTests.NAMES;

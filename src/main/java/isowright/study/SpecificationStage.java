@@ -4,6 +4,7 @@ import isowright.estimation.Fit;
 import isowright.inference.FormComparison;
 import isowright.inference.PlantPrediction;
 import isowright.records.Panel;
+import isowright.records.Reading;
 import isowright.study.FitFindings.Fitted;
 import isowright.study.SpecificationFindings.Comparison;
 import isowright.study.SpecificationFindings.Inflation;
@@ -19,14 +20,19 @@ final class SpecificationStage {
   private SpecificationStage() {}
 
   static SpecificationFindings findings(
-      Study study, Optional<Panel> panel, List<Fit> fits, List<Fitted> fitted) {
+      Study study,
+      Optional<Reading> reading,
+      Optional<Panel> panel,
+      List<Fit> fits,
+      List<Fitted> fitted) {
     return new SpecificationFindings(
         inflation(fits),
         comparisons(fits),
         predictions(fits, study.estimation().confidence()),
         ExpectationStage.held(study.protocol().expectations(), fitted),
         study.protocol().decisions(),
-        MatrixStage.findings(study, panel));
+        MatrixStage.findings(study, panel),
+        ZerosStage.findings(study, reading, panel));
   }
 
   private static List<Inflation> inflation(List<Fit> fits) {

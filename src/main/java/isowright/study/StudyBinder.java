@@ -58,9 +58,11 @@ final class StudyBinder {
           "confidence",
           "resampling",
           "restrict",
+          "zeros",
+          "missing-values",
           "nests");
   private static final List<String> ESTIMATION_LATER =
-      List.of("zeros", "regularity", "instruments", "proxy", "frontier");
+      List.of("regularity", "instruments", "proxy", "frontier");
 
   private final Path file;
   private final Optional<Source> recordsInstead;
@@ -101,6 +103,9 @@ final class StudyBinder {
     costs.ifPresent(c -> c.forms().forEach(form -> names.add(form.word())));
     Estimation estimation = estimation(root, declared, fitted);
     checkCosts(root, declared, estimation);
+    if (GapsBinder.keepsZeros(root, declared)) {
+      declared = declared.keepingZeros();
+    }
     Questions questions = questions(root.section("questions"));
     var leastCost = new PlanBinder(declared, names).bind(root);
     Optional<Filing> filing = new FilingBinder(declared).bind(root);
