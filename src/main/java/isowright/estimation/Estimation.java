@@ -44,6 +44,9 @@ public final class Estimation {
     if (specification.estimator() instanceof Estimator.Instruments instruments) {
       return new InstrumentedEstimation(panel, specification, base, form, instruments).fit();
     }
+    if (specification.estimator() instanceof Estimator.Frontier frontier) {
+      return new FrontierEstimation(panel, specification, base, form, frontier).fit();
+    }
     return new LinearEstimation(panel, specification, base, form).fit();
   }
 

@@ -1,5 +1,6 @@
 package isowright.estimation;
 
+import isowright.regression.OneSidedLaw;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -35,6 +36,46 @@ public sealed interface Estimator {
     @Override
     public String word() {
       return "instruments";
+    }
+  }
+
+  /**
+   * Maximum likelihood of a frontier: output lies below what the technology makes possible by an
+   * inefficiency that is never negative, and about that by noise of both signs.
+   *
+   * @param law of the inefficiency
+   * @param overTime how the rows of a plant share it
+   */
+  record Frontier(OneSidedLaw law, OverTime overTime) implements Estimator {
+    @Override
+    public String word() {
+      return "frontier";
+    }
+
+    /** The word for the law. */
+    public String lawWord() {
+      return law == OneSidedLaw.HALF_NORMAL ? "half-normal" : "exponential";
+    }
+  }
+
+  /** How the rows of a plant share its inefficiency. */
+  enum OverTime {
+    /** Every row has its own. */
+    EACH_ROW("each-row"),
+    /** All rows of a plant have the same. */
+    CONSTANT("constant"),
+    /** That of the last period of the records, times e^(−η (t − T)). */
+    DECAY("decay");
+
+    private final String word;
+
+    OverTime(String word) {
+      this.word = word;
+    }
+
+    /** The word used in files. */
+    public String word() {
+      return word;
     }
   }
 }

@@ -102,7 +102,7 @@ public record Fit(
             : numbers.covariance();
     return new EstimatedTechnology(
         technology(period, productivity),
-        Matrices.sandwich(toTechnology(period, !levels), covariance),
+        Matrices.sandwich(toTechnology(period, productivity), covariance),
         numbers.covarianceSource().degreesOfFreedom());
   }
 
@@ -110,7 +110,7 @@ public record Fit(
   Technology technology(int period, Productivity productivity) {
     Solution numbers = numbers();
     boolean levels = levelsGiveTheConstant(productivity);
-    Technology technology = technologies(period, !levels).apply(numbers.parameters());
+    Technology technology = technologies(period, productivity).apply(numbers.parameters());
     return levels
         ? technology.shifted(numbers.levels().shift(numbers.levels().weights(productivity)))
         : technology;
@@ -118,24 +118,33 @@ public record Fit(
 
   /** Whether the constant is a mean of plants' levels rather than a parameter of the fit. */
   boolean levelsGiveTheConstant(Productivity productivity) {
-    return !(productivity instanceof Productivity.Typical)
-        || !specification.plantEffects().constant();
+    boolean common =
+        productivity instanceof Productivity.Typical
+            || productivity instanceof Productivity.Frontier;
+    return !common || !specification.plantEffects().constant();
   }
 
   /**
    * The technology at a period, controls at their means, that reported parameters (in the order of
    * {@link Solution#parameters()}: the estimate, or a refit) describe.
    *
-   * @param plantMeans as in {@link #toTechnology}
+   * @param productivity whose; the constant of a mean of levels is not yet put in
    */
-  Function<double[], Technology> technologies(int period, boolean plantMeans) {
+  Function<double[], Technology> technologies(int period, Productivity productivity) {
     Technology first = numbers().technology();
     double[] own = first.parameters();
-    double[][] to = toTechnology(period, plantMeans);
+    double[][] to = toTechnology(period, productivity);
+    int law = numbers().lawOfErrors();
+    double since = sinceLast(panel, period);
     return reported -> {
       double[] moved = Arrays.copyOf(reported, own.length);
+      int circumstances = reported.length - law;
       double shift = 0;
-      for (int j = own.length; j < reported.length; j++) {
+      if (law > 0 && productivity instanceof Productivity.Typical) {
+        double[] laws = Arrays.copyOfRange(reported, circumstances, reported.length);
+        shift -= numbers().frontier().orElseThrow().mean(laws, since);
+      }
+      for (int j = own.length; j < circumstances; j++) {
         shift += to[0][j] * reported[j];
         for (int k = 1; k < own.length; k++) {
           moved[k] += to[k][j] * reported[j];
@@ -146,12 +155,11 @@ public record Fit(
   }
 
   /**
-   * The technology's parameters at a period by all reported ones, p × P.
-   *
-   * @param plantMeans whether plant means that were added stand at their means over the rows (the
-   *     typical plant); a plant's own constant holds its own
+   * The derivatives of the technology's parameters at a period in all reported ones, p × P. For the
+   * typical plant, plant means that were added stand at their means over the rows and inefficiency
+   * at its mean; a plant's own constant holds its own.
    */
-  private double[][] toTechnology(int period, boolean plantMeans) {
+  private double[][] toTechnology(int period, Productivity productivity) {
     Solution numbers = numbers();
     int p = numbers.technology().parameters().length;
     double[][] to = new double[p][numbers.parameters().length];
@@ -168,10 +176,29 @@ public record Fit(
       }
     }
     double[] means = numbers.treatment().plantMeans();
-    if (plantMeans) {
+    if (!levelsGiveTheConstant(productivity)) {
       System.arraycopy(means, 0, to[0], p + circumstances.count(), means.length);
     }
+    int law = numbers.lawOfErrors();
+    if (law > 0 && productivity instanceof Productivity.Typical) {
+      double[] all = numbers.parameters();
+      double[] slopes =
+          numbers
+              .frontier()
+              .orElseThrow()
+              .slopes(
+                  Arrays.copyOfRange(all, all.length - law, all.length), sinceLast(panel, period));
+      for (int k = 0; k < law; k++) {
+        to[0][all.length - law + k] = -slopes[k];
+      }
+    }
     return to;
+  }
+
+  /** The distance of a period from the last one of a panel, in the unit of the periods. */
+  static double sinceLast(Panel panel, int period) {
+    int last = panel.periods().size() - 1;
+    return panel.periodNumbers().get(period) - panel.periodNumbers().get(last);
   }
 
   /**

@@ -34,6 +34,7 @@ public record HuberFit(Technology technology, HuberRegression regression) {
     }
     double[] reported = LinearParameters.reported(fit, form, huber.coefficients());
     int last = fit.panel().periods().size() - 1;
-    return Optional.of(new HuberFit(fit.technologies(last, true).apply(reported), huber));
+    return Optional.of(
+        new HuberFit(fit.technologies(last, new Productivity.Typical()).apply(reported), huber));
   }
 }

@@ -8,6 +8,7 @@ import isowright.technology.Form;
 import isowright.technology.LinearForm;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Set;
 
 /**
  * What stands in the way of a specification before anything is fitted: plants or periods that the
@@ -19,6 +20,13 @@ final class Obstacles {
   private final Panel panel;
   private final Specification specification;
   private final List<String> found = new ArrayList<>();
+
+  /** The covariances that the likelihood of a frontier has here. */
+  private static final Set<Specification.StandardErrors> FRONTIER_ERRORS =
+      Set.of(
+          Specification.StandardErrors.CLASSICAL,
+          Specification.StandardErrors.ROBUST,
+          Specification.StandardErrors.CLUSTERED);
 
   private Obstacles(Panel panel, Specification specification) {
     this.panel = panel;
@@ -115,6 +123,10 @@ final class Obstacles {
               + estimator.word()
               + "` out, or ask for cobb-douglas or translog.");
     }
+    if (estimator instanceof Estimator.Frontier frontier) {
+      frontier(frontier);
+      return;
+    }
     if (specification.time() == Time.BIASED_TREND) {
       found.add(
           "A biased trend makes products of inputs and time, which "
@@ -130,6 +142,34 @@ final class Obstacles {
           "Instruments are not carried out with plant-effects: "
               + effects.word()
               + ". Set plant-effects to none, within or differences.");
+    }
+  }
+
+  private void frontier(Estimator.Frontier frontier) {
+    PlantEffects effects = specification.plantEffects();
+    if (effects != PlantEffects.NONE) {
+      found.add(
+          "A frontier draws inefficiency from a law, and plant-effects: "
+              + effects.word()
+              + " would take what lasts in a plant for its level. Set plant-effects to none; with"
+              + " over-time: constant a frontier has one inefficiency a plant.");
+    }
+    boolean shared = frontier.overTime() != Estimator.OverTime.EACH_ROW;
+    if (shared && !panel.repeats()) {
+      found.add(
+          "over-time: "
+              + frontier.overTime().word()
+              + " needs plants seen in more than one period; each of the "
+              + panel.plants().size()
+              + " plants has a single row. Take over-time out: every row then has its own"
+              + " inefficiency.");
+    }
+    if (!FRONTIER_ERRORS.contains(specification.standardErrors())) {
+      found.add(
+          "Standard errors of the kind "
+              + specification.standardErrors().word()
+              + " are not carried out for the likelihood of a frontier. Set standard-errors to"
+              + " classical, robust or clustered.");
     }
   }
 

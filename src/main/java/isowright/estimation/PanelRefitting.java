@@ -68,7 +68,10 @@ final class PanelRefitting implements Refitting {
     // The covariance of a refit is not looked at; the classical one asks least of the rows.
     Specification plain =
         own.with(own.plantEffects(), own.time(), Specification.StandardErrors.CLASSICAL);
-    Fit again = Estimation.fit(some, plain, fit.base());
+    Fit again =
+        own.estimator() instanceof Estimator.Frontier
+            ? FrontierEstimation.again(fit, some, plain)
+            : Estimation.fit(some, plain, fit.base());
     if (!again.state().usable()) {
       boolean rank =
           again.state() == Fit.State.RANK_DEFICIENT || again.state() == Fit.State.REFUSED;

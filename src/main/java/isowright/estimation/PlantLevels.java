@@ -120,6 +120,21 @@ public final class PlantLevels {
     return IntStream.range(0, means.count()).mapToDouble(p -> get(p) - typical).toArray();
   }
 
+  /** The standard error of the difference between the levels of two plants. */
+  public double deviationApart(int plant, int other) {
+    double[] weights = new double[means.count()];
+    weights[plant] += 1;
+    weights[other] -= 1;
+    double[] d = direction(weights);
+    double variance = ownVariance(weights);
+    for (int k = 0; k < d.length; k++) {
+      for (int l = 0; l < d.length; l++) {
+        variance += d[k] * covariance[k][l] * d[l];
+      }
+    }
+    return Math.sqrt(Math.max(0, variance));
+  }
+
   /** The weights over plants that stand for a productivity. */
   double[] weights(Productivity productivity) {
     if (productivity instanceof Productivity.Plant plant) {

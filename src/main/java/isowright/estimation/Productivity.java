@@ -9,6 +9,9 @@ public sealed interface Productivity {
   /** The plant at the upper quartile of plant levels. */
   record UpperQuartile() implements Productivity {}
 
+  /** The frontier: no inefficiency. The same as typical where none was estimated. */
+  record Frontier() implements Productivity {}
+
   /**
    * One plant.
    *

@@ -114,7 +114,7 @@ public final class Replication {
   /** The technology at a period for a productivity, as {@link Fit#at}, with its refits. */
   public EstimatedTechnology at(int period, Productivity productivity) {
     boolean levels = fit.levelsGiveTheConstant(productivity);
-    Function<double[], Technology> build = fit.technologies(period, !levels);
+    Function<double[], Technology> build = fit.technologies(period, productivity);
     RowLevels rows = new RowLevels(fit);
     Technologies plants =
         technologies(
@@ -271,7 +271,7 @@ public final class Replication {
               ? numbers.levels().direction(weights)
               : slopeMeans(form, weights);
       double[] centre = numbers.parameters();
-      int first = centre.length - direction.length;
+      int first = centre.length - numbers.lawOfErrors() - direction.length;
       double constant = centre[0] + numbers.levels().shift(weights);
       return reported -> {
         double moved = constant;

@@ -7,14 +7,15 @@ import isowright.regression.LinearFit;
 import isowright.regression.VarianceInflation;
 import isowright.technology.Technology;
 import java.util.List;
+import java.util.Optional;
 
 /**
  * The numbers of a fit.
  *
- * @param technology the typical plant in the first period, with controls (and plant means that were
- *     added) at zero
+ * @param technology the typical plant (of a frontier, the frontier) in the first period, with
+ *     controls (and plant means that were added) at zero
  * @param names the names of the reported parameters: the technology's, then controls and time, then
- *     plant means where they were added
+ *     plant means where they were added, then those of the law of errors of a frontier
  * @param parameters the reported parameters, shape P
  * @param covariance their covariance, P × P
  * @param covarianceSource the estimator, its factor and degrees of freedom
@@ -108,6 +109,16 @@ public record Solution(
       sum += Math.exp(residual);
     }
     return sum / residuals.length;
+  }
+
+  /** What belongs to a frontier, where one was fitted. */
+  public Optional<Particulars.OfFrontier> frontier() {
+    return particulars instanceof Particulars.OfFrontier own ? Optional.of(own) : Optional.empty();
+  }
+
+  /** How many reported parameters, the last ones, are of the law of errors and of nothing else. */
+  int lawOfErrors() {
+    return frontier().map(Particulars.OfFrontier::count).orElse(0);
   }
 
   /** By how much the other regressors inflate the variance of each coefficient. */

@@ -33,7 +33,9 @@ public record Estimate(
     /** Resampling of whole groups. */
     RESAMPLING("resampling"),
     /** Draws of parameters from their estimated law. */
-    SIMULATION("simulation");
+    SIMULATION("simulation"),
+    /** The law of what is not observed given the rows, the parameters taken as known. */
+    CONDITIONAL("conditional");
 
     private final String word;
 

@@ -54,6 +54,7 @@ public final class Hypotheses {
     hypotheses.oneSubstitution().ifPresent(verdicts::add);
     hypotheses.cobbDouglas().map(hypotheses::verdict).ifPresent(verdicts::add);
     verdicts.addAll(PanelHypotheses.of(fit));
+    verdicts.addAll(FrontierHypotheses.of(fit));
     return List.copyOf(verdicts);
   }
 
@@ -181,8 +182,8 @@ public final class Hypotheses {
     return Optional.of(
         Verdict.of(
             "one-substitution",
-            "one elasticity of substitution serves within nests and between them, so that CES without"
-                + " nests is enough",
+            "one elasticity of substitution serves within nests and between them, so that CES"
+                + " without nests is enough",
             Math.max(ratio, 0),
             new Law.ChiSquared(count - 1)));
   }

@@ -11,8 +11,8 @@ import org.apache.commons.statistics.distribution.TDistribution;
 public sealed interface Law {
 
   /**
-   * Its name: {@code F}, {@code chi-squared}, {@code t}, {@code normal} or {@code weighted
-   * chi-squared}.
+   * Its name: {@code F}, {@code chi-squared}, {@code t}, {@code normal}, {@code mixed chi-squared}
+   * or {@code weighted chi-squared}.
    */
   String name();
 
@@ -99,6 +99,40 @@ public sealed interface Law {
       return Double.isNaN(statistic)
           ? Double.NaN
           : Math.min(1, 2 * NormalDistribution.of(0, 1).survivalProbability(Math.abs(statistic)));
+    }
+  }
+
+  /**
+   * A mixture in equal parts of two chi-squared laws, of f and f + 1 degrees of freedom: the law of
+   * a likelihood ratio where one of f + 1 restrictions puts a variance at its bound of zero. D. A.
+   * Kodde and F. C. Palm 1986, <i>Econometrica</i> 54, 1243–1248; of 0 degrees of freedom is the
+   * number zero.
+   *
+   * @param least f
+   */
+  record MixedChiSquared(int least) implements Law {
+    @Override
+    public String name() {
+      return "mixed chi-squared";
+    }
+
+    @Override
+    public List<Double> degreesOfFreedom() {
+      return List.of((double) least, least + 1.0);
+    }
+
+    @Override
+    public double p(double statistic) {
+      if (Double.isNaN(statistic)) {
+        return Double.NaN;
+      }
+      return statistic <= 0
+          ? 1
+          : 0.5 * beyond(least, statistic) + 0.5 * beyond(least + 1, statistic);
+    }
+
+    private static double beyond(int degrees, double statistic) {
+      return degrees == 0 ? 0 : ChiSquaredDistribution.of(degrees).survivalProbability(statistic);
     }
   }
 

@@ -66,6 +66,16 @@ public record ComposedFit(
     return new ComposedSearch(model).fit();
   }
 
+  /**
+   * The same from one more start, and from the moments of least squares alone beside it: for rows
+   * that are mostly those of another fit.
+   *
+   * @param start parameters of the other fit; not looked at where their number is another
+   */
+  public static ComposedFit of(ComposedErrors model, double[] start) {
+    return new ComposedSearch(model).fit(start);
+  }
+
   /** β. */
   public double[] coefficients() {
     return java.util.Arrays.copyOf(parameters, model.design().columns().size());

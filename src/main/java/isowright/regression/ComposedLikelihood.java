@@ -80,7 +80,7 @@ final class ComposedLikelihood implements NewtonAscent.Point {
   private void unit(double[][] block, int from, int start, int end) {
     UnitSums sums = new UnitSums(block[columns], from, start, end);
     int rows = end - start;
-    value += unit.value(rows, sums.sum, sums.squares) - 0.5 * sums.errorSquares * noisePrecision;
+    value += unit.value(rows, sums.sum, sums.squares, sums.apart(block[columns], start));
     unit.derive(rows, sums.sum, sums.squares);
     int s = columns;
     int r = columns + 1;
@@ -238,6 +238,16 @@ final class ComposedLikelihood implements NewtonAscent.Point {
         sumEtaEta += tau * tau * shared;
         squaresEtaEta += 4 * tau * tau * g * g;
       }
+    }
+
+    /** Σ (ε − g S₁/S₂)²; exactly zero with one row. */
+    private double apart(double[] errors, int start) {
+      double apart = 0;
+      for (int i = 0; share.length > 1 && i < share.length; i++) {
+        double left = errors[start + i] - share[i] * sum / squares;
+        apart += left * left;
+      }
+      return apart;
     }
   }
 }

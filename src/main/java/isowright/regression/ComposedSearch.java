@@ -4,6 +4,7 @@ import isowright.regression.ComposedErrors.Sharing;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Optional;
 
 /**
  * Looks for the maximum of the likelihood of {@link ComposedErrors} from several starts, of which
@@ -13,7 +14,7 @@ import java.util.List;
 final class ComposedSearch {
 
   /** Shares of the residual variance that the one-sided error starts with. */
-  private static final double[] SHARES = {0.1, 0.4, 0.7, 0.95};
+  private static final double[] SHARES = {0.2, 0.8};
 
   /** A rise of the log-likelihood below this is no sign of a one-sided error. */
   private static final double NO_RISE = 1e-7;
@@ -42,11 +43,26 @@ final class ComposedSearch {
   }
 
   ComposedFit fit() {
-    if (model.sharing() == Sharing.NONE && third >= 0) {
-      return without(ComposedFit.State.WRONG_SKEW, 0);
+    return wrongSkew() ? without(ComposedFit.State.WRONG_SKEW, 0) : best(starts());
+  }
+
+  /** From a start of one's own, and from the first of the usual ones. */
+  ComposedFit fit(double[] own) {
+    if (own.length != model.parameters()) {
+      return fit();
     }
+    return wrongSkew()
+        ? without(ComposedFit.State.WRONG_SKEW, 0)
+        : best(List.of(own, moments().orElseGet(() -> share(SHARES[0]))));
+  }
+
+  private boolean wrongSkew() {
+    return model.sharing() == Sharing.NONE && third >= 0;
+  }
+
+  private ComposedFit best(List<double[]> starts) {
     List<NewtonAscent.End> ends = new ArrayList<>();
-    for (double[] from : starts()) {
+    for (double[] from : starts) {
       ends.add(NewtonAscent.from(from, model::at));
     }
     NewtonAscent.End best = ends.get(0);
@@ -106,15 +122,23 @@ final class ComposedSearch {
         return starts;
       }
     }
-    double moment = model.law().scaleOf(Math.max(-third, 0));
-    if (moment > 0 && model.law().variance(moment) < 0.98 * second) {
-      starts.add(at(moment));
-    }
+    moments().ifPresent(starts::add);
     for (double share : SHARES) {
-      double unit = model.law().variance(1);
-      starts.add(at(Math.sqrt(share * second / unit)));
+      starts.add(share(share));
     }
     return starts;
+  }
+
+  private Optional<double[]> moments() {
+    double moment = model.law().scaleOf(Math.max(-third, 0));
+    return moment > 0 && model.law().variance(moment) < 0.98 * second
+        ? Optional.of(at(moment))
+        : Optional.empty();
+  }
+
+  /** Where the one-sided error has this share of the residual variance. */
+  private double[] share(double share) {
+    return at(Math.sqrt(share * second / model.law().variance(1)));
   }
 
   private static ComposedFit of(ComposedErrors model) {

@@ -2,8 +2,8 @@ package isowright.regression;
 
 /**
  * What one unit of {@link ComposedErrors} adds to the log-likelihood, as a function F of its sums
- * S₁ = Σ g ε and S₂ = Σ g² and of s = ln σ_v and r = ln σ_w; the part −½ Σ ε²/σ_v² is apart. First
- * and second derivatives follow from those of A, B and q = B/√A by the chain rule, one loop over
+ * S₁ = Σ g ε and S₂ = Σ g² and of s = ln σ_v and r = ln σ_w. First and second derivatives, without
+ * those of −½ Σ ε²/σ_v², follow from those of A, B and q = B/√A by the chain rule, one loop over
  * the four variables.
  */
 final class ComposedUnit {
@@ -46,18 +46,44 @@ final class ComposedUnit {
     this.rate = halfNormal ? 0 : Math.exp(-r);
   }
 
-  /** Places the unit; its value without the part −½ Σ ε²/σ_v². */
-  double value(int rows, double sum, double squares) {
+  /** Places the unit. */
+  void place(double sum, double squares) {
     a = squares * noisePrecision + scalePrecision;
     b = -sum * noisePrecision - rate;
     q = b / Math.sqrt(a);
+  }
+
+  /**
+   * Places the unit; its part of the log-likelihood, −½ Σ ε²/σ_v² included.
+   *
+   * @param apart Σ (ε − g S₁/S₂)², what the rows differ by; zero with one row
+   */
+  double value(int rows, double sum, double squares, double apart) {
+    place(sum, squares);
     double constant = law == OneSidedLaw.HALF_NORMAL ? Math.log(2) : 0.5 * LOG_TWO_PI;
     return -0.5 * rows * LOG_TWO_PI
         - rows * s
         - r
         + constant
         - 0.5 * Math.log(a)
-        + NormalTail.logScaled(q);
+        - 0.5 * apart * noisePrecision
+        + together(sum, squares);
+  }
+
+  /**
+   * ½ q² + ln Φ(q) − ½ S₁²/(S₂ σ_v²). As the noise goes to zero both squares grow beyond what a
+   * double holds of their difference, so it is written out: −½ S₁²/S₂ · σ_v⁻² σ_w⁻²/A for the
+   * half-normal law, S₁/(S₂ σ_w) + ½ σ_v²/(S₂ σ_w²) for the exponential one.
+   */
+  private double together(double sum, double squares) {
+    if (NormalTail.far(q)) {
+      return NormalTail.logScaled(q) - 0.5 * sum * sum / squares * noisePrecision;
+    }
+    double rest =
+        law == OneSidedLaw.HALF_NORMAL
+            ? -0.5 * sum * sum / squares * noisePrecision * (scalePrecision / a)
+            : rate / squares * (sum + 0.5 * rate / noisePrecision);
+    return NormalTail.logProbability(q) + rest;
   }
 
   /** The mean of the normal law that, cut off at zero, is that of w given the rows. */

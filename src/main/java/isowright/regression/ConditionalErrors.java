@@ -46,7 +46,7 @@ public final class ConditionalErrors {
         sum += shares[r] * errors[r];
         squares += shares[r] * shares[r];
       }
-      unit.value(end - start, sum, squares);
+      unit.place(sum, squares);
       for (int r = start; r < end; r++) {
         means[r] = unit.mean();
         deviations[r] = unit.deviation();
@@ -82,15 +82,44 @@ public final class ConditionalErrors {
     return shares[row] * deviations[row] * NormalTail.excess(means[row] / deviations[row]);
   }
 
+  /** The standard deviation of g w of a row, given its rows; 0 where none was found. */
+  public double deviation(int row) {
+    if (deviations[row] == 0) {
+      return 0;
+    }
+    // Of a normal variable cut off at zero: σ² (1 − λ(q) (q + λ(q))), q = μ/σ.
+    double q = means[row] / deviations[row];
+    return shares[row] * deviations[row] * Math.sqrt(Math.max(0, NormalTail.curvature(q)));
+  }
+
   /** E[e^(−g w) | rows] of a row; 1 where no one-sided error was found. */
   public double survival(int row) {
+    return survival(row, 1);
+  }
+
+  /** E[e^(−2 g w) | rows] of a row; 1 where no one-sided error was found. */
+  public double survivalSquared(int row) {
+    return survival(row, 2);
+  }
+
+  private double survival(int row, int power) {
     if (deviations[row] == 0) {
       return 1;
     }
     double q = means[row] / deviations[row];
-    double moved = q - shares[row] * deviations[row];
+    double moved = q - power * shares[row] * deviations[row];
     // −g μ + ½ g² σ² is ½ moved² − ½ q².
     return Math.exp(NormalTail.logScaled(moved) - NormalTail.logScaled(q));
+  }
+
+  /** The probability that g w of a row exceeds a value, given its rows; 0 where none was found. */
+  public double probabilityAbove(int row, double value) {
+    if (deviations[row] == 0) {
+      return 0;
+    }
+    double q = means[row] / deviations[row];
+    double moved = q - Math.max(0, value) / shares[row] / deviations[row];
+    return Math.exp(NormalTail.logProbability(moved) - NormalTail.logProbability(q));
   }
 
   /** The value that g w of a row exceeds with this probability, given its rows. */

@@ -54,7 +54,12 @@ final class NormalTail {
 
   /** ln Φ(q). */
   static double logProbability(double q) {
-    return logScaled(q) - 0.5 * q * q;
+    return far(q) ? logScaled(q) - 0.5 * q * q : Math.log(NORMAL.cumulativeProbability(q));
+  }
+
+  /** Whether q lies so far out that Φ(q) is better had from its tail. */
+  static boolean far(double q) {
+    return q < FAR;
   }
 
   /**

@@ -53,6 +53,7 @@ final class FitJson {
     tests(file, fit.tests());
     file.numbersByName("plantLevels", fit.plantLevels());
     PanelJson.write(file, fit.panel());
+    FrontierJson.write(file, fit.frontier());
     file.number("smearing", fit.smearing().orElse(Double.NaN));
     rows(file, fit);
     RefitJson.write(file, fit);

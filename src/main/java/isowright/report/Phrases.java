@@ -169,6 +169,7 @@ public final class Phrases {
         switch (test.distribution()) {
           case "chi-squared" -> "χ²";
           case "normal" -> "z";
+          case "mixed chi-squared" -> "½χ² + ½χ²";
           case "weighted chi-squared" -> "Σwχ²";
           default -> test.distribution();
         };
@@ -194,8 +195,8 @@ public final class Phrases {
       return "No row was examined.";
     }
     if (regular.both() == regular.rows()) {
-      return "Regular at every row of the records: elasticities, plans and costs inside their ranges"
-          + " can be read as economics.";
+      return "Regular at every row of the records: elasticities, plans and costs inside their"
+          + " ranges can be read as economics.";
     }
     int failing = regular.rows() - regular.both();
     String where =

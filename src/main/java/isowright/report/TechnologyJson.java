@@ -95,6 +95,7 @@ public final class TechnologyJson {
     file.number("degreesOfFreedom", fit.how().degreesOfFreedom());
     file.matrix("covariance", fit.covariance());
     file.numbersByName("plantLevels", fit.plantLevels());
+    FrontierJson.technology(file, fit.frontier());
     file.number("smearing", fit.smearing().orElse(Double.NaN));
     file.list(
         "productivity",

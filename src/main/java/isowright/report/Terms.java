@@ -37,6 +37,7 @@ final class Terms {
         case "zero" -> "No " + rest + " used";
         case "mean" -> "Plant mean of " + parameter(rest).toLowerCase(java.util.Locale.ROOT);
         case "period" -> "Period " + rest;
+        case "frontier" -> frontier(rest);
         default -> name;
       };
     }
@@ -47,6 +48,15 @@ final class Terms {
       case "rho" -> "Curvature ρ";
       case "scale" -> "Scale ν";
       default -> product(name);
+    };
+  }
+
+  private static String frontier(String name) {
+    return switch (name) {
+      case "noise" -> "Noise, σ_v";
+      case "inefficiency" -> "Inefficiency, σ_u";
+      case "decay" -> "Decay of inefficiency, η";
+      default -> name;
     };
   }
 
@@ -80,7 +90,7 @@ final class Terms {
     return switch (state) {
       case "estimated" -> "An optimum was found and identified.";
       case "boundary" ->
-          "The sum of squares still falls at the edge of the admissible range: the records have no"
+          "The fit still improves at the edge of the admissible range: the records have no"
               + " admissible optimum under this form, and no figure is printed for it.";
       case "flat" ->
           "The sum of squares hardly changes over a wide range of curvature: read the interval, not"
@@ -178,6 +188,7 @@ final class Terms {
       case "delta" -> "first-order propagation of the parameter covariance";
       case "profile" -> "the profile of the sum of squares";
       case "resampling" -> "resampling of whole plants";
+      case "conditional" -> "the law of inefficiency given the residuals";
       default -> word;
     };
   }
@@ -204,6 +215,8 @@ final class Terms {
       case "plant-effects" -> "Plant effects";
       case "plant-variance" -> "Variance between plants";
       case "random-against-within" -> "Random effects against within";
+      case "no-inefficiency" -> "No inefficiency (one-sided)";
+      case "no-decay" -> "Inefficiency constant over time";
       case "reset" -> "RESET: is the form rich enough?";
       case "breusch-pagan" -> "Breusch-Pagan: equal variance";
       case "white" -> "White: equal variance";

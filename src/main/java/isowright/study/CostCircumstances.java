@@ -159,6 +159,8 @@ final class CostCircumstances {
                   ? "the typical plant"
                   : "the plants of the records on average")
               + when;
+      case FRONTIER ->
+          "the plants of the records on average, no frontier being fitted of cost" + when;
       case BEST_QUARTER -> "the plant at the lower quartile of cost at equal prices" + when;
       case PLANT -> "plant " + question.productivity().plant().orElseThrow() + when;
     };

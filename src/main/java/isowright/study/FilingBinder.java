@@ -68,7 +68,7 @@ final class FilingBinder {
     Productivity against =
         section
             .get("against")
-            .map(value -> ProductivityWords.read(value, false))
+            .map(value -> ProductivityWords.read(value, false, FrontierBinder.asked(root)))
             .orElse(Productivity.TYPICAL);
     boolean smearing = section.get("smearing").flatMap(YamlValue::flag).orElse(false);
     contradictions(root, section, against, smearing);

@@ -37,6 +37,7 @@ public final class FitFindings {
    * @param points fitted value and residual of each row
    * @param influence the most influential rows
    * @param robustness how far the fit stands when looked at in other ways
+   * @param frontier what was found of inefficiency; absent where no frontier was fitted
    * @param remarks what must be said of this fit
    */
   public record Fitted(
@@ -59,6 +60,7 @@ public final class FitFindings {
       List<Point> points,
       List<Influential> influence,
       RobustnessFindings robustness,
+      Optional<FrontierFindings> frontier,
       List<Said> remarks) {
     /** Whether the fit has an answer that later stages may use. */
     public boolean usable() {
@@ -105,8 +107,8 @@ public final class FitFindings {
    *
    * @param name {@code constant}, an input's name, {@code labour*machines}, {@code trend}, {@code
    *     trend*trend}, {@code labour*trend}, {@code share:labour}, {@code rho}, {@code scale},
-   *     {@code control:COLUMN}, {@code period:P}, and {@code mean:} before any of them for a plant
-   *     mean
+   *     {@code control:COLUMN}, {@code period:P}, {@code mean:} before any of them for a plant
+   *     mean, and {@code frontier:noise}, {@code frontier:inefficiency}, {@code frontier:decay}
    * @param figure value, standard error and interval
    * @param p two-sided p-value of the null that it is zero; NaN where there is none
    */

@@ -34,6 +34,9 @@ final class FitStage {
   /** Points kept of a fit for its charts; more cannot be told apart on a page. */
   private static final int POINTS = 2000;
 
+  /** Standard deviations: positive, with zero at their bound. */
+  private static final List<String> SPREADS = List.of("frontier:noise", "frontier:inefficiency");
+
   private final Panel panel;
   private final Study study;
 
@@ -108,6 +111,7 @@ final class FitStage {
         List.of(),
         List.of(),
         RobustnessFindings.NONE,
+        Optional.empty(),
         remarks);
   }
 
@@ -159,6 +163,7 @@ final class FitStage {
         points(numbers),
         other.influential(),
         robustness,
+        FrontierStage.findings(fit),
         remarks(fit, regular, substitution, verdicts, other.remarks(robustness, output, scale)));
   }
 
@@ -191,13 +196,16 @@ final class FitStage {
       double error = Math.sqrt(Math.max(0, numbers.covariance()[k][k]));
       Optional<CurvatureProfile> profile =
           fit.profiles().stream().filter(p -> p.name().equals(name)).findFirst();
+      boolean spread = SPREADS.contains(name);
       boolean zeroMeansNothing =
-          fit.specification().form() instanceof NonlinearForm
-              && (profile.isPresent() || name.equals("scale") || name.contains("share:"));
+          spread
+              || fit.specification().form() instanceof NonlinearForm
+                  && (profile.isPresent() || name.equals("scale") || name.contains("share:"));
+      DeltaMethod.Scale scale = spread ? DeltaMethod.Scale.LOG : DeltaMethod.Scale.LINEAR;
       Figure figure =
           profile
               .map(p -> curvatureFigure(fit, p, value, error))
-              .orElseGet(() -> figure(delta.estimate(value, error, DeltaMethod.Scale.LINEAR)));
+              .orElseGet(() -> figure(delta.estimate(value, error, scale)));
       parameters.add(
           new Parameter(name, figure, zeroMeansNothing ? Double.NaN : law.p(value / error)));
     }
@@ -306,6 +314,7 @@ final class FitStage {
         .ifPresent(remarks::add);
     remarks.addAll(robustness);
     remarks.addAll(new PanelStage(fit).remarks());
+    remarks.addAll(FrontierStage.remarks(fit));
     if (regular.both() < regular.rows()) {
       remarks.add(Said.of("warning", "irregular-rows", RegularityFindings.words(regular)));
     }

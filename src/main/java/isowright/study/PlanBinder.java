@@ -53,6 +53,7 @@ final class PlanBinder {
   private final AcrossBinder across;
   private final List<String> names = new ArrayList<>();
   private int place;
+  private boolean frontier;
 
   /**
    * A reader of questions.
@@ -75,6 +76,7 @@ final class PlanBinder {
   /** The questions under {@code least-cost}; one for each target. */
   List<LeastCostQuestion> bind(YamlSection root) {
     List<LeastCostQuestion> all = new ArrayList<>();
+    frontier = FrontierBinder.asked(root);
     for (YamlValue item : root.get("least-cost").flatMap(YamlValue::list).orElse(List.of())) {
       place++;
       item.section().map(this::questions).ifPresent(all::addAll);
@@ -278,7 +280,7 @@ final class PlanBinder {
     if (value.isEmpty()) {
       return Productivity.TYPICAL;
     }
-    Productivity read = ProductivityWords.read(value.get(), true);
+    Productivity read = ProductivityWords.read(value.get(), true, frontier);
     if (read.kind() == Productivity.Kind.PLANT && !declared.plant()) {
       section.refuse("productivity", "a plant is named, but `records.plant` names no column");
     } else if (read.kind() == Productivity.Kind.BEST_QUARTER && !declared.present()) {

@@ -93,6 +93,7 @@ final class PlanCircumstances {
     return switch (asked.kind()) {
       case TYPICAL -> new Productivity.Typical();
       case BEST_QUARTER -> new Productivity.UpperQuartile();
+      case FRONTIER -> new Productivity.Frontier();
       case PLANT -> plant(asked.plant().orElseThrow(), panel);
     };
   }
@@ -116,8 +117,22 @@ final class PlanCircumstances {
     return switch (asked.productivity().kind()) {
       case TYPICAL -> "the typical plant" + when;
       case BEST_QUARTER -> "the plant at the upper quartile of productivity" + when;
+      case FRONTIER -> frontierWords(candidate) + when;
       case PLANT -> "plant " + asked.productivity().plant().orElseThrow() + when;
     };
+  }
+
+  /** The frontier of a fit, or what stands in its place where no inefficiency was found. */
+  static String frontierWords(Candidate candidate) {
+    return inefficient(candidate)
+        ? "the frontier (no inefficiency)"
+        : "the frontier, which is the typical plant (no inefficiency was found)";
+  }
+
+  /** Whether inefficiency was found in the fit. */
+  static boolean inefficient(Candidate candidate) {
+    return candidate.fit().flatMap(f -> f.numbers().frontier()).stream()
+        .anyMatch(own -> own.fit().state().oneSided());
   }
 
   /** The price of an input: stated, or the mean of the last period recorded. */

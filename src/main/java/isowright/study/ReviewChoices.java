@@ -1,5 +1,6 @@
 package isowright.study;
 
+import isowright.estimation.Estimator;
 import isowright.study.Study.Productivity;
 import java.util.ArrayList;
 import java.util.List;
@@ -46,13 +47,12 @@ final class ReviewChoices {
     String money = study.money().words();
     List<Choice> all = new ArrayList<>();
     all.add(new Choice("as-asked", "as asked", asked, rows, money, true));
-    for (Productivity.Kind kind :
-        List.of(Productivity.Kind.TYPICAL, Productivity.Kind.BEST_QUARTER)) {
+    for (Productivity.Kind kind : kinds()) {
       for (boolean smearing : new boolean[] {false, true}) {
         ReviewReference other =
             new ReviewReference(new Productivity(kind, Optional.empty()), smearing);
         if (!other.equals(asked)) {
-          String code = kind == Productivity.Kind.TYPICAL ? "typical" : "best-quarter";
+          String code = code(kind);
           all.add(
               new Choice(
                   smearing ? code + "-mean" : code,
@@ -99,5 +99,23 @@ final class ReviewChoices {
                         money,
                         true)));
     return all;
+  }
+
+  /** A frontier where one was fitted. */
+  private List<Productivity.Kind> kinds() {
+    List<Productivity.Kind> kinds =
+        new ArrayList<>(List.of(Productivity.Kind.TYPICAL, Productivity.Kind.BEST_QUARTER));
+    if (study.estimation().estimator() instanceof Estimator.Frontier) {
+      kinds.add(Productivity.Kind.FRONTIER);
+    }
+    return kinds;
+  }
+
+  private static String code(Productivity.Kind kind) {
+    return switch (kind) {
+      case BEST_QUARTER -> "best-quarter";
+      case FRONTIER -> "frontier";
+      default -> "typical";
+    };
   }
 }

@@ -2,6 +2,7 @@ package isowright.study;
 
 import isowright.estimation.EstimatedTechnology;
 import isowright.estimation.Productivity;
+import isowright.estimation.Solution;
 import java.util.Locale;
 import java.util.Optional;
 
@@ -35,16 +36,24 @@ record ReviewReference(Study.Productivity against, boolean smearing) {
     return smearing && candidate.fit().isPresent() ? Math.log(factor(candidate)) : 0;
   }
 
-  private static double factor(Candidate candidate) {
-    return candidate.fit().orElseThrow().numbers().smearing();
+  /** On the frontier noise alone is left, whose mean exponential is e^(σ²/2). */
+  private double factor(Candidate candidate) {
+    Solution numbers = candidate.fit().orElseThrow().numbers();
+    if (against.kind() == Study.Productivity.Kind.FRONTIER && numbers.frontier().isPresent()) {
+      double noise = numbers.frontier().get().fit().noise();
+      return Math.exp(0.5 * noise * noise);
+    }
+    return numbers.smearing();
   }
 
   /** In words. */
   String words() {
     String whose =
-        against.kind() == Study.Productivity.Kind.TYPICAL
-            ? "the typical plant"
-            : "the plant at the upper quartile of productivity";
+        switch (against.kind()) {
+          case BEST_QUARTER -> "the plant at the upper quartile of productivity";
+          case FRONTIER -> "the frontier (no inefficiency)";
+          default -> "the typical plant";
+        };
     return whose
         + (smearing
             ? ", at the mean of its output (smearing factor)"
@@ -52,7 +61,7 @@ record ReviewReference(Study.Productivity against, boolean smearing) {
   }
 
   /** The smearing factor of a candidate in words. */
-  static String factorWords(Candidate candidate) {
+  String factorWords(Candidate candidate) {
     return String.format(Locale.ROOT, "%.4f", factor(candidate));
   }
 }

@@ -29,7 +29,11 @@ final class ReviewSettings {
             .orElse("the last"));
     settings.put(
         "filing.against",
-        filing.against().kind() == Study.Productivity.Kind.TYPICAL ? "typical" : "best-quarter");
+        switch (filing.against().kind()) {
+          case BEST_QUARTER -> "best-quarter";
+          case FRONTIER -> "frontier";
+          default -> "typical";
+        });
     settings.put("filing.smearing", Boolean.toString(filing.smearing()));
     settings.put("filing.simulation.draws", Integer.toString(filing.simulation().draws()));
     settings.put("filing.simulation.seed", Long.toString(filing.simulation().seed()));

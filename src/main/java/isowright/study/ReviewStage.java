@@ -227,7 +227,7 @@ final class ReviewStage {
       for (Candidate candidate : candidates) {
         String factor =
             candidate.fit().isPresent()
-                ? "is " + ReviewReference.factorWords(candidate)
+                ? "is " + ReviewReference.asked(filing).factorWords(candidate)
                 : "is not known, there being no residuals, so the technology is taken as it stands";
         all.add(
             Said.of(
@@ -249,6 +249,9 @@ final class ReviewStage {
                   + " the gaps are not worked out again for plants drawn anew or left out, and"
                   + " their intervals are those of propagation."));
     }
+    if (filing.against().kind() == Study.Productivity.Kind.FRONTIER) {
+      candidates.forEach(candidate -> frontier(candidate).ifPresent(all::add));
+    }
     boolean many =
         Arrays.stream(periods(filing, panel))
             .anyMatch(period -> FilingRows.of(panel, period).length > needed);
@@ -262,5 +265,19 @@ final class ReviewStage {
                   + " largest gaps of each technology and period."));
     }
     return all;
+  }
+
+  private static Optional<Said> frontier(Candidate candidate) {
+    String words =
+        candidate.fit().isEmpty()
+            ? "is taken as given; nothing is known of a frontier above it"
+            : PlanCircumstances.inefficient(candidate)
+                ? "stands for output without any inefficiency. Inefficiency measured includes what"
+                    + " the records do not hold, so distance from a frontier is not waste"
+                : "has no inefficiency above the typical plant, so its frontier is the typical"
+                    + " plant";
+    return Optional.of(
+        Said.of(
+            "note", "against-frontier", "The technology " + candidate.name() + " " + words + "."));
   }
 }

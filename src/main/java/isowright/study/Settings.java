@@ -1,5 +1,6 @@
 package isowright.study;
 
+import isowright.estimation.Estimator;
 import isowright.estimation.Specification;
 import isowright.records.Source;
 import java.io.IOException;
@@ -84,6 +85,10 @@ final class Settings {
       boolean keeps = study.records().map(r -> r.roles().keepsZeros()).orElse(false);
       settings.put("estimation.zeros", keeps ? "dummy" : "drop");
       settings.put("estimation.missing-values", "drop");
+      if (how.estimator() instanceof Estimator.Frontier frontier) {
+        settings.put("estimation.frontier.inefficiency", frontier.lawWord());
+        settings.put("estimation.frontier.over-time", frontier.overTime().word());
+      }
       held(how.held(), settings);
       how.resampling()
           .ifPresent(

@@ -265,7 +265,7 @@ public record Study(
   /**
    * Whose productivity is meant.
    *
-   * @param kind typical, best quarter, or a named plant
+   * @param kind typical, best quarter, the frontier, or a named plant
    * @param plant the plant, where one is named
    */
   public record Productivity(Kind kind, Optional<String> plant) {
@@ -275,6 +275,8 @@ public record Study(
       TYPICAL,
       /** The plant at the upper quartile of productivity. */
       BEST_QUARTER,
+      /** The frontier, where there is no inefficiency. */
+      FRONTIER,
       /** A named plant. */
       PLANT
     }
@@ -289,7 +291,7 @@ public record Study(
    * @param cost the column of filed cost; absent: the sum of price × quantity
    * @param firstPeriod the first period; absent: the last of the records
    * @param lastPeriod the last period
-   * @param against typical or best quarter
+   * @param against typical, best quarter or the frontier
    * @param smearing whether the reference is brought from the median to the mean of output (Duan
    *     1983)
    * @param simulation how ranks are drawn

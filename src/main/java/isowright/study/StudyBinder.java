@@ -60,9 +60,10 @@ final class StudyBinder {
           "restrict",
           "zeros",
           "missing-values",
-          "nests");
+          "nests",
+          "frontier");
   private static final List<String> ESTIMATION_LATER =
-      List.of("regularity", "instruments", "proxy", "frontier");
+      List.of("regularity", "instruments", "proxy");
 
   private final Path file;
   private final Optional<Source> recordsInstead;
@@ -212,7 +213,8 @@ final class StudyBinder {
         scaled,
         errors,
         confidence(section),
-        List.of(),
+        new FrontierBinder(section, declared, technologies)
+            .bind(effects.plants(), errors).stream().toList(),
         new HeldBinder(section, root, declared.inputs(), technologies).bind(effects),
         ResamplingBinder.read(section, !technologies.isEmpty()));
   }

@@ -24,8 +24,8 @@ public final class DistortedFindings {
 
   /** A name that fits nowhere. */
   public static final String LONG =
-      "the technology of the filing of the second regulatory period as corrected in the letter of the"
-          + " twenty-third of November";
+      "the technology of the filing of the second regulatory period as corrected in the letter of"
+          + " the twenty-third of November";
 
   private DistortedFindings() {}
 
@@ -331,6 +331,7 @@ public final class DistortedFindings {
         points,
         f.influence(),
         f.robustness(),
+        f.frontier(),
         f.remarks());
   }
 }

@@ -347,6 +347,7 @@ final class GlassworksFits {
           points,
           influence,
           RobustnessFindings.NONE,
+          Optional.empty(),
           remarks);
     }
 

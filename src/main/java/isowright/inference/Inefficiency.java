@@ -1,0 +1,203 @@
+package isowright.inference;
+
+import isowright.estimation.Estimation;
+import isowright.estimation.Estimator;
+import isowright.estimation.Fit;
+import isowright.estimation.Particulars;
+import isowright.estimation.PlantLevels;
+import isowright.estimation.Specification;
+import isowright.regression.ComposedFit;
+import isowright.regression.ConditionalErrors;
+import isowright.regression.Covariance;
+import isowright.regression.OneSidedLaw;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import org.apache.commons.statistics.distribution.TDistribution;
+
+/**
+ * What a frontier says of inefficiency: how much there is, and where.
+ *
+ * <p>With σ_v and σ_u of noise and inefficiency: λ = σ_u/σ_v; γ = σ_u²/(σ_u² + σ_v²) (G. E. Battese
+ * and G. S. Corra 1977, <i>Australian Journal of Agricultural Economics</i> 21, 169–179); the share
+ * of the variance, var u/(var u + σ_v²), with var u = (1 − 2/π) σ_u² under the half-normal law and
+ * σ_u² under the exponential one, which is what γ is often taken for. Intervals are symmetric in
+ * logs (σ, λ) and in log odds (γ, share), so that they stay within their bounds.
+ *
+ * <p>A row's inefficiency given its residuals: see {@link ConditionalErrors} (Jondrow, Lovell,
+ * Materov and Schmidt 1982; Battese and Coelli 1988; intervals of Horrace and Schmidt 1996).
+ *
+ * <p>Beside it, without any law: the greatest plant level of the fit within plants less that of the
+ * plant (P. Schmidt and R. C. Sickles 1984, <i>Journal of Business and Economic Statistics</i> 2,
+ * 367–374). Tested in {@code InefficiencyTest}.
+ *
+ * @param variances how much there is; absent where none was found
+ * @param known what the rows say; empty where none was found
+ * @param mean E u in the last period of the records
+ * @param byEffects beside it, from the fit within plants
+ */
+public record Inefficiency(
+    Optional<Variances> variances,
+    Optional<ConditionalErrors> known,
+    double mean,
+    Optional<ByEffects> byEffects) {
+
+  /**
+   * How much inefficiency there is.
+   *
+   * @param noise σ_v
+   * @param inefficiency σ_u
+   * @param ratio λ
+   * @param gamma γ
+   * @param share the share of var u in the variance of both
+   * @param mean E u, in the last period of the records where there is decay
+   * @param decay η
+   */
+  public record Variances(
+      Estimate noise,
+      Estimate inefficiency,
+      Estimate ratio,
+      Estimate gamma,
+      Estimate share,
+      Estimate mean,
+      Optional<Estimate> decay) {}
+
+  /**
+   * Inefficiency as the distance from the plant of greatest level.
+   *
+   * @param best that plant, by index
+   * @param plants by plant; that of the best is zero by construction
+   */
+  public record ByEffects(int best, List<Estimate> plants) {
+    /** Copies the list. */
+    public ByEffects {
+      plants = List.copyOf(plants);
+    }
+  }
+
+  /** Of a usable fit; absent where it is no frontier. */
+  public static Optional<Inefficiency> of(Fit fit) {
+    return fit.numbers().frontier().map(own -> of(fit, own));
+  }
+
+  private static Inefficiency of(Fit fit, Particulars.OfFrontier own) {
+    boolean found = own.fit().state().oneSided();
+    Optional<Variances> variances = found ? Optional.of(variances(fit, own)) : Optional.empty();
+    return new Inefficiency(
+        variances,
+        found ? Optional.of(own.fit().conditional()) : Optional.empty(),
+        own.scale() * own.fit().scale(),
+        byEffects(fit));
+  }
+
+  private static Variances variances(Fit fit, Particulars.OfFrontier own) {
+    ComposedFit found = own.fit();
+    Covariance source = fit.numbers().covarianceSource();
+    int first = found.coefficients().length;
+    double[][] v = source.matrix();
+    double level = fit.specification().confidence();
+    Errors errors = new Errors(source.degreesOfFreedom(), level);
+    double noise = Math.sqrt(v[first][first]);
+    double inefficiency = Math.sqrt(v[first + 1][first + 1]);
+    double ratio =
+        Math.sqrt(Math.max(0, v[first][first] + v[first + 1][first + 1] - 2 * v[first][first + 1]));
+    double lambda = found.scale() / found.noise();
+    OneSidedLaw law = found.model().law();
+    return new Variances(
+        errors.positive(found.noise(), noise),
+        errors.positive(found.scale(), inefficiency),
+        errors.positive(lambda, ratio),
+        errors.share(lambda * lambda, 2 * ratio),
+        errors.share(law.variance(1) * lambda * lambda, 2 * ratio),
+        errors.positive(own.scale() * found.scale(), inefficiency),
+        v.length > first + 2
+            ? Optional.of(errors.plain(found.decay(), Math.sqrt(v[first + 2][first + 2])))
+            : Optional.empty());
+  }
+
+  private static Optional<ByEffects> byEffects(Fit fit) {
+    if (!fit.panel().repeats() || fit.panel().plants().size() < 2) {
+      return Optional.empty();
+    }
+    Specification how = fit.specification();
+    Fit within =
+        Estimation.fit(
+            fit.panel(),
+            how.with(Specification.PlantEffects.WITHIN, how.time(), how.standardErrors())
+                .by(new Estimator.LeastSquares()));
+    if (!within.state().usable()) {
+      return Optional.empty();
+    }
+    PlantLevels levels = within.numbers().levels();
+    double[] relative = levels.relative();
+    int best = 0;
+    for (int p = 1; p < relative.length; p++) {
+      best = relative[p] > relative[best] ? p : best;
+    }
+    Errors errors =
+        new Errors(within.numbers().covarianceSource().degreesOfFreedom(), how.confidence());
+    List<Estimate> plants = new ArrayList<>();
+    for (int p = 0; p < relative.length; p++) {
+      double error = p == best ? 0 : levels.deviationApart(best, p);
+      plants.add(errors.plain(relative[best] - relative[p], error));
+    }
+    return Optional.of(new ByEffects(best, plants));
+  }
+
+  /** What the rows say of the inefficiency of one row, in ln Q. */
+  public static Estimate ofRow(ConditionalErrors known, int row, double level) {
+    return new Estimate(
+        known.mean(row),
+        known.deviation(row),
+        known.exceeded(row, (1 + level) / 2),
+        known.exceeded(row, (1 - level) / 2),
+        level,
+        Estimate.Method.CONDITIONAL);
+  }
+
+  /** The same as the share of the frontier's output that is reached: E e^(−u). */
+  public static Estimate efficiency(ConditionalErrors known, int row, double level) {
+    double mean = known.survival(row);
+    double square = known.survivalSquared(row);
+    return new Estimate(
+        mean,
+        Math.sqrt(Math.max(0, square - mean * mean)),
+        Math.exp(-known.exceeded(row, (1 - level) / 2)),
+        Math.exp(-known.exceeded(row, (1 + level) / 2)),
+        level,
+        Estimate.Method.CONDITIONAL);
+  }
+
+  /** Intervals by Student's law. */
+  private record Errors(double degrees, double level) {
+
+    private double quantile() {
+      return TDistribution.of(degrees).inverseSurvivalProbability((1 - level) / 2);
+    }
+
+    Estimate plain(double value, double error) {
+      double half = error == 0 ? 0 : quantile() * error;
+      return new Estimate(value, error, value - half, value + half, level, Estimate.Method.DELTA);
+    }
+
+    /** From the standard error of the log. */
+    Estimate positive(double value, double error) {
+      double factor = Math.exp(quantile() * error);
+      return new Estimate(
+          value, value * error, value / factor, value * factor, level, Estimate.Method.DELTA);
+    }
+
+    /** odds/(1 + odds), from the standard error of the log of the odds. */
+    Estimate share(double odds, double error) {
+      double factor = Math.exp(quantile() * error);
+      double value = odds / (1 + odds);
+      return new Estimate(
+          value,
+          value / (1 + odds) * error,
+          odds / factor / (1 + odds / factor),
+          odds * factor / (1 + odds * factor),
+          level,
+          Estimate.Method.DELTA);
+    }
+  }
+}
