@@ -148,7 +148,7 @@ final class GapPartsCharts {
       }
     }
     return Words.sentence(Words.technology(technology))
-        + (period.isEmpty() ? "" : ", " + period)
+        + Words.inPeriod(period)
         + ": of a gap of "
         + Numbers.money(gap, setting.units().money())
         + " the "

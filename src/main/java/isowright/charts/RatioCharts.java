@@ -91,7 +91,7 @@ final class RatioCharts {
   private String title() {
     String head =
         Words.sentence(Words.technology(order.technology()))
-            + (order.period().isEmpty() ? "" : ", " + order.period())
+            + Words.inPeriod(order.period())
             + ": filed over least cost ";
     Placed first = all.get(0);
     Placed last = all.get(all.size() - 1);

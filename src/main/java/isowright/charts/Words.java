@@ -26,6 +26,11 @@ final class Words {
     };
   }
 
+  /** ", 2024"; nothing for records that are one cross-section. */
+  static String inPeriod(String period) {
+    return period.isEmpty() || period.equals("all") ? "" : ", " + period;
+  }
+
   /** The same with a capital first letter. */
   static String sentence(String words) {
     if (words.isEmpty()) {

@@ -102,6 +102,23 @@ public final class EstimatedCost {
     return at(centre());
   }
 
+  /**
+   * The chance in each row: ln C_r less what the fit says of it, with plant effects less the mean
+   * of its plant.
+   */
+  public double[] chances() {
+    double[] all = residuals(fit.values());
+    if (fit.specification().plantEffects()) {
+      for (int g = 0; g < data.groups().count(); g++) {
+        double mean = mean(all, g);
+        for (int r = data.groups().start(g); r < data.groups().end(g); r++) {
+          all[r] -= mean;
+        }
+      }
+    }
+    return all;
+  }
+
   private double level(double[] parameters) {
     return level(parameters, weights.length > 0 ? residuals(parameters) : new double[0]);
   }

@@ -2,6 +2,7 @@ package isowright.inference;
 
 import isowright.estimation.EstimatedTechnology;
 import isowright.technology.Technology;
+import java.util.Optional;
 import java.util.SplittableRandom;
 import java.util.random.RandomGenerator;
 import org.apache.commons.math3.linear.Array2DRowRealMatrix;
@@ -32,16 +33,24 @@ import org.apache.commons.math3.linear.EigenDecomposition;
  */
 public final class ParameterDraws {
 
-  private final EstimatedTechnology estimated;
+  private final Optional<EstimatedTechnology> estimated;
+  private final double degreesOfFreedom;
   private final double[] centre;
   private final double[][] root;
   private final int count;
   private final long seed;
 
-  private ParameterDraws(EstimatedTechnology estimated, int count, long seed) {
+  private ParameterDraws(
+      Optional<EstimatedTechnology> estimated,
+      double[] centre,
+      double[][] covariance,
+      double degreesOfFreedom,
+      int count,
+      long seed) {
     this.estimated = estimated;
-    this.centre = estimated.technology().parameters();
-    this.root = root(estimated.covariance());
+    this.degreesOfFreedom = degreesOfFreedom;
+    this.centre = centre;
+    this.root = root(covariance);
     this.count = count;
     this.seed = seed;
   }
@@ -53,7 +62,26 @@ public final class ParameterDraws {
    * @param seed where they begin; the same seed gives the same draws
    */
   public static ParameterDraws of(EstimatedTechnology estimated, int count, long seed) {
-    return new ParameterDraws(estimated, count, seed);
+    return new ParameterDraws(
+        Optional.of(estimated),
+        estimated.technology().parameters(),
+        estimated.covariance(),
+        estimated.degreesOfFreedom(),
+        count,
+        seed);
+  }
+
+  /**
+   * Draws of parameters that belong to no technology of inputs, for functions whose gradient is
+   * known.
+   *
+   * @param covariance p × p
+   * @param degreesOfFreedom of Student's law; infinite for the normal law
+   */
+  public static ParameterDraws of(
+      double[][] covariance, double degreesOfFreedom, int count, long seed) {
+    return new ParameterDraws(
+        Optional.empty(), new double[covariance.length], covariance, degreesOfFreedom, count, seed);
   }
 
   /** How many draws there are. */
@@ -83,18 +111,22 @@ public final class ParameterDraws {
     return new Draw(departure, stretch, source.nextLong());
   }
 
-  /** The technology of a draw. */
+  /**
+   * The technology of a draw.
+   *
+   * @throws java.util.NoSuchElementException where the parameters belong to none
+   */
   public Technology technology(Draw draw) {
     double[] moved = centre.clone();
     for (int k = 0; k < moved.length; k++) {
       moved[k] += draw.departure[k];
     }
-    return estimated.technology().withParameters(moved);
+    return estimated.orElseThrow().technology().withParameters(moved);
   }
 
   /** √(ν/χ²): many degrees of freedom are taken as normal. */
   private double stretch(RandomGenerator random) {
-    double degrees = estimated.degreesOfFreedom();
+    double degrees = degreesOfFreedom;
     int whole = (int) Math.min(Math.rint(degrees), NORMAL + 1);
     if (whole > NORMAL) {
       return 1;

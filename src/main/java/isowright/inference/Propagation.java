@@ -92,12 +92,13 @@ public final class Propagation<T> {
   }
 
   /** √(∇g′ V ∇g) for a gradient known in closed form, shape p. */
-  double standardError(double[] gradient) {
+  public double standardError(double[] gradient) {
     return Math.sqrt(variance(gradient));
   }
 
   /** The quantile of the sampling distribution on which the intervals rest. */
-  double quantile(double value, double standardError, DeltaMethod.Scale scale, double probability) {
+  public double quantile(
+      double value, double standardError, DeltaMethod.Scale scale, double probability) {
     double t = standardError == 0 ? 0 : student(probability);
     return scale == DeltaMethod.Scale.LOG && value > 0
         ? value * Math.exp(t * standardError / value)
@@ -128,7 +129,7 @@ public final class Propagation<T> {
   }
 
   /** The gradients of functions in the parameters; [function][parameter]. */
-  double[][] gradients(Function<T, double[]> functions) {
+  public double[][] gradients(Function<T, double[]> functions) {
     return gradients(functions, functions.apply(build.apply(centre.clone())).length);
   }
 

@@ -26,8 +26,10 @@ final class EfficiencyBlocks {
             .flatMap(review -> review.detail().stream())
             .anyMatch(detail -> detail.scale().flatMap(Scale::output).isPresent());
     for (Reviewed review : reviews) {
-      if (review.detail().isPresent()) {
-        Detail detail = review.detail().get();
+      Optional<Detail> known =
+          review.detail().filter(d -> d.efficiency().isPresent() || d.scale().isPresent());
+      if (known.isPresent()) {
+        Detail detail = known.get();
         rows.add(new Row(Text.of(review.plant()), cells(review.period(), detail, found)));
       }
     }

@@ -11,8 +11,10 @@ import isowright.report.Document.Row;
 import isowright.report.Document.Section;
 import isowright.report.Document.Table;
 import isowright.report.Document.Weight;
+import isowright.study.Findings.Said;
 import isowright.study.PlanFindings.Detail;
 import isowright.study.PlanFindings.Reviewed;
+import isowright.study.ReviewFindings;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.EnumMap;
@@ -90,10 +92,17 @@ final class FilingSection {
     blocks.addAll(ReviewBlocks.orders(material, technology));
     blocks.addAll(ReviewBlocks.needed(material, technology, reviews));
     reviews.stream()
-        .filter(review -> !review.remarks().isEmpty())
+        .filter(review -> !own(review).isEmpty())
         .limit(LONGEST_REMARKS)
-        .forEach(review -> blocks.addAll(Material.notices(named(review), review.remarks())));
+        .forEach(review -> blocks.addAll(Material.notices(named(review), own(review))));
     return new Section(ID + "-" + technology, "Against " + Terms.technology(technology), blocks);
+  }
+
+  /** What is said of this filing alone. */
+  private static List<Said> own(Reviewed review) {
+    return review.remarks().stream()
+        .filter(said -> !said.code().equals(ReviewFindings.UNDIVIDED))
+        .toList();
   }
 
   private static double size(Reviewed review) {

@@ -19,12 +19,17 @@ final class ReviewMethod {
 
   static Section of(Material material, Citing citing) {
     List<Block> blocks = new ArrayList<>();
-    parts(blocks, citing);
+    List<Reviewed> reviews = material.findings().reviews();
+    if (reviews.stream().anyMatch(r -> r.technical().isPresent())) {
+      parts(blocks, citing);
+    }
+    if (!material.findings().costs().fits().isEmpty()) {
+      costSide(blocks);
+    }
     ReviewFindings review = material.findings().review();
     if (!review.orders().isEmpty()) {
       order(blocks, citing);
     }
-    List<Reviewed> reviews = material.findings().reviews();
     if (reviews.stream().flatMap(r -> r.detail().stream()).anyMatch(d -> d.scale().isPresent())) {
       blocks.add(
           Paragraph.of(
@@ -76,6 +81,15 @@ final class ReviewMethod {
     blocks.add(
         Display.of(
             "{∂ C}/{∂ β_k} = −λ Q {∂ ln f}/{∂ β_k}, {∂ ln θ}/{∂ β_k} = −{1}/{e} {∂ ln f}/{∂ β_k}"));
+  }
+
+  private static void costSide(List<Block> blocks) {
+    blocks.add(
+        Paragraph.of(
+            "Against a cost function, which knows no quantities, the gap is what the filing holds"
+                + " beyond recorded cost (unreconciled, exact) and what recorded cost holds beyond"
+                + " least cost (remainder); R is recorded cost:"));
+    blocks.add(Display.of("F − C(w, y) = (F − R) + (R − C(w, y))"));
   }
 
   private static void order(List<Block> blocks, Citing citing) {

@@ -1,12 +1,14 @@
 package isowright.review;
 
 import isowright.estimation.EstimatedTechnology;
+import isowright.inference.DeltaMethod;
 import isowright.inference.ParameterDraws;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Objects;
+import java.util.function.ToDoubleFunction;
 import java.util.stream.IntStream;
 
 /**
@@ -122,19 +124,55 @@ public final class Ordering {
    */
   public static Ordering of(
       List<Entrant> entrants, EstimatedTechnology reference, int draws, long seed, double level) {
+    boolean known =
+        Arrays.stream(reference.covariance()).flatMapToDouble(Arrays::stream).allMatch(v -> v == 0);
+    int count = known ? 1 : draws;
+    Simulation simulation =
+        known
+            ? Simulation.EXACT
+            : (long) entrants.size() * count <= MOST_PLANS
+                ? Simulation.SOLVED
+                : Simulation.FIRST_ORDER;
+    DeltaMethod delta = DeltaMethod.of(reference, level);
+    return of(
+        entrants,
+        ParameterDraws.of(reference, count, seed),
+        simulation,
+        delta::standardError,
+        level);
+  }
+
+  /**
+   * Orders plants whose least costs come from a cost function, whose log moves with its parameters
+   * as the entrants' slopes say.
+   *
+   * @param draws of its parameters
+   * @param standardError that of a function of the parameters with this gradient
+   */
+  public static Ordering of(
+      List<Entrant> entrants,
+      ParameterDraws draws,
+      ToDoubleFunction<double[]> standardError,
+      double level) {
+    return of(entrants, draws, Simulation.FIRST_ORDER, standardError, level);
+  }
+
+  private static Ordering of(
+      List<Entrant> entrants,
+      ParameterDraws parameters,
+      Simulation simulation,
+      ToDoubleFunction<double[]> standardError,
+      double level) {
     List<Entrant> order =
         entrants.stream()
             .sorted(Comparator.comparingDouble(Entrant::logRatio).thenComparing(Entrant::plant))
             .toList();
-    boolean known =
-        Arrays.stream(reference.covariance()).flatMapToDouble(Arrays::stream).allMatch(v -> v == 0);
-    ParameterDraws parameters = ParameterDraws.of(reference, known ? 1 : draws, seed);
     ParameterDraws.Draw[] made =
         IntStream.range(0, parameters.count())
             .parallel()
             .mapToObj(parameters::draw)
             .toArray(ParameterDraws.Draw[]::new);
-    RatioDraws ratios = RatioDraws.of(order, parameters, made, known);
+    RatioDraws ratios = RatioDraws.of(order, parameters, made, simulation);
     boolean year = order.stream().anyMatch(e -> e.yearSpread() > 0);
     RankBands bands = RankBands.of(ratios.ranks(), level);
     List<RankBands> withYear =
@@ -154,8 +192,8 @@ public final class Ordering {
         ratios.simulation(),
         ratios.without(),
         ranked,
-        ToldApart.of(order, reference, made, level, false),
-        year ? ToldApart.of(order, reference, made, level, true) : ToldApart.NONE);
+        ToldApart.of(order, standardError, made, level, false),
+        year ? ToldApart.of(order, standardError, made, level, true) : ToldApart.NONE);
   }
 
   /** How least cost was moved with the parameters. */
@@ -191,13 +229,10 @@ public final class Ordering {
     private static final int TOGETHER = 64;
 
     static RatioDraws of(
-        List<Entrant> order, ParameterDraws draws, ParameterDraws.Draw[] made, boolean known) {
-      Simulation simulation =
-          known
-              ? Simulation.EXACT
-              : (long) order.size() * made.length <= MOST_PLANS
-                  ? Simulation.SOLVED
-                  : Simulation.FIRST_ORDER;
+        List<Entrant> order,
+        ParameterDraws draws,
+        ParameterDraws.Draw[] made,
+        Simulation simulation) {
       RatioDraws ranked = of(RatioRow.of(order, draws, simulation), made);
       return ranked.without > MOST_WITHOUT * made.length
           ? of(RatioRow.of(order, draws, Simulation.FIRST_ORDER), made)

@@ -51,7 +51,8 @@ final class RatioRow {
         LeastCost leastCost = Minimiser.of(draws.technology(draw));
         for (int i = 0; i < row.length; i++) {
           Entrant entrant = order.get(i);
-          double cost = leastCost.plan(entrant.question(), entrant.plan()).cost();
+          Entrant.Asked asked = entrant.asked().orElseThrow();
+          double cost = leastCost.plan(asked.question(), asked.plan()).cost();
           if (!(cost > 0) || Double.isInfinite(cost)) {
             return new double[0];
           }

@@ -1,12 +1,11 @@
 package isowright.review;
 
-import isowright.estimation.EstimatedTechnology;
-import isowright.inference.DeltaMethod;
 import isowright.inference.ParameterDraws;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.OptionalDouble;
+import java.util.function.ToDoubleFunction;
 import java.util.stream.IntStream;
 
 /**
@@ -34,11 +33,12 @@ public record ToldApart(OptionalDouble critical, List<List<String>> groups) {
    * Compares all pairs.
    *
    * @param order the plants in their order
+   * @param standardError that of a function of the parameters with this gradient
    * @param year whether the chance of the year is counted
    */
   static ToldApart of(
       List<Entrant> order,
-      EstimatedTechnology reference,
+      ToDoubleFunction<double[]> standardError,
       ParameterDraws.Draw[] draws,
       double level,
       boolean year) {
@@ -48,7 +48,7 @@ public record ToldApart(OptionalDouble critical, List<List<String>> groups) {
     }
     double[][] slopes = order.stream().map(Entrant::slopes).toArray(double[][]::new);
     double[] years = order.stream().mapToDouble(Entrant::yearSpread).toArray();
-    double[][] spread = spreads(order, slopes, DeltaMethod.of(reference, level), year);
+    double[][] spread = spreads(order, slopes, standardError, year);
     double[] largest =
         Arrays.stream(draws)
             .parallel()
@@ -62,7 +62,10 @@ public record ToldApart(OptionalDouble critical, List<List<String>> groups) {
 
   /** s_ij, symmetric; zero where a pair has no uncertainty. */
   private static double[][] spreads(
-      List<Entrant> order, double[][] slopes, DeltaMethod delta, boolean year) {
+      List<Entrant> order,
+      double[][] slopes,
+      ToDoubleFunction<double[]> standardError,
+      boolean year) {
     int n = order.size();
     double[][] spread = new double[n][n];
     for (int i = 0; i < n; i++) {
@@ -71,7 +74,7 @@ public record ToldApart(OptionalDouble critical, List<List<String>> groups) {
         for (int k = 0; k < difference.length; k++) {
           difference[k] = slopes[i][k] - slopes[j][k];
         }
-        double error = delta.standardError(difference);
+        double error = standardError.applyAsDouble(difference);
         double chance = year ? Math.hypot(order.get(i).yearSpread(), order.get(j).yearSpread()) : 0;
         spread[i][j] = Math.hypot(error, chance);
         spread[j][i] = spread[i][j];

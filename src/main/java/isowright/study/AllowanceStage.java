@@ -1,7 +1,6 @@
 package isowright.study;
 
 import isowright.review.AllowancePath;
-import isowright.review.GapEstimates;
 import isowright.study.ReviewFindings.Allowed;
 import isowright.study.ReviewFindings.Year;
 import java.util.ArrayList;
@@ -16,25 +15,28 @@ final class AllowanceStage {
     this.terms = terms;
   }
 
-  /** An allowance for every filing with an answer, and their sum under no plant's name. */
-  List<Allowed> allowed(
-      Candidate candidate, String period, GapEstimates estimates, List<HeldFiling> held) {
+  /**
+   * A gap to be carried to an allowance.
+   *
+   * @param plant its plant
+   * @param filed the filed cost
+   * @param gap the estimated gap
+   * @param used the quantile of it that is used
+   */
+  record Carried(String plant, double filed, double gap, double used) {}
+
+  /** An allowance for every gap, and their sum under no plant's name. */
+  List<Allowed> allowed(String technology, String period, List<Carried> gaps) {
+    AllowancePath.Terms each =
+        new AllowancePath.Terms(
+            terms.controllable(), terms.years(), terms.frontierShift(), terms.index());
     List<Allowed> all = new ArrayList<>();
-    for (HeldFiling filing : held) {
-      if (filing.answered()) {
-        double used = estimates.quantile(filing.gap(), terms.quantile());
-        AllowancePath path =
-            AllowancePath.of(
-                filing.gap().gap().filed(),
-                filing.gap().gap().gap(),
-                used,
-                new AllowancePath.Terms(
-                    terms.controllable(), terms.years(), terms.frontierShift(), terms.index()));
-        all.add(allowed(filing.plant(), period, candidate.name(), path));
-      }
+    for (Carried gap : gaps) {
+      AllowancePath path = AllowancePath.of(gap.filed(), gap.gap(), gap.used(), each);
+      all.add(allowed(gap.plant(), period, technology, path));
     }
     if (!all.isEmpty()) {
-      all.add(sum(all, period, candidate.name()));
+      all.add(sum(all, period, technology));
     }
     return all;
   }

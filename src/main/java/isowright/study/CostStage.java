@@ -85,6 +85,11 @@ final class CostStage {
     return new CostPlans(study, asked, panel, data).plans(usable);
   }
 
+  /** The review of filed costs against the cost functions fitted; after the findings. */
+  ReviewStage.Review review() {
+    return CostReviewStage.of(study, asked, panel, data, usable);
+  }
+
   CostFindings findings() {
     List<CostFindings.Fitted> fitted = new ArrayList<>();
     for (CostForm form : asked.forms()) {

@@ -77,15 +77,20 @@ final class CostsBinder {
     if (equations != Equations.SHARES && outputs.isEmpty() && section.has("inputs")) {
       section.lacks(
           "outputs",
-          "the output or outputs that cost is of, such as `outputs: {glass: {column: tonnes}}`; only"
-              + " share equations alone (`system: shares`) do without");
+          "the output or outputs that cost is of, such as `outputs: {glass: {column: tonnes}}`;"
+              + " only share equations alone (`system: shares`) do without");
     }
     List<Restriction> restrictions = restrictions(section);
     if (source.isEmpty() || cost.isEmpty() || inputs.size() < 2 || forms.isEmpty()) {
       return Optional.empty();
     }
     Roles roles =
-        Roles.ofCosts(plant, period, cost.get(), arguments(inputs, outputs, fixed), shares(inputs));
+        Roles.ofCosts(
+            plant,
+            period,
+            cost.get(),
+            arguments(inputs, outputs, fixed),
+            further(inputs, cost.get()));
     return Optional.of(
         new Costs(
             new Study.Records(source.get(), roles, keep),
@@ -246,6 +251,15 @@ final class CostsBinder {
           .ifPresent(word -> imposed.add(Restriction.values()[words.indexOf(word)]));
     }
     return imposed;
+  }
+
+  /** Shares, then the filed cost where it is another column than the one explained. */
+  private List<Further> further(List<Costs.Input> inputs, String cost) {
+    List<Further> all = shares(inputs);
+    FilingBinder.costColumn(root)
+        .filter(filed -> !filed.equals(cost))
+        .ifPresent(filed -> all.add(new Further(filed, CostFilings.ROLE, Measure.NUMBER)));
+    return all;
   }
 
   private static List<Further> shares(List<Costs.Input> inputs) {

@@ -42,17 +42,31 @@ final class OrderStage {
     answered.forEach(h -> ratios.put(h.plant(), ReviewFigures.figure(candidate, h.gap().ratio())));
     Ordering ordering =
         Ordering.of(entrants, reference, simulation.draws(), simulation.seed(), level);
-    return Optional.of(
-        new Order(
-            candidate.name(),
-            period,
-            ordering.simulation().word(),
-            simulation.draws(),
-            simulation.seed(),
-            ordering.without(),
-            ordering.ranked().stream().map(r -> placed(r, ratios)).toList(),
-            groups(ordering.apart()),
-            residual > 0 ? Optional.of(groups(ordering.apartWithYear())) : Optional.empty()));
+    return Optional.of(order(candidate.name(), period, ordering, residual > 0, ratios));
+  }
+
+  /**
+   * An order as it stands in the findings.
+   *
+   * @param year whether the chance of the year is known
+   * @param ratios filed over least cost, by plant
+   */
+  Order order(
+      String technology,
+      String period,
+      Ordering ordering,
+      boolean year,
+      Map<String, Figure> ratios) {
+    return new Order(
+        technology,
+        period,
+        ordering.simulation().word(),
+        simulation.draws(),
+        simulation.seed(),
+        ordering.without(),
+        ordering.ranked().stream().map(r -> placed(r, ratios)).toList(),
+        groups(ordering.apart()),
+        year ? Optional.of(groups(ordering.apartWithYear())) : Optional.empty());
   }
 
   private static Placed placed(Ordering.Ranked ranked, Map<String, Figure> ratios) {

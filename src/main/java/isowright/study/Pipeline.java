@@ -80,11 +80,14 @@ public final class Pipeline {
             : Optional.empty();
     CostFindings costs = CostFindings.NONE;
     List<Planned> costPlans = List.of();
+    ReviewStage.Review costReview = ReviewStage.Review.NONE;
     if (costReading.isPresent()) {
+      CostFilings.check(study, costReading.get().panel());
       CostStage stage =
           new CostStage(study, study.costs().orElseThrow(), costReading.get().panel());
       costs = stage.findings();
       costPlans = stage.plans();
+      costReview = stage.review();
     }
 
     progress.stage("answering least-cost questions", 3, STAGES);
@@ -98,7 +101,7 @@ public final class Pipeline {
     CostFindings bothSides = CostSides.in(costs, fitted, plans);
 
     progress.stage("holding filed costs against least cost", 4, STAGES);
-    ReviewStage.Review review = ReviewStage.of(study, priced, candidates);
+    ReviewStage.Review review = ReviewStage.of(study, priced, candidates).and(costReview);
     Optional<Findings.Records> records =
         reading
             .map(

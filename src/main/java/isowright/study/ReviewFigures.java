@@ -170,11 +170,16 @@ final class ReviewFigures {
   }
 
   private Needed needed(Condition condition) {
+    return needed(condition, condition.value().map(this::figure));
+  }
+
+  /** A condition as it stands in the findings. */
+  static Needed needed(Condition condition, Optional<Figure> value) {
     return new Needed(
         condition.kind().word(),
         condition.input(),
         condition.asIs(),
-        condition.value().map(this::figure),
+        value,
         condition.low(),
         condition.high(),
         condition.end(),

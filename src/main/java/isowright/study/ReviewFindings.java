@@ -3,6 +3,7 @@ package isowright.study;
 import isowright.study.Findings.Said;
 import java.util.List;
 import java.util.Optional;
+import java.util.stream.Stream;
 
 /**
  * What was found of filed costs beyond plant and period: orders of plants, how far the gap depends
@@ -27,6 +28,9 @@ public record ReviewFindings(
     Optional<Study.Allowance> terms,
     List<Said> remarks) {
 
+  /** The code of the remark that technical and mix part cannot be told apart. */
+  public static final String UNDIVIDED = "parts-not-told-apart";
+
   /** Nothing reviewed. */
   public static final ReviewFindings NONE =
       new ReviewFindings(
@@ -40,6 +44,23 @@ public record ReviewFindings(
     spreads = List.copyOf(spreads);
     allowances = List.copyOf(allowances);
     remarks = List.copyOf(remarks);
+  }
+
+  /** These and those of the cost side. */
+  ReviewFindings and(ReviewFindings other) {
+    return new ReviewFindings(
+        reference + "; on the cost side " + other.reference,
+        joined(orders, other.orders),
+        joined(variants, other.variants),
+        joined(omissions, other.omissions),
+        joined(spreads, other.spreads),
+        joined(allowances, other.allowances),
+        terms,
+        joined(remarks, other.remarks));
+  }
+
+  private static <T> List<T> joined(List<T> first, List<T> second) {
+    return Stream.concat(first.stream(), second.stream()).toList();
   }
 
   /**

@@ -13,14 +13,22 @@ final class ReviewSettings {
   /** By key of the study file. */
   static Map<String, String> of(Study study) {
     ReviewSettings all = new ReviewSettings();
-    study.filing().ifPresent(all::filing);
+    study
+        .filing()
+        .ifPresent(
+            filing ->
+                all.filing(
+                    filing,
+                    study.costs().isPresent() && study.records().isEmpty()
+                        ? "the recorded cost"
+                        : "the sum of price × quantity"));
     study.capital().assets().forEach(all::asset);
     study.capital().owner().ifPresent(all::owner);
     return all.settings;
   }
 
-  private void filing(Study.Filing filing) {
-    settings.put("filing.cost", filing.cost().orElse("the sum of price × quantity"));
+  private void filing(Study.Filing filing, String without) {
+    settings.put("filing.cost", filing.cost().orElse(without));
     settings.put(
         "filing.periods",
         filing

@@ -39,6 +39,16 @@ final class ReviewStage {
   record Review(List<Reviewed> reviews, ReviewFindings findings) {
     /** Nothing reviewed. */
     static final Review NONE = new Review(List.of(), ReviewFindings.NONE);
+
+    /** Both; the one where the other is nothing. */
+    Review and(Review other) {
+      if (reviews.isEmpty() || other.reviews.isEmpty()) {
+        return reviews.isEmpty() ? other : this;
+      }
+      List<Reviewed> all = new ArrayList<>(reviews);
+      all.addAll(other.reviews);
+      return new Review(all, findings.and(other.findings));
+    }
   }
 
   private final Study.Filing filing;
@@ -142,8 +152,22 @@ final class ReviewStage {
     }
     omissions.addAll(omitted.omissions(candidate, period, asked.reference(), held));
     if (last && filing.allowance().isPresent()) {
+      double quantile = filing.allowance().get().quantile();
       allowances.addAll(
-          new AllowanceStage(filing.allowance().get()).allowed(candidate, name, estimates, held));
+          new AllowanceStage(filing.allowance().get())
+              .allowed(
+                  candidate.name(),
+                  name,
+                  held.stream()
+                      .filter(HeldFiling::answered)
+                      .map(
+                          h ->
+                              new AllowanceStage.Carried(
+                                  h.plant(),
+                                  h.gap().gap().filed(),
+                                  h.gap().gap().gap(),
+                                  estimates.quantile(h.gap(), quantile)))
+                      .toList()));
     }
   }
 

@@ -157,11 +157,11 @@ class OrderingTest {
         equal.add(
             new Entrant(
                 e.plant(),
-                e.plan().cost() * moved,
-                e.question(),
-                e.plan(),
+                e.leastCost() * moved,
+                e.leastCost(),
                 e.slopes(),
-                e.yearSpread()));
+                e.yearSpread(),
+                e.asked()));
       }
       if (Ordering.of(equal, reference, 999, trial, .95).apartWithYear().groups().size() > 1) {
         called++;

@@ -1,0 +1,305 @@
+package isowright.study;
+
+import isowright.cost.CostElasticities;
+import isowright.cost.CostFunction;
+import isowright.estimation.CostData;
+import isowright.estimation.CostFit;
+import isowright.estimation.CostSpecification.Equations;
+import isowright.inference.ParameterDraws;
+import isowright.records.Panel;
+import isowright.review.CostConditions;
+import isowright.review.CostGap;
+import isowright.review.CostGaps;
+import isowright.review.Entrant;
+import isowright.review.Ordering;
+import isowright.study.CostReference.Levelled;
+import isowright.study.Findings.Said;
+import isowright.study.PlanFindings.Detail;
+import isowright.study.PlanFindings.Needed;
+import isowright.study.PlanFindings.Reviewed;
+import isowright.study.ReviewFindings.Allowed;
+import isowright.study.ReviewFindings.Order;
+import isowright.study.ReviewFindings.Variant;
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.Comparator;
+import java.util.HashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.stream.IntStream;
+
+/**
+ * Holds the filed costs of a study against its fitted cost functions at the same outputs and
+ * prices: gaps, the order of plants, the same against other references, allowances. Without
+ * quantities the technical and the mix part cannot be told apart, so they are left out.
+ */
+final class CostReviewStage {
+
+  /** For about so many filings of a cost function it is asked what would have to be true. */
+  private static final int MOST_NEEDED = 500;
+
+  private static final Said UNDIVIDED =
+      Said.of(
+          "note",
+          ReviewFindings.UNDIVIDED,
+          "A cost function knows no quantities of inputs, so by it the technical part and the mix"
+              + " part of a gap cannot be told apart: what recorded cost holds beyond least cost"
+              + " stands as remainder.");
+
+  private final Study study;
+  private final Study.Filing filing;
+  private final CostFilings filings;
+  private final CostData data;
+  private final CostCircumstances circumstances;
+
+  private final List<Reviewed> reviews = new ArrayList<>();
+  private final List<Order> orders = new ArrayList<>();
+  private final List<Variant> variants = new ArrayList<>();
+  private final List<Allowed> allowances = new ArrayList<>();
+  private final GapSpread spread = new GapSpread();
+
+  private CostReviewStage(
+      Study study, Costs costs, Study.Filing filing, Panel panel, CostData data) {
+    this.study = study;
+    this.filing = filing;
+    this.filings = new CostFilings(filing, panel);
+    this.data = data;
+    this.circumstances = new CostCircumstances(costs, panel, data);
+  }
+
+  /** The review of these fits; nothing where none is asked or none explains cost. */
+  static ReviewStage.Review of(
+      Study study, Costs costs, Panel panel, CostData data, List<CostFit> fits) {
+    List<CostFit> explaining =
+        fits.stream().filter(f -> f.specification().equations() != Equations.SHARES).toList();
+    if (study.filing().isEmpty() || explaining.isEmpty()) {
+      return ReviewStage.Review.NONE;
+    }
+    return new CostReviewStage(study, costs, study.filing().get(), panel, data).review(explaining);
+  }
+
+  private ReviewStage.Review review(List<CostFit> fits) {
+    CostReference asked = CostReference.asked(filing);
+    int[] periods = filings.periods();
+    for (CostFit fit : fits) {
+      for (int period : periods) {
+        review(fit, asked, period, period == periods[periods.length - 1]);
+      }
+    }
+    return new ReviewStage.Review(
+        reviews,
+        new ReviewFindings(
+            asked.words(),
+            orders,
+            variants,
+            List.of(),
+            spread.spreads(filings.panel()),
+            allowances,
+            filing.allowance(),
+            List.of(
+                Said.of(
+                    "note",
+                    "parts-not-told-apart",
+                    "A cost function knows no quantities of inputs, so by it the technical part and"
+                        + " the mix part of a gap cannot be told apart: what recorded cost holds"
+                        + " beyond least cost stands as remainder."))));
+  }
+
+  private void review(CostFit fit, CostReference reference, int period, boolean last) {
+    Levelled levelled = reference.of(data, fit);
+    int[] rows = filings.rows(period);
+    List<CostGap> gaps = gaps(levelled, rows);
+    double smallest = smallest(gaps, levelled, rows);
+    for (int i = 0; i < rows.length; i++) {
+      reviews.add(reviewed(levelled, rows[i], gaps.get(i), smallest));
+    }
+    List<Integer> answered =
+        IntStream.range(0, rows.length)
+            .filter(i -> irregular(levelled.function(), rows[i]).isEmpty())
+            .boxed()
+            .toList();
+    if (answered.isEmpty()) {
+      return;
+    }
+    order(levelled, period, rows, gaps, answered);
+    for (CostReference other : CostReference.all(reference)) {
+      vary(fit, other, period, other.equals(reference), rows, answered);
+    }
+    if (last && filing.allowance().isPresent()) {
+      CostGaps engine = CostGaps.against(levelled.propagation());
+      double quantile = filing.allowance().get().quantile();
+      allowances.addAll(
+          new AllowanceStage(filing.allowance().get())
+              .allowed(
+                  levelled.function().form(),
+                  filings.period(period),
+                  answered.stream()
+                      .map(
+                          i ->
+                              new AllowanceStage.Carried(
+                                  filings.plant(rows[i]),
+                                  gaps.get(i).filed(),
+                                  gaps.get(i).difference().value(),
+                                  engine.quantile(gaps.get(i), quantile)))
+                      .toList()));
+    }
+  }
+
+  private List<CostGap> gaps(Levelled levelled, int[] rows) {
+    return CostGaps.against(levelled.propagation())
+        .of(
+            Arrays.stream(rows).mapToObj(data::point).toList(),
+            levelled.function(),
+            Arrays.stream(rows).mapToDouble(filings::filed).toArray(),
+            Arrays.stream(rows).mapToDouble(filings::recorded).toArray());
+  }
+
+  private double smallest(List<CostGap> gaps, Levelled levelled, int[] rows) {
+    int needed = Math.max(1, MOST_NEEDED / filings.periods().length);
+    return IntStream.range(0, rows.length)
+        .filter(i -> irregular(levelled.function(), rows[i]).isEmpty())
+        .mapToObj(i -> Math.abs(gaps.get(i).difference().value()))
+        .sorted(Comparator.reverseOrder())
+        .mapToDouble(size -> size)
+        .limit(needed)
+        .min()
+        .orElse(0);
+  }
+
+  /** Why the fitted function is no cost function at a row; empty where it is one. */
+  private String irregular(CostFunction function, int row) {
+    CostElasticities at = CostElasticities.at(function, data.point(row));
+    if (at.monotone() && at.concave()) {
+      return "";
+    }
+    return at.monotone()
+        ? "it is not concave in prices"
+        : "a share or marginal cost is not positive";
+  }
+
+  private Reviewed reviewed(Levelled levelled, int row, CostGap gap, double smallest) {
+    String irregular = irregular(levelled.function(), row);
+    String form = levelled.function().form();
+    if (!irregular.isEmpty()) {
+      return new Reviewed(
+          filings.plant(row),
+          filings.periodOf(row),
+          form,
+          gap.filed(),
+          gap.recorded(),
+          Optional.empty(),
+          Optional.empty(),
+          gap.unreconciled(),
+          Optional.empty(),
+          Optional.empty(),
+          "irregular",
+          List.of(
+              Said.of(
+                  "warning",
+                  "irregular",
+                  "At these prices and outputs the fitted function is no cost function ("
+                      + irregular
+                      + "), so there is no least cost.")));
+    }
+    List<String> outside = circumstances.outside(data.point(row));
+    boolean asked = Math.abs(gap.difference().value()) >= smallest;
+    return new Reviewed(
+        filings.plant(row),
+        filings.periodOf(row),
+        form,
+        gap.filed(),
+        gap.recorded(),
+        Optional.of(FitStage.figure(gap.leastCost())),
+        Optional.of(FitStage.figure(gap.difference())),
+        gap.unreconciled(),
+        Optional.empty(),
+        Optional.empty(),
+        outside.isEmpty() ? "solved" : "outside-records",
+        Optional.of(
+            new Detail(
+                FitStage.figure(gap.ratio()),
+                FitStage.figure(gap.remainder()),
+                Optional.empty(),
+                Optional.empty(),
+                asked ? needed(levelled, row, gap) : List.of())),
+        List.of(UNDIVIDED));
+  }
+
+  private List<Needed> needed(Levelled levelled, int row, CostGap gap) {
+    return CostConditions.on(levelled.function(), levelled.propagation())
+        .of(data.point(row), gap.filed())
+        .stream()
+        .map(c -> ReviewFigures.needed(c, c.value().map(FitStage::figure)))
+        .toList();
+  }
+
+  private void order(
+      Levelled levelled, int period, int[] rows, List<CostGap> gaps, List<Integer> answered) {
+    Map<String, Figure> ratios = new HashMap<>();
+    List<Entrant> entrants = new ArrayList<>();
+    for (int i : answered) {
+      CostGap gap = gaps.get(i);
+      ratios.put(filings.plant(rows[i]), FitStage.figure(gap.ratio()));
+      entrants.add(
+          new Entrant(
+              filings.plant(rows[i]),
+              gap.filed(),
+              gap.leastCost().value(),
+              gap.slopes(),
+              levelled.chance(),
+              Optional.empty()));
+    }
+    Study.Simulation simulation = filing.simulation();
+    double level = study.estimation().confidence();
+    Ordering ordering =
+        Ordering.of(
+            entrants,
+            ParameterDraws.of(
+                levelled.covariance(),
+                levelled.degreesOfFreedom(),
+                simulation.draws(),
+                simulation.seed()),
+            levelled.propagation()::standardError,
+            level);
+    orders.add(
+        new OrderStage(simulation, level)
+            .order(
+                levelled.function().form(),
+                filings.period(period),
+                ordering,
+                levelled.chance() > 0,
+                ratios));
+  }
+
+  private void vary(
+      CostFit fit,
+      CostReference reference,
+      int period,
+      boolean asAsked,
+      int[] rows,
+      List<Integer> answered) {
+    Levelled levelled = reference.of(data, fit);
+    int[] own = answered.stream().mapToInt(i -> rows[i]).toArray();
+    List<CostGap> gaps = gaps(levelled, own);
+    String form = levelled.function().form();
+    spread.note(
+        form,
+        asAsked ? "as asked" : "against " + reference.words(),
+        own,
+        gaps.stream().mapToDouble(g -> g.difference().value() / g.filed()).toArray());
+    var total = CostGaps.against(levelled.propagation()).total(gaps);
+    variants.add(
+        new Variant(
+            form,
+            filings.period(period),
+            asAsked ? "as-asked" : reference.code(),
+            asAsked ? "as asked" : "against " + reference.words(),
+            study.money().words(),
+            own.length,
+            total.filed(),
+            FitStage.figure(total.leastCost()),
+            FitStage.figure(total.gap()),
+            FitStage.figure(total.share())));
+  }
+}
