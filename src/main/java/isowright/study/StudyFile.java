@@ -56,9 +56,23 @@ public final class StudyFile {
     return read(file, Optional.of(records));
   }
 
+  /**
+   * The study that a text asks for.
+   *
+   * @param as the study file that the text would stand in; paths are relative to its folder
+   * @param text what the file would say
+   */
+  public static Study readText(Path as, String text) throws StudyRefused {
+    return study(as, text, text.getBytes(StandardCharsets.UTF_8), Optional.empty());
+  }
+
   private static Study read(Path file, Optional<Source> instead) throws StudyRefused {
     byte[] bytes = bytes(file);
-    String text = text(file, bytes);
+    return study(file, text(file, bytes), bytes, instead);
+  }
+
+  private static Study study(Path file, String text, byte[] bytes, Optional<Source> instead)
+      throws StudyRefused {
     Mistakes mistakes = new Mistakes();
     StudyBinder binder = new StudyBinder(file, sha256(bytes), instead);
     var study = YamlNodes.root(text, mistakes).flatMap(YamlValue::section).flatMap(binder::bind);

@@ -131,6 +131,11 @@ class ArchitectureTest {
             List.of("org.apache.poi..", "org.openxmlformats..", "org.apache.xmlbeans.."),
             "a document on paper says what the page says; one that reaches further could differ"),
         new Room(
+            "workbench",
+            List.of("study", "records", "estimation", "charts", "report"),
+            List.of(),
+            "from code a study is said as in its file, and answered by the same stages"),
+        new Room(
             "cli",
             with(
                 with(with(with(with(reviewing, "study"), "charts"), "runs"), "report"), "handover"),
