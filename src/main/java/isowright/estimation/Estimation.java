@@ -51,6 +51,21 @@ public final class Estimation {
   }
 
   /**
+   * Least squares on the very rows that a fit by instruments uses, so that the two differ in
+   * nothing but the estimator.
+   */
+  public static Fit leastSquaresBeside(Fit fit) {
+    Specification how = fit.specification();
+    return new InstrumentedEstimation(
+            fit.panel(),
+            how.by(new Estimator.LeastSquares()),
+            fit.base(),
+            (LinearForm) how.form(),
+            (Estimator.Instruments) how.estimator())
+        .leastSquares();
+  }
+
+  /**
    * The least sum of squares of a nonlinear form with every curvature held at the same value, all
    * else as in the fit.
    */

@@ -54,7 +54,16 @@ final class InstrumentedEstimation {
     this.instruments = instruments;
   }
 
+  /** The same rows by least squares, every input taken as it is. */
+  Fit leastSquares() {
+    return fit(true);
+  }
+
   Fit fit() {
+    return fit(false);
+  }
+
+  private Fit fit(boolean allExogenous) {
     read();
     if (!lacking.isEmpty()) {
       return refused(lacking);
@@ -73,9 +82,9 @@ final class InstrumentedEstimation {
     boolean[] held = held(own, used);
     Design wide = new DesignWithInstruments(own, rows, columns, held);
     Design treated = treated(wide, known, used);
-    InstrumentedFit fit =
-        TwoStageLeastSquares.fit(
-            new InstrumentedDesign(treated, endogenous(own, columns, constant)));
+    boolean[] endogenous =
+        allExogenous ? new boolean[own.columns().size()] : endogenous(own, columns, constant);
+    InstrumentedFit fit = TwoStageLeastSquares.fit(new InstrumentedDesign(treated, endogenous));
     List<String> reasons = reasons(fit, own, held);
     if (!reasons.isEmpty()) {
       return refused(reasons);
@@ -241,7 +250,8 @@ final class InstrumentedEstimation {
               + parameters
               + " columns of the first stage"
               + (last.absorbed() > 0 ? " (plant effects among them)" : "")
-              + ": add records, use fewer or shorter lags, or ask for a form with fewer parameters.");
+              + ": add records, use fewer or shorter lags, or ask for a form with fewer"
+              + " parameters.");
       return reasons;
     }
     List<Collinearity> untold =

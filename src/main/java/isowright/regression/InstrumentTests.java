@@ -1,7 +1,6 @@
 package isowright.regression;
 
 import java.util.Arrays;
-import java.util.List;
 import org.apache.commons.math3.linear.Array2DRowRealMatrix;
 import org.apache.commons.math3.linear.ArrayRealVector;
 import org.apache.commons.math3.linear.CholeskyDecomposition;
@@ -138,10 +137,7 @@ public final class InstrumentTests {
 
   /** Z as regressors, the residuals y − Xβ as response. */
   private Design residualsOnInstruments() {
-    InstrumentedDesign of = fit.of();
-    Design asIs =
-        new ChosenColumns(of.design(), of.instrumentColumns(), of.design().columns().size());
-    return new ResidualResponse(asIs, of, fit.fit().coefficients());
+    return ResidualResponse.of(fit.of(), fit.fit().coefficients());
   }
 
   private static LinearFit withoutCoefficients(LinearFit stage) {
@@ -200,69 +196,5 @@ public final class InstrumentTests {
       x[i] = sum / factor[kept[i]][kept[i]];
     }
     return x;
-  }
-
-  /** A design of instruments with y − Xβ in place of the response. */
-  private static final class ResidualResponse implements Design {
-    private final Design instruments;
-    private final InstrumentedDesign of;
-    private final double[] coefficients;
-
-    ResidualResponse(Design instruments, InstrumentedDesign of, double[] coefficients) {
-      this.instruments = instruments;
-      this.of = of;
-      this.coefficients = coefficients;
-    }
-
-    @Override
-    public int rows() {
-      return instruments.rows();
-    }
-
-    @Override
-    public List<String> columns() {
-      return instruments.columns();
-    }
-
-    @Override
-    public Groups groups() {
-      return instruments.groups();
-    }
-
-    @Override
-    public void fill(int from, int to, double[][] into) {
-      int columns = of.design().columns().size();
-      int[] chosen = of.instrumentColumns();
-      double[][] wide = new double[columns + 1][];
-      for (int l = 0; l < chosen.length; l++) {
-        wide[chosen[l]] = into[l];
-      }
-      wide[columns] = into[chosen.length];
-      for (int k = 0; k < columns; k++) {
-        if (wide[k] == null) {
-          wide[k] = new double[to - from];
-        }
-      }
-      of.design().fill(from, to, wide);
-      double[] residuals = new Residuals(to - from).of(regressors(wide), to - from, coefficients);
-      System.arraycopy(residuals, 0, into[chosen.length], 0, to - from);
-    }
-
-    private double[][] regressors(double[][] wide) {
-      double[][] block = new double[coefficients.length + 1][];
-      System.arraycopy(wide, 0, block, 0, coefficients.length);
-      block[coefficients.length] = wide[wide.length - 1];
-      return block;
-    }
-
-    @Override
-    public int absorbed() {
-      return instruments.absorbed();
-    }
-
-    @Override
-    public double absorbedLeverage(int row) {
-      return instruments.absorbedLeverage(row);
-    }
   }
 }

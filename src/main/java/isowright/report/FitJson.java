@@ -22,6 +22,7 @@ final class FitJson {
 
   static void write(JsonFile file, Fitted fit) throws IOException {
     file.text("technology", fit.technology());
+    file.text("estimator", fit.frontier().isPresent() ? "frontier" : fit.endogeneity().estimator());
     file.text("plantEffects", fit.how().plantEffects());
     file.text("time", fit.how().time());
     file.text("standardErrors", fit.how().standardErrors());
@@ -54,6 +55,7 @@ final class FitJson {
     file.numbersByName("plantLevels", fit.plantLevels());
     PanelJson.write(file, fit.panel());
     FrontierJson.write(file, fit.frontier());
+    EndogeneityJson.write(file, fit.endogeneity());
     file.number("smearing", fit.smearing().orElse(Double.NaN));
     rows(file, fit);
     RefitJson.write(file, fit);

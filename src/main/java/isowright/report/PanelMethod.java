@@ -21,6 +21,7 @@ final class PanelMethod {
     Set<String> words = new LinkedHashSet<>();
     Set<String> tests = new LinkedHashSet<>();
     for (Fitted fit : material.findings().fits()) {
+      words.add(fit.endogeneity().estimator());
       words.add(fit.how().plantEffects());
       words.add(fit.how().time());
       fit.panel().components().ifPresent(c -> words.add(c.method()));
@@ -44,18 +45,34 @@ final class PanelMethod {
 
   private static String point(String word, Citing citing) {
     return switch (word) {
+      case "instruments" ->
+          "Inputs chosen knowing productivity by two-stage least squares, standard errors from y −"
+              + " Xβ with the inputs themselves "
+              + citing.cite(Source.BASMANN)
+              + "; every second-order column of such an input has the same column of its"
+              + " instruments. Instruments are called weak below F = 10 "
+              + citing.cite(Source.STAIGER)
+              + ", by effective F "
+              + citing.cite(Source.MONTIEL)
+              + " or, for several columns, conditional F "
+              + citing.cite(Source.SANDERSON)
+              + "; the values not rejected however weak they are after "
+              + citing.cite(Source.ANDERSON_RUBIN)
+              + ".";
       case "within" -> "Plant effects by deviations from plant means.";
       case "two-way" ->
-          "Plant effects by deviations from plant means, period effects as a constant for each period"
-              + " but the first; exact for plants of unequal length too.";
+          "Plant effects by deviations from plant means, period effects as a constant for each"
+              + " period but the first; exact for plants of unequal length too.";
       case "between" -> "Least squares on the means of plants, each plant counting once.";
       case "differences" ->
           "Least squares on differences of successive periods; none is taken across a gap.";
       case "random" ->
-          "Random effects by generalised least squares: a share θ = 1 − √(σ²_e/(σ²_e + T σ²_u)) of a"
-              + " plant’s mean is taken off its rows. A plant’s level is its best linear prediction.";
+          "Random effects by generalised least squares: a share θ = 1 − √(σ²_e/(σ²_e + T σ²_u)) of"
+              + " a plant’s mean is taken off its rows. A plant’s level is its best linear"
+              + " prediction.";
       case "mundlak" ->
-          "Random effects with plant means of all columns added, which makes slopes those within plants "
+          "Random effects with plant means of all columns added, which makes slopes those within"
+              + " plants "
               + citing.cite(Source.MUNDLAK)
               + "; the typical plant has mean plant means.";
       case "swamy-arora" ->
@@ -71,8 +88,8 @@ final class PanelMethod {
               + citing.cite(Source.AMEMIYA, Source.BALTAGI_CHANG)
               + ".";
       case "biased-trend" ->
-          "A biased trend adds τ t + ½ τ₂ t² + Σ τ_i z_i t; its bias is what it does to shares in cost at"
-              + " a given mix.";
+          "A biased trend adds τ t + ½ τ₂ t² + Σ τ_i z_i t; its bias is what it does to shares in"
+              + " cost at a given mix.";
       default -> "";
     };
   }
@@ -83,13 +100,23 @@ final class PanelMethod {
           "Variance between plants by Lagrange multiplier "
               + citing.cite(Source.BREUSCH, Source.BALTAGI_LI)
               + ".";
+      case "instruments-agree" ->
+          "Over-identification by the moments at the efficient estimate, or by R² of residuals on"
+              + " instruments where variances are taken as equal "
+              + citing.cite(Source.HANSEN, Source.SARGAN)
+              + ".";
+      case "inputs-exogenous" ->
+          "Whether instruments were needed by first-stage residuals added to the regression "
+              + citing.cite(Source.WU, Source.HAUSMAN)
+              + ".";
       case "random-against-within" ->
-          "Random effects against within by the difference of their slopes, with classical covariances"
-              + " of both "
+          "Random effects against within by the difference of their slopes, with classical"
+              + " covariances of both "
               + citing.cite(Source.HAUSMAN)
               + ".";
       case "plant-means" ->
-          "The same question by plant means added to the regression, with the covariance of the fit "
+          "The same question by plant means added to the regression, with the covariance of the fit"
+              + " "
               + citing.cite(Source.MUNDLAK)
               + ".";
       case "poolability" ->

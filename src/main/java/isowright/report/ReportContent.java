@@ -37,6 +37,7 @@ public final class ReportContent {
     if (findings.fits().stream().anyMatch(fit -> !fit.tests().isEmpty())) {
       sections.add(TestsSection.of(material));
     }
+    EndogeneitySection.of(material).ifPresent(sections::add);
     if (!CostsSection.alone(findings)) {
       sections.add(ElasticitiesSection.of(material));
       sections.add(RegularitySection.of(material));

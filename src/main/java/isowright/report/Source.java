@@ -12,6 +12,12 @@ enum Source {
       "Amemiya, T. (1971)",
       "The Estimation of the Variances in a Variance-Components Model",
       "International Economic Review 12, 1–13"),
+  ANDERSON_RUBIN(
+      "Anderson and Rubin 1949",
+      "Anderson, T. W. and Rubin, H. (1949)",
+      "Estimation of the Parameters of a Single Equation in a Complete System of Stochastic"
+          + " Equations",
+      "Annals of Mathematical Statistics 20, 46–63"),
   ARROW(
       "Arrow et al. 1961",
       "Arrow, K. J., Chenery, H. B., Minhas, B. S. and Solow, R. M. (1961)",
@@ -33,6 +39,12 @@ enum Source {
       "Barten, A. P. (1969)",
       "Maximum Likelihood Estimation of a Complete System of Demand Equations",
       "European Economic Review 1, 7–73"),
+  BASMANN(
+      "Basmann 1957",
+      "Basmann, R. L. (1957)",
+      "A Generalized Classical Method of Linear Estimation of Coefficients in a Structural"
+          + " Equation",
+      "Econometrica 25, 77–83"),
   BELSLEY(
       "Belsley, Kuh and Welsch 1980",
       "Belsley, D. A., Kuh, E. and Welsch, R. E. (1980)",
@@ -144,6 +156,11 @@ enum Source {
       "Hanoch, G. (1975)",
       "The Elasticity of Scale and the Shape of Average Costs",
       "American Economic Review 65, 492–497"),
+  HANSEN(
+      "Hansen 1982",
+      "Hansen, L. P. (1982)",
+      "Large Sample Properties of Generalized Method of Moments Estimators",
+      "Econometrica 50, 1029–1054"),
   HAUSMAN(
       "Hausman 1978",
       "Hausman, J. A. (1978)",
@@ -199,6 +216,11 @@ enum Source {
       "League Tables of In Vitro Fertilisation Clinics: How Confident Can We Be About the"
           + " Rankings?",
       "British Medical Journal 316, 1701–1705"),
+  MONTIEL(
+      "Montiel Olea and Pflueger 2013",
+      "Montiel Olea, J. L. and Pflueger, C. (2013)",
+      "A Robust Test for Weak Instruments",
+      "Journal of Business and Economic Statistics 31, 358–369"),
   MUNDLAK(
       "Mundlak 1978",
       "Mundlak, Y. (1978)",
@@ -220,12 +242,27 @@ enum Source {
       "Shephard, R. W. (1953)",
       "Cost and Production Functions",
       "Princeton: Princeton University Press"),
+  STAIGER(
+      "Staiger and Stock 1997",
+      "Staiger, D. and Stock, J. H. (1997)",
+      "Instrumental Variables Regression with Weak Instruments",
+      "Econometrica 65, 557–586"),
   SWAMY(
       "Swamy and Arora 1972",
       "Swamy, P. A. V. B. and Arora, S. S. (1972)",
       "The Exact Finite Sample Properties of the Estimators of Coefficients in the"
           + " Error Components Regression Models",
       "Econometrica 40, 261–275"),
+  SANDERSON(
+      "Sanderson and Windmeijer 2016",
+      "Sanderson, E. and Windmeijer, F. (2016)",
+      "A Weak Instrument F-Test in Linear IV Models with Multiple Endogenous Variables",
+      "Journal of Econometrics 190, 212–221"),
+  SARGAN(
+      "Sargan 1958",
+      "Sargan, J. D. (1958)",
+      "The Estimation of Economic Relationships Using Instrumental Variables",
+      "Econometrica 26, 393–415"),
   SATO(
       "Sato 1967",
       "Sato, K. (1967)",
@@ -251,6 +288,11 @@ enum Source {
       "Wooldridge, J. M. (2002)",
       "Econometric Analysis of Cross Section and Panel Data",
       "Cambridge, Massachusetts: MIT Press"),
+  WU(
+      "Wu 1973",
+      "Wu, D.-M. (1973)",
+      "Alternative Tests of Independence between Stochastic Regressors and Disturbances",
+      "Econometrica 41, 733–750"),
   ZELLNER(
       "Zellner 1962",
       "Zellner, A. (1962)",

@@ -173,6 +173,16 @@ final class Terms {
   }
 
   /** After whom variances of random effects were estimated. */
+  static String estimator(String word) {
+    return switch (word) {
+      case "least-squares" -> "Least squares";
+      case "instruments" -> "Two-stage least squares";
+      case "proxy" -> "Control function";
+      case "joint-moments" -> "Joint moments";
+      default -> word;
+    };
+  }
+
   static String components(String word) {
     return switch (word) {
       case "swamy-arora" -> "Swamy and Arora";
@@ -217,6 +227,8 @@ final class Terms {
       case "random-against-within" -> "Random effects against within";
       case "no-inefficiency" -> "No inefficiency (one-sided)";
       case "no-decay" -> "Inefficiency constant over time";
+      case "instruments-agree" -> "Do the instruments agree? (over-identification)";
+      case "inputs-exogenous" -> "Were instruments needed? (Durbin-Wu-Hausman)";
       case "reset" -> "RESET: is the form rich enough?";
       case "breusch-pagan" -> "Breusch-Pagan: equal variance";
       case "white" -> "White: equal variance";

@@ -38,6 +38,7 @@ public final class FitFindings {
    * @param influence the most influential rows
    * @param robustness how far the fit stands when looked at in other ways
    * @param frontier what was found of inefficiency; absent where no frontier was fitted
+   * @param endogeneity what was found about inputs chosen knowing productivity
    * @param remarks what must be said of this fit
    */
   public record Fitted(
@@ -61,7 +62,57 @@ public final class FitFindings {
       List<Influential> influence,
       RobustnessFindings robustness,
       Optional<FrontierFindings> frontier,
+      EndogeneityFindings endogeneity,
       List<Said> remarks) {
+
+    /** By least squares, about which nothing further was asked. */
+    public Fitted(
+        String technology,
+        How how,
+        String state,
+        List<Parameter> parameters,
+        double[][] covariance,
+        Optional<Summary> summary,
+        Map<String, Figure> outputElasticity,
+        Optional<Figure> returnsToScale,
+        List<Pair> substitution,
+        List<Pair> demandElasticity,
+        Optional<Regular> regularity,
+        Optional<Curvature> curvature,
+        List<Tested> tests,
+        Map<String, Double> plantLevels,
+        PanelFindings panel,
+        Optional<Double> smearing,
+        List<Point> points,
+        List<Influential> influence,
+        RobustnessFindings robustness,
+        Optional<FrontierFindings> frontier,
+        List<Said> remarks) {
+      this(
+          technology,
+          how,
+          state,
+          parameters,
+          covariance,
+          summary,
+          outputElasticity,
+          returnsToScale,
+          substitution,
+          demandElasticity,
+          regularity,
+          curvature,
+          tests,
+          plantLevels,
+          panel,
+          smearing,
+          points,
+          influence,
+          robustness,
+          frontier,
+          EndogeneityFindings.NONE,
+          remarks);
+    }
+
     /** Whether the fit has an answer that later stages may use. */
     public boolean usable() {
       return state.equals("estimated") || state.equals("flat");

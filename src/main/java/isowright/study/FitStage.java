@@ -112,6 +112,7 @@ final class FitStage {
         List.of(),
         RobustnessFindings.NONE,
         Optional.empty(),
+        EndogeneityStage.unusable(fit),
         remarks);
   }
 
@@ -129,7 +130,11 @@ final class FitStage {
     List<FitFindings.Pair> substitution = elasticities.substitution();
     FitStatistics statistics = numbers.statistics();
     FitFindings.Regular regular = RegularityFindings.of(fit);
+    EndogeneityStage endogenous = new EndogeneityStage(fit);
     List<Verdict> verdicts = verdicts(fit);
+    verdicts.addAll(endogenous.verdicts());
+    List<Said> others = new ArrayList<>(other.remarks(robustness, output, scale));
+    others.addAll(endogenous.remarks());
     return new Fitted(
         fit.specification().form().name(),
         how(
@@ -164,7 +169,8 @@ final class FitStage {
         other.influential(),
         robustness,
         FrontierStage.findings(fit),
-        remarks(fit, regular, substitution, verdicts, other.remarks(robustness, output, scale)));
+        endogenous.findings(output, scale),
+        remarks(fit, regular, substitution, verdicts, others));
   }
 
   private FitFindings.How how(Fit fit, String covarianceWords, double degreesOfFreedom) {

@@ -90,6 +90,7 @@ final class Settings {
         settings.put("estimation.frontier.over-time", frontier.overTime().word());
       }
       held(how.held(), settings);
+      settings.putAll(EndogenousBinder.settings(how.estimators()));
       how.resampling()
           .ifPresent(
               drawing -> {

@@ -1,5 +1,6 @@
 package isowright.study;
 
+import isowright.estimation.Estimator;
 import isowright.estimation.Specification.PlantEffects;
 import isowright.estimation.Specification.StandardErrors;
 import isowright.estimation.Specification.Time;
@@ -60,10 +61,10 @@ final class StudyBinder {
           "restrict",
           "zeros",
           "missing-values",
+          "instruments",
           "nests",
           "frontier");
-  private static final List<String> ESTIMATION_LATER =
-      List.of("regularity", "instruments", "proxy");
+  private static final List<String> ESTIMATION_LATER = List.of("regularity", "proxy");
 
   private final Path file;
   private final Optional<Source> recordsInstead;
@@ -107,6 +108,7 @@ final class StudyBinder {
     if (GapsBinder.keepsZeros(root, declared)) {
       declared = declared.keepingZeros();
     }
+    declared = declared.withFurther(EndogenousBinder.further(estimation.estimators(), declared));
     Questions questions = questions(root.section("questions"));
     var leastCost = new PlanBinder(declared, names).bind(root);
     Optional<Filing> filing = new FilingBinder(declared).bind(root);
@@ -206,6 +208,12 @@ final class StudyBinder {
               + "` needs rows of several periods, and `plant-effects: between` leaves one row a"
               + " plant; set this to robust");
     }
+    Study.Held held = new HeldBinder(section, root, declared.inputs(), technologies).bind(effects);
+    List<Estimator> estimators = new ArrayList<>();
+    new FrontierBinder(section, declared, technologies)
+        .bind(effects.plants(), errors)
+        .ifPresent(estimators::add);
+    estimators.addAll(new EndogenousBinder(section, declared, technologies).bind(effects, held));
     return new Estimation(
         effects.plants(),
         effects.time(),
@@ -213,9 +221,8 @@ final class StudyBinder {
         scaled,
         errors,
         confidence(section),
-        new FrontierBinder(section, declared, technologies)
-            .bind(effects.plants(), errors).stream().toList(),
-        new HeldBinder(section, root, declared.inputs(), technologies).bind(effects),
+        estimators,
+        held,
         ResamplingBinder.read(section, !technologies.isEmpty()));
   }
 

@@ -28,7 +28,7 @@ class TwoStageLeastSquaresTest {
   private static final Path REFERENCE = Path.of("src/test/resources/reference/instruments.csv");
 
   /** constant, pcap, pc, emp, unemp; lag emp, lag 2 emp, lag pc: rows 2 to 16 of each state. */
-  private static ArrayDesign states() throws IOException {
+  static ArrayDesign states() throws IOException {
     ArrayDesign all = PublishedDesigns.states();
     double[][] columns = new double[6][all.rows()];
     all.fill(0, all.rows(), columns);
@@ -58,7 +58,7 @@ class TwoStageLeastSquaresTest {
         Groups.startingAt(rows, starts));
   }
 
-  private static Times years() {
+  static Times years() {
     return Times.of(15, java.util.stream.IntStream.range(0, 720).map(r -> r % 15).toArray());
   }
 

@@ -56,7 +56,13 @@ class StudyMistakesTest {
 
   static List<Bad> table() throws IOException {
     List<Bad> all = new ArrayList<>();
-    for (String file : List.of("mistakes.txt", "filing-mistakes.txt", "matrix-mistakes.txt")) {
+    List<String> files =
+        List.of(
+            "mistakes.txt",
+            "filing-mistakes.txt",
+            "matrix-mistakes.txt",
+            "endogenous-mistakes.txt");
+    for (String file : files) {
       all.addAll(table(file));
     }
     return all;
