@@ -143,15 +143,7 @@ final class AverageCostCharts {
     plot.dots("rows", x, y, Dot.FAR);
     band(plot);
     plot.line("average cost", outputs, costs, Pen.MAIN);
-    plot.labelAlong(
-        "typical plant",
-        Curves.ends(outputs),
-        Curves.ends(costs),
-        Style.DEEP,
-        Side.SOUTH,
-        Side.NORTH,
-        Side.SOUTH_WEST);
-    plot.key(Pen.MAIN, "average cost at mean prices");
+    plot.key(Pen.MAIN, "typical plant at mean prices");
     plot.key(Dot.FAR, "rows at mean prices");
     return plot;
   }

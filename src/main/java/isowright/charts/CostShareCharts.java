@@ -41,12 +41,25 @@ final class CostShareCharts {
     this.overTime = rows.stream().map(Row::period).distinct().count() == rows.size();
   }
 
-  /** The chart of a cost function; none where shares are not recorded, or of too many inputs. */
+  /**
+   * The chart of a cost function; none where shares are not recorded, do not move, or are of too
+   * many inputs.
+   */
   static Optional<Chart> of(Fitted fit, Setting setting) {
     List<Row> rows = fit.rows().rows().stream().filter(row -> !row.seen().isEmpty()).toList();
-    return rows.size() < 3 || rows.get(0).fitted().size() > DOTS.size()
+    boolean moving =
+        rows.stream().anyMatch(row -> Math.abs(moved(row, rows.get(0))) > CostShape.NOTHING);
+    return rows.size() < 3 || !moving || rows.get(0).fitted().size() > DOTS.size()
         ? Optional.empty()
         : Optional.of(new CostShareCharts(fit, rows, setting).chart());
+  }
+
+  /** The largest difference of a fitted share between two rows. */
+  private static double moved(Row row, Row other) {
+    return row.fitted().keySet().stream()
+        .mapToDouble(input -> Math.abs(fitted(row, input) - fitted(other, input)))
+        .max()
+        .orElse(0);
   }
 
   private static double fitted(Row row, String input) {

@@ -9,7 +9,9 @@ import isowright.records.RecordsRefused;
 import isowright.records.Remark;
 import isowright.records.Remark.Severity;
 import isowright.report.Numbers;
+import isowright.study.CostAudit;
 import isowright.study.Costs;
+import isowright.study.Findings.Said;
 import isowright.study.Study;
 import java.io.PrintWriter;
 import java.util.ArrayList;
@@ -35,7 +37,8 @@ final class AuditText {
     Optional<Study.Records> asked = study.records().or(() -> study.costs().map(Costs::records));
     if (asked.isEmpty()) {
       out.println(
-          "Records  none: the study asks technologies taken as known, so there is nothing to audit");
+          "Records  none: the study asks technologies taken as known, so there is nothing to"
+              + " audit");
       return true;
     }
     Study.Records records = asked.get();
@@ -56,9 +59,11 @@ final class AuditText {
             + " set aside");
     out.println("Plants   " + panel.plants().size() + periods(panel));
     setAside(reading);
-    remarks(remarks);
+    List<Said> costs = CostAudit.of(study);
+    remarks(remarks, costs);
     columns(PanelAudit.describe(panel));
-    return remarks.stream().noneMatch(remark -> remark.severity() == Severity.ERROR);
+    return remarks.stream().noneMatch(remark -> remark.severity() == Severity.ERROR)
+        && costs.stream().noneMatch(said -> said.severity().equals("error"));
   }
 
   private static String periods(Panel panel) {
@@ -94,10 +99,14 @@ final class AuditText {
         : (count == 1 ? " (row " : " (rows ") + first + (more ? ", …" : "") + ")";
   }
 
-  private void remarks(List<Remark> remarks) {
+  private void remarks(List<Remark> remarks, List<Said> costs) {
     out.println();
-    out.println(
-        "Remarks: " + RemarkCounts.words(remarks.stream().map(r -> r.severity().word()).toList()));
+    List<String> severities = new ArrayList<>(costs.stream().map(Said::severity).toList());
+    remarks.forEach(remark -> severities.add(remark.severity().word()));
+    out.println("Remarks: " + RemarkCounts.words(severities));
+    for (Said said : costs) {
+      out.println("  " + said.severity() + ": " + said.message());
+    }
     for (Remark remark : remarks) {
       out.println("  " + remark.severity().word() + ": " + remark.message());
     }
@@ -132,6 +141,7 @@ final class AuditText {
     }
     table.lines("  ").forEach(out::println);
     out.println(
-        "  (within plants: the share of the variance that lies within plants, in logs where all are positive)");
+        "  (within plants: the share of the variance that lies within plants, in logs where all are"
+            + " positive)");
   }
 }

@@ -110,12 +110,21 @@ final class CostTables {
             "Scale economies",
             fits,
             fit -> Cells.figure(fit.at().flatMap(AtMean::scaleEconomies))));
-    scale.add(
-        row(
-            "Technical change a period",
-            fits,
-            fit -> Cells.figure(fit.at().flatMap(AtMean::technicalChange))));
-    groups.add(new Group(Optional.of("Scale and time"), scale));
+    boolean change =
+        fits.stream().anyMatch(f -> f.at().flatMap(AtMean::technicalChange).isPresent());
+    if (change) {
+      scale.add(
+          row(
+              "Technical change a period",
+              fits,
+              fit -> Cells.figure(fit.at().flatMap(AtMean::technicalChange))));
+    }
+    boolean outputs =
+        fits.stream().anyMatch(f -> f.at().flatMap(AtMean::scaleEconomies).isPresent());
+    if (outputs || change) {
+      groups.add(new Group(Optional.of(change ? "Scale and time" : "Scale"), scale));
+    }
+    groups.add(named("Change of the share in cost a period", fits, AtMean::bias));
     groups.add(
         pairs("Allen-Uzawa elasticity of substitution", "allen", fits, AtMean::substitution));
     groups.add(

@@ -6,6 +6,7 @@ import isowright.report.Document.Notice;
 import isowright.report.Document.Paragraph;
 import isowright.report.Document.Section;
 import isowright.report.Document.Weight;
+import isowright.study.CostFindings;
 import isowright.study.CostFindings.AtMean;
 import isowright.study.CostFindings.Fitted;
 import isowright.study.CostRows;
@@ -46,7 +47,7 @@ final class CostsSection {
       blocks.add(Paragraph.of(CostSidesBlocks.inWords(material.findings().costs().sides())));
     }
     material.findings().costs().remarks().stream()
-        .filter(said -> !said.code().equals("sides-differ"))
+        .filter(said -> !ofRecords(said) && !said.code().equals("sides-differ"))
         .forEach(said -> blocks.add(notice("", said)));
     for (Fitted fit : fits) {
       fit.remarks().forEach(said -> blocks.add(notice(title(fit.technology()) + ". ", said)));
@@ -110,12 +111,21 @@ final class CostsSection {
     return new Section(ID + "-trust", "Regularity, tests, parameters", blocks);
   }
 
+  /** Whether a remark is one of the audit, told where the records are. */
+  static boolean ofRecords(Said said) {
+    return said.code().equals("shares-not-one");
+  }
+
   private static String title(String word) {
     return Terms.technology(word);
   }
 
   /** What can be stated of the cost side. */
   static void supported(Material material, List<Text> points) {
+    List<CostFindings.Side> sides = material.findings().costs().sides();
+    if (!sides.isEmpty() && sides.stream().noneMatch(CostFindings.Side::apart)) {
+      points.add(Text.of(CostSidesBlocks.inWords(sides)));
+    }
     for (Fitted fit : material.findings().costs().fits()) {
       fit.at()
           .flatMap(AtMean::scaleEconomies)
@@ -130,11 +140,33 @@ final class CostsSection {
                               + " "
                               + Numbers.valueAndInterval(figure)
                               + ".")));
+      efficient(fit, material, points);
     }
+  }
+
+  private static void efficient(Fitted fit, Material material, List<Text> points) {
+    fit.efficient()
+        .ifPresent(
+            efficient ->
+                points.add(
+                    Text.of(
+                        "Average cost is least at "
+                            + Numbers.unit(
+                                Numbers.valueAndInterval(efficient.output()),
+                                material.findings().units().output())
+                            + ", by "
+                            + title(fit.technology())
+                            + "; "
+                            + Numbers.percent(efficient.below())
+                            + " of the rows produce less.")));
   }
 
   /** What cannot be stated of the cost side. */
   static void unsupported(Material material, List<Text> points) {
+    List<CostFindings.Side> sides = material.findings().costs().sides();
+    if (sides.stream().anyMatch(CostFindings.Side::apart)) {
+      points.add(Text.of(CostSidesBlocks.inWords(sides)));
+    }
     for (Fitted fit : material.findings().costs().fits()) {
       if (!fit.usable()) {
         points.add(
@@ -230,9 +262,20 @@ final class CostsSection {
           .append(Numbers.count(told.unclear()))
           .append(" it cannot be told. ");
     }
-    words.append(scale.isPresent() ? "The" : "the").append(demand(fit));
+    boolean unit = unitSubstitution(fit);
+    words.append(scale.isPresent() ? "The" : "the");
+    words.append(unit ? " elasticity of substitution is one by its form." : demand(fit));
     fit.at().flatMap(AtMean::technicalChange).ifPresent(figure -> words.append(change(figure)));
     return words.toString();
+  }
+
+  /** Whether the form, not the records, says what replaces what. */
+  private static boolean unitSubstitution(Fitted fit) {
+    return fit.at().map(AtMean::substitution).orElse(List.of()).stream()
+        .allMatch(
+            pair ->
+                Math.abs(pair.figure().value() - 1) < 1e-9
+                    && pair.figure().uncertainty().filter(u -> u.standardError() > 1e-9).isEmpty());
   }
 
   /** Which inputs answer to their own price, and which go together. */

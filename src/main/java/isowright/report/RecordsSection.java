@@ -10,6 +10,7 @@ import isowright.report.Document.Row;
 import isowright.report.Document.Section;
 import isowright.report.Document.Table;
 import isowright.study.Findings.Records;
+import isowright.study.Findings.Said;
 import isowright.study.Findings.SetAside;
 import java.util.ArrayList;
 import java.util.List;
@@ -30,7 +31,7 @@ final class RecordsSection {
         .findings()
         .records()
         .ifPresentOrElse(
-            records -> tell(records, material.findings().run().settings(), blocks),
+            records -> tell(material, records, blocks),
             () ->
                 blocks.add(
                     Paragraph.of(
@@ -39,7 +40,7 @@ final class RecordsSection {
     return new Section(ID, "Records and provenance", blocks);
   }
 
-  private static void tell(Records records, Map<String, String> settings, List<Block> blocks) {
+  private static void tell(Material material, Records records, List<Block> blocks) {
     List<Entry> entries = new ArrayList<>();
     entries.add(Entry.of("File", records.file()));
     entries.add(new Entry(Text.of("SHA-256"), Text.typed(records.sha256())));
@@ -48,10 +49,10 @@ final class RecordsSection {
     entries.add(Entry.of("Plants", Numbers.count(records.plants())));
     entries.add(Entry.of("Periods", span(records)));
     records.facts().forEach((name, fact) -> entries.add(Entry.of(Phrases.sentence(name), fact)));
-    policies(settings, entries);
+    policies(material.findings().run().settings(), entries);
     blocks.add(new Definitions(entries));
     blocks.add(new Section(ID + "-set-aside", "Rows set aside", setAside(records)));
-    blocks.add(new Section(ID + "-audit", "What the audit found", audit(records)));
+    blocks.add(new Section(ID + "-audit", "What the audit found", audit(material, records)));
   }
 
   /** What is done where the records lack something. */
@@ -107,7 +108,14 @@ final class RecordsSection {
     return rows.size() < count ? String.join(", ", shown) + ", …" : Phrases.list(shown);
   }
 
-  private static List<Block> audit(Records records) {
+  private static List<Block> audit(Material material, Records records) {
+    List<Said> costs =
+        material.findings().costs().remarks().stream().filter(CostsSection::ofRecords).toList();
+    if (!costs.isEmpty()) {
+      List<Block> all = new ArrayList<>(Material.notices(costs));
+      all.addAll(Material.notices(records.remarks()));
+      return all;
+    }
     if (records.remarks().isEmpty()) {
       return List.of(Paragraph.of("The audit found nothing to remark on."));
     }

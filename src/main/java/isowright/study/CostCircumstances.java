@@ -23,12 +23,14 @@ final class CostCircumstances {
   /** A fixed input that may be chosen is looked for this many times beyond the records. */
   private static final double BEYOND = 10;
 
+  private final Study study;
   private final Costs asked;
   private final Panel panel;
   private final CostData data;
   private final Support support;
 
-  CostCircumstances(Costs asked, Panel panel, CostData data) {
+  CostCircumstances(Study study, Costs asked, Panel panel, CostData data) {
+    this.study = study;
     this.asked = asked;
     this.panel = panel;
     this.data = data;
@@ -130,7 +132,7 @@ final class CostCircumstances {
     int n = task.inputs();
     for (int q = 0; q < task.names().size(); q++) {
       String name = task.names().get(q);
-      String unit = q < n ? "" : asked.fixed().get(q - n).unit();
+      String unit = q < n ? unit(name) : asked.fixed().get(q - n).unit();
       Study.Limit limit = question.limits().get(name);
       if (question.hold().containsKey(name)) {
         words.put(name, "held at " + PlanWords.number(task.low()[q], unit));
@@ -148,6 +150,12 @@ final class CostCircumstances {
       }
     }
     return words;
+  }
+
+  /** The unit of a variable input, where the production side of the study states it. */
+  private String unit(String input) {
+    int at = study.inputs().indexOf(input);
+    return at < 0 ? "" : study.inputUnits().get(at).orElse("");
   }
 
   /** Whose cost it is, in words. */

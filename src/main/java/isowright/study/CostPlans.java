@@ -38,7 +38,7 @@ final class CostPlans {
     this.study = study;
     this.asked = asked;
     this.data = data;
-    this.circumstances = new CostCircumstances(asked, panel, data);
+    this.circumstances = new CostCircumstances(study, asked, panel, data);
   }
 
   /** One question to one cost function, with what is needed to say how sure its answer is. */

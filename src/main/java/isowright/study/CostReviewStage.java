@@ -65,7 +65,7 @@ final class CostReviewStage {
     this.filing = filing;
     this.filings = new CostFilings(filing, panel);
     this.data = data;
-    this.circumstances = new CostCircumstances(costs, panel, data);
+    this.circumstances = new CostCircumstances(study, costs, panel, data);
   }
 
   /** The review of these fits; nothing where none is asked or none explains cost. */

@@ -8,7 +8,6 @@ import isowright.estimation.CostSpecification;
 import isowright.estimation.CostSpecification.Equations;
 import isowright.estimation.Specification.PlantEffects;
 import isowright.estimation.Specification.StandardErrors;
-import isowright.estimation.Specification.Time;
 import isowright.estimation.Unfit;
 import isowright.inference.CostHypotheses;
 import isowright.records.Panel;
@@ -42,39 +41,14 @@ final class CostStage {
     this.study = study;
     this.asked = asked;
     this.panel = panel;
-    CostRecords made =
-        new CostRecords(
-            asked, panel, study.estimation().time() == Time.TREND, study.estimation().scaled());
+    CostRecords made = CostAudit.records(study, asked, panel);
     this.data = made.data();
     refuse(made);
     records.addAll(made.addingUp(data));
   }
 
   private void refuse(CostRecords made) throws Unfit {
-    List<String> reasons = new ArrayList<>();
-    List<Integer> missing = made.withoutShare(data);
-    if (!missing.isEmpty()) {
-      reasons.add(
-          "costs: the share or the spending of an input is not known in "
-              + missing.size()
-              + " of "
-              + data.rows()
-              + " rows (first in row "
-              + missing.get(0)
-              + "): enter it, set these rows aside, or fit the cost equation alone (system:"
-              + " false).");
-    }
-    List<String> still = made.withoutVariation(data);
-    String last = data.arguments().inputs().get(data.arguments().inputs().size() - 1);
-    for (String input : still) {
-      reasons.add(
-          "costs: the price of "
-              + input
-              + " over that of "
-              + last
-              + " is the same in every row, so that nothing can be learnt of their substitution:"
-              + " give records in which they move apart, or leave one of them out.");
-    }
+    List<String> reasons = CostAudit.reasons(made, data);
     if (!reasons.isEmpty()) {
       throw new Unfit(reasons);
     }

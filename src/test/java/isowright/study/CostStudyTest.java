@@ -99,6 +99,18 @@ class CostStudyTest {
     assertThat(fit.remarks()).extracting(Said::code).contains("depends-on-share-left-out");
   }
 
+  /** The audit names the slip before anything is fitted. */
+  @Test
+  void auditOfElectricity() throws Exception {
+    Files.copy(PUBLISHED.resolve("electricity-1970.csv"), folder.resolve("electricity-1970.csv"));
+    Path file =
+        Files.writeString(
+            folder.resolve("study.yaml"), electricity("  technologies: [translog-cost]"));
+    assertThat(CostAudit.of(StudyFile.read(file)))
+        .singleElement()
+        .satisfies(said -> assertThat(said.message()).contains("row 63 (62)", "0.7998"));
+  }
+
   /** Berndt and Wood (1975): shares alone, concave in all 25 years. */
   @Test
   void sharesOfManufacturing() throws Exception {
