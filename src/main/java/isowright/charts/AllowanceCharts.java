@@ -15,10 +15,10 @@ import java.util.function.ToDoubleFunction;
 final class AllowanceCharts {
 
   private final Allowed sum;
-  private final long plants;
+  private final int plants;
   private final Setting setting;
 
-  private AllowanceCharts(Allowed sum, long plants, Setting setting) {
+  private AllowanceCharts(Allowed sum, int plants, Setting setting) {
     this.sum = sum;
     this.plants = plants;
     this.setting = setting;
@@ -29,10 +29,11 @@ final class AllowanceCharts {
     List<Chart> charts = new ArrayList<>();
     for (Allowed sum : allowances) {
       if (sum.plant().isEmpty() && sum.years().size() > 1) {
-        long plants =
-            allowances.stream()
-                .filter(a -> a.technology().equals(sum.technology()) && !a.plant().isEmpty())
-                .count();
+        int plants =
+            (int)
+                allowances.stream()
+                    .filter(a -> a.technology().equals(sum.technology()) && !a.plant().isEmpty())
+                    .count();
         charts.add(new AllowanceCharts(sum, plants, setting).chart());
       }
     }

@@ -139,8 +139,8 @@ final class RatioCharts {
   }
 
   /** How many plants cannot be told apart from some other. */
-  private long together() {
-    return groups.stream().flatMap(List::stream).distinct().count();
+  private int together() {
+    return (int) groups.stream().flatMap(List::stream).distinct().count();
   }
 
   private String caption() {

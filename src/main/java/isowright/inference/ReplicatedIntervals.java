@@ -217,7 +217,7 @@ public final class ReplicatedIntervals implements Intervals {
     int count = 0;
     for (int i = 0; i < near.length; i++) {
       double size = size(near[i][f], centre);
-      if (Double.isNaN(size) || count == SCREENED && size <= sizes[count - 1]) {
+      if (Double.isNaN(size) || (count == SCREENED && size <= sizes[count - 1])) {
         continue;
       }
       int at = count < SCREENED ? count++ : count - 1;

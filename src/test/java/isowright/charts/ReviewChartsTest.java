@@ -15,6 +15,7 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Objects;
 import java.util.stream.Stream;
 import org.junit.jupiter.api.Named;
 import org.junit.jupiter.api.Test;
@@ -57,6 +58,11 @@ class ReviewChartsTest {
     all.addAll(RatioCharts.of(List.of(filings.order(group)), setting));
     all.addAll(AllowanceCharts.of(filings.allowances(years), setting));
     return all;
+  }
+
+  /** A chart of a case: parts, order, allowance. */
+  private static Chart chart(String name, int which) {
+    return Objects.requireNonNull(CASES.get(name)).get(which);
   }
 
   static Stream<Named<Chart>> all() {
@@ -158,12 +164,12 @@ class ReviewChartsTest {
   /** Of many plants only the highest and lowest gaps are drawn, and the table has all up to 600. */
   @Test
   void manyPlantsAreThinned() {
-    Chart parts = CASES.get("two hundred plants").get(0);
+    Chart parts = chart("two hundred plants", 0);
     assertThat(parts.rows()).hasSize(200);
     assertThat(parts.caption()).contains("Of 200 filings the 20 highest and the 10 lowest gaps");
     assertThat(Drawing.of(parts.svg().get()).letters().stream().map(Letters::text))
         .contains(parts.rows().get(0).get(0), parts.rows().get(199).get(0));
-    assertThat(CASES.get("three thousand plants").get(1).rows()).hasSize(Sample.MOST);
+    assertThat(chart("three thousand plants", 1).rows()).hasSize(Sample.MOST);
   }
 
   /** Ranks, ratios, groups as in the order; overlapping groups too many to draw are said to be. */
@@ -171,7 +177,7 @@ class ReviewChartsTest {
   void theOrderIsThatOfTheFindings() {
     Filings filings = Filings.of(14, "GW-", 1e6, true);
     Order order = filings.order(4);
-    Chart chart = CASES.get("fourteen plants").get(1);
+    Chart chart = chart("fourteen plants", 1);
     for (int i = 0; i < 14; i++) {
       List<String> row = chart.rows().get(i);
       assertThat(row.get(0)).isEqualTo(order.plants().get(i).plant());
@@ -183,7 +189,7 @@ class ReviewChartsTest {
     assertThat(chart.rows().get(2).get(8)).isEqualTo("1 2 3");
     assertThat(chart.title()).contains("no plant is told apart from all others");
     assertThat(chart.caption()).contains("Brackets at the right");
-    assertThat(CASES.get("in too many groups").get(1).caption()).contains("overlap too much");
-    assertThat(CASES.get("three thousand plants").get(1).caption()).contains("were not compared");
+    assertThat(chart("in too many groups", 1).caption()).contains("overlap too much");
+    assertThat(chart("three thousand plants", 1).caption()).contains("were not compared");
   }
 }

@@ -113,7 +113,7 @@ class CostReviewTest {
         .isInstanceOfSatisfying(
             StudyRefused.class,
             refused -> {
-              assertThat(refused.mistakes()).singleElement();
+              assertThat(refused.mistakes()).hasSize(1);
               assertThat(refused.mistakes().get(0).key()).isEqualTo("filing.cost");
               assertThat(refused.mistakes().get(0).line()).isEqualTo(12);
               assertThat(refused.mistakes().get(0).message()).contains("filed", "row 63");
