@@ -30,10 +30,10 @@ var dearer = bench.with("""
 String.format("%,.0f", dearer.plan("Dearer hours", "ces").mix().get("labour").value())   // ==> 90,441
 
 // Other settings: the same study, plant effects taken as random.
-var random = bench.with("estimation: {plant-effects: random, time: trend}\ntechnologies: [cobb-douglas]\nleast-cost: []\nfiling:");
+var random = bench.with("estimation: {plant-effects: random, time: trend}\ntechnologies: [cobb-douglas]\nleast-cost: []");
 random.fit("cobb-douglas").how().plantEffects()                              // ==> random
 
 // Draw: a chart is a picture, its caption, and the data behind it.
 var chart = bench.draw("profile-ces");
-chart.svg().get().startsWith("<?xml")                                        // ==> true
+chart.svg().get().contains("<svg")                                            // ==> true
 chart.header().size() > 1                                                    // ==> true

@@ -24,7 +24,7 @@ final class GapsBinder {
     YamlSection section = root.section("estimation").orElseThrow();
     section
         .get("missing-values")
-        .flatMap(value -> value.word(List.of(DROP), List.of("impute", "mean", "interpolate")));
+        .ifPresent(value -> value.word(List.of(DROP), List.of("impute", "mean", "interpolate")));
     boolean keeps =
         section
             .get("zeros")
