@@ -138,6 +138,9 @@ public final class CostElasticities {
 
   /** Whether cost is concave in prices. */
   public boolean concave() {
+    if (!(cost > 0)) {
+      return false;
+    }
     double[] eigenvalues = eigenvalues();
     double largest = Arrays.stream(eigenvalues).map(Math::abs).max().orElse(0);
     return Arrays.stream(eigenvalues).allMatch(e -> e <= ROUNDING * Math.max(1, largest));

@@ -4,6 +4,7 @@ import isowright.cost.CostArguments;
 import isowright.cost.PriceHomogeneity;
 import isowright.cost.TranslogCost;
 import isowright.cost.TranslogCost.Term;
+import isowright.estimation.CostSpecification.Concavity;
 import isowright.estimation.CostSpecification.Equations;
 import isowright.estimation.CostSpecification.Restriction;
 import isowright.regression.EquationSystem;
@@ -11,6 +12,8 @@ import isowright.regression.EquationSystem.Equation;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
+import java.util.Optional;
+import java.util.stream.IntStream;
 
 /**
  * Cost and share equations of a translog cost function as a system over free parameters φ: the
@@ -157,10 +160,39 @@ final class CostEquations {
     return names;
   }
 
+  /** The factor that makes cost concave at the mean of the records, where that is asked for. */
+  Optional<Curvature> curvature(CostData data) {
+    int r = arguments.inputs().size() - 1;
+    if (specification.concavity() == Concavity.FREE || !specification.homogeneous()) {
+      return Optional.empty();
+    }
+    int[][] places = new int[r][r];
+    double[][] shares = new double[r][free.size() + controls.size()];
+    double[] mean = new double[arguments.size()];
+    Arrays.setAll(mean, k -> Arrays.stream(data.points()[k]).average().orElse(0));
+    double[] z = arguments.scaled(mean);
+    for (int i = 0; i < r; i++) {
+      for (int j = 0; j < r; j++) {
+        places[i][j] = free.indexOf(terms.indexOf(new Term(Math.min(i, j), Math.max(i, j))));
+        if (places[i][j] < 0) {
+          return Optional.empty();
+        }
+      }
+      shares[i][free.indexOf(terms.indexOf(new Term(i, TranslogCost.NONE)))] = 1;
+      for (int k = r + 1; k < arguments.size(); k++) {
+        int place = free.indexOf(terms.indexOf(new Term(i, k)));
+        if (place >= 0) {
+          shares[i][place] = z[k];
+        }
+      }
+    }
+    return Optional.of(Curvature.atPoint(freeNames(), places, shares));
+  }
+
   /** The places of the inputs whose share equations are fitted. */
   int[] fittedShares() {
     int n = arguments.inputs().size();
-    return java.util.stream.IntStream.range(0, n)
+    return IntStream.range(0, n)
         .filter(i -> i != specification.leftOut())
         .toArray();
   }

@@ -1,21 +1,28 @@
 package isowright.estimation;
 
+import isowright.cost.CostFunction;
+import isowright.cost.GeneralisedCost;
 import isowright.cost.TranslogCost;
 import isowright.estimation.CostSpecification.Equations;
+import isowright.regression.Design;
 import isowright.regression.EquationSystem;
+import isowright.regression.MappedFit;
 import isowright.regression.SeeminglyUnrelated;
 import isowright.regression.SystemCovariance;
 import isowright.regression.SystemFit;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 
 /**
  * Fits a cost function to costs, shares, or both at once.
  *
  * <p>The cost equation alone is ordinary least squares, its covariance that of independent rows
  * with N − K degrees of freedom; with share equations beside it the system is iterated to maximum
- * likelihood ({@link SeeminglyUnrelated}), so that the share left out does not matter.
+ * likelihood ({@link SeeminglyUnrelated}), so that the share left out does not matter. Forms in
+ * levels are fitted to the quantities of all inputs over output, iterated likewise. Where cost is to
+ * be concave, products of prices are entries of a factor ({@link Curvature}).
  *
  * <p>Sources: Christensen, L. R. and Greene, W. H. (1976), <i>Journal of Political Economy</i> 84,
  * 655–676; Berndt, E. R. and Wood, D. O. (1975), <i>Review of Economics and Statistics</i> 57,
@@ -27,34 +34,96 @@ public final class CostEstimation {
 
   /** Fits as specified. */
   public static CostFit fit(CostData data, CostSpecification specification) {
+    return specification.form().inLevels().isPresent()
+        ? inLevels(data, specification)
+        : inLogs(data, specification);
+  }
+
+  private static CostFit inLogs(CostData data, CostSpecification specification) {
     CostEquations equations = new CostEquations(data, specification);
     CostDesign design = new CostDesign(data, equations.terms());
-    EquationSystem system = equations.system(design);
-    SystemFit fit = SeeminglyUnrelated.fit(design, system);
-    Uncertainty uncertainty = uncertainty(design, specification, fit);
-    double[] coefficients = equations.coefficients(fit.coefficients());
+    Solved solved = Solved.of(design, equations.system(design), equations.curvature(data));
+    Uncertainty uncertainty = uncertainty(design, specification, solved.fit());
+    double[] coefficients = equations.coefficients(solved.theta());
     TranslogCost function =
         new TranslogCost(
             specification.form().word(), data.arguments(), equations.terms(), coefficients);
     List<String> names = new ArrayList<>(function.parameterNames());
     List<String> freeNames = equations.freeNames();
     int controls = (int) freeNames.stream().filter(name -> name.startsWith("control:")).count();
-    List<String> controlNames = freeNames.subList(freeNames.size() - controls, freeNames.size());
-    names.addAll(controlNames);
+    names.addAll(freeNames.subList(freeNames.size() - controls, freeNames.size()));
     double[] values = java.util.Arrays.copyOf(coefficients, names.size());
     for (int c = 0; c < controls; c++) {
-      values[coefficients.length + c] = fit.coefficient(controlNames.get(c));
+      values[coefficients.length + c] = solved.theta()[freeNames.size() - controls + c];
     }
+    double[][] covariance = equations.covariance(solved.covariance(uncertainty.covariance()));
+    return made(specification, function, names, values, covariance, uncertainty, solved);
+  }
+
+  private static CostFit inLevels(CostData data, CostSpecification specification) {
+    QuantityDesign design =
+        new QuantityDesign(data, specification.form().inLevels().orElseThrow());
+    QuantityEquations equations = new QuantityEquations(data, specification, design);
+    EquationSystem system = equations.system(design);
+    Solved solved = Solved.of(design, system, equations.curvature(system.parameters()));
+    Uncertainty uncertainty = uncertainty(design, specification, solved.fit());
+    GeneralisedCost function = equations.function(solved.theta());
+    double[][] covariance = equations.covariance(solved.covariance(uncertainty.covariance()));
+    return made(
+        specification,
+        function,
+        function.parameterNames(),
+        function.parameters(),
+        covariance,
+        uncertainty,
+        solved);
+  }
+
+  private static CostFit made(
+      CostSpecification specification,
+      CostFunction function,
+      List<String> names,
+      double[] values,
+      double[][] covariance,
+      Uncertainty uncertainty,
+      Solved solved) {
     return new CostFit(
         specification,
         function,
         names,
         values,
-        equations.covariance(uncertainty.covariance()),
+        covariance,
         uncertainty.words(),
         uncertainty.degreesOfFreedom(),
-        fit.rank(),
-        fit);
+        solved.fit().rank(),
+        solved.fit(),
+        solved.imposed());
+  }
+
+  /**
+   * A system solved, freely or over the entries of a factor that makes cost concave.
+   *
+   * @param fit over the parameters that were free
+   * @param theta the parameters of the system
+   * @param jacobian how they move with those that were free; empty where they are the same
+   */
+  private record Solved(
+      SystemFit fit, double[] theta, double[][] jacobian, Optional<CostFit.Imposed> imposed) {
+
+    static Solved of(Design design, EquationSystem system, Optional<Curvature> curvature) {
+      if (curvature.isEmpty()) {
+        SystemFit fit = SeeminglyUnrelated.fit(design, system);
+        return new Solved(fit, fit.coefficients(), new double[0][], Optional.empty());
+      }
+      MappedFit mapped = SeeminglyUnrelated.fit(design, system, curvature.get());
+      Optional<CostFit.Imposed> imposed =
+          Optional.of(new CostFit.Imposed(mapped.free().logLikelihood(), mapped.bound()));
+      return new Solved(mapped.fit(), mapped.theta(), mapped.jacobian(), imposed);
+    }
+
+    double[][] covariance(double[][] ofFree) {
+      return jacobian.length == 0 ? ofFree : Matrices.sandwich(jacobian, ofFree);
+    }
   }
 
   /** The same equations with share coefficients that need not be symmetric; what it fits counts. */
@@ -71,7 +140,10 @@ public final class CostEstimation {
    */
   public static double dependenceOnLeftOut(CostData data, CostFit fit) {
     CostSpecification specification = fit.specification();
-    if (specification.equations() == Equations.COST) {
+    boolean shares =
+        specification.equations() == Equations.SYSTEM
+            || specification.equations() == Equations.SHARES;
+    if (!shares) {
       return 0;
     }
     double most = 0;
@@ -89,7 +161,7 @@ public final class CostEstimation {
   private record Uncertainty(double[][] covariance, String words, double degreesOfFreedom) {}
 
   private static Uncertainty uncertainty(
-      CostDesign design, CostSpecification specification, SystemFit fit) {
+      Design design, CostSpecification specification, SystemFit fit) {
     if (specification.clustered()) {
       SystemCovariance clustered = SystemCovariance.clustered(design, fit);
       return new Uncertainty(clustered.matrix(), clustered.words(), clustered.clusters() - 1.0);

@@ -1,9 +1,10 @@
 package isowright.estimation;
 
-import isowright.cost.TranslogCost;
+import isowright.cost.CostFunction;
 import isowright.regression.Collinearity;
 import isowright.regression.SystemFit;
 import java.util.List;
+import java.util.Optional;
 
 /**
  * A cost function fitted to records of costs.
@@ -17,17 +18,28 @@ import java.util.List;
  * @param degreesOfFreedom of the t distribution for intervals
  * @param free how many parameters were free
  * @param system the fit of the equations, over the free parameters
+ * @param imposed what it took to make cost concave, where that was asked for
  */
 public record CostFit(
     CostSpecification specification,
-    TranslogCost function,
+    CostFunction function,
     List<String> names,
     double[] values,
     double[][] covariance,
     String covarianceWords,
     double degreesOfFreedom,
     int free,
-    SystemFit system) {
+    SystemFit system,
+    Optional<Imposed> imposed) {
+
+  /**
+   * What it took to make cost concave.
+   *
+   * @param logLikelihood of the same equations fitted freely
+   * @param bound how many entries of the factor are zero because the records would have the matrix
+   *     indefinite; above zero, the fit is at the edge of what is concave
+   */
+  public record Imposed(double logLikelihood, int bound) {}
 
   /** Copies the list. */
   public CostFit {

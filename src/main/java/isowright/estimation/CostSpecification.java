@@ -15,6 +15,7 @@ import java.util.Locale;
  * @param clustered whether rows of a firm may depend on one another
  * @param leftOut the input whose share equation is left out, by place
  * @param confidence the level of all intervals
+ * @param concavity whether and where cost is made concave in prices
  */
 public record CostSpecification(
     CostForm form,
@@ -24,11 +25,49 @@ public record CostSpecification(
     boolean plantEffects,
     boolean clustered,
     int leftOut,
-    double confidence) {
+    double confidence,
+    Concavity concavity) {
 
   /** Copies the list. */
   public CostSpecification {
     restrictions = List.copyOf(restrictions);
+  }
+
+  /** The same with cost as concave as the records have it. */
+  public CostSpecification(
+      CostForm form,
+      Equations equations,
+      boolean homogeneous,
+      List<Restriction> restrictions,
+      boolean plantEffects,
+      boolean clustered,
+      int leftOut,
+      double confidence) {
+    this(
+        form,
+        equations,
+        homogeneous,
+        restrictions,
+        plantEffects,
+        clustered,
+        leftOut,
+        confidence,
+        Concavity.FREE);
+  }
+
+  /** Whether and where cost is made concave in prices. */
+  public enum Concavity {
+    /** Not imposed. */
+    FREE,
+    /** At the mean of the records: translog cost. */
+    AT_MEAN,
+    /** At all prices: McFadden cost. */
+    EVERYWHERE;
+
+    /** The word used in files. */
+    public String word() {
+      return name().toLowerCase(Locale.ROOT).replace('_', '-');
+    }
   }
 
   /** Which equations are fitted. */
@@ -38,7 +77,9 @@ public record CostSpecification(
     /** The cost equation and all share equations but one. */
     SYSTEM,
     /** All share equations but one. */
-    SHARES;
+    SHARES,
+    /** The quantities of all inputs, for forms in levels. */
+    QUANTITIES;
 
     /** The word used in files. */
     public String word() {
@@ -57,7 +98,9 @@ public record CostSpecification(
     /** No products of prices: all elasticities of substitution are one. */
     UNIT_SUBSTITUTION,
     /** No products of prices with time. */
-    NEUTRAL_CHANGE;
+    NEUTRAL_CHANGE,
+    /** Forms in levels: inputs in proportions that prices do not move. */
+    NO_SUBSTITUTION;
 
     /** The word used in files. */
     public String word() {
@@ -67,19 +110,27 @@ public record CostSpecification(
 
   /** The same, with this share equation left out. */
   public CostSpecification leavingOut(int input) {
-    return new CostSpecification(
-        form, equations, homogeneous, restrictions, plantEffects, clustered, input, confidence);
+    return with(homogeneous, restrictions, input, concavity);
   }
 
   /** The same with these restrictions. */
   public CostSpecification restricted(List<Restriction> imposed) {
-    return new CostSpecification(
-        form, equations, homogeneous, imposed, plantEffects, clustered, leftOut, confidence);
+    return with(homogeneous, imposed, leftOut, concavity);
   }
 
   /** The same, with or without homogeneity imposed. */
   public CostSpecification homogeneous(boolean imposed) {
+    return with(imposed, restrictions, leftOut, concavity);
+  }
+
+  /** The same, concave there. */
+  public CostSpecification concave(Concavity where) {
+    return with(homogeneous, restrictions, leftOut, where);
+  }
+
+  private CostSpecification with(
+      boolean inPrices, List<Restriction> imposed, int input, Concavity where) {
     return new CostSpecification(
-        form, equations, imposed, restrictions, plantEffects, clustered, leftOut, confidence);
+        form, equations, inPrices, imposed, plantEffects, clustered, input, confidence, where);
   }
 }

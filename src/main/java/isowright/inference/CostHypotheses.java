@@ -2,6 +2,8 @@ package isowright.inference;
 
 import isowright.cost.CostArguments;
 import isowright.cost.CostForm;
+import isowright.cost.GeneralisedCost;
+import isowright.cost.TranslogCost;
 import isowright.cost.TranslogCost.Term;
 import isowright.estimation.CostData;
 import isowright.estimation.CostEstimation;
@@ -50,6 +52,9 @@ public final class CostHypotheses {
   }
 
   private void homogeneity(List<Verdict> verdicts) {
+    if (fit.function() instanceof GeneralisedCost) {
+      return;
+    }
     CostSpecification own = fit.specification();
     CostFit free = own.homogeneous() ? CostEstimation.fit(data, own.homogeneous(false)) : fit;
     CostFit held = own.homogeneous() ? fit : CostEstimation.fit(data, own.homogeneous(true));
@@ -78,7 +83,17 @@ public final class CostHypotheses {
   private boolean applies(Restriction restriction) {
     List<Restriction> imposed = fit.specification().restrictions();
     CostArguments arguments = data.arguments();
-    boolean second = fit.function().terms().stream().anyMatch(Term::secondOrder);
+    if (fit.function() instanceof GeneralisedCost) {
+      return !imposed.contains(restriction)
+          && switch (restriction) {
+            case CONSTANT_RETURNS, NO_SUBSTITUTION -> true;
+            case NEUTRAL_CHANGE -> arguments.time();
+            default -> false;
+          };
+    }
+    boolean second =
+        fit.function() instanceof TranslogCost own
+            && own.terms().stream().anyMatch(Term::secondOrder);
     boolean translog = fit.specification().form() == CostForm.TRANSLOG;
     boolean cost = fit.specification().equations() != Equations.SHARES;
     boolean outputs = !arguments.outputs().isEmpty();
@@ -95,6 +110,7 @@ public final class CostHypotheses {
           case CONSTANT_RETURNS -> outputs && cost;
           case UNIT_SUBSTITUTION -> translog;
           case NEUTRAL_CHANGE -> translog && arguments.time();
+          case NO_SUBSTITUTION -> false;
         };
   }
 
@@ -113,6 +129,7 @@ public final class CostHypotheses {
           case CONSTANT_RETURNS -> "returns to scale are constant at every output";
           case UNIT_SUBSTITUTION -> "every elasticity of substitution is one";
           case NEUTRAL_CHANGE -> "technical change saves all inputs alike";
+          case NO_SUBSTITUTION -> "prices do not move the proportions of inputs";
         };
     verdicts.add(compared(restriction.word(), null0, fit.system(), held.system()));
   }

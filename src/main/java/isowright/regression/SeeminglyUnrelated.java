@@ -68,6 +68,65 @@ public final class SeeminglyUnrelated {
     return prepared(design, system).search(renewals);
   }
 
+  /**
+   * Iterates to maximum likelihood over φ, of which the parameters of the system are a function.
+   *
+   * <p>For weights that are given, the sum of squares is quadratic in θ about its own least θ̂ with
+   * V⁻¹; so each renewal fits freely and then looks for the nearest θ(φ) in that metric ({@link
+   * NearestParameters}). The fit is that of the equations made linear in φ at the solution, a
+   * Gauss-Newton step away from nowhere, so that its covariances are those of φ.
+   */
+  public static MappedFit fit(Design design, EquationSystem system, ParameterMap map) {
+    SeeminglyUnrelated prepared = prepared(design, system);
+    SystemFit free = prepared.search(MOST_RENEWALS);
+    if (!free.converged() || free.rank() < system.parameters().size()) {
+      return MappedFit.unfitted(free);
+    }
+    return prepared.search(free, map);
+  }
+
+  private MappedFit search(SystemFit free, ParameterMap map) {
+    double[][] sigma = free.residualCovariance();
+    double[] phi = map.start(free.coefficients());
+    double[] theta = map.parameters(phi);
+    int done = 0;
+    boolean still = false;
+    LinearFit fit = weighted(sigma);
+    while (done < MOST_RENEWALS && !still) {
+      double[][] metric = inverse(fit.inverseCrossProduct());
+      NearestParameters.Found found =
+          new NearestParameters(map, fit.coefficients(), metric).from(map.start(theta));
+      double[] next = map.parameters(found.phi());
+      still = found.still() && still(theta, next, fit.inverseCrossProduct());
+      phi = found.phi();
+      theta = next;
+      done++;
+      sigma = residualCovariance(theta, sigma);
+      if (!definite(sigma)) {
+        break;
+      }
+      fit = weighted(sigma);
+    }
+    double[][] jacobian = map.jacobian(phi);
+    double[][] information =
+        NearestParameters.information(jacobian, inverse(fit.inverseCrossProduct()));
+    boolean[] kept = MappedFit.kept(information);
+    SystemFit mapped =
+        new SystemFit(
+            MappedFit.linear(system, map.names(), theta, jacobian, phi),
+            phi,
+            kept,
+            MappedFit.inverse(information, kept),
+            sigma,
+            logLikelihood(sigma),
+            rows,
+            absorbed,
+            done,
+            still,
+            List.of());
+    return new MappedFit(mapped, theta, jacobian, free);
+  }
+
   private static SeeminglyUnrelated prepared(Design design, EquationSystem system) {
     int m = system.size();
     int[] all = new int[m];
@@ -143,9 +202,10 @@ public final class SeeminglyUnrelated {
   }
 
   private static boolean still(LinearFit before, LinearFit after) {
-    double[] a = before.coefficients();
-    double[] b = after.coefficients();
-    double[][] v = after.inverseCrossProduct();
+    return still(before.coefficients(), after.coefficients(), after.inverseCrossProduct());
+  }
+
+  private static boolean still(double[] a, double[] b, double[][] v) {
     for (int k = 0; k < a.length; k++) {
       if (Math.abs(a[k] - b[k]) > STILL * Math.sqrt(v[k][k])) {
         return false;
@@ -258,12 +318,26 @@ public final class SeeminglyUnrelated {
     return slopes;
   }
 
-  /** The inverse of a small symmetric positive definite matrix. */
+  /** The inverse of a small symmetric positive definite matrix, whatever its units. */
   static double[][] inverse(double[][] matrix) {
-    return new CholeskyDecomposition(new Array2DRowRealMatrix(matrix), 1e-10, 0)
-        .getSolver()
-        .getInverse()
-        .getData();
+    int n = matrix.length;
+    double[][] scaled = new double[n][n];
+    for (int i = 0; i < n; i++) {
+      for (int j = 0; j < n; j++) {
+        scaled[i][j] = matrix[i][j] / Math.sqrt(matrix[i][i]) / Math.sqrt(matrix[j][j]);
+      }
+    }
+    double[][] inverse =
+        new CholeskyDecomposition(new Array2DRowRealMatrix(scaled, false), 1e-10, 0)
+            .getSolver()
+            .getInverse()
+            .getData();
+    for (int i = 0; i < n; i++) {
+      for (int j = 0; j < n; j++) {
+        inverse[i][j] /= Math.sqrt(matrix[i][i]) * Math.sqrt(matrix[j][j]);
+      }
+    }
+    return inverse;
   }
 
   private static double[][] block(double[][] matrix, int[] rows, int[] columns) {

@@ -2,7 +2,7 @@ package isowright.study;
 
 import isowright.cost.CostArguments;
 import isowright.cost.CostElasticities;
-import isowright.cost.TranslogCost;
+import isowright.cost.CostFunction;
 import isowright.estimation.CostData;
 import isowright.estimation.CostFit;
 import isowright.inference.DeltaMethod;
@@ -29,7 +29,7 @@ final class CostFigures {
 
   private final CostData data;
   private final CostFit fit;
-  private final Propagation<TranslogCost> propagation;
+  private final Propagation<CostFunction> propagation;
   private final double[] mean;
 
   CostFigures(CostData data, CostFit fit) {
@@ -58,7 +58,7 @@ final class CostFigures {
     return mean.clone();
   }
 
-  List<Figure> figures(Function<TranslogCost, double[]> functions, DeltaMethod.Scale scale) {
+  List<Figure> figures(Function<CostFunction, double[]> functions, DeltaMethod.Scale scale) {
     return propagation.estimates(functions, scale).stream().map(FitStage::figure).toList();
   }
 

@@ -6,6 +6,7 @@ import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 
 /** Published records of costs and shares. */
@@ -45,6 +46,44 @@ public final class CostFixtures {
         arguments,
         points,
         new double[0],
+        new double[][] {c[2], c[3], c[4], c[5]},
+        new double[0][],
+        List.of(),
+        Groups.ofSingleRows(25));
+  }
+
+  /**
+   * The same years with output and time, for forms in levels: the file has no output, so that cost
+   * over an index of prices weighted by mean shares stands for it.
+   */
+  public static CostData manufacturingOfOutput() throws IOException {
+    double[][] c = columns("us-manufacturing-klem.csv", 25);
+    double[][] logs = new double[6][25];
+    double[] base = new double[5];
+    double[] shares = new double[4];
+    for (int i = 0; i < 4; i++) {
+      logs[i] = logs(c[6 + i]);
+      base[i] = Math.exp(Arrays.stream(logs[i]).average().orElseThrow());
+      shares[i] = Arrays.stream(c[2 + i]).average().orElseThrow();
+    }
+    double[] logCost = logs(c[1]);
+    for (int r = 0; r < 25; r++) {
+      logs[4][r] = logCost[r];
+      for (int i = 0; i < 4; i++) {
+        logs[4][r] -= shares[i] * logs[i][r];
+      }
+      logs[5][r] = r;
+    }
+    base[4] = Math.exp(Arrays.stream(logs[4]).average().orElseThrow());
+    return new CostData(
+        new CostArguments(
+            List.of("capital", "labour", "energy", "materials"),
+            List.of("output"),
+            List.of(),
+            true,
+            base),
+        logs,
+        logCost,
         new double[][] {c[2], c[3], c[4], c[5]},
         new double[0][],
         List.of(),
