@@ -14,7 +14,8 @@ import java.util.List;
  *      + θ′w (β t + β₂ t² h + Σ_{k≤l} d_kl y_k y_l)
  *
  *  Leontief   q = 2 Σ_{i&lt;j} a_ij √(w_i w_j)
- *  McFadden   q = w′Sw / (2 θ′w),  S symmetric with off-diagonal a_ij and rows that sum to zero </pre>
+ *  McFadden   q = w′Sw / (2 θ′w),  S symmetric with off-diagonal a_ij and rows that sum to zero
+ * </pre>
  *
  * For one output this is equation by equation the generalised Leontief and the symmetric
  * generalised McFadden cost of Diewert and Wales, with their weights α = β = γ = θ; b_i lets

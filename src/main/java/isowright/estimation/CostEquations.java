@@ -192,9 +192,7 @@ final class CostEquations {
   /** The places of the inputs whose share equations are fitted. */
   int[] fittedShares() {
     int n = arguments.inputs().size();
-    return IntStream.range(0, n)
-        .filter(i -> i != specification.leftOut())
-        .toArray();
+    return IntStream.range(0, n).filter(i -> i != specification.leftOut()).toArray();
   }
 
   /** The system over φ. */

@@ -21,8 +21,8 @@ import java.util.Optional;
  * <p>The cost equation alone is ordinary least squares, its covariance that of independent rows
  * with N − K degrees of freedom; with share equations beside it the system is iterated to maximum
  * likelihood ({@link SeeminglyUnrelated}), so that the share left out does not matter. Forms in
- * levels are fitted to the quantities of all inputs over output, iterated likewise. Where cost is to
- * be concave, products of prices are entries of a factor ({@link Curvature}).
+ * levels are fitted to the quantities of all inputs over output, iterated likewise. Where cost is
+ * to be concave, products of prices are entries of a factor ({@link Curvature}).
  *
  * <p>Sources: Christensen, L. R. and Greene, W. H. (1976), <i>Journal of Political Economy</i> 84,
  * 655–676; Berndt, E. R. and Wood, D. O. (1975), <i>Review of Economics and Statistics</i> 57,
@@ -61,8 +61,7 @@ public final class CostEstimation {
   }
 
   private static CostFit inLevels(CostData data, CostSpecification specification) {
-    QuantityDesign design =
-        new QuantityDesign(data, specification.form().inLevels().orElseThrow());
+    QuantityDesign design = new QuantityDesign(data, specification.form().inLevels().orElseThrow());
     QuantityEquations equations = new QuantityEquations(data, specification, design);
     EquationSystem system = equations.system(design);
     Solved solved = Solved.of(design, system, equations.curvature(system.parameters()));
@@ -191,8 +190,8 @@ public final class CostEstimation {
         String.format(
             Locale.ROOT,
             "Covariance of maximum likelihood (equal covariance of the equations' errors in all"
-                + " rows, Σ = E′E/N, no factor); t with %.0f degrees of freedom, rows times equations"
-                + " less parameters.",
+                + " rows, Σ = E′E/N, no factor); t with %.0f degrees of freedom, rows times"
+                + " equations less parameters.",
             left);
     return new Uncertainty(fit.covariance(), words, left);
   }

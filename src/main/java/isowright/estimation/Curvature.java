@@ -15,7 +15,8 @@ import org.apache.commons.math3.linear.EigenDecomposition;
  * <p>Of the coefficients θ those of products of prices, r (r + 1)/2 of them for n = r + 1 inputs,
  * give way to the entries of L; the others stay:
  *
- * <pre>  McFadden   S = −L L′ over all prices but the last; rows of S sum to zero, so a_in = Σ_j (L L′)_ij:
+ * <pre>
+ *   McFadden   S = −L L′ over all prices but the last; rows of S sum to zero, so a_in = Σ_j (L L′)_ij:
  *             concave at all prices
  *  translog   b_ij = −(L L′)_ij + [i = j] s_i − s_i s_j  with s the shares at the point meant,
  *             linear in the other coefficients: concave at that point </pre>
@@ -24,10 +25,10 @@ import org.apache.commons.math3.linear.EigenDecomposition;
  * this part is. Where the records would have it indefinite, L loses columns: the fit is then at the
  * edge, and standard errors are those given the edge.
  *
- * <p>Sources: Diewert, W. E. and Wales, T. J. (1987), Flexible functional forms and global curvature
- * conditions, <i>Econometrica</i> 55, 43–68; Ryan, D. L. and Wales, T. J. (2000), Imposing local
- * concavity in the translog and generalized Leontief cost functions, <i>Economics Letters</i> 67,
- * 253–260. Tested in {@code CurvatureTest}.
+ * <p>Sources: Diewert, W. E. and Wales, T. J. (1987), Flexible functional forms and global
+ * curvature conditions, <i>Econometrica</i> 55, 43–68; Ryan, D. L. and Wales, T. J. (2000),
+ * Imposing local concavity in the translog and generalized Leontief cost functions, <i>Economics
+ * Letters</i> 67, 253–260. Tested in {@code CurvatureTest}.
  */
 final class Curvature implements ParameterMap {
 
@@ -40,8 +41,7 @@ final class Curvature implements ParameterMap {
   private final int[] last;
   private final double[][] shares;
 
-  private Curvature(
-      List<String> names, int order, int[][] places, int[] last, double[][] shares) {
+  private Curvature(List<String> names, int order, int[][] places, int[] last, double[][] shares) {
     this.names = names;
     this.order = order;
     this.places = places;
@@ -83,7 +83,9 @@ final class Curvature implements ParameterMap {
     return last.length > 0;
   }
 
-  /** Where entry (i, j) of L, j ≤ i, stands among φ: in the places that products of prices leave. */
+  /**
+   * Where entry (i, j) of L, j ≤ i, stands among φ: in the places that products of prices leave.
+   */
   private int entry(int i, int j) {
     if (pairs()) {
       return i * (i + 1) / 2 + j;

@@ -15,7 +15,8 @@ import java.util.Optional;
  * The input quantities of a cost function in levels, by Shephard's lemma, each over h, the sum of
  * outputs, as a system over the coefficients that are free:
  *
- * <pre>  x_i/h = ∂q/∂w_i + Σ_k c_ik y_k/h + b_i/h + τ_i t + θ_i (β t/h + β₂ t² + Σ d_kl y_k y_l/h) </pre>
+ * <pre>  x_i/h = ∂q/∂w_i + Σ_k c_ik y_k/h + b_i/h + τ_i t + θ_i (β t/h + β₂ t² + Σ d_kl y_k y_l/h)
+ * </pre>
  *
  * Dividing by output keeps errors of large and small firms comparable; all n equations are fitted,
  * their errors being free to go together.

@@ -9,6 +9,7 @@ import isowright.estimation.CostData;
 import isowright.estimation.CostEstimation;
 import isowright.estimation.CostFit;
 import isowright.estimation.CostSpecification;
+import isowright.estimation.CostSpecification.Concavity;
 import isowright.estimation.CostSpecification.Equations;
 import isowright.estimation.CostSpecification.Restriction;
 import isowright.regression.SystemFit;
@@ -37,9 +38,16 @@ public final class CostHypotheses {
     this.fit = fit;
   }
 
-  /** The tests that apply to a fit. */
+  /**
+   * The tests that apply to a fit. Where cost was made concave they are those of the same equations
+   * fitted freely: at the edge of what is concave likelihoods do not compare by χ².
+   */
   public static List<Verdict> of(CostData data, CostFit fit) {
-    CostHypotheses tests = new CostHypotheses(data, fit);
+    CostFit free =
+        fit.imposed().isEmpty()
+            ? fit
+            : CostEstimation.fit(data, fit.specification().concave(Concavity.FREE));
+    CostHypotheses tests = new CostHypotheses(data, free);
     List<Verdict> verdicts = new ArrayList<>();
     tests.homogeneity(verdicts);
     tests.symmetry(verdicts);

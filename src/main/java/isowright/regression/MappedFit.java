@@ -75,7 +75,11 @@ public record MappedFit(SystemFit fit, double[] theta, double[][] jacobian, Syst
 
   /** e = o − D θ(φ̂) − D J (φ − φ̂), as equations in φ. */
   static EquationSystem linear(
-      EquationSystem system, List<String> names, double[] theta, double[][] jacobian, double[] phi) {
+      EquationSystem system,
+      List<String> names,
+      double[] theta,
+      double[][] jacobian,
+      double[] phi) {
     double[] rest = theta.clone();
     for (int k = 0; k < rest.length; k++) {
       rest[k] -= Matrices.dot(jacobian[k], phi);

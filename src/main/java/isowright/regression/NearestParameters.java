@@ -7,8 +7,8 @@ import org.apache.commons.math3.linear.CholeskyDecomposition;
 import org.apache.commons.math3.linear.NonPositiveDefiniteMatrixException;
 
 /**
- * Which φ brings θ(φ) nearest to θ̂ in the metric V⁻¹? The least of ½ (θ(φ) − θ̂)′ V⁻¹ (θ(φ) − θ̂) by
- * Newton's method, the Hessian raised on its diagonal until it is positive definite and the step
+ * Which φ brings θ(φ) nearest to θ̂ in the metric V⁻¹? The least of ½ (θ(φ) − θ̂)′ V⁻¹ (θ(φ) − θ̂)
+ * by Newton's method, the Hessian raised on its diagonal until it is positive definite and the step
  * goes down.
  *
  * <p>For least squares with weights that are given, this is the least of the sum of squares over φ:
@@ -18,8 +18,8 @@ import org.apache.commons.math3.linear.NonPositiveDefiniteMatrixException;
  * rows would have indefinite, a column of it goes to zero, and the first derivatives with it; the
  * second do not, so that the search still ends quickly.
  *
- * <p>Source: J. Nocedal and S. J. Wright 2006, <i>Numerical Optimization</i>, section 3.4
- * (Hessians modified on the diagonal). Tested in {@code MappedSystemTest}.
+ * <p>Source: J. Nocedal and S. J. Wright 2006, <i>Numerical Optimization</i>, section 3.4 (Hessians
+ * modified on the diagonal). Tested in {@code MappedSystemTest}.
  */
 final class NearestParameters {
 

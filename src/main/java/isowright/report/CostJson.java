@@ -41,15 +41,29 @@ final class CostJson {
     file.text("equations", fit.how().equations());
     file.texts("restrictions", fit.how().restrictions());
     file.text("plantEffects", fit.how().plantEffects());
-    file.text("covarianceWords", fit.how().covarianceWords());
-    file.number("degreesOfFreedom", fit.how().degreesOfFreedom());
+    if (!fit.state().equals("refused")) {
+      file.text("covarianceWords", fit.how().covarianceWords());
+      file.number("degreesOfFreedom", fit.how().degreesOfFreedom());
+    }
     file.numbersByName("scaling", fit.how().base());
     file.whole("rows", fit.how().rows());
     file.whole("plants", fit.how().plants());
     file.truth("converged", fit.usable());
     file.text("state", fit.state());
-    file.number("logLikelihood", fit.how().logLikelihood());
-    file.whole("iterations", fit.how().iterations());
+    if (!fit.state().equals("refused")) {
+      file.number("logLikelihood", fit.how().logLikelihood());
+      file.whole("iterations", fit.how().iterations());
+    }
+    if (fit.how().concave().isPresent()) {
+      CostFindings.Concave concave = fit.how().concave().get();
+      file.line(
+          "concavity",
+          () -> {
+            file.text("where", concave.where());
+            file.number("logLikelihoodFree", concave.logLikelihoodFree());
+            file.truth("edge", concave.edge());
+          });
+    }
     FitJson.parameters(file, fit.parameters());
     file.matrix("covariance", fit.covariance());
     if (fit.at().isPresent()) {

@@ -30,13 +30,13 @@ final class MethodSection {
     MethodSection method = new MethodSection(material);
     List<Block> blocks = new ArrayList<>();
     if (CostsSection.alone(material.findings())) {
-      blocks.add(CostMethod.of(method::cite));
+      blocks.add(CostMethod.of(material.findings().costs().fits(), method::cite));
     } else {
       blocks.add(method.notation());
       blocks.add(method.forms());
       blocks.add(method.derived());
       if (!material.findings().costs().fits().isEmpty()) {
-        blocks.add(CostMethod.of(method::cite));
+        blocks.add(CostMethod.of(material.findings().costs().fits(), method::cite));
       }
     }
     if (!material.findings().fits().isEmpty()) {

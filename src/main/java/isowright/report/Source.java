@@ -86,6 +86,21 @@ enum Source {
       "Caves, D. W., Christensen, L. R. and Swanson, J. A. (1981)",
       "Productivity Growth, Scale Economies, and Capacity Utilization in U.S. Railroads, 1955–74",
       "American Economic Review 71, 994–1002"),
+  DIEWERT_WALES(
+      "Diewert and Wales 1987",
+      "Diewert, W. E. and Wales, T. J. (1987)",
+      "Flexible Functional Forms and Global Curvature Conditions",
+      "Econometrica 55, 43–68"),
+  RYAN_WALES(
+      "Ryan and Wales 2000",
+      "Ryan, D. L. and Wales, T. J. (2000)",
+      "Imposing Local Concavity in the Translog and Generalized Leontief Cost Functions",
+      "Economics Letters 67, 253–260"),
+  BAUMOL_PANZAR_WILLIG(
+      "Baumol, Panzar and Willig 1982",
+      "Baumol, W. J., Panzar, J. C. and Willig, R. D. (1982)",
+      "Contestable Markets and the Theory of Industry Structure",
+      "Harcourt Brace Jovanovich"),
   CHRISTENSEN_GREENE(
       "Christensen and Greene 1976",
       "Christensen, L. R. and Greene, W. H. (1976)",

@@ -19,6 +19,8 @@ final class Terms {
       case "cobb-douglas-cost" -> "Cobb-Douglas cost";
       case "cobb-douglas-cost-squared-output" -> "Cobb-Douglas cost, output squared";
       case "translog-cost" -> "Translog cost";
+      case "generalised-leontief-cost" -> "Generalised Leontief cost";
+      case "mcfadden-cost" -> "McFadden cost";
       default -> name;
     };
   }
@@ -81,6 +83,7 @@ final class Terms {
       case "flat" -> "flat";
       case "not-converged" -> "not converged";
       case "rank-deficient" -> "rank-deficient";
+      case "refused" -> "refused";
       default -> state;
     };
   }

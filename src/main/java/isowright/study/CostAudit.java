@@ -53,6 +53,7 @@ public final class CostAudit {
               data.rows(),
               missing.get(0)));
     }
+    reasons.addAll(made.impossibleOutputs(data));
     String last = data.arguments().inputs().get(data.arguments().inputs().size() - 1);
     for (String input : made.withoutVariation(data)) {
       reasons.add(

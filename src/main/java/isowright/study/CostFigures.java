@@ -3,8 +3,10 @@ package isowright.study;
 import isowright.cost.CostArguments;
 import isowright.cost.CostElasticities;
 import isowright.cost.CostFunction;
+import isowright.cost.GeneralisedCost;
 import isowright.estimation.CostData;
 import isowright.estimation.CostFit;
+import isowright.estimation.CostSpecification.Equations;
 import isowright.inference.DeltaMethod;
 import isowright.inference.Law;
 import isowright.inference.Propagation;
@@ -49,8 +51,13 @@ final class CostFigures {
             fit.function()::withParameters);
     this.mean = new double[data.arguments().size()];
     for (int k = 0; k < mean.length; k++) {
-      mean[k] = java.util.Arrays.stream(data.points()[k]).average().orElse(0);
+      mean[k] = CostRecords.mean(data.points()[k]);
     }
+  }
+
+  /** Whether cost is known, not its shares alone. */
+  private boolean ofCost() {
+    return fit.specification().equations() != Equations.SHARES;
   }
 
   /** The arguments at their means (of logs, where they are logged), shape A. */
@@ -83,7 +90,7 @@ final class CostFigures {
     CostArguments arguments = data.arguments();
     int n = arguments.inputs().size();
     int m = arguments.outputs().size();
-    boolean outputs = m > 0 && fit.function().parameterNames().contains(arguments.outputs().get(0));
+    boolean outputs = m > 0 && ofCost();
     List<Figure> figures =
         figures(
             f -> {
@@ -120,7 +127,7 @@ final class CostFigures {
             },
             DeltaMethod.Scale.LINEAR);
     int after = n + 3 * n * n;
-    boolean level = fit.function().parameterNames().contains(CostArguments.TREND);
+    boolean level = arguments.time() && ofCost();
     return new AtMean(
         named(arguments.inputs(), figures.subList(0, n)),
         outputs ? named(arguments.outputs(), figures.subList(after, after + m)) : Map.of(),
@@ -181,7 +188,7 @@ final class CostFigures {
   /** Scale economies of every row, thinned where there are many. */
   List<RowScale> scale(Panel panel) {
     List<String> outputs = data.arguments().outputs();
-    boolean known = !outputs.isEmpty() && fit.function().parameterNames().contains(outputs.get(0));
+    boolean known = !outputs.isEmpty() && ofCost();
     if (!known) {
       return List.of();
     }
@@ -221,21 +228,15 @@ final class CostFigures {
     if (arguments.outputs().size() != 1) {
       return Optional.empty();
     }
-    String output = arguments.outputs().get(0);
-    int square = fit.function().parameterNames().indexOf(output + "*" + output);
-    if (square < 0 || !(fit.function().parameters()[square] > 0)) {
+    Optional<Function<CostFunction, double[]>> least =
+        fit.function() instanceof GeneralisedCost levels
+            ? leastInLevels(levels)
+            : leastInLogs(arguments);
+    if (least.isEmpty()) {
       return Optional.empty();
     }
+    Figure figure = figures(least.get(), DeltaMethod.Scale.LOG).get(0);
     int place = arguments.inputs().size();
-    Figure figure =
-        figures(
-                f -> {
-                  CostElasticities at = CostElasticities.at(f, mean);
-                  double away = (1 - at.costElasticity(0)) / f.parameters()[square];
-                  return new double[] {Math.exp(mean[place] + away)};
-                },
-                DeltaMethod.Scale.LOG)
-            .get(0);
     long below = 0;
     for (double y : data.points()[place]) {
       below += Math.exp(y) < figure.value() ? 1 : 0;
@@ -243,12 +244,43 @@ final class CostFigures {
     return Optional.of(new Efficient(figure, (double) below / data.rows()));
   }
 
+  /** In logs: the square of output is all that bends the elasticity of cost in it. */
+  private Optional<Function<CostFunction, double[]>> leastInLogs(CostArguments arguments) {
+    String output = arguments.outputs().get(0);
+    int square = fit.function().parameterNames().indexOf(output + "*" + output);
+    if (square < 0 || !(fit.function().parameters()[square] > 0)) {
+      return Optional.empty();
+    }
+    int place = arguments.inputs().size();
+    return Optional.of(
+        f -> {
+          CostElasticities at = CostElasticities.at(f, mean);
+          double away = (1 - at.costElasticity(0)) / f.parameters()[square];
+          return new double[] {Math.exp(mean[place] + away)};
+        });
+  }
+
+  /** In levels: C = F + m y + ½ C″ y², average cost is least at √(2 F/C″). */
+  private Optional<Function<CostFunction, double[]>> leastInLevels(GeneralisedCost levels) {
+    double[] nothing = mean.clone();
+    nothing[data.arguments().inputs().size()] = Double.NEGATIVE_INFINITY;
+    double fixed = Math.exp(levels.logCost(nothing));
+    if (!(fixed > 0 && levels.complementarity(mean, 0, 0) > 0)) {
+      return Optional.empty();
+    }
+    return Optional.of(
+        f -> {
+          double steep = ((GeneralisedCost) f).complementarity(mean, 0, 0);
+          return new double[] {Math.sqrt(2 * Math.exp(f.logCost(nothing)) / steep)};
+        });
+  }
+
   /** Where the function is a cost function. */
   CostFindings.Regular regularity() {
     int monotone = 0;
     int concave = 0;
     int both = 0;
-    boolean shares = fit.function().parameterNames().indexOf("constant") < 0;
+    boolean shares = !ofCost();
     for (int row = 0; row < data.rows(); row++) {
       CostElasticities at = CostElasticities.at(fit.function(), data.point(row));
       boolean rising = shares ? positive(at.shares()) : at.monotone();

@@ -34,7 +34,8 @@ public record CostFindings(List<Fitted> fits, List<Said> remarks, List<Side> sid
    *
    * @param technology the form's name
    * @param how how it was fitted
-   * @param state {@code estimated}, {@code not-converged} or {@code rank-deficient}
+   * @param state {@code estimated}, {@code not-converged}, {@code rank-deficient} or {@code
+   *     refused}
    * @param parameters the parameters and controls, in the order of the covariance
    * @param covariance their covariance
    * @param at the figures at the geometric mean of the sample; absent where there is no fit
@@ -68,7 +69,7 @@ public record CostFindings(List<Fitted> fits, List<Said> remarks, List<Side> sid
   /**
    * How a cost function was fitted.
    *
-   * @param equations cost, system or shares
+   * @param equations cost, system, shares or quantities
    * @param restrictions what was imposed beside homogeneity in prices
    * @param plantEffects none or within
    * @param covarianceWords the estimator, factor and degrees of freedom in words
@@ -78,6 +79,7 @@ public record CostFindings(List<Fitted> fits, List<Said> remarks, List<Side> sid
    * @param plants firms or plants
    * @param logLikelihood of all equations together
    * @param iterations how often the covariance of the equations was renewed
+   * @param concave what it took to make cost concave, where that was asked for
    */
   public record How(
       String equations,
@@ -89,7 +91,17 @@ public record CostFindings(List<Fitted> fits, List<Said> remarks, List<Side> sid
       int rows,
       int plants,
       double logLikelihood,
-      int iterations) {}
+      int iterations,
+      Optional<Concave> concave) {}
+
+  /**
+   * Cost made concave in prices.
+   *
+   * @param where {@code at-mean} or {@code everywhere}
+   * @param logLikelihoodFree of the same equations fitted freely
+   * @param edge whether the records would have it otherwise, so that the fit is at the edge
+   */
+  public record Concave(String where, double logLikelihoodFree, boolean edge) {}
 
   /**
    * Figures at the geometric mean of the sample.

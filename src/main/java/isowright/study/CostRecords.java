@@ -11,6 +11,7 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
+import java.util.Optional;
 
 /** Turns the panel of a cost side into what cost functions are fitted to, and checks its shares. */
 final class CostRecords {
@@ -38,7 +39,10 @@ final class CostRecords {
     double[] base = new double[arguments];
     for (int k = 0; k < arguments; k++) {
       points[k] = panel.controls().get(k).toArray();
-      base[k] = scaled ? Math.exp(Arrays.stream(points[k]).average().orElse(0)) : 1;
+      if (asked.outputsAsTheyStand() && output(k)) {
+        points[k] = Arrays.stream(points[k]).map(Math::log).toArray();
+      }
+      base[k] = scaled ? Math.exp(mean(points[k])) : 1;
     }
     if (time) {
       points[arguments] = periods();
@@ -64,6 +68,80 @@ final class CostRecords {
         Groups.startingAt(panel.rows(), panel.plantStarts().toArray()));
   }
 
+  private boolean output(int argument) {
+    int first = asked.inputs().size();
+    return argument >= first && argument < first + asked.outputs().size();
+  }
+
+  /** The mean of logs, those of zeros left out. */
+  static double mean(double[] logs) {
+    return Arrays.stream(logs).filter(Double::isFinite).average().orElse(0);
+  }
+
+  /** Outputs that a cost function in levels cannot be fitted with, told with their rows. */
+  List<String> impossibleOutputs(CostData data) {
+    List<String> reasons = new ArrayList<>();
+    int first = asked.inputs().size();
+    List<Integer> without = new ArrayList<>();
+    for (int r = 0; r < data.rows() && asked.outputsAsTheyStand(); r++) {
+      boolean any = false;
+      for (int k = 0; k < asked.outputs().size(); k++) {
+        double log = data.points()[first + k][r];
+        any |= Double.isFinite(log);
+        if (Double.isNaN(log)) {
+          reasons.add(
+              "costs: the output "
+                  + asked.outputs().get(k).name()
+                  + " is negative in row "
+                  + panel.fileRows().get(r)
+                  + ": correct it, or set the row aside.");
+        }
+      }
+      if (!any) {
+        without.add(panel.fileRows().get(r));
+      }
+    }
+    if (!without.isEmpty()) {
+      reasons.add(
+          "costs: nothing at all was produced in "
+              + without.size()
+              + " rows (first in row "
+              + without.get(0)
+              + "): set them aside.");
+    }
+    return reasons;
+  }
+
+  /**
+   * The outputs that are zero in some rows, with the first of these rows; logs cannot take them.
+   */
+  Optional<String> zeros(CostData data) {
+    List<String> found = new ArrayList<>();
+    int first = asked.inputs().size();
+    for (int k = 0; k < asked.outputs().size(); k++) {
+      double[] logs = data.points()[first + k];
+      int count = 0;
+      int row = -1;
+      for (int r = logs.length - 1; r >= 0; r--) {
+        if (Double.isInfinite(logs[r])) {
+          count++;
+          row = r;
+        }
+      }
+      if (count > 0) {
+        found.add(
+            asked.outputs().get(k).name()
+                + " in "
+                + count
+                + " of "
+                + logs.length
+                + " rows, first in row "
+                + panel.fileRows().get(row));
+      }
+    }
+    return found.isEmpty() ? Optional.empty() : Optional.of(String.join("; ", found));
+  }
+
   /** Periods counted from the first. */
   private double[] periods() {
     double first = panel.periodNumbers().get(0);
@@ -76,7 +154,7 @@ final class CostRecords {
 
   /** Shares as recorded, or spending over cost; empty where neither is known of every input. */
   private double[][] shares() {
-    if (asked.equations() == Equations.COST) {
+    if (asked.equations() == Equations.COST && CostFormRules.inLevels(asked.forms()).isEmpty()) {
       return new double[0][];
     }
     double[][] shares = new double[asked.inputs().size()][];
@@ -118,9 +196,9 @@ final class CostRecords {
     String message =
         String.format(
             Locale.ROOT,
-            "The shares of the inputs do not add up to one, to within %.4f, in %d of %d rows; furthest"
-                + " in row %d (%s), where they add up to %.4f. Nothing was rescaled. Correct the"
-                + " shares of these rows, or set the rows aside.",
+            "The shares of the inputs do not add up to one, to within %.4f, in %d of %d rows;"
+                + " furthest in row %d (%s), where they add up to %.4f. Nothing was rescaled."
+                + " Correct the shares of these rows, or set the rows aside.",
             ROUNDING,
             rows.size(),
             data.rows(),

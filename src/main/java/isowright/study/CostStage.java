@@ -5,6 +5,7 @@ import isowright.estimation.CostData;
 import isowright.estimation.CostEstimation;
 import isowright.estimation.CostFit;
 import isowright.estimation.CostSpecification;
+import isowright.estimation.CostSpecification.Concavity;
 import isowright.estimation.CostSpecification.Equations;
 import isowright.estimation.Specification.PlantEffects;
 import isowright.estimation.Specification.StandardErrors;
@@ -36,6 +37,7 @@ final class CostStage {
   private final CostData data;
   private final List<Said> records = new ArrayList<>();
   private final List<CostFit> usable = new ArrayList<>();
+  private final Optional<String> zeros;
 
   CostStage(Study study, Costs asked, Panel panel) throws Unfit {
     this.study = study;
@@ -45,6 +47,7 @@ final class CostStage {
     this.data = made.data();
     refuse(made);
     records.addAll(made.addingUp(data));
+    this.zeros = made.zeros(data);
   }
 
   private void refuse(CostRecords made) throws Unfit {
@@ -72,6 +75,15 @@ final class CostStage {
     return new CostFindings(fitted, records, List.of());
   }
 
+  /** McFadden cost is concave unless stated otherwise: that is what it is for. */
+  private Concavity concavity(CostForm form) {
+    return switch (form) {
+      case MCFADDEN -> asked.concavity().orElse(Concavity.EVERYWHERE);
+      case TRANSLOG -> asked.concavity().orElse(Concavity.FREE);
+      default -> Concavity.FREE;
+    };
+  }
+
   private CostSpecification specification(CostForm form) {
     boolean clustered =
         study
@@ -81,33 +93,58 @@ final class CostStage {
             .orElse(panel.plants().size() < panel.rows());
     return new CostSpecification(
         form,
-        asked.equations(),
+        form.inLevels().isPresent() ? Equations.QUANTITIES : asked.equations(),
         true,
         asked.restrictions(),
         study.estimation().plantEffects() == PlantEffects.WITHIN,
         clustered,
         data.arguments().inputs().size() - 1,
-        study.estimation().confidence());
+        study.estimation().confidence(),
+        concavity(form));
+  }
+
+  /** A form in logs that outputs of zero keep from being fitted. */
+  private CostFindings.Fitted refused(CostForm form, String where) {
+    CostSpecification how = specification(form);
+    Said reason =
+        Said.of(
+            "error",
+            "zero-output",
+            "It takes logs of outputs, which zeros do not have ("
+                + where
+                + "), and no small number may stand for them: what a product costs alone would be"
+                + " made up. Ask for generalised-leontief-cost or mcfadden-cost, which carry zeros,"
+                + " or set these rows aside.");
+    return unfitted(
+        form, how(how, "", 0, Double.NaN, 0, Optional.empty()), "refused", List.of(reason));
+  }
+
+  private static CostFindings.Fitted unfitted(
+      CostForm form, CostFindings.How how, String state, List<Said> remarks) {
+    return new CostFindings.Fitted(
+        form.word(),
+        how,
+        state,
+        List.of(),
+        new double[0][],
+        Optional.empty(),
+        List.of(),
+        Optional.empty(),
+        Optional.empty(),
+        List.of(),
+        CostRows.NONE,
+        remarks);
   }
 
   private CostFindings.Fitted fitted(CostForm form) {
+    if (form.inLevels().isEmpty() && zeros.isPresent()) {
+      return refused(form, zeros.get());
+    }
     CostFit fit = CostEstimation.fit(data, specification(form));
     List<Said> remarks = new ArrayList<>();
     String state = state(fit, remarks);
     if (!state.equals("estimated")) {
-      return new CostFindings.Fitted(
-          form.word(),
-          how(fit),
-          state,
-          List.of(),
-          new double[0][],
-          Optional.empty(),
-          List.of(),
-          Optional.empty(),
-          Optional.empty(),
-          List.of(),
-          CostRows.NONE,
-          remarks);
+      return unfitted(form, how(fit), state, remarks);
     }
     usable.add(fit);
     CostFigures figures = new CostFigures(data, fit);
@@ -189,12 +226,14 @@ final class CostStage {
               String.format(
                   Locale.ROOT,
                   "Not a cost function at %d of %d rows (rising in prices and outputs at %d,"
-                      + " concave in prices at %d): elasticities and plans there are no economics.",
+                      + " concave in prices at %d): elasticities and plans there are no economics."
+                      + remedy(fit, regular),
                   regular.rows() - regular.both(),
                   regular.rows(),
                   regular.monotone(),
                   regular.concave())));
     }
+    fit.imposed().ifPresent(imposed -> remarks.add(concave(fit, imposed)));
     if (fit.specification().clustered() && panel.plants().size() < FEW_CLUSTERS) {
       remarks.add(
           Said.of(
@@ -208,10 +247,65 @@ final class CostStage {
     }
   }
 
+  private static String remedy(CostFit fit, CostFindings.Regular regular) {
+    boolean bent = regular.concave() < regular.rows() && fit.imposed().isEmpty();
+    return bent && fit.specification().form() == CostForm.TRANSLOG
+        ? " `concavity: at-mean` under `costs` makes it concave at the mean of the records."
+        : bent && fit.specification().form() == CostForm.GENERALISED_LEONTIEF
+            ? " mcfadden-cost can be made concave at all prices."
+            : "";
+  }
+
+  private static Said concave(CostFit fit, CostFit.Imposed imposed) {
+    String where =
+        fit.specification().concavity() == Concavity.AT_MEAN
+                && fit.specification().form() == CostForm.TRANSLOG
+            ? "at the mean of the records"
+            : "at all prices";
+    double lost = imposed.logLikelihood() - fit.system().logLikelihood();
+    return Said.of(
+        imposed.bound() > 0 ? "warning" : "note",
+        "concavity-imposed",
+        String.format(
+            Locale.ROOT,
+            imposed.bound() > 0
+                ? "Cost was made concave %s, against what the records would have: the"
+                    + " logarithm of likelihood falls by %.4g, and the fit is at the edge of what"
+                    + " is concave, so that standard errors are those given the edge."
+                : "Cost was made concave %s; the records have it so themselves (the"
+                    + " logarithm of likelihood falls by %.2g).",
+            where,
+            Math.max(0, lost)));
+  }
+
   /** Below this many clusters, intervals are known to be too narrow (Cameron and Miller 2015). */
   private static final int FEW_CLUSTERS = 30;
 
   private CostFindings.How how(CostFit fit) {
+    Optional<CostFindings.Concave> concave =
+        fit.imposed()
+            .map(
+                imposed ->
+                    new CostFindings.Concave(
+                        fit.specification().concavity().word(),
+                        imposed.logLikelihood(),
+                        imposed.bound() > 0));
+    return how(
+        fit.specification(),
+        fit.covarianceWords().replace("by group", "by plant"),
+        fit.degreesOfFreedom(),
+        fit.system().logLikelihood(),
+        fit.system().iterations(),
+        concave);
+  }
+
+  private CostFindings.How how(
+      CostSpecification how,
+      String words,
+      double degreesOfFreedom,
+      double logLikelihood,
+      int iterations,
+      Optional<CostFindings.Concave> concave) {
     Map<String, Double> base = new LinkedHashMap<>();
     if (study.estimation().scaled()) {
       double[] values = data.arguments().base();
@@ -219,18 +313,18 @@ final class CostStage {
         base.put(data.arguments().names().get(k), values[k]);
       }
     }
-    CostSpecification how = fit.specification();
     boolean within = how.plantEffects() && how.equations() != Equations.SHARES;
     return new CostFindings.How(
         how.equations().word(),
         how.restrictions().stream().map(CostSpecification.Restriction::word).toList(),
         within ? PlantEffects.WITHIN.word() : PlantEffects.NONE.word(),
-        fit.covarianceWords().replace("by group", "by plant"),
-        fit.degreesOfFreedom(),
+        words,
+        degreesOfFreedom,
         base,
         data.rows(),
         panel.plants().size(),
-        fit.system().logLikelihood(),
-        fit.system().iterations());
+        logLikelihood,
+        iterations,
+        concave);
   }
 }

@@ -1,6 +1,7 @@
 package isowright.study;
 
 import isowright.cost.CostForm;
+import isowright.estimation.CostSpecification.Concavity;
 import isowright.estimation.CostSpecification.Equations;
 import isowright.estimation.CostSpecification.Restriction;
 import java.util.List;
@@ -21,6 +22,8 @@ import java.util.stream.Stream;
  * @param forms the forms to be fitted, in order
  * @param equations which equations are fitted
  * @param restrictions what is imposed
+ * @param concavity whether and where cost is made concave, where that is stated
+ * @param outputsAsTheyStand whether outputs are read as they stand, zeros among them
  */
 public record Costs(
     Study.Records records,
@@ -31,7 +34,9 @@ public record Costs(
     List<String> controls,
     List<CostForm> forms,
     Equations equations,
-    List<Restriction> restrictions) {
+    List<Restriction> restrictions,
+    Optional<Concavity> concavity,
+    boolean outputsAsTheyStand) {
 
   /** Copies the lists. */
   public Costs {

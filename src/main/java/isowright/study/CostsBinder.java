@@ -1,6 +1,7 @@
 package isowright.study;
 
 import isowright.cost.CostForm;
+import isowright.estimation.CostSpecification.Concavity;
 import isowright.estimation.CostSpecification.Equations;
 import isowright.estimation.CostSpecification.Restriction;
 import isowright.records.Keep;
@@ -26,7 +27,8 @@ final class CostsBinder {
           "fixed-inputs",
           "technologies",
           "system",
-          "restrict");
+          "restrict",
+          "concavity");
 
   private final YamlSection root;
   private final Optional<Source> source;
@@ -81,6 +83,14 @@ final class CostsBinder {
               + " only share equations alone (`system: shares`) do without");
     }
     List<Restriction> restrictions = restrictions(section);
+    Optional<Concavity> concavity =
+        StudyBinder.choice(section, "concavity", Concavity.values(), Concavity::word);
+    CostFormRules rules = new CostFormRules(section, forms);
+    rules.quantities(inputs, !outputs.isEmpty(), !controls.isEmpty());
+    rules.restrictions(restrictions);
+    rules.concavity(concavity);
+    // forms in levels carry outputs of zero; where there are several, they are read as they stand
+    boolean asTheyStand = outputs.size() > 1 && !CostFormRules.inLevels(forms).isEmpty();
     if (source.isEmpty() || cost.isEmpty() || inputs.size() < 2 || forms.isEmpty()) {
       return Optional.empty();
     }
@@ -89,7 +99,7 @@ final class CostsBinder {
             plant,
             period,
             cost.get(),
-            arguments(inputs, outputs, fixed),
+            arguments(inputs, outputs, !asTheyStand, fixed),
             further(inputs, cost.get()));
     return Optional.of(
         new Costs(
@@ -101,7 +111,9 @@ final class CostsBinder {
             controls.stream().map(Control::column).toList(),
             forms,
             equations,
-            restrictions));
+            restrictions,
+            concavity,
+            asTheyStand));
   }
 
   private Optional<String> cost(YamlSection section) {
@@ -214,7 +226,7 @@ final class CostsBinder {
             "technologies", "the cost functions to be fitted: " + String.join(", ", words));
     List<CostForm> forms = new ArrayList<>();
     for (YamlValue item : value.flatMap(YamlValue::list).orElse(List.of())) {
-      item.word(words, List.of("generalised-leontief-cost"))
+      item.word(words, List.of())
           .ifPresent(word -> forms.add(CostForm.values()[words.indexOf(word)]));
     }
     return forms;
@@ -276,10 +288,13 @@ final class CostsBinder {
   }
 
   private List<Control> arguments(
-      List<Costs.Input> inputs, List<Costs.Quantity> outputs, List<Costs.Quantity> fixed) {
+      List<Costs.Input> inputs,
+      List<Costs.Quantity> outputs,
+      boolean logged,
+      List<Costs.Quantity> fixed) {
     List<Control> arguments = new ArrayList<>();
     inputs.forEach(i -> arguments.add(new Control(i.price(), true, "price of " + i.name())));
-    outputs.forEach(q -> arguments.add(new Control(q.column(), true, "output " + q.name())));
+    outputs.forEach(q -> arguments.add(new Control(q.column(), logged, "output " + q.name())));
     fixed.forEach(
         q ->
             arguments.add(

@@ -281,6 +281,8 @@ final class StudyBinder {
                     "plant-effects",
                     "cost functions are fitted with `none` or `within`; write one of them");
               }
+              CostFormRules.estimation(
+                  section, declared.costs().get(), estimation.plantEffects(), estimation.scaled());
             });
   }
 

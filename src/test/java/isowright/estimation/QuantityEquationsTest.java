@@ -98,8 +98,7 @@ class QuantityEquationsTest {
   void constantReturns() throws IOException {
     CostData data = CostFixtures.manufacturingOfOutput();
     CostSpecification free = specification(CostForm.GENERALISED_LEONTIEF, Concavity.FREE);
-    CostFit held =
-        CostEstimation.fit(data, free.restricted(List.of(Restriction.CONSTANT_RETURNS)));
+    CostFit held = CostEstimation.fit(data, free.restricted(List.of(Restriction.CONSTANT_RETURNS)));
     for (int row = 0; row < data.rows(); row++) {
       assertThat(CostElasticities.at(held.function(), data.point(row)).scaleEconomies())
           .isCloseTo(1, within(1e-12));
