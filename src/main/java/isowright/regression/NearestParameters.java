@@ -19,7 +19,7 @@ import org.apache.commons.math3.linear.NonPositiveDefiniteMatrixException;
  * second do not, so that the search still ends quickly.
  *
  * <p>Source: J. Nocedal and S. J. Wright 2006, <i>Numerical Optimization</i>, section 3.4 (Hessians
- * modified on the diagonal). Tested in {@code MappedSystemTest}.
+ * modified on the diagonal). Tested in {@code QuantityEquationsTest}.
  */
 final class NearestParameters {
 
