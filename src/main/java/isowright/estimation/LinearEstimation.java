@@ -6,6 +6,7 @@ import isowright.regression.Covariance;
 import isowright.regression.Design;
 import isowright.regression.Effects;
 import isowright.regression.FitStatistics;
+import isowright.regression.InequalityLeastSquares;
 import isowright.regression.LeastSquares;
 import isowright.regression.LinearFit;
 import isowright.regression.VarianceComponents;
@@ -49,7 +50,40 @@ final class LinearEstimation {
     LinearFit fit = LeastSquares.fit(treatment.design());
     Optional<Fit> lacking =
         lacking(panel, specification, base, fit, treatment.outcome().rows().kind());
-    return lacking.orElseGet(() -> solved(treatment, fit, new Particulars.None()));
+    return lacking.orElseGet(
+        () ->
+            specification.regularity() == Specification.RegularityImposed.FREE
+                ? solved(treatment, fit, new Particulars.None())
+                : regular(treatment, fit));
+  }
+
+  /** The fit held to be regular; the free one goes with it. */
+  private Fit regular(PlantTreatment treatment, LinearFit fit) {
+    Specification freely = specification.with(Specification.RegularityImposed.FREE);
+    Fit free =
+        new LinearEstimation(panel, freely, base, form)
+            .solved(treatment, fit, new Particulars.None());
+    ImposedRegularity imposed =
+        ImposedRegularity.of(panel, specification, base, form, fit.columns().size());
+    Optional<ImposedRegularity.Best> best = imposed.best(fit);
+    if (best.isEmpty()) {
+      return Estimation.without(
+          panel,
+          specification,
+          base,
+          Fit.State.NOT_CONVERGED,
+          List.of(
+              "No technology that is regular "
+                  + (specification.regularity() == Specification.RegularityImposed.AT_MEAN
+                      ? "at the geometric mean"
+                      : "at every row")
+                  + " was reached from any start. Set regularity to free to see what the records say,"
+                  + " or ask for a form with fewer parameters."));
+    }
+    return solved(
+        treatment,
+        InequalityLeastSquares.held(fit, best.get().found()),
+        Particulars.OfRegularity.of(free, specification.regularity(), imposed, best.get()));
   }
 
   /** The fit that says what the rows lack, if anything. */

@@ -74,4 +74,58 @@ public sealed interface Particulars {
       return slopes;
     }
   }
+
+  /**
+   * Of a fit held to be regular.
+   *
+   * @param free the same without
+   * @param where where it is held
+   * @param held at how many mixes
+   * @param binding at how many of them something binds
+   * @param withoutProduct at how many an input is held to add nothing
+   * @param straight at how many the isoquant is held straight
+   * @param watched the rows whose inequalities entered the search
+   * @param distance the rise of the sum of squares over the free residual variance
+   * @param departure how far the first-order conditions are from being met, zero at an optimum
+   * @param starts from how many starts the search was made
+   * @param agreeing how many of them came to the best
+   */
+  record OfRegularity(
+      Fit free,
+      Specification.RegularityImposed where,
+      int held,
+      int binding,
+      int withoutProduct,
+      int straight,
+      List<Integer> watched,
+      double distance,
+      double departure,
+      int starts,
+      int agreeing)
+      implements Particulars {
+    /** Copies the list. */
+    public OfRegularity {
+      watched = List.copyOf(watched);
+    }
+
+    static OfRegularity of(
+        Fit free,
+        Specification.RegularityImposed where,
+        ImposedRegularity imposed,
+        ImposedRegularity.Best best) {
+      int[] binding = imposed.mixes().binding(best.found().coefficients());
+      return new OfRegularity(
+          free,
+          where,
+          imposed.mixes().rows(),
+          binding[0],
+          binding[1],
+          binding[2],
+          imposed.mixes().watched(),
+          best.found().distance(),
+          best.found().departure(),
+          best.starts(),
+          best.agreeing());
+    }
+  }
 }
