@@ -80,6 +80,17 @@ public record Fit(
             || specification.plantEffects() == Specification.PlantEffects.WITHIN);
   }
 
+  /**
+   * The fit whose regression tests and diagnostics look at: the free one where this one is held to
+   * be regular, else this one.
+   */
+  public Fit examined() {
+    return solution
+        .filter(s -> s.particulars() instanceof Particulars.OfRegularity)
+        .map(s -> ((Particulars.OfRegularity) s.particulars()).free())
+        .orElse(this);
+  }
+
   /** The numbers, where the state is usable. */
   public Solution numbers() {
     return solution.orElseThrow(

@@ -1,11 +1,11 @@
 package isowright.estimation;
 
-import isowright.records.Column;
 import isowright.records.Panel;
 import isowright.regression.Inequalities;
 import isowright.regression.InequalityLeastSquares;
 import isowright.regression.InequalityLeastSquares.Found;
 import isowright.regression.LinearFit;
+import isowright.regression.Refits;
 import isowright.technology.LinearForm;
 import java.util.ArrayList;
 import java.util.Arrays;
@@ -13,6 +13,7 @@ import java.util.List;
 import java.util.Optional;
 import java.util.SplittableRandom;
 import java.util.TreeSet;
+import java.util.stream.IntStream;
 
 /**
  * Least squares of a form linear in its parameters, held to be regular at the geometric mean of the
@@ -25,7 +26,8 @@ import java.util.TreeSet;
  * elasticities, which is regular everywhere, so that a technology that meets everything always
  * exists; points between and around), the best is kept, and how many came to it is reported.
  *
- * <p>Rows are taken under watch as they are missed, so that the cost hardly depends on their number.
+ * <p>Rows are taken under watch as they are missed, so that the cost hardly depends on their
+ * number.
  *
  * <p>Sources: constrained least squares under inequalities: Judge, G. G. and Takayama, T. (1966),
  * Inequality Restrictions in Regression Analysis, <i>Journal of the American Statistical
@@ -78,13 +80,48 @@ final class ImposedRegularity {
                 .mapToObj(mean -> new double[] {Math.log(mean)})
                 .toArray(double[][]::new);
           }
-          case EVERYWHERE ->
-              panel.logQuantities().stream().map(Column::toArray).toArray(double[][]::new);
+          case EVERYWHERE -> withAllInputs(panel);
           case FREE -> throw new IllegalArgumentException("no regularity is asked for");
         };
     int first = specification.plantEffects().constant() ? 1 : 0;
     RegularMixes mixes = new RegularMixes(form, panel.inputs(), base, logs, first);
     return new ImposedRegularity(mixes, columns);
+  }
+
+  /** Logs of inputs; rows that do without an input have no log of it and are not held. */
+  private static double[][] withAllInputs(Panel panel) {
+    int[] rows = IntStream.range(0, panel.rows()).filter(row -> !panel.anyZero(row)).toArray();
+    return panel.logQuantities().stream()
+        .map(column -> Arrays.stream(rows).mapToDouble(column::get).toArray())
+        .toArray(double[][]::new);
+  }
+
+  /** How refits of a fit held to be regular are held: at the same mixes, from the estimate on. */
+  static Refits.Revision revision(Fit fit, LinearForm form) {
+    double[] estimate = fit.numbers().linear().coefficients();
+    ImposedRegularity imposed =
+        of(fit.panel(), fit.specification(), fit.base(), form, estimate.length);
+    imposed.mixes.watch(((Particulars.OfRegularity) fit.numbers().particulars()).watched());
+    return (centre, factor) ->
+        new ImposedRegularity(imposed.mixes.again(), centre.length)
+            .refitted(centre, factor, estimate);
+  }
+
+  private Optional<double[]> refitted(double[] centre, double[][] factor, double[] estimate) {
+    if (mixes.missed(centre).isEmpty()) {
+      return Optional.of(centre);
+    }
+    double[] start = estimate.clone();
+    for (int i = start.length - 1; i >= 0; i--) {
+      start[i] -= centre[i];
+      for (int k = i + 1; k < start.length; k++) {
+        start[i] -= factor[i][k] * start[k];
+      }
+      start[i] /= factor[i][i];
+    }
+    return cut(centre, factor, start)
+        .or(() -> cut(centre, factor, new double[columns]))
+        .map(Found::coefficients);
   }
 
   RegularMixes mixes() {
@@ -98,14 +135,11 @@ final class ImposedRegularity {
     mixes.watch(mixes.missed(centre));
     List<Found> all = new ArrayList<>();
     List<double[]> starts =
-        mixes.watched().isEmpty()
-            ? List.of(new double[columns])
-            : starts(centre, factor);
+        mixes.watched().isEmpty() ? List.of(new double[columns]) : starts(centre, factor);
     for (double[] start : starts) {
       cut(centre, factor, start).ifPresent(all::add);
     }
-    Optional<Found> best =
-        all.stream().min((a, b) -> Double.compare(a.distance(), b.distance()));
+    Optional<Found> best = all.stream().min((a, b) -> Double.compare(a.distance(), b.distance()));
     return best.map(
         one ->
             new Best(

@@ -77,8 +77,8 @@ final class LinearEstimation {
                   + (specification.regularity() == Specification.RegularityImposed.AT_MEAN
                       ? "at the geometric mean"
                       : "at every row")
-                  + " was reached from any start. Set regularity to free to see what the records say,"
-                  + " or ask for a form with fewer parameters."));
+                  + " was reached from any start. Set regularity to free to see what the records"
+                  + " say, or ask for a form with fewer parameters."));
     }
     return solved(
         treatment,
@@ -116,8 +116,8 @@ final class LinearEstimation {
             collinearity.column()
                 + " cannot be told apart from "
                 + among(collinearity)
-                + ": in these records it is an exact combination of them. Leave one of them out, add"
-                + " records in which they move apart, or ask for a simpler form.");
+                + ": in these records it is an exact combination of them. Leave one of them out,"
+                + " add records in which they move apart, or ask for a simpler form.");
       }
       return Optional.of(
           Estimation.without(panel, specification, base, Fit.State.RANK_DEFICIENT, reasons));

@@ -3,9 +3,11 @@ package isowright.estimation;
 import isowright.estimation.RefittedParameters.Outcome;
 import isowright.estimation.RefittedParameters.Refit;
 import isowright.regression.ClusterBootstrap;
+import isowright.regression.Design;
 import isowright.regression.GroupProducts;
 import isowright.regression.LeaveOut;
 import isowright.regression.Refits;
+import isowright.regression.Times;
 import isowright.technology.LinearForm;
 import java.util.ArrayList;
 import java.util.List;
@@ -13,18 +15,25 @@ import java.util.Optional;
 
 /**
  * Refits of a form linear in its parameters, pooled or within plants, from what each plant
- * contributes to sums of products; rows are read once.
+ * contributes to sums of products; rows are read once. Where the fit is held to be regular, each
+ * refit is, at the rows of the records.
  */
 final class LinearRefitting implements Refitting {
 
   private final Fit fit;
   private final GroupProducts products;
   private final LinearForm form;
+  private final Optional<Refits.Revision> revision;
 
   LinearRefitting(Fit fit, LinearForm form) {
     this.fit = fit;
     this.form = form;
-    this.products = GroupProducts.of(fit.numbers().design(), fit.numbers().linear());
+    Solution free = fit.examined().numbers();
+    this.products = GroupProducts.of(free.design(), free.linear());
+    this.revision =
+        fit == fit.examined()
+            ? Optional.empty()
+            : Optional.of(ImposedRegularity.revision(fit, form));
   }
 
   /** What each plant contributes. */
@@ -34,14 +43,24 @@ final class LinearRefitting implements Refitting {
 
   @Override
   public RefittedParameters drawn(int draws, long seed) {
-    return reported(ClusterBootstrap.draw(products, draws, seed));
+    return reported(
+        revision
+            .map(held -> ClusterBootstrap.draw(products, draws, seed, held))
+            .orElseGet(() -> ClusterBootstrap.draw(products, draws, seed)));
   }
 
   @Override
   public Optional<RefittedParameters> withoutPlants() {
-    return products.groups() < 3
-        ? Optional.empty()
-        : Optional.of(reported(LeaveOut.eachGroup(products)));
+    boolean tooMany =
+        revision.isPresent() && (long) products.groups() * fit.panel().rows() > MOST_ROWS_REFITTED;
+    if (products.groups() < 3 || tooMany) {
+      return Optional.empty();
+    }
+    return Optional.of(
+        reported(
+            revision
+                .map(held -> LeaveOut.eachGroup(products, held))
+                .orElseGet(() -> LeaveOut.eachGroup(products))));
   }
 
   @Override
@@ -50,13 +69,13 @@ final class LinearRefitting implements Refitting {
       return Optional.empty();
     }
     boolean effects = fit.specification().time().byPeriod();
+    Design design = fit.numbers().design();
+    Times times = PanelRows.of(fit.panel(), fit.base()).times();
     return Optional.of(
         reported(
-            LeaveOut.eachTime(
-                fit.numbers().design(),
-                products,
-                PanelRows.of(fit.panel(), fit.base()).times(),
-                effects)));
+            revision
+                .map(held -> LeaveOut.eachTime(design, products, times, effects, held))
+                .orElseGet(() -> LeaveOut.eachTime(design, products, times, effects))));
   }
 
   private RefittedParameters reported(Refits refits) {
@@ -64,7 +83,7 @@ final class LinearRefitting implements Refitting {
     for (int i = 0; i < refits.count(); i++) {
       all.add(
           refits.failed(i)
-              ? Refit.failed(Outcome.LOST_RANK)
+              ? Refit.failed(refits.notRevised(i) ? Outcome.NOT_FOUND : Outcome.LOST_RANK)
               : Refit.of(LinearParameters.reported(fit, form, refits.coefficients(i))));
     }
     return new RefittedParameters(all);

@@ -38,6 +38,7 @@ final class Obstacles {
     obstacles.form();
     obstacles.zeros();
     obstacles.estimator();
+    obstacles.regularity();
     obstacles.plants();
     obstacles.time();
     obstacles.standardErrors();
@@ -105,6 +106,39 @@ final class Obstacles {
               + " are kept by a dummy, which is carried out for least squares and not for "
               + specification.estimator().word()
               + ". Set zeros to drop.");
+    }
+  }
+
+  private void regularity() {
+    if (specification.regularity() == Specification.RegularityImposed.FREE
+        || specification.form().regularByForm()) {
+      return;
+    }
+    String asked = "regularity: " + specification.regularity().word();
+    if (!(specification.form() instanceof LinearForm)) {
+      found.add(
+          "The form "
+              + specification.form().name()
+              + " is not linear in its parameters, and "
+              + asked
+              + " is imposed on forms that are. Set regularity to free, or ask for translog.");
+    }
+    if (specification.time() == Time.BIASED_TREND) {
+      found.add(
+          "A biased trend moves the elasticities with time, and "
+              + asked
+              + " holds the same ones at every period. Set time to quadratic-trend.");
+    }
+    if (!(specification.estimator() instanceof Estimator.LeastSquares)) {
+      found.add(
+          "With "
+              + specification.estimator().word()
+              + ", "
+              + asked
+              + " is not carried out: it is imposed on least squares. Set regularity to free, or"
+              + " take `"
+              + specification.estimator().word()
+              + "` out.");
     }
   }
 

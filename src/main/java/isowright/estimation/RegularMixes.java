@@ -15,10 +15,10 @@ import java.util.stream.IntStream;
  * coefficients of its regression: at each mix e_i ≥ m for every input and −λ_j ≥ m for every
  * curvature of the isoquant ({@link RegularityMargins}).
  *
- * <p>Only the mixes that are watched enter the inequalities; which others are missed is asked of all
- * of them ({@link #missed}), and those are watched from then on. Gradient and Hessian are linear in
- * the coefficients, so their slopes at a mix are those of the technology with one coefficient of
- * one.
+ * <p>Only the mixes that are watched enter the inequalities; which others are missed is asked of
+ * all of them ({@link #missed}), and those are watched from then on. Gradient and Hessian are
+ * linear in the coefficients, so their slopes at a mix are those of the technology with one
+ * coefficient of one.
  */
 final class RegularMixes implements Inequalities {
 
@@ -67,6 +67,24 @@ final class RegularMixes implements Inequalities {
       one[k] = 1;
       units[k] = form.technology(inputs, base, 0, one);
     }
+  }
+
+  private RegularMixes(RegularMixes other) {
+    this.form = other.form;
+    this.inputs = other.inputs;
+    this.base = other.base;
+    this.logs = other.logs;
+    this.first = other.first;
+    this.count = other.count;
+    this.margins = new RegularityMargins(other.inputs.size());
+    this.zero = other.zero;
+    this.units = other.units;
+    this.watched.addAll(other.watched);
+  }
+
+  /** The same mixes, with those under watch, for another thread. */
+  RegularMixes again() {
+    return new RegularMixes(this);
   }
 
   /** How many mixes there are. */
@@ -126,8 +144,7 @@ final class RegularMixes implements Inequalities {
   }
 
   Technology technology(double[] coefficients) {
-    return form.technology(
-        inputs, base, 0, Arrays.copyOfRange(coefficients, first, first + count));
+    return form.technology(inputs, base, 0, Arrays.copyOfRange(coefficients, first, first + count));
   }
 
   private int perMix() {

@@ -39,10 +39,16 @@ public final class ClusterBootstrap {
    * @param draws how many, at least 1
    */
   public static Refits draw(GroupProducts products, int draws, long seed) {
+    return draw(products, draws, seed, Refits.AS_THEY_ARE);
+  }
+
+  /** The same, each refit revised before it is kept. */
+  public static Refits draw(
+      GroupProducts products, int draws, long seed, Refits.Revision revision) {
     if (draws < 1) {
       throw new IllegalArgumentException("draws is " + draws);
     }
-    Refits refits = new Refits(draws, products.fit().columns().size());
+    Refits refits = new Refits(draws, products.fit().columns().size(), revision);
     int blocks = (draws + BLOCK - 1) / BLOCK;
     IntStream.range(0, blocks)
         .parallel()

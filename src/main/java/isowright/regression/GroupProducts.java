@@ -121,6 +121,28 @@ public final class GroupProducts {
     }
   }
 
+  /**
+   * s_e F L⁻ᵀ over all columns, s_e² the residual variance of the fit of all rows (one where it has
+   * no error).
+   *
+   * @param inverse L⁻ᵀ over the estimated columns
+   */
+  double[][] factorOf(double[][] inverse) {
+    double variance = fit.residualVariance();
+    double error = variance > 0 ? Math.sqrt(variance) : 1;
+    double[][] product = new double[factor.length][factor.length];
+    for (int p = 0; p < kept.length; p++) {
+      for (int q = p; q < kept.length; q++) {
+        double sum = 0;
+        for (int k = p; k <= q; k++) {
+          sum += factor[kept[p]][kept[k]] * inverse[k][q];
+        }
+        product[kept[p]][kept[q]] = error * sum;
+      }
+    }
+    return product;
+  }
+
   /** s. */
   double scale() {
     return scale;

@@ -14,18 +14,18 @@ import java.util.stream.IntStream;
  * coefficients and s² its residual variance, β = b + s F γ gives SSR(β) = SSR(b) + s² ‖γ‖²: the
  * coefficients wanted are those of the shortest γ, whatever the units and the condition of X.
  *
- * <p><b>Method.</b> Sequential quadratic programming: at each step the inequalities are made linear,
- * the curvature of the Lagrangian is built up from the slopes seen (Powell's damped update), the
- * nearest point is found ({@link NearestPoint}), and the step is shortened until ½‖γ‖² + ρ Σ max(0,
- * −g_j) falls; a step that is refused is first bent once toward the curved inequalities. What is
- * found is a local optimum; where the inequalities are not convex, several starts are for the caller
- * to try.
+ * <p><b>Method.</b> Sequential quadratic programming: at each step the inequalities are made
+ * linear, the curvature of the Lagrangian is built up from the slopes seen (Powell's damped
+ * update), the nearest point is found ({@link NearestPoint}), and the step is shortened until ½‖γ‖²
+ * + ρ Σ max(0, −g_j) falls; a step that is refused is first bent once toward the curved
+ * inequalities. What is found is a local optimum; where the inequalities are not convex, several
+ * starts are for the caller to try.
  *
  * <p>Sources: Powell, M. J. D. (1978), A Fast Algorithm for Nonlinearly Constrained Optimization
  * Calculations, <i>Lecture Notes in Mathematics</i> 630, 144–157; Nocedal, J. and Wright, S. J.
  * (2006), <i>Numerical Optimization</i>, 2nd ed., algorithm 18.3 and section 15.6 (second-order
- * correction). Tested in {@code InequalityLeastSquaresTest} and, against an independent solution, in
- * {@code RegularityImposedTest}.
+ * correction). Tested in {@code InequalityLeastSquaresTest} and, against an independent solution,
+ * in {@code RegularityImposedTest}.
  */
 public final class InequalityLeastSquares {
 

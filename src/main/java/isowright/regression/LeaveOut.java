@@ -24,8 +24,13 @@ public final class LeaveOut {
 
   /** The fit without each group in turn; refit g is that without group g. */
   public static Refits eachGroup(GroupProducts products) {
+    return eachGroup(products, Refits.AS_THEY_ARE);
+  }
+
+  /** The same, each refit revised before it is kept. */
+  public static Refits eachGroup(GroupProducts products, Refits.Revision revision) {
     int groups = products.groups();
-    Refits refits = new Refits(groups, products.fit().columns().size());
+    Refits refits = new Refits(groups, products.fit().columns().size(), revision);
     double[] total = products.total();
     int chunks = (groups + CHUNK - 1) / CHUNK;
     IntStream.range(0, chunks)
@@ -49,8 +54,18 @@ public final class LeaveOut {
    */
   public static Refits eachTime(
       Design design, GroupProducts products, Times times, boolean timeColumns) {
+    return eachTime(design, products, times, timeColumns, Refits.AS_THEY_ARE);
+  }
+
+  /** The same, each refit revised before it is kept. */
+  public static Refits eachTime(
+      Design design,
+      GroupProducts products,
+      Times times,
+      boolean timeColumns,
+      Refits.Revision revision) {
     double[] own = timeProducts(design, products, times);
-    Refits refits = new Refits(times.count(), products.fit().columns().size());
+    Refits refits = new Refits(times.count(), products.fit().columns().size(), revision);
     some(products, own, products.total(), 0, times.count(), timeColumns ? 1 : 0, refits);
     return refits;
   }

@@ -7,12 +7,14 @@ import java.util.Optional;
  * Which point that meets linear inequalities n_j′x ≥ b_j is nearest to a given point?
  *
  * <p>The dual method of Goldfarb and Idnani for a quadratic objective whose matrix is the identity:
- * it starts at the given point, takes in the inequality that is missed by most, moves to the nearest
- * point that meets it together with those taken in before, and lets go of those whose multiplier
- * would turn negative. The optimum is reached after finitely many steps, or no point meets all.
+ * it starts at the given point, takes in the inequality that is missed by most, moves to the
+ * nearest point that meets it together with those taken in before, and lets go of those whose
+ * multiplier would turn negative. The optimum is reached after finitely many steps, or no point
+ * meets all.
  *
- * <p>Sizes: a few dozen unknowns, some hundred inequalities. Those taken in are decomposed afresh at
- * each step by repeated orthogonalisation, which at this size costs nothing and forgets no digits.
+ * <p>Sizes: a few dozen unknowns, some hundred inequalities. Those taken in are decomposed afresh
+ * at each step by repeated orthogonalisation, which at this size costs nothing and forgets no
+ * digits.
  *
  * <p>Source: Goldfarb, D. and Idnani, A. (1983), A Numerically Stable Dual Method for Solving
  * Strictly Convex Quadratic Programs, <i>Mathematical Programming</i> 27, 1–33. Tested in {@code

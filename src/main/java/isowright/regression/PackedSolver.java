@@ -65,6 +65,25 @@ final class PackedSolver {
     return lost == 0;
   }
 
+  /**
+   * L⁻ᵀ of the last solution, A = L L′; a direction that was lost stands for itself. Upper
+   * triangular.
+   */
+  double[][] inverseTransposed() {
+    double[][] inverse = new double[columns][columns];
+    for (int k = 0; k < columns; k++) {
+      for (int i = k; i >= 0; i--) {
+        double sum = i == k ? 1 : 0;
+        for (int j = i + 1; j <= k; j++) {
+          sum -= triangle[GroupProducts.place(0, j, i)] * inverse[j][k];
+        }
+        double pivot = triangle[GroupProducts.place(0, i, i)];
+        inverse[i][k] = pivot > 0 ? sum / pivot : sum;
+      }
+    }
+    return inverse;
+  }
+
   /** How many directions were lost. */
   int lost() {
     return lost;

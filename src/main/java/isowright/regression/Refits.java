@@ -1,6 +1,7 @@
 package isowright.regression;
 
 import java.util.Arrays;
+import java.util.Optional;
 
 /**
  * Coefficients of one linear model fitted again and again, to samples of its groups or without some
@@ -10,16 +11,38 @@ import java.util.Arrays;
  */
 public final class Refits {
 
+  /** What is done with a refit before it is kept. */
+  @FunctionalInterface
+  public interface Revision {
+
+    /**
+     * Other coefficients in place of those of least squares; called from several threads.
+     *
+     * @param coefficients b of the refit, shape K
+     * @param factor G, upper triangular, K × K: b + G γ has a sum of squares larger by s² ‖γ‖², s²
+     *     the residual variance of the fit of all rows
+     * @return empty where there are none
+     */
+    Optional<double[]> revised(double[] coefficients, double[][] factor);
+  }
+
+  /** Refits are kept as they are. */
+  static final Revision AS_THEY_ARE = (coefficients, factor) -> Optional.of(coefficients);
+
+  private final Revision revision;
   private final int columns;
   private final double[] coefficients;
   private final double[] sums;
   private final boolean[] failed;
+  private final boolean[] notRevised;
 
-  Refits(int count, int columns) {
+  Refits(int count, int columns, Revision revision) {
+    this.revision = revision;
     this.columns = columns;
     this.coefficients = new double[Math.multiplyExact(count, columns)];
     this.sums = new double[count];
     this.failed = new boolean[count];
+    this.notRevised = new boolean[count];
   }
 
   /** How many refits there are. */
@@ -30,6 +53,11 @@ public final class Refits {
   /** Whether refit i lost rank: its rows cannot tell the columns apart. */
   public boolean failed(int i) {
     return failed[i];
+  }
+
+  /** Whether refit i failed because nothing could be put in place of its coefficients. */
+  public boolean notRevised(int i) {
+    return notRevised[i];
   }
 
   /** How many refits lost rank. */
@@ -61,10 +89,22 @@ public final class Refits {
     if (usable) {
       products.coefficients(solver.move(), coefficients, i * columns);
       sums[i] = solver.sumOfSquares() * products.scale() * products.scale();
+      if (revision != AS_THEY_ARE) {
+        revise(i, products, solver);
+      }
     } else {
       failed[i] = true;
       sums[i] = Double.NaN;
       Arrays.fill(coefficients, i * columns, (i + 1) * columns, Double.NaN);
     }
+  }
+
+  private void revise(int i, GroupProducts products, PackedSolver solver) {
+    Optional<double[]> revised =
+        revision.revised(coefficients(i), products.factorOf(solver.inverseTransposed()));
+    notRevised[i] = revised.isEmpty();
+    failed[i] = notRevised[i];
+    double[] kept = revised.orElseGet(() -> new double[columns]);
+    System.arraycopy(kept, 0, coefficients, i * columns, columns);
   }
 }

@@ -45,6 +45,7 @@ final class FitJson {
     pairs(file, "substitution", fit.substitution());
     pairs(file, "demandElasticity", fit.demandElasticity());
     regularity(file, fit);
+    RegularityBlocks.write(file, fit);
     curvature(file, "curvature", fit.curvature());
     file.list(
         "nestCurvatures",

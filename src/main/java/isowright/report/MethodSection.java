@@ -196,6 +196,22 @@ final class MethodSection {
                   + " flat or inadmissible optimum is seen; the interval of the elasticity of"
                   + " substitution comes from the profile of the sum of squares."));
     }
+    if (material.usable().stream()
+        .anyMatch(fit -> fit.regularity().flatMap(r -> r.imposed()).isPresent())) {
+      points.add(
+          Text.of(
+              "Regularity imposed: the least sum of squares among the technologies whose"
+                  + " elasticities are at least 0.000001 and whose isoquants bend by at least as"
+                  + " much, by sequential quadratic programming from several starts, rows taken in"
+                  + " as they are missed "
+                  + cite(Source.JUDGE, Source.GALLANT, Source.GOLDFARB)
+                  + "; bounds of the p-value of the rise "
+                  + cite(Source.KODDE)
+                  + "; covariance with what binds held as equations. Estimates at a bound are not"
+                  + " normal, and a bootstrap does not mend it "
+                  + cite(Source.ANDREWS)
+                  + "."));
+    }
     points.addAll(PanelMethod.points(material, this::cite));
     if (with("clustered")) {
       points.add(

@@ -26,10 +26,10 @@ final class RegularitySection {
     List<Block> blocks = new ArrayList<>();
     blocks.add(
         Paragraph.of(
-            "A technology makes economic sense at a mix of inputs only if more of any input gives more"
-                + " output (every marginal product is positive) and its isoquants bend toward the"
-                + " origin (it is quasi-concave). One does not imply the other, so both are examined at"
-                + " every row of the records."));
+            "A technology makes economic sense at a mix of inputs only if more of any input gives"
+                + " more output (every marginal product is positive) and its isoquants bend toward"
+                + " the origin (it is quasi-concave). One does not imply the other, so both are"
+                + " examined at every row of the records."));
     List<Row> rows = new ArrayList<>();
     for (Fitted fit : material.usable()) {
       fit.regularity()
@@ -43,6 +43,7 @@ final class RegularitySection {
       for (Fitted fit : material.usable()) {
         fit.regularity().ifPresent(regular -> consequence(fit, regular, blocks));
       }
+      blocks.addAll(RegularityBlocks.of(material.usable()));
     }
     return new Section(ID, "Regularity", blocks);
   }
@@ -82,6 +83,12 @@ final class RegularitySection {
             });
     if (!where.isEmpty()) {
       words = words.then(" The marginal product is not positive for " + Phrases.list(where) + ".");
+    }
+    if (regular.imposable() && regular.both() < regular.rows()) {
+      words =
+          words.then(
+              " Remedy: `estimation: {regularity: everywhere}` fits the form held to be regular at"
+                  + " every row, and states the price in fit.");
     }
     boolean regularEverywhere = regular.rows() > 0 && regular.both() == regular.rows();
     blocks.add(regularEverywhere ? new Paragraph(words) : new Notice(Weight.WARNING, words));

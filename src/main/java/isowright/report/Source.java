@@ -18,6 +18,11 @@ enum Source {
       "Estimation of the Parameters of a Single Equation in a Complete System of Stochastic"
           + " Equations",
       "Annals of Mathematical Statistics 20, 46–63"),
+  ANDREWS(
+      "Andrews 2000",
+      "Andrews, D. W. K. (2000)",
+      "Inconsistency of the Bootstrap When a Parameter Is on the Boundary of the Parameter Space",
+      "Econometrica 68, 399–405"),
   ARROW(
       "Arrow et al. 1961",
       "Arrow, K. J., Chenery, H. B., Minhas, B. S. and Solow, R. M. (1961)",
@@ -156,6 +161,16 @@ enum Source {
       "Farrell, M. J. (1957)",
       "The Measurement of Productive Efficiency",
       "Journal of the Royal Statistical Society, Series A 120, 253–290"),
+  GALLANT(
+      "Gallant and Golub 1984",
+      "Gallant, A. R. and Golub, G. H. (1984)",
+      "Imposing Curvature Restrictions on Flexible Functional Forms",
+      "Journal of Econometrics 26, 295–321"),
+  GOLDFARB(
+      "Goldfarb and Idnani 1983",
+      "Goldfarb, D. and Idnani, A. (1983)",
+      "A Numerically Stable Dual Method for Solving Strictly Convex Quadratic Programs",
+      "Mathematical Programming 27, 1–33"),
   GUM(
       "JCGM 2008",
       "JCGM (2008)",
@@ -193,11 +208,21 @@ enum Source {
       "Jorgenson, D. W. (1963)",
       "Capital Theory and Investment Behavior",
       "American Economic Review 53 (2), 247–259"),
+  JUDGE(
+      "Judge and Takayama 1966",
+      "Judge, G. G. and Takayama, T. (1966)",
+      "Inequality Restrictions in Regression Analysis",
+      "Journal of the American Statistical Association 61, 166–181"),
   KLUMP(
       "Klump and de La Grandville 2000",
       "Klump, R. and de La Grandville, O. (2000)",
       "Economic Growth and the Elasticity of Substitution: Two Theorems and Some Suggestions",
       "American Economic Review 90, 282–291"),
+  KODDE(
+      "Kodde and Palm 1986",
+      "Kodde, D. A. and Palm, F. C. (1986)",
+      "Wald Criteria for Jointly Testing Equality and Inequality Restrictions",
+      "Econometrica 54, 1243–1248"),
   KOPP(
       "Kopp and Diewert 1982",
       "Kopp, R. J. and Diewert, W. E. (1982)",

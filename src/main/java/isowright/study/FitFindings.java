@@ -193,9 +193,24 @@ public final class FitFindings {
    * @param quasiConcave rows at which the bordered Hessian has the right signs
    * @param both rows at which both hold
    * @param nonMonotoneBy rows with a non-positive marginal product, by input
+   * @param imposed how the fit was held to be regular; absent where it was not
+   * @param imposable whether it could have been
    */
   public record Regular(
-      int rows, int monotone, int quasiConcave, int both, Map<String, Integer> nonMonotoneBy) {}
+      int rows,
+      int monotone,
+      int quasiConcave,
+      int both,
+      Map<String, Integer> nonMonotoneBy,
+      Optional<RegularityImposed> imposed,
+      boolean imposable) {
+
+    /** Of a fit that was not held to be regular, and whose form cannot be. */
+    public Regular(
+        int rows, int monotone, int quasiConcave, int both, Map<String, Integer> nonMonotoneBy) {
+      this(rows, monotone, quasiConcave, both, nonMonotoneBy, Optional.empty(), false);
+    }
+  }
 
   /**
    * The profile of the sum of squares over a curvature parameter.

@@ -131,7 +131,7 @@ final class FitStage {
     FitStatistics statistics = numbers.statistics();
     FitFindings.Regular regular = RegularityFindings.of(fit);
     EndogeneityStage endogenous = new EndogeneityStage(fit);
-    List<Verdict> verdicts = verdicts(fit);
+    List<Verdict> verdicts = verdicts(fit.examined());
     verdicts.addAll(endogenous.verdicts());
     List<Said> others = new ArrayList<>(other.remarks(robustness, output, scale));
     others.addAll(endogenous.remarks());
@@ -321,9 +321,7 @@ final class FitStage {
     remarks.addAll(robustness);
     remarks.addAll(new PanelStage(fit).remarks());
     remarks.addAll(FrontierStage.remarks(fit));
-    if (regular.both() < regular.rows()) {
-      remarks.add(Said.of("warning", "irregular-rows", RegularityFindings.words(regular)));
-    }
+    remarks.addAll(RegularityFindings.remarks(fit, regular));
     if (elasticities.stream().allMatch(pair -> pair.figure().uncertainty().isEmpty())) {
       remarks.add(
           Said.of(

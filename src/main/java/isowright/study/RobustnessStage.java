@@ -7,6 +7,7 @@ import isowright.estimation.RowsUsed;
 import isowright.inference.WildVerdict;
 import isowright.records.Panel;
 import isowright.regression.Influence;
+import isowright.regression.LinearFit;
 import isowright.study.Findings.Said;
 import isowright.study.FitFindings.Influential;
 import isowright.study.RobustnessFindings.Beyond;
@@ -44,9 +45,11 @@ final class RobustnessStage {
     this.fit = fit;
     this.replication = replication;
     this.panel = fit.panel();
-    this.survey = Influence.survey(fit.numbers().design(), fit.numbers().linear(), INFLUENTIAL);
-    this.cutoffs = Influence.Cutoffs.of(fit.numbers().linear());
-    this.huber = HuberFit.of(fit);
+    Fit examined = fit.examined();
+    LinearFit linear = examined.numbers().linear();
+    this.survey = Influence.survey(examined.numbers().design(), linear, INFLUENTIAL);
+    this.cutoffs = Influence.Cutoffs.of(linear);
+    this.huber = HuberFit.of(examined);
   }
 
   /**
@@ -85,7 +88,10 @@ final class RobustnessStage {
         .map(
             drawing ->
                 WildVerdict.of(
-                        fit, study.questions().returnsToScale(), drawing.draws(), drawing.seed())
+                        fit.examined(),
+                        study.questions().returnsToScale(),
+                        drawing.draws(),
+                        drawing.seed())
                     .stream()
                     .map(verdict -> wild(verdict, confidence))
                     .toList())
@@ -167,8 +173,8 @@ final class RobustnessStage {
           Said.of(
               "note",
               "resampling-by-the-estimator",
-              "This estimator draws whole plants for its own standard errors, so its figures are not"
-                  + " resampled once more."));
+              "This estimator draws whole plants for its own standard errors, so its figures are"
+                  + " not resampled once more."));
     }
     Map<String, Figure> headline = new LinkedHashMap<>();
     headline.put("returns to scale", scale);
@@ -254,8 +260,8 @@ final class RobustnessStage {
             Said.of(
                 "warning",
                 "huber-differs",
-                "Where rows with large residuals count for less (Huber's M estimate), figures move by"
-                    + " more than two standard errors: "
+                "Where rows with large residuals count for less (Huber's M estimate), figures move"
+                    + " by more than two standard errors: "
                     + String.join("; ", names)
                     + ". Some rows do not follow the rest."));
   }

@@ -39,7 +39,8 @@ final class SpecificationStage {
     List<Inflation> all = new ArrayList<>();
     for (Fit fit : fits) {
       if (fit.state().usable() && fit.specification().form() instanceof LinearForm linear) {
-        fit.numbers()
+        fit.examined()
+            .numbers()
             .inflation()
             .forEach(f -> all.add(new Inflation(linear.name(), f.column(), f.raw(), f.centred())));
       }
@@ -48,7 +49,7 @@ final class SpecificationStage {
   }
 
   private static List<Comparison> comparisons(List<Fit> fits) {
-    return FormComparison.all(fits).stream()
+    return FormComparison.all(fits.stream().map(Fit::examined).toList()).stream()
         .map(
             c ->
                 new Comparison(

@@ -63,8 +63,9 @@ final class StudyBinder {
           "missing-values",
           "instruments",
           "nests",
+          "regularity",
           "frontier");
-  private static final List<String> ESTIMATION_LATER = List.of("regularity", "proxy");
+  private static final List<String> ESTIMATION_LATER = List.of("proxy");
 
   private final Path file;
   private final Optional<Source> recordsInstead;

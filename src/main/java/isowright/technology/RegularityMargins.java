@@ -8,9 +8,9 @@ package isowright.technology;
  * curvatures of the isoquant: the eigenvalues λ_j of C = H − diag(e) on the plane Σ e_i v_i = 0 (v
  * in logs, of length one), which must not be positive (see {@link Regularity}).
  *
- * <p>With v the direction that belongs to λ and κ = 2 e′Cv/e′e the multiplier of the plane, a change
- * of the technology that changes gradient and Hessian of ln f in logs by ė and Ḣ changes a curvature
- * that is no double one by
+ * <p>With v the direction that belongs to λ and κ = 2 e′Cv/e′e the multiplier of the plane, a
+ * change of the technology that changes gradient and Hessian of ln f in logs by ė and Ḣ changes a
+ * curvature that is no double one by
  *
  * <pre>  λ̇ = v′Ḣ v − Σ_i ė_i v_i² − κ ė′v. </pre>
  *

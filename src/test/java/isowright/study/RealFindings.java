@@ -35,6 +35,8 @@ public final class RealFindings {
      * plans outside the records, out of reach, and where the technology is irregular.
      */
     PRIMARY_METALS,
+    /** The same, the translog held to be regular at every state. */
+    PRIMARY_METALS_REGULAR,
     /** Judge et al. 1988: a CES technology whose sum of squares is flat. */
     THIRTY_POINTS,
     /**
@@ -80,6 +82,10 @@ public final class RealFindings {
       case DEMO -> DEMO.resolve("glassworks.yaml");
       case GIVEN -> DEMO.resolve("given-only.yaml");
       case PRIMARY_METALS -> written("primary-metals-27-states", PRIMARY_METALS);
+      case PRIMARY_METALS_REGULAR ->
+          written(
+              "primary-metals-27-states",
+              PRIMARY_METALS + "estimation: {regularity: everywhere}\n");
       case THIRTY_POINTS -> written("ces-30-points", THIRTY_POINTS);
       case STATES_WITHIN -> written("us-states-public-capital", STATES.formatted("within"));
       case STATES_POOLED -> written("us-states-public-capital", STATES.formatted("none"));
