@@ -6,7 +6,7 @@ import isowright.regression.Covariance;
 import isowright.regression.Design;
 import isowright.regression.Effects;
 import isowright.regression.FitStatistics;
-import isowright.regression.InequalityLeastSquares;
+import isowright.regression.HeldFit;
 import isowright.regression.LeastSquares;
 import isowright.regression.LinearFit;
 import isowright.regression.VarianceComponents;
@@ -82,7 +82,7 @@ final class LinearEstimation {
     }
     return solved(
         treatment,
-        InequalityLeastSquares.held(fit, best.get().found()),
+        HeldFit.of(fit, best.get().found()),
         Particulars.OfRegularity.of(free, specification.regularity(), imposed, best.get()));
   }
 
