@@ -55,6 +55,8 @@ public record Chart(
     PRICE_ELASTICITIES,
     /** The sum of squares along a curvature parameter. */
     PROFILE,
+    /** Inefficiency of plants in order. */
+    INEFFICIENCY,
     /** Residuals against fitted values. */
     RESIDUALS,
     /** Actual against predicted output. */

@@ -35,6 +35,9 @@ public final class Charts {
       ResidualCharts.of(fit, setting).ifPresent(charts::add);
       ActualPredictedCharts.of(fit, setting).ifPresent(charts::add);
     }
+    for (Fitted fit : findings.fits()) {
+      InefficiencyCharts.of(fit, setting).ifPresent(charts::add);
+    }
     charts.addAll(CostElasticityCharts.of(findings, setting));
     for (CostFindings.Fitted fit : findings.costs().fits()) {
       AverageCostCharts.of(fit, setting).ifPresent(charts::add);

@@ -275,8 +275,10 @@ final class MethodSection {
     return material.findings().fits().stream().anyMatch(f -> f.technology().equals(technology));
   }
 
+  /** Of fits by least squares; what a likelihood does stands with it. */
   private boolean with(String standardErrors) {
     return material.findings().fits().stream()
+        .filter(fit -> fit.frontier().isEmpty())
         .anyMatch(fit -> fit.how().standardErrors().equals(standardErrors));
   }
 

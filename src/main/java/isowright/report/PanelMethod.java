@@ -26,6 +26,7 @@ final class PanelMethod {
       words.add(fit.how().time());
       fit.panel().components().ifPresent(c -> words.add(c.method()));
       fit.tests().stream().map(Tested::name).forEach(tests::add);
+      fit.frontier().ifPresent(f -> words.addAll(List.of("frontier", f.law(), f.overTime())));
     }
     List<Text> points = new ArrayList<>();
     for (String word : words) {
@@ -87,6 +88,38 @@ final class PanelMethod {
           "Variances of random effects from the residuals within plants "
               + citing.cite(Source.AMEMIYA, Source.BALTAGI_CHANG)
               + ".";
+      case "frontier" ->
+          "Frontier by maximum likelihood, ln Q = x′β + v − u with noise v normal and inefficiency"
+              + " u ≥ 0 "
+              + citing.cite(Source.AIGNER)
+              + "; a row’s inefficiency is its mean given the residuals "
+              + citing.cite(Source.JONDROW, Source.BATTESE_COELLI_1988)
+              + ", with intervals "
+              + citing.cite(Source.HORRACE)
+              + ". Covariance from the inverse Hessian; where it is robust or clustered, with the"
+              + " squares of scores of rows or plants between two of them, times G/(G − 1). The"
+              + " typical plant has mean inefficiency; the constant is that of the frontier."
+              + " Where the residuals of least squares are skewed the other way, least squares is"
+              + " the maximum "
+              + citing.cite(Source.WALDMAN)
+              + ".";
+      case "half-normal" -> "Inefficiency half-normal: the absolute value of a normal variable.";
+      case "exponential" ->
+          "Inefficiency exponential " + citing.cite(Source.AIGNER, Source.MEEUSEN) + ".";
+      case "constant" ->
+          "One inefficiency a plant, the same in all its periods "
+              + citing.cite(Source.BATTESE_COELLI_1988)
+              + "; beside it, from plant effects within plants, the greatest level less the plant’s"
+              + " "
+              + citing.cite(Source.SCHMIDT_SICKLES)
+              + ".";
+      case "decay" ->
+          "One inefficiency a plant, in period t that of the last period T times e^(−η (t − T)) "
+              + citing.cite(Source.BATTESE_COELLI_1992)
+              + "; beside it, from plant effects within plants, the greatest level less the plant’s"
+              + " "
+              + citing.cite(Source.SCHMIDT_SICKLES)
+              + ".";
       case "biased-trend" ->
           "A biased trend adds τ t + ½ τ₂ t² + Σ τ_i z_i t; its bias is what it does to shares in"
               + " cost at a given mix.";
@@ -96,6 +129,11 @@ final class PanelMethod {
 
   private static String test(String name, Citing citing) {
     return switch (name) {
+      case "no-inefficiency" ->
+          "No inefficiency by the likelihood ratio, whose law at the bound of a variance is a"
+              + " mixture of chi-squared laws "
+              + citing.cite(Source.KODDE)
+              + ".";
       case "plant-variance" ->
           "Variance between plants by Lagrange multiplier "
               + citing.cite(Source.BREUSCH, Source.BALTAGI_LI)

@@ -43,6 +43,7 @@ public final class ReportContent {
       sections.add(RegularitySection.of(material));
     }
     ChangeSection.of(material).ifPresent(sections::add);
+    FrontierSection.of(material).ifPresent(sections::add);
     CostsSection.of(material).ifPresent(sections::add);
     ExpectationsSection.of(material).ifPresent(sections::add);
     if (!findings.plans().isEmpty()) {
@@ -59,6 +60,7 @@ public final class ReportContent {
     SpecificationSection.of(material).ifPresent(sections::add);
     MatrixSection.of(material).ifPresent(sections::add);
     RobustnessSection.of(material).ifPresent(sections::add);
+    FrontierSection.annex(material).ifPresent(sections::add);
     PlanAnnexSection.of(material).ifPresent(sections::add);
     sections.add(MethodSection.of(material));
     sections.add(RunSection.of(material));

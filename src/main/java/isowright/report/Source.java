@@ -2,88 +2,86 @@ package isowright.report;
 
 /** The publications that the method section cites. */
 enum Source {
+  AIGNER(
+      "Aigner, Lovell and Schmidt 1977 | Aigner, D., Lovell, C. A. K. and Schmidt, P. (1977)",
+      "Formulation and Estimation of Stochastic Frontier Production Function Models",
+      "Journal of Econometrics 6, 21–37"),
   ALLEN(
-      "Allen 1938",
-      "Allen, R. G. D. (1938)",
+      "Allen 1938 | Allen, R. G. D. (1938)",
       "Mathematical Analysis for Economists",
       "London: Macmillan"),
   AMEMIYA(
-      "Amemiya 1971",
-      "Amemiya, T. (1971)",
+      "Amemiya 1971 | Amemiya, T. (1971)",
       "The Estimation of the Variances in a Variance-Components Model",
       "International Economic Review 12, 1–13"),
   ANDERSON_RUBIN(
-      "Anderson and Rubin 1949",
-      "Anderson, T. W. and Rubin, H. (1949)",
+      "Anderson and Rubin 1949 | Anderson, T. W. and Rubin, H. (1949)",
       "Estimation of the Parameters of a Single Equation in a Complete System of Stochastic"
           + " Equations",
       "Annals of Mathematical Statistics 20, 46–63"),
   ANDREWS(
-      "Andrews 2000",
-      "Andrews, D. W. K. (2000)",
+      "Andrews 2000 | Andrews, D. W. K. (2000)",
       "Inconsistency of the Bootstrap When a Parameter Is on the Boundary of the Parameter Space",
       "Econometrica 68, 399–405"),
   ARROW(
-      "Arrow et al. 1961",
-      "Arrow, K. J., Chenery, H. B., Minhas, B. S. and Solow, R. M. (1961)",
+      "Arrow et al. 1961 | Arrow, K. J., Chenery, H. B., Minhas, B. S. and Solow, R. M. (1961)",
       "Capital-Labor Substitution and Economic Efficiency",
       "Review of Economics and Statistics 43, 225–250"),
   BALTAGI_CHANG(
-      "Baltagi and Chang 1994",
-      "Baltagi, B. H. and Chang, Y.-J. (1994)",
+      "Baltagi and Chang 1994 | Baltagi, B. H. and Chang, Y.-J. (1994)",
       "Incomplete Panels: A Comparative Study of Alternative Estimators for the"
           + " Unbalanced One-Way Error Component Regression Model",
       "Journal of Econometrics 62, 67–89"),
   BALTAGI_LI(
-      "Baltagi and Li 1990",
-      "Baltagi, B. H. and Li, Q. (1990)",
+      "Baltagi and Li 1990 | Baltagi, B. H. and Li, Q. (1990)",
       "A Lagrange Multiplier Test for the Error Components Model with Incomplete Panels",
       "Econometric Reviews 9, 103–107"),
   BARTEN(
-      "Barten 1969",
-      "Barten, A. P. (1969)",
+      "Barten 1969 | Barten, A. P. (1969)",
       "Maximum Likelihood Estimation of a Complete System of Demand Equations",
       "European Economic Review 1, 7–73"),
   BASMANN(
-      "Basmann 1957",
-      "Basmann, R. L. (1957)",
+      "Basmann 1957 | Basmann, R. L. (1957)",
       "A Generalized Classical Method of Linear Estimation of Coefficients in a Structural"
           + " Equation",
       "Econometrica 25, 77–83"),
+  BATTESE_COELLI_1988(
+      "Battese and Coelli 1988 | Battese, G. E. and Coelli, T. J. (1988)",
+      "Prediction of Firm-Level Technical Efficiencies with a Generalized Frontier Production"
+          + " Function and Panel Data",
+      "Journal of Econometrics 38, 387–399"),
+  BATTESE_COELLI_1992(
+      "Battese and Coelli 1992 | Battese, G. E. and Coelli, T. J. (1992)",
+      "Frontier Production Functions, Technical Efficiency and Panel Data: With Application to"
+          + " Paddy Farmers in India",
+      "Journal of Productivity Analysis 3, 153–169"),
   BELSLEY(
-      "Belsley, Kuh and Welsch 1980",
-      "Belsley, D. A., Kuh, E. and Welsch, R. E. (1980)",
+      "Belsley, Kuh and Welsch 1980 | Belsley, D. A., Kuh, E. and Welsch, R. E. (1980)",
       "Regression Diagnostics",
       "New York: Wiley"),
   BERNDT(
-      "Berndt and Wood 1975",
-      "Berndt, E. R. and Wood, D. O. (1975)",
+      "Berndt and Wood 1975 | Berndt, E. R. and Wood, D. O. (1975)",
       "Technology, Prices, and the Derived Demand for Energy",
       "Review of Economics and Statistics 57, 259–268"),
   BLACKORBY(
-      "Blackorby and Russell 1989",
-      "Blackorby, C. and Russell, R. R. (1989)",
+      "Blackorby and Russell 1989 | Blackorby, C. and Russell, R. R. (1989)",
       "Will the Real Elasticity of Substitution Please Stand Up?",
       "American Economic Review 79, 882–888"),
   BREUSCH(
-      "Breusch and Pagan 1980",
-      "Breusch, T. S. and Pagan, A. R. (1980)",
+      "Breusch and Pagan 1980 | Breusch, T. S. and Pagan, A. R. (1980)",
       "The Lagrange Multiplier Test and Its Applications to Model Specification in"
           + " Econometrics",
       "Review of Economic Studies 47, 239–253"),
   CAMERON(
-      "Cameron and Miller 2015",
-      "Cameron, A. C. and Miller, D. L. (2015)",
+      "Cameron and Miller 2015 | Cameron, A. C. and Miller, D. L. (2015)",
       "A Practitioner’s Guide to Cluster-Robust Inference",
       "Journal of Human Resources 50, 317–372"),
   CAMERON_BOOTSTRAP(
-      "Cameron, Gelbach and Miller 2008",
-      "Cameron, A. C., Gelbach, J. B. and Miller, D. L. (2008)",
+      "Cameron, Gelbach and Miller 2008 | Cameron, A. C., Gelbach, J. B. and Miller, D. L. (2008)",
       "Bootstrap-Based Improvements for Inference with Clustered Errors",
       "Review of Economics and Statistics 90, 414–427"),
   CAMERON_GELBACH(
-      "Cameron, Gelbach and Miller 2011",
-      "Cameron, A. C., Gelbach, J. B. and Miller, D. L. (2011)",
+      "Cameron, Gelbach and Miller 2011 | Cameron, A. C., Gelbach, J. B. and Miller, D. L. (2011)",
       "Robust Inference with Multiway Clustering",
       "Journal of Business and Economic Statistics 29, 238–249"),
   CAVES(
@@ -92,8 +90,7 @@ enum Source {
       "Productivity Growth, Scale Economies, and Capacity Utilization in U.S. Railroads, 1955–74",
       "American Economic Review 71, 994–1002"),
   DIEWERT_WALES(
-      "Diewert and Wales 1987",
-      "Diewert, W. E. and Wales, T. J. (1987)",
+      "Diewert and Wales 1987 | Diewert, W. E. and Wales, T. J. (1987)",
       "Flexible Functional Forms and Global Curvature Conditions",
       "Econometrica 55, 43–68"),
   RYAN_WALES(
@@ -102,18 +99,15 @@ enum Source {
       "Imposing Local Concavity in the Translog and Generalized Leontief Cost Functions",
       "Economics Letters 67, 253–260"),
   BAUMOL_PANZAR_WILLIG(
-      "Baumol, Panzar and Willig 1982",
-      "Baumol, W. J., Panzar, J. C. and Willig, R. D. (1982)",
+      "Baumol, Panzar and Willig 1982 | Baumol, W. J., Panzar, J. C. and Willig, R. D. (1982)",
       "Contestable Markets and the Theory of Industry Structure",
       "Harcourt Brace Jovanovich"),
   CHRISTENSEN_GREENE(
-      "Christensen and Greene 1976",
-      "Christensen, L. R. and Greene, W. H. (1976)",
+      "Christensen and Greene 1976 | Christensen, L. R. and Greene, W. H. (1976)",
       "Economies of Scale in U.S. Electric Power Generation",
       "Journal of Political Economy 84, 655–676"),
   CHOW(
-      "Chow 1960",
-      "Chow, G. C. (1960)",
+      "Chow 1960 | Chow, G. C. (1960)",
       "Tests of Equality between Sets of Coefficients in Two Linear Regressions",
       "Econometrica 28, 591–605"),
   CHRISTENSEN(
@@ -122,33 +116,27 @@ enum Source {
       "Transcendental Logarithmic Production Frontiers",
       "Review of Economics and Statistics 55, 28–45"),
   COBB_DOUGLAS(
-      "Cobb and Douglas 1928",
-      "Cobb, C. W. and Douglas, P. H. (1928)",
+      "Cobb and Douglas 1928 | Cobb, C. W. and Douglas, P. H. (1928)",
       "A Theory of Production",
       "American Economic Review 18, Supplement, 139–165"),
   COOK(
-      "Cook 1977",
-      "Cook, R. D. (1977)",
+      "Cook 1977 | Cook, R. D. (1977)",
       "Detection of Influential Observation in Linear Regression",
       "Technometrics 19, 15–18"),
   DAVISON(
-      "Davison and Hinkley 1997",
-      "Davison, A. C. and Hinkley, D. V. (1997)",
+      "Davison and Hinkley 1997 | Davison, A. C. and Hinkley, D. V. (1997)",
       "Bootstrap Methods and their Application",
       "Cambridge: Cambridge University Press"),
   DRISCOLL(
-      "Driscoll and Kraay 1998",
-      "Driscoll, J. C. and Kraay, A. C. (1998)",
+      "Driscoll and Kraay 1998 | Driscoll, J. C. and Kraay, A. C. (1998)",
       "Consistent Covariance Matrix Estimation with Spatially Dependent Panel Data",
       "Review of Economics and Statistics 80, 549–560"),
   DIEWERT(
-      "Diewert 1971",
-      "Diewert, W. E. (1971)",
+      "Diewert 1971 | Diewert, W. E. (1971)",
       "An Application of the Shephard Duality Theorem: A Generalized Leontief Production Function",
       "Journal of Political Economy 79, 481–507"),
   DUAN(
-      "Duan 1983",
-      "Duan, N. (1983)",
+      "Duan 1983 | Duan, N. (1983)",
       "Smearing Estimate: A Nonparametric Retransformation Method",
       "Journal of the American Statistical Association 78, 605–610"),
   EFRON(
@@ -197,12 +185,21 @@ enum Source {
       "Specification Tests in Econometrics",
       "Econometrica 46, 1251–1271"),
   HICKS("Hicks 1932", "Hicks, J. R. (1932)", "The Theory of Wages", "London: Macmillan"),
+  HORRACE(
+      "Horrace and Schmidt 1996 | Horrace, W. C. and Schmidt, P. (1996)",
+      "Confidence Statements for Efficiency Estimates from Stochastic Frontier Models",
+      "Journal of Productivity Analysis 7, 257–282"),
   HOTHORN(
       "Hothorn, Bretz and Westfall 2008",
       "Hothorn, T., Bretz, F. and Westfall, P. (2008)",
       "Simultaneous Inference in General Parametric Models",
       "Biometrical Journal 50, 346–363"),
   HUBER("Huber 1981", "Huber, P. J. (1981)", "Robust Statistics", "New York: Wiley"),
+  JONDROW(
+      "Jondrow et al. 1982 | Jondrow, J., Lovell, C. A. K., Materov, I. S. and Schmidt, P. (1982)",
+      "On the Estimation of Technical Inefficiency in the Stochastic Frontier Production Function"
+          + " Model",
+      "Journal of Econometrics 19, 233–238"),
   JORGENSON(
       "Jorgenson 1963",
       "Jorgenson, D. W. (1963)",
@@ -219,8 +216,7 @@ enum Source {
       "Economic Growth and the Elasticity of Substitution: Two Theorems and Some Suggestions",
       "American Economic Review 90, 282–291"),
   KODDE(
-      "Kodde and Palm 1986",
-      "Kodde, D. A. and Palm, F. C. (1986)",
+      "Kodde and Palm 1986 | Kodde, D. A. and Palm, F. C. (1986)",
       "Wald Criteria for Jointly Testing Equality and Inequality Restrictions",
       "Econometrica 54, 1243–1248"),
   KOPP(
@@ -230,8 +226,7 @@ enum Source {
           + " Allocative Efficiency",
       "Journal of Econometrics 19, 319–331"),
   DE_LA_GRANDVILLE(
-      "de La Grandville 1989",
-      "de La Grandville, O. (1989)",
+      "de La Grandville 1989 | de La Grandville, O. (1989)",
       "In Quest of the Slutsky Diamond",
       "American Economic Review 79, 468–481"),
   LIANG(
@@ -261,6 +256,10 @@ enum Source {
       "Montiel Olea, J. L. and Pflueger, C. (2013)",
       "A Robust Test for Weak Instruments",
       "Journal of Business and Economic Statistics 31, 358–369"),
+  MEEUSEN(
+      "Meeusen and van den Broeck 1977 | Meeusen, W. and van den Broeck, J. (1977)",
+      "Efficiency Estimation from Cobb-Douglas Production Functions with Composed Error",
+      "International Economic Review 18, 435–444"),
   MUNDLAK(
       "Mundlak 1978",
       "Mundlak, Y. (1978)",
@@ -277,6 +276,10 @@ enum Source {
       "Newey, W. K. and West, K. D. (1994)",
       "Automatic Lag Selection in Covariance Matrix Estimation",
       "Review of Economic Studies 61, 631–653"),
+  SCHMIDT_SICKLES(
+      "Schmidt and Sickles 1984 | Schmidt, P. and Sickles, R. C. (1984)",
+      "Production Frontiers and Panel Data",
+      "Journal of Business and Economic Statistics 2, 367–374"),
   SHEPHARD(
       "Shephard 1953",
       "Shephard, R. W. (1953)",
@@ -313,6 +316,10 @@ enum Source {
       "Uzawa, H. (1962)",
       "Production Functions with Constant Elasticities of Substitution",
       "Review of Economic Studies 29, 291–299"),
+  WALDMAN(
+      "Waldman 1982 | Waldman, D. M. (1982)",
+      "A Stationary Point for the Stochastic Frontier Likelihood",
+      "Journal of Econometrics 18, 275–279"),
   WALLACE(
       "Wallace and Hussain 1969",
       "Wallace, T. D. and Hussain, A. (1969)",
@@ -350,6 +357,15 @@ enum Source {
     this.authors = authors;
     this.title = title;
     this.place = place;
+  }
+
+  /** How it is cited in a sentence, and authors and year, with a bar between. */
+  Source(String names, String title, String place) {
+    this(
+        names.substring(0, names.indexOf(" | ")),
+        names.substring(names.indexOf(" | ") + 3),
+        title,
+        place);
   }
 
   /** How it is cited in a sentence. */

@@ -55,14 +55,16 @@ final class FrontierStage {
 
   private FrontierFindings findings() {
     Inefficiency inefficiency = Inefficiency.of(fit).orElseThrow();
+    List<Plant> plants =
+        inefficiency.known().map(known -> plants(known, inefficiency)).orElse(List.of());
     return new FrontierFindings(
         asked.lawWord(),
         asked.overTime().word(),
         state(),
-        words(),
+        words() + inefficiency.variances().map(v -> amount(v) + told(plants)).orElse(""),
         found.skewness(),
         inefficiency.variances().map(FrontierStage::variances),
-        inefficiency.known().map(known -> plants(known, inefficiency)).orElse(List.of()),
+        plants,
         inefficiency.known().map(known -> rows(known, inefficiency.mean())).orElse(List.of()),
         inefficiency.byEffects().map(by -> panel.plants().get(by.best())));
   }
@@ -111,6 +113,41 @@ final class FrontierStage {
                         + " from the last period of the records.";
               };
     };
+  }
+
+  /** What mean inefficiency makes of output, and how much of the variance it takes. */
+  private static String amount(Inefficiency.Variances v) {
+    return String.format(
+        Locale.ROOT,
+        " At the same inputs the typical plant makes %s %% less output than the frontier (%s to"
+            + " %s); inefficiency takes %s %% of the variance that the technology leaves (%s to"
+            + " %s).",
+        percent(-Math.expm1(-v.mean().value())),
+        percent(-Math.expm1(-v.mean().low())),
+        percent(-Math.expm1(-v.mean().high())),
+        percent(v.share().value()),
+        percent(v.share().low()),
+        percent(v.share().high()));
+  }
+
+  private static String percent(double share) {
+    return String.format(Locale.ROOT, "%.1f", 100 * share);
+  }
+
+  /** Of how many plants it can be said on which side of the mean they lie. */
+  private String told(List<Plant> plants) {
+    long above = plants.stream().filter(p -> p.last().aboveMean() >= level).count();
+    long below = plants.stream().filter(p -> p.last().aboveMean() <= 1 - level).count();
+    return String.format(
+        Locale.ROOT,
+        " With a probability of at least %s %%, the parameters taken as known, %d of %d %s less"
+            + " inefficiency than that mean and %d more; of the other %d it cannot be said.",
+        percent(level).replace(".0", ""),
+        below,
+        plants.size(),
+        plants.size() == 1 ? "plant has" : "plants have",
+        above,
+        plants.size() - below - above);
   }
 
   private List<Plant> plants(ConditionalErrors known, Inefficiency inefficiency) {
@@ -175,6 +212,12 @@ final class FrontierStage {
                   + " not the same as waste. Its law ("
                   + asked.lawWord()
                   + ") was assumed and not found in the records."));
+      remarks.add(
+          Said.of(
+              "note",
+              "influence-about-typical",
+              "The influence of single rows is measured as that on least squares about the typical"
+                  + " plant; maximum likelihood has no such figures in closed form."));
       if (asked.overTime() == Estimator.OverTime.EACH_ROW && panel.repeats()) {
         remarks.add(
             Said.of(

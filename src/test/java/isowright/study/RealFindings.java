@@ -46,7 +46,9 @@ public final class RealFindings {
     /** Munnell 1990, pooled, with a plan. */
     STATES_POOLED,
     /** The demo's records under many specifications, some of which cannot be carried out. */
-    SPECIFICATIONS
+    SPECIFICATIONS,
+    /** A frontier of the demo's records, with decay. */
+    FRONTIER
   }
 
   /** The findings of a study. */
@@ -89,6 +91,7 @@ public final class RealFindings {
       case THIRTY_POINTS -> written("ces-30-points", THIRTY_POINTS);
       case STATES_WITHIN -> written("us-states-public-capital", STATES.formatted("within"));
       case STATES_POOLED -> written("us-states-public-capital", STATES.formatted("none"));
+      case FRONTIER -> DEMO.resolve("below-the-frontier.yaml");
       case SPECIFICATIONS -> DEMO.resolve("glassworks-specifications.yaml");
     };
   }
