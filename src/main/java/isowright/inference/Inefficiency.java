@@ -7,9 +7,9 @@ import isowright.estimation.Particulars;
 import isowright.estimation.PlantLevels;
 import isowright.estimation.Specification;
 import isowright.regression.ComposedFit;
+import isowright.regression.ComposedProfile;
 import isowright.regression.ConditionalErrors;
 import isowright.regression.Covariance;
-import isowright.regression.OneSidedLaw;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
@@ -22,7 +22,10 @@ import org.apache.commons.statistics.distribution.TDistribution;
  * and G. S. Corra 1977, <i>Australian Journal of Agricultural Economics</i> 21, 169–179); the share
  * of the variance, var u/(var u + σ_v²), with var u = (1 − 2/π) σ_u² under the half-normal law and
  * σ_u² under the exponential one, which is what γ is often taken for. Intervals are symmetric in
- * logs (σ, λ) and in log odds (γ, share), so that they stay within their bounds.
+ * logs (σ, λ) and so in log odds (γ, share), and stay within their bounds; where the half-length in
+ * the log exceeds {@link #QUADRATIC} they are read off the profile of the likelihood instead, its
+ * threshold widened as the covariance in force is wider than that of the likelihood (Kent, J. T.
+ * 1982, <i>Biometrika</i> 69, 19–27).
  *
  * <p>A row's inefficiency given its residuals: see {@link ConditionalErrors} (Jondrow, Lovell,
  * Materov and Schmidt 1982; Battese and Coelli 1988; intervals of Horrace and Schmidt 1996).
@@ -80,6 +83,9 @@ public record Inefficiency(
     return fit.numbers().frontier().map(own -> of(fit, own));
   }
 
+  /** Half-length of an interval of a log beyond which the log is no longer near to normal. */
+  private static final double QUADRATIC = 1;
+
   private static Inefficiency of(Fit fit, Particulars.OfFrontier own) {
     boolean found = own.fit().state().oneSided();
     Optional<Variances> variances = found ? Optional.of(variances(fit, own)) : Optional.empty();
@@ -88,6 +94,14 @@ public record Inefficiency(
         found ? Optional.of(own.fit().conditional()) : Optional.empty(),
         own.scale() * own.fit().scale(),
         byEffects(fit));
+  }
+
+  /** How much inefficiency there is, by a usable fit; absent where none was found. */
+  public static Optional<Variances> variances(Fit fit) {
+    return fit.numbers()
+        .frontier()
+        .filter(own -> own.fit().state().oneSided())
+        .map(own -> variances(fit, own));
   }
 
   private static Variances variances(Fit fit, Particulars.OfFrontier own) {
@@ -99,20 +113,59 @@ public record Inefficiency(
     Errors errors = new Errors(source.degreesOfFreedom(), level);
     double noise = Math.sqrt(v[first][first]);
     double inefficiency = Math.sqrt(v[first + 1][first + 1]);
-    double ratio =
-        Math.sqrt(Math.max(0, v[first][first] + v[first + 1][first + 1] - 2 * v[first][first + 1]));
+    double ratio = Math.sqrt(Math.max(0, ratioVariance(v, first)));
     double lambda = found.scale() / found.noise();
-    OneSidedLaw law = found.model().law();
+    double part = found.model().law().variance(1);
+    Estimate scale = errors.positive(found.scale(), inefficiency);
+    Estimate of = errors.positive(lambda, ratio);
+    if (errors.quantile() * Math.max(inefficiency, ratio) > QUADRATIC) {
+      double[][] plain = found.covariance(Covariance.Kind.CLASSICAL).matrix();
+      double wider = v[first + 1][first + 1] / plain[first + 1][first + 1];
+      double wide = ratioVariance(v, first) / ratioVariance(plain, first);
+      scale = errors.profiled(scale, found, ComposedProfile.Held.SCALE, wider);
+      of = errors.profiled(of, found, ComposedProfile.Held.RATIO, wide);
+    }
     return new Variances(
         errors.positive(found.noise(), noise),
-        errors.positive(found.scale(), inefficiency),
-        errors.positive(lambda, ratio),
-        errors.share(lambda * lambda, 2 * ratio),
-        errors.share(law.variance(1) * lambda * lambda, 2 * ratio),
-        errors.positive(own.scale() * found.scale(), inefficiency),
+        scale,
+        of,
+        share(of, 1, 2 * ratio),
+        share(of, part, 2 * ratio),
+        times(scale, own.scale()),
         v.length > first + 2
             ? Optional.of(errors.plain(found.decay(), Math.sqrt(v[first + 2][first + 2])))
             : Optional.empty());
+  }
+
+  /** The variance of ln λ. */
+  private static double ratioVariance(double[][] v, int noise) {
+    return v[noise][noise] + v[noise + 1][noise + 1] - 2 * v[noise][noise + 1];
+  }
+
+  /** part λ²/(1 + part λ²), with the ends that λ has. */
+  private static Estimate share(Estimate lambda, double part, double error) {
+    double value = share(lambda.value(), part);
+    return new Estimate(
+        value,
+        value * (1 - value) * error,
+        share(lambda.low(), part),
+        share(lambda.high(), part),
+        lambda.level(),
+        lambda.method());
+  }
+
+  private static double share(double lambda, double part) {
+    return 1 - 1 / (1 + part * lambda * lambda);
+  }
+
+  private static Estimate times(Estimate scale, double by) {
+    return new Estimate(
+        by * scale.value(),
+        by * scale.standardError(),
+        by * scale.low(),
+        by * scale.high(),
+        scale.level(),
+        scale.method());
   }
 
   private static Optional<ByEffects> byEffects(Fit fit) {
@@ -187,17 +240,21 @@ public record Inefficiency(
           value, value * error, value / factor, value * factor, level, Estimate.Method.DELTA);
     }
 
-    /** odds/(1 + odds), from the standard error of the log of the odds. */
-    Estimate share(double odds, double error) {
-      double factor = Math.exp(quantile() * error);
-      double value = odds / (1 + odds);
+    /**
+     * The ends of the profile of the likelihood in the place of those of the log.
+     *
+     * @param wider by how much the covariance in force is wider than that of the likelihood alone
+     */
+    Estimate profiled(Estimate estimate, ComposedFit fit, ComposedProfile.Held held, double wider) {
+      double threshold = quantile() * quantile() * (wider > 0 ? wider : 1);
+      double[] ends = ComposedProfile.interval(fit, held, threshold);
       return new Estimate(
-          value,
-          value / (1 + odds) * error,
-          odds / factor / (1 + odds / factor),
-          odds * factor / (1 + odds * factor),
+          estimate.value(),
+          estimate.standardError(),
+          ends[0],
+          ends[1],
           level,
-          Estimate.Method.DELTA);
+          Estimate.Method.PROFILE);
     }
   }
 }

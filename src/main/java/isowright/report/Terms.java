@@ -199,7 +199,7 @@ final class Terms {
   static String method(String word) {
     return switch (word) {
       case "delta" -> "first-order propagation of the parameter covariance";
-      case "profile" -> "the profile of the sum of squares";
+      case "profile" -> "the profile of the sum of squares or of the likelihood";
       case "resampling" -> "resampling of whole plants";
       case "conditional" -> "the law of inefficiency given the residuals";
       default -> word;

@@ -11,6 +11,7 @@ import isowright.estimation.Specification;
 import isowright.inference.DeltaMethod;
 import isowright.inference.Estimate;
 import isowright.inference.Hypotheses;
+import isowright.inference.Inefficiency;
 import isowright.inference.Intervals;
 import isowright.inference.Law;
 import isowright.inference.SpecificationTests;
@@ -33,9 +34,6 @@ final class FitStage {
 
   /** Points kept of a fit for its charts; more cannot be told apart on a page. */
   private static final int POINTS = 2000;
-
-  /** Standard deviations: positive, with zero at their bound. */
-  private static final List<String> SPREADS = List.of("frontier:noise", "frontier:inefficiency");
 
   private final Panel panel;
   private final Study study;
@@ -196,26 +194,40 @@ final class FitStage {
     Solution numbers = fit.numbers();
     Law law = new Law.Student(numbers.covarianceSource().degreesOfFreedom());
     List<Parameter> parameters = new ArrayList<>();
+    Optional<Inefficiency.Variances> spreads = Inefficiency.variances(fit);
     for (int k = 0; k < numbers.names().size(); k++) {
       String name = numbers.names().get(k);
       double value = numbers.parameters()[k];
       double error = Math.sqrt(Math.max(0, numbers.covariance()[k][k]));
       Optional<CurvatureProfile> profile =
           fit.profiles().stream().filter(p -> p.name().equals(name)).findFirst();
-      boolean spread = SPREADS.contains(name);
+      Optional<Estimate> spread = spread(name, spreads);
       boolean zeroMeansNothing =
-          spread
+          spread.isPresent()
               || fit.specification().form() instanceof NonlinearForm
                   && (profile.isPresent() || name.equals("scale") || name.contains("share:"));
-      DeltaMethod.Scale scale = spread ? DeltaMethod.Scale.LOG : DeltaMethod.Scale.LINEAR;
       Figure figure =
           profile
               .map(p -> curvatureFigure(fit, p, value, error))
-              .orElseGet(() -> figure(delta.estimate(value, error, scale)));
+              .or(
+                  () ->
+                      spread.map(
+                          e ->
+                              Figure.estimated(value, error, e.low(), e.high(), e.method().word())))
+              .orElseGet(() -> figure(delta.estimate(value, error, DeltaMethod.Scale.LINEAR)));
       parameters.add(
           new Parameter(name, figure, zeroMeansNothing ? Double.NaN : law.p(value / error)));
     }
     return parameters;
+  }
+
+  /** Standard deviations of a frontier: positive, with zero at their bound. */
+  private static Optional<Estimate> spread(String name, Optional<Inefficiency.Variances> spreads) {
+    return switch (name) {
+      case "frontier:noise" -> spreads.map(Inefficiency.Variances::noise);
+      case "frontier:inefficiency" -> spreads.map(Inefficiency.Variances::inefficiency);
+      default -> Optional.empty();
+    };
   }
 
   /** The interval of ρ is that of σ from the profile, carried over. */

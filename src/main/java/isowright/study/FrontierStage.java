@@ -198,11 +198,26 @@ final class FrontierStage {
         estimate.method().word());
   }
 
+  private static Said weak(Inefficiency.Variances v) {
+    return Said.of(
+        "warning",
+        "inefficiency-weak",
+        "The records hardly tell inefficiency from noise: "
+            + (v.inefficiency().low() == 0
+                ? "none at all is among the values they do not speak against"
+                : "its size is known within wide bounds only")
+            + ". Its intervals are read off the profile of the likelihood, and what is said of"
+            + " single plants rests on the assumed law more than on the records.");
+  }
+
   private List<Said> remarks() {
     List<Said> remarks = new ArrayList<>();
     if (!found.state().oneSided()) {
       remarks.add(Said.of("warning", state(), words()));
     } else {
+      Inefficiency.variances(fit)
+          .filter(v -> v.inefficiency().method() == Estimate.Method.PROFILE)
+          .ifPresent(v -> remarks.add(weak(v)));
       remarks.add(
           Said.of(
               "note",

@@ -295,4 +295,39 @@ class ComposedErrorsTest {
     assertThat(again.coefficients()[3]).isCloseTo(fit.coefficients()[3], within(1e-7));
     assertThat(again.scale()).isCloseTo(fit.scale(), within(1e-7));
   }
+
+  /**
+   * Ends of profiles against R's own search ({@code reference/frontier-effects.R}); halving stops
+   * at a relative 1.3e-4.
+   */
+  @Test
+  void profilesAgainstR() throws IOException {
+    ComposedFit fit =
+        ComposedFit.of(
+            new ComposedErrors(
+                PublishedDesigns.electricity(),
+                OneSidedLaw.HALF_NORMAL,
+                Sharing.NONE,
+                new double[0]));
+    int seen = 0;
+    for (String line :
+        Files.readAllLines(Path.of("src/test/resources/reference/frontier-effects.csv"))) {
+      String[] cells = line.split(",");
+      if (!cells[0].equals("profile")) {
+        continue;
+      }
+      ComposedProfile.Held held =
+          cells[1].equals("scale") ? ComposedProfile.Held.SCALE : ComposedProfile.Held.RATIO;
+      double[] ends = ComposedProfile.interval(fit, held, 0.5);
+      for (int k = 0; k < 2; k++) {
+        double expected = Double.parseDouble(cells[2 + k]);
+        assertThat(ends[k]).as(line).isCloseTo(expected, within(1.5e-4 * expected));
+        seen++;
+      }
+    }
+    assertThat(seen).isEqualTo(4);
+    // Where no one-sided error at all is not spoken against, the interval begins at zero.
+    double all = fit.likelihoodRatio() + 1e-6;
+    assertThat(ComposedProfile.interval(fit, ComposedProfile.Held.SCALE, all)[0]).isZero();
+  }
 }
