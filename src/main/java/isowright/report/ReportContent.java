@@ -31,6 +31,7 @@ public final class ReportContent {
     if (findings.records().isPresent()) {
       sections.add(DescriptionSection.of(material));
     }
+    SimultaneitySection.of(material).ifPresent(sections::add);
     if (!CostsSection.alone(findings)) {
       sections.add(FitsSection.of(material));
     }

@@ -35,6 +35,9 @@ final class SpecificationJson {
           file.text("what", decision.what());
           file.text("why", decision.why());
         });
+    if (found.simultaneity().isPresent()) {
+      file.object("beforeFitting", () -> SimultaneityJson.write(file, found.simultaneity().get()));
+    }
     if (found.zeros().isPresent()) {
       file.object("zeros", () -> MatrixJson.zeros(file, found.zeros().get()));
     }

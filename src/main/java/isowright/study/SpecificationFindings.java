@@ -18,6 +18,7 @@ import java.util.Optional;
  * @param decisions the decisions stated in the study file
  * @param matrix other specifications side by side, where asked
  * @param zeros what the other policy for zeros does, where the records hold any
+ * @param simultaneity what was expected of least squares before fitting, where anything is fitted
  */
 public record SpecificationFindings(
     List<Inflation> inflation,
@@ -26,7 +27,8 @@ public record SpecificationFindings(
     List<Expected> expectations,
     List<Decision> decisions,
     Optional<MatrixFindings> matrix,
-    Optional<ZerosFindings> zeros) {
+    Optional<ZerosFindings> zeros,
+    Optional<SimultaneityFindings> simultaneity) {
 
   /** Nothing asked, nothing found. */
   public static final SpecificationFindings NONE =
@@ -36,6 +38,7 @@ public record SpecificationFindings(
           List.of(),
           List.of(),
           List.of(),
+          Optional.empty(),
           Optional.empty(),
           Optional.empty());
 

@@ -32,7 +32,8 @@ final class SpecificationStage {
         ExpectationStage.held(study.protocol().expectations(), fitted),
         study.protocol().decisions(),
         MatrixStage.findings(study, panel),
-        ZerosStage.findings(study, reading, panel));
+        ZerosStage.findings(study, reading, panel),
+        SimultaneityStage.findings(study, panel));
   }
 
   private static List<Inflation> inflation(List<Fit> fits) {
