@@ -21,6 +21,10 @@ final class EfficiencyBlocks {
   /** The table for reviews in their order; absent where none has a gap. */
   static Optional<Table> table(Material material, String technology, List<Reviewed> reviews) {
     List<Row> rows = new ArrayList<>();
+    boolean scaled =
+        reviews.stream()
+            .flatMap(review -> review.detail().stream())
+            .anyMatch(detail -> detail.scale().isPresent());
     boolean found =
         reviews.stream()
             .flatMap(review -> review.detail().stream())
@@ -30,7 +34,7 @@ final class EfficiencyBlocks {
           review.detail().filter(d -> d.efficiency().isPresent() || d.scale().isPresent());
       if (known.isPresent()) {
         Detail detail = known.get();
-        rows.add(new Row(Text.of(review.plant()), cells(review.period(), detail, found)));
+        rows.add(new Row(Text.of(review.plant()), cells(review.period(), detail, scaled, found)));
       }
     }
     if (rows.isEmpty()) {
@@ -38,41 +42,55 @@ final class EfficiencyBlocks {
     }
     return Optional.of(
         new Table(
-            "Ratios of costs and scale, by " + Terms.technology(technology),
+            (scaled ? "Ratios of costs and scale, by " : "Ratios of costs, by ")
+                + Terms.technology(technology),
             "Plant",
-            columns(material, found),
+            columns(material, scaled, found),
             List.of(Group.of(rows)),
-            List.of(
-                Text.of(
-                    "Technical × mix = cost: least cost over price × quantity. A technical ratio"
-                        + " above one is a plant that does better than the reference. "
-                        + Phrases.sentence(material.interval())
-                        + "s beneath."),
-                Text.of(
-                    "Scale is for information alone and no part of the gap: output is what the"
-                        + " plant is asked for."
-                        + (found
-                            ? " Its worth is what the same output would cost less at the unit cost"
-                                + " of the efficient scale."
-                            : "")))));
+            notes(material, scaled, found)));
   }
 
-  private static List<Column> columns(Material material, boolean found) {
+  private static List<Text> notes(Material material, boolean scaled, boolean found) {
+    List<Text> notes = new ArrayList<>();
+    notes.add(
+        Text.of(
+            "Technical × mix = cost: least cost over price × quantity. A technical ratio above one"
+                + " is a plant that does better than the reference. "
+                + Phrases.sentence(material.interval())
+                + "s beneath."));
+    if (scaled) {
+      notes.add(
+          Text.of(
+              "Scale is for information alone and no part of the gap: output is what the plant is"
+                  + " asked for."
+                  + (found
+                      ? " Its worth is what the same output would cost less at the unit cost of the"
+                          + " efficient scale."
+                      : "")));
+    }
+    return notes;
+  }
+
+  private static List<Column> columns(Material material, boolean scale, boolean found) {
     List<Column> columns = new ArrayList<>();
     columns.add(Column.ofWords("Period"));
     columns.add(Column.ofNumbers("Technical", "ratio"));
     columns.add(Column.ofNumbers("Mix", "ratio"));
     columns.add(Column.ofNumbers("Cost", "ratio"));
-    columns.add(Column.ofNumbers("Returns to scale", "at least cost"));
+    if (scale) {
+      columns.add(Column.ofNumbers("Returns to scale", "at least cost"));
+    }
     if (found) {
       columns.add(Column.ofNumbers("Efficient scale", material.outputUnit()));
       columns.add(Column.ofNumbers("Worth of scale", material.money()));
     }
-    columns.add(Column.ofWords("Average cost"));
+    if (scale) {
+      columns.add(Column.ofWords("Average cost"));
+    }
     return columns;
   }
 
-  private static List<Cell> cells(String period, Detail detail, boolean found) {
+  private static List<Cell> cells(String period, Detail detail, boolean scaled, boolean found) {
     Optional<Efficiency> ratios = detail.efficiency();
     Optional<Scale> scale = detail.scale();
     List<Cell> cells = new ArrayList<>();
@@ -80,12 +98,16 @@ final class EfficiencyBlocks {
     cells.add(Cells.figure(ratios.map(Efficiency::technical)));
     cells.add(Cells.figure(ratios.map(Efficiency::mix)));
     cells.add(Cells.figure(ratios.map(Efficiency::cost)));
-    cells.add(Cells.figure(scale.map(Scale::elasticity)));
+    if (scaled) {
+      cells.add(Cells.figure(scale.map(Scale::elasticity)));
+    }
     if (found) {
       cells.add(Cells.figure(scale.flatMap(Scale::output)));
       cells.add(Cells.figure(scale.flatMap(Scale::part)));
     }
-    cells.add(Cell.of(scale.map(Scale::state).map(EfficiencyBlocks::words).orElse("")));
+    if (scaled) {
+      cells.add(Cell.of(scale.map(Scale::state).map(EfficiencyBlocks::words).orElse("")));
+    }
     return cells;
   }
 

@@ -20,11 +20,12 @@ final class ReviewMethod {
   static Section of(Material material, Citing citing) {
     List<Block> blocks = new ArrayList<>();
     List<Reviewed> reviews = material.findings().reviews();
-    if (reviews.stream().anyMatch(r -> r.technical().isPresent())) {
+    if (reviews.stream().anyMatch(r -> r.technical().isPresent())
+        || material.findings().costs().fits().isEmpty()) {
       parts(blocks, citing);
     }
     if (!material.findings().costs().fits().isEmpty()) {
-      costSide(blocks);
+      costSide(blocks, citing);
     }
     ReviewFindings review = material.findings().review();
     if (!review.orders().isEmpty()) {
@@ -83,13 +84,18 @@ final class ReviewMethod {
             "{∂ C}/{∂ β_k} = −λ Q {∂ ln f}/{∂ β_k}, {∂ ln θ}/{∂ β_k} = −{1}/{e} {∂ ln f}/{∂ β_k}"));
   }
 
-  private static void costSide(List<Block> blocks) {
+  private static void costSide(List<Block> blocks, Citing citing) {
     blocks.add(
         Paragraph.of(
-            "Against a cost function, which knows no quantities, the gap is what the filing holds"
-                + " beyond recorded cost (unreconciled, exact) and what recorded cost holds beyond"
-                + " least cost (remainder); R is recorded cost:"));
-    blocks.add(Display.of("F − C(w, y) = (F − R) + (R − C(w, y))"));
+            "Against a cost function the gap is what the filing holds beyond recorded cost R"
+                + " (unreconciled, exact) and what recorded cost holds beyond least cost. Where"
+                + " shares are recorded they say the quantities x, and θ follows from the prices u"
+                + " at which x would be least cost "
+                + citing.cite(Source.KOPP)
+                + "; technical and mix part are then those above, else they stand together as"
+                + " remainder:"));
+    blocks.add(
+        Display.of("F − C(w, y) = (F − R) + (R − C(w, y)), θ = max_u {C(u, y)}/{Σ_i u_i x_i}"));
   }
 
   private static void order(List<Block> blocks, Citing citing) {

@@ -6,7 +6,9 @@ import isowright.inference.Estimate;
 import isowright.inference.Propagation;
 import isowright.review.GapEstimates.Total;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
+import java.util.Optional;
 
 /**
  * How do filed costs compare with an estimated cost function at the same outputs and prices, and
@@ -14,8 +16,14 @@ import java.util.List;
  *
  * <pre>  gap = filed − C(w, y) = (filed − recorded) + (recorded − C(w, y)) </pre>
  *
- * <p>The first part is unreconciled and exact; the second is the remainder: a cost function knows
- * no quantities, so a technical and a mix part cannot be told apart in it.
+ * <p>The first part is unreconciled and exact. The second divides where the shares of inputs in
+ * recorded cost are known, hence quantities x, by the factor θ that draws x onto the isoquant
+ * ({@link DualContraction}):
+ *
+ * <pre>  recorded − C = (1 − θ) recorded + (θ recorded − C) </pre>
+ *
+ * <p>Without shares, or where no prices make the mix least cost while the function is a cost
+ * function, it stands undivided.
  *
  * <p>Uncertainty: first-order propagation of the parameters' covariance. The log of the forms
  * fitted is linear in their parameters, so ∂ln C/∂θ by differences is right to rounding, and all
@@ -36,34 +44,101 @@ public final class CostGaps {
   }
 
   /**
+   * A filing.
+   *
+   * @param point the arguments of the cost function
+   * @param filed filed cost
+   * @param recorded recorded cost
+   * @param shares the shares of the inputs in it; empty where not known
+   */
+  public record Filed(double[] point, double filed, double recorded, double[] shares) {
+
+    /** Shares that add up to one to this are shares: four printed decimals of several inputs. */
+    private static final double ROUNDING = 5e-4;
+
+    /**
+     * Quantities x_i = s_i recorded / w_i, the rounding of shares spread in proportion; absent
+     * where shares are not known or do not add up.
+     */
+    Optional<double[]> mix() {
+      double sum = Arrays.stream(shares).sum();
+      double[] mix = new double[shares.length];
+      for (int i = 0; i < mix.length; i++) {
+        mix[i] = shares[i] / sum * recorded / Math.exp(point[i]);
+      }
+      boolean known = Math.abs(sum - 1) <= ROUNDING && Arrays.stream(mix).allMatch(x -> x > 0);
+      return known ? Optional.of(mix) : Optional.empty();
+    }
+  }
+
+  /**
    * The gaps of filings.
    *
-   * @param points the arguments of the cost function, one array a filing
    * @param function the cost function at the estimate
-   * @param filed filed costs
-   * @param recorded recorded costs
    */
-  public List<CostGap> of(
-      List<double[]> points, CostFunction function, double[] filed, double[] recorded) {
+  public List<CostGap> of(List<Filed> filings, CostFunction function) {
+    List<double[]> points = filings.stream().map(Filed::point).toList();
     double[][] slopes = propagation.gradients(f -> logCosts(f, points));
     double[] logCosts = logCosts(function, points);
+    List<Optional<DualContraction>> drawn =
+        filings.parallelStream()
+            .map(f -> f.mix().flatMap(x -> DualContraction.of(function, f.point(), x)))
+            .toList();
+    List<double[]> there =
+        drawn.stream().flatMap(d -> d.stream().map(DualContraction::point)).toList();
+    double[][] thetaSlopes =
+        there.isEmpty() ? new double[0][] : propagation.gradients(f -> logCosts(f, there));
     List<CostGap> gaps = new ArrayList<>();
-    for (int r = 0; r < filed.length; r++) {
+    int next = 0;
+    for (int r = 0; r < filings.size(); r++) {
+      Filed filing = filings.get(r);
       double cost = Math.exp(logCosts[r]);
       double relative = propagation.standardError(slopes[r]);
       Estimate least = propagation.estimate(cost, cost * relative, Scale.LOG);
-      double ratio = filed[r] / cost;
+      double ratio = filing.filed() / cost;
+      Optional<CostGap.Parts> parts = Optional.empty();
+      if (drawn.get(r).isPresent()) {
+        double theta = drawn.get(r).get().theta();
+        parts = Optional.of(parts(filing.recorded(), least, theta, slopes[r], thetaSlopes[next++]));
+      }
       gaps.add(
           new CostGap(
-              filed[r],
-              recorded[r],
+              filing.filed(),
+              filing.recorded(),
               least,
-              turnedRound(filed[r], least),
-              turnedRound(recorded[r], least),
+              turnedRound(filing.filed(), least),
+              turnedRound(filing.recorded(), least),
+              parts,
               propagation.estimate(ratio, ratio * relative, Scale.LOG),
               slopes[r]));
     }
     return gaps;
+  }
+
+  /** By ∂ln C and ∂ln θ: d technical = −θ R ∂ln θ, d mix = θ R ∂ln θ − C ∂ln C. */
+  private CostGap.Parts parts(
+      double recorded, Estimate least, double theta, double[] ofCost, double[] ofTheta) {
+    double cost = least.value();
+    double[] inMix = new double[ofCost.length];
+    double[] mixRatio = new double[ofCost.length];
+    for (int k = 0; k < inMix.length; k++) {
+      inMix[k] = theta * recorded * ofTheta[k] - cost * ofCost[k];
+      mixRatio[k] = ofCost[k] - ofTheta[k];
+    }
+    double thetaError = propagation.standardError(ofTheta);
+    double mix = cost / (theta * recorded);
+    double all = cost / recorded;
+    return new CostGap.Parts(
+        propagation.estimate(
+            recorded - theta * recorded, theta * recorded * thetaError, Scale.LINEAR),
+        GapEstimates.onTheRoot(
+            propagation.estimate(
+                theta * recorded - cost, propagation.standardError(inMix), Scale.LINEAR)),
+        new GapEstimate.Efficiency(
+            propagation.estimate(theta, theta * thetaError, Scale.LOG),
+            GapEstimates.atMostOne(
+                propagation.estimate(mix, mix * propagation.standardError(mixRatio), Scale.LOG)),
+            propagation.estimate(all, all * propagation.standardError(ofCost), Scale.LOG)));
   }
 
   private static double[] logCosts(CostFunction function, List<double[]> points) {

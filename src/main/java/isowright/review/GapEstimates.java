@@ -128,13 +128,7 @@ public final class GapEstimates {
     Estimate ofMix = delta.estimate(mix, mix * delta.standardError(inMix), Scale.LOG);
     return new GapEstimate.Efficiency(
         delta.estimate(technical, technical * delta.standardError(contraction), Scale.LOG),
-        new Estimate(
-            mix,
-            ofMix.standardError(),
-            ofMix.low(),
-            ofMix.high() > 1 ? Math.max(1, mix) : ofMix.high(),
-            ofMix.level(),
-            ofMix.method()),
+        atMostOne(ofMix),
         delta.estimate(gap.costRatio(), gap.costRatio() * relative, Scale.LOG));
   }
 
@@ -219,8 +213,19 @@ public final class GapEstimates {
             1 - probability);
   }
 
+  /** The interval of a ratio that cannot pass one, cut there. */
+  static Estimate atMostOne(Estimate ratio) {
+    return new Estimate(
+        ratio.value(),
+        ratio.standardError(),
+        ratio.low(),
+        ratio.high() > 1 ? Math.max(1, ratio.value()) : ratio.high(),
+        ratio.level(),
+        ratio.method());
+  }
+
   /** (√m ± h)² from m ± 2 h √m, cut at zero. */
-  private static Estimate onTheRoot(Estimate linear) {
+  static Estimate onTheRoot(Estimate linear) {
     double root = Math.sqrt(Math.max(linear.value(), 0));
     if (root == 0 || Double.isNaN(linear.high())) {
       return linear;

@@ -15,6 +15,7 @@ import isowright.review.Ordering;
 import isowright.study.CostReference.Levelled;
 import isowright.study.Findings.Said;
 import isowright.study.PlanFindings.Detail;
+import isowright.study.PlanFindings.Efficiency;
 import isowright.study.PlanFindings.Needed;
 import isowright.study.PlanFindings.Reviewed;
 import isowright.study.ReviewFindings.Allowed;
@@ -31,8 +32,8 @@ import java.util.stream.IntStream;
 
 /**
  * Holds the filed costs of a study against its fitted cost functions at the same outputs and
- * prices: gaps, the order of plants, the same against other references, allowances. Without
- * quantities the technical and the mix part cannot be told apart, so they are left out.
+ * prices: gaps in parts where shares of inputs are recorded, the order of plants, the same against
+ * other references, allowances.
  */
 final class CostReviewStage {
 
@@ -43,9 +44,19 @@ final class CostReviewStage {
       Said.of(
           "note",
           ReviewFindings.UNDIVIDED,
-          "A cost function knows no quantities of inputs, so by it the technical part and the mix"
-              + " part of a gap cannot be told apart: what recorded cost holds beyond least cost"
+          "Technical part and mix part cannot be told apart: the shares of the inputs are not known"
+              + " or do not add up, or no prices at which the fitted function is a cost function"
+              + " make the mix used the least-cost one. What recorded cost holds beyond least cost"
               + " stands as remainder.");
+
+  private static final Said HOW =
+      Said.of(
+          "note",
+          "parts-from-cost-function",
+          "On the cost side quantities are those that recorded shares and prices imply, and the mix"
+              + " used is drawn onto the isoquant at the prices that would make it the least-cost"
+              + " mix (Kopp and Diewert 1982). Where there are none, the gap beyond recorded cost"
+              + " stands undivided, as remainder.");
 
   private final Study study;
   private final Study.Filing filing;
@@ -97,13 +108,7 @@ final class CostReviewStage {
             spread.spreads(filings.panel()),
             allowances,
             filing.allowance(),
-            List.of(
-                Said.of(
-                    "note",
-                    "parts-not-told-apart",
-                    "A cost function knows no quantities of inputs, so by it the technical part and"
-                        + " the mix part of a gap cannot be told apart: what recorded cost holds"
-                        + " beyond least cost stands as remainder."))));
+            List.of(HOW)));
   }
 
   private void review(CostFit fit, CostReference reference, int period, boolean last) {
@@ -148,11 +153,12 @@ final class CostReviewStage {
 
   private List<CostGap> gaps(Levelled levelled, int[] rows) {
     return CostGaps.against(levelled.propagation())
-        .of(
-            Arrays.stream(rows).mapToObj(data::point).toList(),
-            levelled.function(),
-            Arrays.stream(rows).mapToDouble(filings::filed).toArray(),
-            Arrays.stream(rows).mapToDouble(filings::recorded).toArray());
+        .of(Arrays.stream(rows).mapToObj(this::filed).toList(), levelled.function());
+  }
+
+  private CostGaps.Filed filed(int row) {
+    double[] shares = Arrays.stream(data.shares()).mapToDouble(share -> share[row]).toArray();
+    return new CostGaps.Filed(data.point(row), filings.filed(row), filings.recorded(row), shares);
   }
 
   private double smallest(List<CostGap> gaps, Levelled levelled, int[] rows) {
@@ -213,17 +219,27 @@ final class CostReviewStage {
         Optional.of(FitStage.figure(gap.leastCost())),
         Optional.of(FitStage.figure(gap.difference())),
         gap.unreconciled(),
-        Optional.empty(),
-        Optional.empty(),
+        gap.parts().map(p -> FitStage.figure(p.technical())),
+        gap.parts().map(p -> FitStage.figure(p.mix())),
         outside.isEmpty() ? "solved" : "outside-records",
-        Optional.of(
-            new Detail(
-                FitStage.figure(gap.ratio()),
-                FitStage.figure(gap.remainder()),
-                Optional.empty(),
-                Optional.empty(),
-                asked ? needed(levelled, row, gap) : List.of())),
-        List.of(UNDIVIDED));
+        Optional.of(detail(levelled, row, gap, asked)),
+        gap.parts().isPresent() ? List.of() : List.of(UNDIVIDED));
+  }
+
+  private Detail detail(Levelled levelled, int row, CostGap gap, boolean asked) {
+    return new Detail(
+        FitStage.figure(gap.ratio()),
+        gap.parts().isPresent() ? Figure.exact(0) : FitStage.figure(gap.remainder()),
+        gap.parts()
+            .map(CostGap.Parts::efficiency)
+            .map(
+                e ->
+                    new Efficiency(
+                        FitStage.figure(e.technical()),
+                        FitStage.figure(e.mix()),
+                        FitStage.figure(e.cost()))),
+        Optional.empty(),
+        asked ? needed(levelled, row, gap) : List.of());
   }
 
   private List<Needed> needed(Levelled levelled, int row, CostGap gap) {

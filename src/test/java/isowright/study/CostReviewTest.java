@@ -4,7 +4,6 @@ import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.assertThatThrownBy;
 import static org.assertj.core.api.Assertions.within;
 
-import isowright.study.Findings.Said;
 import isowright.study.PlanFindings.Reviewed;
 import isowright.study.ReviewFindings.Variant;
 import java.nio.file.Files;
@@ -63,19 +62,24 @@ class CostReviewTest {
     assertThat(findings.reviews()).hasSize(2 * 123);
     long answered = findings.reviews().stream().filter(r -> r.gap().isPresent()).count();
     assertThat(answered).isGreaterThan(230);
+    int divided = 0;
     for (Reviewed review : findings.reviews()) {
-      assertThat(review.technical()).isEmpty();
-      assertThat(review.mix()).isEmpty();
       if (review.gap().isEmpty()) {
         assertThat(review.status()).isEqualTo("irregular");
         continue;
       }
       double remainder = review.detail().orElseThrow().remainder().value();
-      // two differences of numbers of the size of the filing
-      assertThat(review.unreconciled() + remainder)
-          .isCloseTo(review.gap().orElseThrow().value(), within(1e-13 * review.filed()));
-      assertThat(review.remarks()).extracting(Said::code).contains("parts-not-told-apart");
+      double technical = review.technical().map(Figure::value).orElse(0.0);
+      double mix = review.mix().map(Figure::value).orElse(0.0);
+      // differences of numbers of the size of the filing
+      assertThat(review.unreconciled() + technical + mix + remainder)
+          .isCloseTo(review.gap().orElseThrow().value(), within(1e-12 * review.filed()));
+      divided += review.technical().isPresent() ? 1 : 0;
+      assertThat(review.technical().isPresent()).isEqualTo(review.mix().isPresent());
+      assertThat(review.remarks().isEmpty()).isEqualTo(review.technical().isPresent());
     }
+    // many mixes are least cost only at prices where the translog is no cost function
+    assertThat(divided).isBetween(50, (int) answered - 1);
     assertThat(findings.review().orders()).hasSize(2);
     assertThat(findings.review().variants())
         .extracting(Variant::choice)
