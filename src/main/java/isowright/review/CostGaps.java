@@ -25,10 +25,10 @@ import java.util.Optional;
  * <p>Without shares, or where no prices make the mix least cost while the function is a cost
  * function, it stands undivided.
  *
- * <p>Uncertainty: first-order propagation of the parameters' covariance. The log of the forms
- * fitted is linear in their parameters, so ∂ln C/∂θ by differences is right to rounding, and all
- * filings share the functions moved. Filing, prices and outputs are taken as exact. Tested in
- * {@code CostGapsTest}.
+ * <p>Uncertainty: first-order propagation of the parameters' covariance. ∂ln C/∂θ by differences of
+ * fourth order, exact but for rounding where ln C is linear in its parameters; all filings share
+ * the functions moved. Filing, prices and outputs are taken as exact. Tested in {@code
+ * CostGapsTest} and, for coverage, in {@code CostGapCoverageTest}.
  */
 public final class CostGaps {
 

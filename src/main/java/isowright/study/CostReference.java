@@ -22,8 +22,15 @@ import java.util.stream.Stream;
  */
 record CostReference(Study.Productivity against, boolean smearing) {
 
+  /** What is asked; the typical plant where that is a frontier, which cost functions have not. */
   static CostReference asked(Study.Filing filing) {
-    return new CostReference(filing.against(), filing.smearing());
+    return new CostReference(
+        frontier(filing) ? Study.Productivity.TYPICAL : filing.against(), filing.smearing());
+  }
+
+  /** Whether a frontier is asked for, which is estimated of production functions alone. */
+  static boolean frontier(Study.Filing filing) {
+    return filing.against().kind() == Study.Productivity.Kind.FRONTIER;
   }
 
   /** The one that is asked, then the others. */

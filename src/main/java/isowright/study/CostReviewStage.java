@@ -58,6 +58,13 @@ final class CostReviewStage {
               + " mix (Kopp and Diewert 1982). Where there are none, the gap beyond recorded cost"
               + " stands undivided, as remainder.");
 
+  private static final Said NO_FRONTIER =
+      Said.of(
+          "warning",
+          "no-frontier-of-cost",
+          "A frontier is estimated of production functions alone, so on the cost side costs are"
+              + " held against the typical plant.");
+
   private final Study study;
   private final Study.Filing filing;
   private final CostFilings filings;
@@ -94,9 +101,15 @@ final class CostReviewStage {
     CostReference asked = CostReference.asked(filing);
     int[] periods = filings.periods();
     for (CostFit fit : fits) {
+      List<Choice> choices =
+          CostReference.all(asked).stream().map(r -> new Choice(r, r.of(data, fit))).toList();
       for (int period : periods) {
-        review(fit, asked, period, period == periods[periods.length - 1]);
+        review(choices, period, period == periods[periods.length - 1]);
       }
+    }
+    List<Said> remarks = new ArrayList<>(List.of(HOW));
+    if (CostReference.frontier(filing)) {
+      remarks.add(NO_FRONTIER);
     }
     return new ReviewStage.Review(
         reviews,
@@ -108,11 +121,15 @@ final class CostReviewStage {
             spread.spreads(filings.panel()),
             allowances,
             filing.allowance(),
-            List.of(HOW)));
+            remarks));
   }
 
-  private void review(CostFit fit, CostReference reference, int period, boolean last) {
-    Levelled levelled = reference.of(data, fit);
+  /** A reference, and the cost function at it. */
+  private record Choice(CostReference reference, Levelled levelled) {}
+
+  /** Of one period; the first choice is the one asked for. */
+  private void review(List<Choice> choices, int period, boolean last) {
+    Levelled levelled = choices.get(0).levelled();
     int[] rows = filings.rows(period);
     List<CostGap> gaps = gaps(levelled, rows);
     double smallest = smallest(gaps, levelled, rows);
@@ -128,8 +145,8 @@ final class CostReviewStage {
       return;
     }
     order(levelled, period, rows, gaps, answered);
-    for (CostReference other : CostReference.all(reference)) {
-      vary(fit, other, period, other.equals(reference), rows, answered);
+    for (Choice choice : choices) {
+      vary(choice, period, choice == choices.get(0), rows, answered);
     }
     if (last && filing.allowance().isPresent()) {
       CostGaps engine = CostGaps.against(levelled.propagation());
@@ -289,13 +306,9 @@ final class CostReviewStage {
   }
 
   private void vary(
-      CostFit fit,
-      CostReference reference,
-      int period,
-      boolean asAsked,
-      int[] rows,
-      List<Integer> answered) {
-    Levelled levelled = reference.of(data, fit);
+      Choice choice, int period, boolean asAsked, int[] rows, List<Integer> answered) {
+    CostReference reference = choice.reference();
+    Levelled levelled = choice.levelled();
     int[] own = answered.stream().mapToInt(i -> rows[i]).toArray();
     List<CostGap> gaps = gaps(levelled, own);
     String form = levelled.function().form();

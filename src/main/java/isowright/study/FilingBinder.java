@@ -86,6 +86,13 @@ final class FilingBinder {
   /** What follows from residuals and from plants' levels is known of a fit alone. */
   private static void contradictions(
       YamlSection root, YamlSection section, Productivity against, boolean smearing) {
+    if (against.kind() == Productivity.Kind.FRONTIER && !root.has("technologies")) {
+      section.refuse(
+          "against",
+          "a frontier is estimated of production functions alone, and this study fits none; write"
+              + " typical or best-quarter, or name a form under `technologies`");
+      return;
+    }
     boolean fitted = root.has("technologies") || root.has("costs");
     if (fitted) {
       return;
