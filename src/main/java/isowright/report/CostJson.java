@@ -158,5 +158,20 @@ final class CostJson {
     FitJson.pairs(file, "substitution", at.substitution());
     FitJson.pairs(file, "demandElasticity", at.demand());
     file.figures("bias", at.bias());
+    if (at.together().isPresent()) {
+      CostFindings.Together together = at.together().get();
+      file.object(
+          "together",
+          () -> {
+            if (together.scope().isPresent()) {
+              file.figure("scope", together.scope());
+              file.figures("scopeByOutput", together.byOutput());
+            }
+            FitJson.pairs(file, "complementarity", together.complementarity());
+            if (!together.note().isEmpty()) {
+              file.text("note", together.note());
+            }
+          });
+    }
   }
 }

@@ -60,6 +60,7 @@ final class CostsSection {
                 + " least cost up to chance."));
     if (!usable.isEmpty()) {
       scale(usable, material).ifPresent(blocks::add);
+      ScopeTable.of(usable).ifPresent(blocks::add);
       blocks.add(substitution(usable, material));
       shares(usable, material).ifPresent(blocks::add);
       CostSidesBlocks.section(material).ifPresent(blocks::add);

@@ -137,7 +137,8 @@ final class CostFigures {
         level ? Optional.of(figures.get(after + m + 1)) : Optional.empty(),
         arguments.time()
             ? named(arguments.inputs(), figures.subList(after + m + 2, after + m + 2 + n))
-            : Map.of());
+            : Map.of(),
+        Optional.empty());
   }
 
   private static Map<String, Figure> named(List<String> names, List<Figure> figures) {

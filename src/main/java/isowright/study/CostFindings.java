@@ -113,6 +113,7 @@ public record CostFindings(List<Fitted> fits, List<Said> remarks, List<Side> sid
    * @param demand price elasticities of demand
    * @param technicalChange by how much cost falls a period, as a share
    * @param bias change of each share a period
+   * @param together several outputs made together, where there are several
    */
   public record AtMean(
       Map<String, Figure> shares,
@@ -121,7 +122,36 @@ public record CostFindings(List<Fitted> fits, List<Said> remarks, List<Side> sid
       List<Pair> substitution,
       List<Pair> demand,
       Optional<Figure> technicalChange,
-      Map<String, Figure> bias) {}
+      Map<String, Figure> bias,
+      Optional<Together> together) {
+
+    AtMean with(Optional<Together> several) {
+      return new AtMean(
+          shares,
+          costElasticity,
+          scaleEconomies,
+          substitution,
+          demand,
+          technicalChange,
+          bias,
+          several);
+    }
+  }
+
+  /**
+   * Several outputs made together.
+   *
+   * @param scope by what share cost would rise with every output made apart; absent where the form
+   *     cannot tell
+   * @param byOutput the same with one output apart from the rest
+   * @param complementarity elasticities of the marginal cost of the first in the second
+   * @param note why scope is absent, or how far the records bear it; may be empty
+   */
+  public record Together(
+      Optional<Figure> scope,
+      Map<String, Figure> byOutput,
+      List<Pair> complementarity,
+      String note) {}
 
   /** Scale economies of a row. */
   public record RowScale(int row, String plant, String period, double output, Figure economies) {}

@@ -156,7 +156,7 @@ final class CostStage {
         state,
         figures.parameters(),
         fit.covariance(),
-        Optional.of(figures.atMean()),
+        Optional.of(figures.atMean().with(new ScopeFigures(data, fit, figures).together())),
         figures.scale(panel),
         figures.efficient(),
         Optional.of(regular),

@@ -2,11 +2,17 @@ package isowright.study;
 
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.assertThatThrownBy;
+import static org.assertj.core.api.Assertions.within;
 
+import isowright.estimation.Unfit;
 import isowright.study.Findings.Said;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.ArrayList;
 import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+import java.util.Random;
 import java.util.stream.Collectors;
 import java.util.stream.IntStream;
 import org.junit.jupiter.api.Test;
@@ -90,5 +96,114 @@ class CostFormsStudyTest {
                         m -> assertThat(m).contains("fitted as the records have it"),
                         m -> assertThat(m).contains("everywhere and stay flexible"),
                         m -> assertThat(m).contains("fitted without plant effects")));
+  }
+
+  /**
+   * Invented dairies that make cheese, butter or both: C = w (10 + 2 y + z) + v (6 + y + 3 z), so
+   * that apart only the fixed quantities 10 and 6 are bought twice.
+   */
+  private Path dairies(double leastButter) throws Exception {
+    Random random = new Random(51);
+    StringBuilder text = new StringBuilder("dairy,cost,wage,milk,cheese,butter,pay,bought\n");
+    for (int r = 0; r < 160; r++) {
+      double w = Math.exp(0.3 * random.nextGaussian());
+      double v = Math.exp(0.3 * random.nextGaussian());
+      double y = r % 4 == 0 ? 0 : 2 + 8 * random.nextDouble();
+      double z = r % 4 == 1 ? leastButter : 2 + 8 * random.nextDouble();
+      double pay = w * (10 + 2 * y + z + 0.3 * random.nextGaussian());
+      double bought = v * (6 + y + 3 * z + 0.3 * random.nextGaussian());
+      text.append(
+          String.format(
+              Locale.ROOT,
+              "D%d,%.8f,%.8f,%.8f,%.8f,%.8f,%.8f,%.8f%n",
+              r,
+              pay + bought,
+              w,
+              v,
+              y,
+              z,
+              pay,
+              bought));
+    }
+    Files.writeString(folder.resolve("dairies.csv"), text);
+    return Files.writeString(
+        folder.resolve("study.yaml"),
+        """
+        title: Dairies
+        records: {file: dairies.csv, plant: dairy}
+        costs:
+          total: cost
+          outputs: {cheese: {column: cheese}, butter: {column: butter}}
+          inputs:
+            labour: {price: wage, spending: pay}
+            milk: {price: milk, spending: bought}
+          technologies: [translog-cost, generalised-leontief-cost]
+        estimation: {standard-errors: classical}
+        """);
+  }
+
+  /**
+   * Scope is found where the records hold firms that make one thing alone; translog cost refused.
+   */
+  @Test
+  void economiesOfScopeWithOutputsOfZero() throws Exception {
+    List<CostFindings.Fitted> fits =
+        Pipeline.run(StudyFile.read(dairies(0)), Progress.SILENT).costs().fits();
+    assertThat(fits.get(0).state()).isEqualTo("refused");
+    assertThat(fits.get(0).remarks().get(0).message())
+        .contains("cheese in 40 of 160 rows, first in row 2", "butter in 40 of 160 rows");
+    CostFindings.Fitted levels = fits.get(1);
+    Map<String, Double> at = levels.how().base();
+    double fixed = 10 * at.get("labour") + 6 * at.get("milk");
+    double cost =
+        fixed
+            + at.get("labour") * (2 * at.get("cheese") + at.get("butter"))
+            + at.get("milk") * (at.get("cheese") + 3 * at.get("butter"));
+    CostFindings.Together together = levels.at().orElseThrow().together().orElseThrow();
+    Figure scope = together.scope().orElseThrow();
+    double se = scope.uncertainty().orElseThrow().standardError();
+    // one draw in 16,000 is further off than four standard errors
+    assertThat(scope.value()).isCloseTo(fixed / cost, within(4 * se));
+    assertThat(se).isLessThan(0.05);
+    assertThat(together.byOutput()).containsOnlyKeys("cheese", "butter");
+    assertThat(together.complementarity()).hasSize(4);
+    assertThat(together.note()).isEmpty();
+  }
+
+  /** Without such firms scope is told, with the note that it lies outside the records. */
+  @Test
+  void scopeOutsideTheRecordsIsSaidToBe() throws Exception {
+    Path file = dairies(0.5);
+    Files.writeString(
+        folder.resolve("dairies.csv"),
+        Files.readString(folder.resolve("dairies.csv")).replace(",0.00000000,", ",0.50000000,"));
+    List<CostFindings.Fitted> fits =
+        Pipeline.run(StudyFile.read(file), Progress.SILENT).costs().fits();
+    CostFindings.Together logs = fits.get(0).at().orElseThrow().together().orElseThrow();
+    assertThat(logs.scope()).isEmpty();
+    assertThat(logs.note()).contains("logs of outputs");
+    assertThat(fits.get(1).at().orElseThrow().together().orElseThrow().note())
+        .contains("No row is without cheese, butter");
+  }
+
+  @Test
+  void negativeOutputsAndIdleRowsAreRefused() throws Exception {
+    Path file = dairies(0);
+    String text = Files.readString(folder.resolve("dairies.csv"));
+    List<String> lines = new ArrayList<>(text.lines().toList());
+    String[] cells = lines.get(1).split(",");
+    cells[5] = "0";
+    lines.set(1, String.join(",", cells));
+    cells = lines.get(3).split(",");
+    cells[5] = "-1";
+    lines.set(3, String.join(",", cells));
+    Files.write(folder.resolve("dairies.csv"), lines);
+    assertThatThrownBy(() -> Pipeline.run(StudyFile.read(file), Progress.SILENT))
+        .isInstanceOfSatisfying(
+            Unfit.class,
+            unfit ->
+                assertThat(unfit.reasons())
+                    .anySatisfy(r -> assertThat(r).contains("butter is negative in row 4"))
+                    .anySatisfy(r -> assertThat(r).contains("nothing at all", "row 2")));
   }
 }
