@@ -83,7 +83,7 @@ final class InefficiencyCharts {
     String caption =
         "Bars are "
             + setting.level()
-            + " intervals given the residuals, the parameters taken as known. "
+            + " intervals given the residuals. "
             + (found.overTime().equals("constant")
                 ? "A plant has the same in all its periods."
                 : "Each plant at its last period.")

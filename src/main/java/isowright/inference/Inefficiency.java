@@ -28,20 +28,24 @@ import org.apache.commons.statistics.distribution.TDistribution;
  * 1982, <i>Biometrika</i> 69, 19–27).
  *
  * <p>A row's inefficiency given its residuals: see {@link ConditionalErrors} (Jondrow, Lovell,
- * Materov and Schmidt 1982; Battese and Coelli 1988; intervals of Horrace and Schmidt 1996).
+ * Materov and Schmidt 1982; Battese and Coelli 1988; intervals of Horrace and Schmidt 1996, widened
+ * by the uncertainty of the parameters to first order).
  *
  * <p>Beside it, without any law: the greatest plant level of the fit within plants less that of the
  * plant (P. Schmidt and R. C. Sickles 1984, <i>Journal of Business and Economic Statistics</i> 2,
  * 367–374). Tested in {@code InefficiencyTest}.
  *
  * @param variances how much there is; absent where none was found
- * @param known what the rows say; empty where none was found
+ * @param known what the rows say, the parameters taken as known; empty where none was found
+ * @param widened the same with the parameters uncertain; that of {@code known} where the likelihood
+ *     is too far from quadratic to propagate their covariance
  * @param mean E u in the last period of the records
  * @param byEffects beside it, from the fit within plants
  */
 public record Inefficiency(
     Optional<Variances> variances,
     Optional<ConditionalErrors> known,
+    Optional<ConditionalErrors> widened,
     double mean,
     Optional<ByEffects> byEffects) {
 
@@ -87,11 +91,14 @@ public record Inefficiency(
   private static final double QUADRATIC = 1;
 
   private static Inefficiency of(Fit fit, Particulars.OfFrontier own) {
-    boolean found = own.fit().state().oneSided();
-    Optional<Variances> variances = found ? Optional.of(variances(fit, own)) : Optional.empty();
+    Optional<Variances> variances = variances(fit);
+    Optional<ConditionalErrors> known = variances.map(v -> own.fit().conditional());
     return new Inefficiency(
         variances,
-        found ? Optional.of(own.fit().conditional()) : Optional.empty(),
+        known,
+        variances.map(Inefficiency::quadratic).orElse(false)
+            ? Optional.of(own.fit().conditional(fit.numbers().covarianceSource().matrix()))
+            : known,
         own.scale() * own.fit().scale(),
         byEffects(fit));
   }
@@ -197,28 +204,40 @@ public record Inefficiency(
     return Optional.of(new ByEffects(best, plants));
   }
 
-  /** What the rows say of the inefficiency of one row, in ln Q. */
-  public static Estimate ofRow(ConditionalErrors known, int row, double level) {
+  /** Whether the covariance of the parameters may be propagated. */
+  public static boolean quadratic(Variances v) {
+    return v.inefficiency().method() == Estimate.Method.DELTA;
+  }
+
+  /** What the rows say of the inefficiency of one row, in ln Q; of a fit that found some. */
+  public Estimate ofRow(int row, double level) {
+    ConditionalErrors wide = widened.orElseThrow();
     return new Estimate(
-        known.mean(row),
-        known.deviation(row),
-        known.exceeded(row, (1 + level) / 2),
-        known.exceeded(row, (1 - level) / 2),
+        known.orElseThrow().mean(row),
+        wide.deviation(row),
+        wide.exceeded(row, (1 + level) / 2),
+        wide.exceeded(row, (1 - level) / 2),
         level,
         Estimate.Method.CONDITIONAL);
   }
 
   /** The same as the share of the frontier's output that is reached: E e^(−u). */
-  public static Estimate efficiency(ConditionalErrors known, int row, double level) {
-    double mean = known.survival(row);
-    double square = known.survivalSquared(row);
+  public Estimate efficiency(int row, double level) {
+    ConditionalErrors wide = widened.orElseThrow();
+    double mean = wide.survival(row);
+    double square = wide.survivalSquared(row);
     return new Estimate(
-        mean,
+        known.orElseThrow().survival(row),
         Math.sqrt(Math.max(0, square - mean * mean)),
-        Math.exp(-known.exceeded(row, (1 - level) / 2)),
-        Math.exp(-known.exceeded(row, (1 + level) / 2)),
+        Math.exp(-wide.exceeded(row, (1 - level) / 2)),
+        Math.exp(-wide.exceeded(row, (1 + level) / 2)),
         level,
         Estimate.Method.CONDITIONAL);
+  }
+
+  /** The probability that the inefficiency of a row exceeds a value. */
+  public double probabilityAbove(int row, double value) {
+    return widened.orElseThrow().probabilityAbove(row, value);
   }
 
   /** Intervals by Student's law. */

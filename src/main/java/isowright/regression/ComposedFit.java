@@ -195,4 +195,13 @@ public record ComposedFit(
   public ConditionalErrors conditional() {
     return ConditionalErrors.of(this);
   }
+
+  /**
+   * The same with the parameters uncertain, for intervals and probabilities.
+   *
+   * @param covariance of {@link #parameters()}
+   */
+  public ConditionalErrors conditional(double[][] covariance) {
+    return ConditionalErrors.widened(this, covariance);
+  }
 }

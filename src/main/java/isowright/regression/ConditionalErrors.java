@@ -1,5 +1,9 @@
 package isowright.regression;
 
+import java.util.Arrays;
+import org.apache.commons.math3.linear.Array2DRowRealMatrix;
+import org.apache.commons.math3.linear.EigenDecomposition;
+
 /**
  * What the rows say of the one-sided error of each: w given the unit's rows is normal with mean μ
  * and standard deviation σ, cut off at zero; a row's error is g w.
@@ -7,11 +11,13 @@ package isowright.regression;
  * <p>Sources: J. Jondrow, C. A. K. Lovell, I. S. Materov and P. Schmidt 1982, Journal of
  * Econometrics 19, 233–238 (the conditional mean); G. E. Battese and T. J. Coelli 1988, Journal of
  * Econometrics 38, 387–399, eq. 12 (the mean of e^−w); W. C. Horrace and P. Schmidt 1996, Journal
- * of Productivity Analysis 7, 257–282 (its quantiles). The parameters are taken as known: their own
- * uncertainty is not in these intervals. Tested in {@code ConditionalErrorsTest} against
- * quadrature.
+ * of Productivity Analysis 7, 257–282 (its quantiles). The parameters are taken as known, unless
+ * {@link #widened} says otherwise. Tested in {@code ConditionalErrorsTest} against quadrature.
  */
 public final class ConditionalErrors {
+
+  /** The step of differences in standard errors: small against their spread, large for rounding. */
+  private static final double STEP = 0.01;
 
   private final double[] means;
   private final double[] deviations;
@@ -24,16 +30,23 @@ public final class ConditionalErrors {
   }
 
   static ConditionalErrors of(ComposedFit fit) {
+    if (!fit.state().oneSided()) {
+      int rows = fit.model().design().rows();
+      return new ConditionalErrors(new double[rows], new double[rows], new double[rows]);
+    }
+    return of(fit, fit.parameters());
+  }
+
+  private static ConditionalErrors of(ComposedFit fit, double[] parameters) {
     ComposedErrors model = fit.model();
     int rows = model.design().rows();
+    int columns = fit.coefficients().length;
     double[] means = new double[rows];
     double[] deviations = new double[rows];
     double[] shares = new double[rows];
-    if (!fit.state().oneSided()) {
-      return new ConditionalErrors(means, deviations, shares);
-    }
-    double[] errors = LeastSquares.residuals(model.design(), at(fit));
-    ComposedUnit unit = new ComposedUnit(model.law(), Math.log(fit.noise()), Math.log(fit.scale()));
+    double decay = parameters.length > columns + 2 ? parameters[columns + 2] : 0;
+    double[] errors = LeastSquares.residuals(model.design(), at(fit, parameters));
+    ComposedUnit unit = new ComposedUnit(model.law(), parameters[columns], parameters[columns + 1]);
     Groups groups = model.design().groups();
     int end;
     for (int start = 0; start < rows; start = end) {
@@ -42,7 +55,7 @@ public final class ConditionalErrors {
       double sum = 0;
       double squares = 0;
       for (int r = start; r < end; r++) {
-        shares[r] = Math.exp(-fit.decay() * model.since(r));
+        shares[r] = Math.exp(-decay * model.since(r));
         sum += shares[r] * errors[r];
         squares += shares[r] * shares[r];
       }
@@ -55,12 +68,12 @@ public final class ConditionalErrors {
     return new ConditionalErrors(means, deviations, shares);
   }
 
-  /** The least-squares fit with the coefficients of maximum likelihood, for its residuals alone. */
-  private static LinearFit at(ComposedFit fit) {
+  /** The least-squares fit with other coefficients, for its residuals alone. */
+  private static LinearFit at(ComposedFit fit, double[] parameters) {
     LinearFit start = fit.leastSquares();
     return new LinearFit(
         start.columns(),
-        fit.coefficients(),
+        Arrays.copyOf(parameters, fit.coefficients().length),
         start.estimated(),
         start.inverseFactor(),
         start.ssr(),
@@ -71,6 +84,46 @@ public final class ConditionalErrors {
         start.collinearities(),
         start.rankRule(),
         start.pivots());
+  }
+
+  /**
+   * The same with the parameters uncertain, to first order: μ + e in the place of μ, e normal with
+   * variance ∇μ′ V ∇μ, so that σ² + ∇μ′ V ∇μ stands in the place of σ². Means so widened are not
+   * estimates; the widened law is for intervals and probabilities. The slope of μ along each
+   * principal direction of V is a central difference.
+   *
+   * @param covariance V, of {@link ComposedFit#parameters()}
+   */
+  static ConditionalErrors widened(ComposedFit fit, double[][] covariance) {
+    ConditionalErrors known = of(fit);
+    if (!fit.state().oneSided()) {
+      return known;
+    }
+    double[] variances = new double[known.means.length];
+    for (int r = 0; r < variances.length; r++) {
+      variances[r] = known.deviations[r] * known.deviations[r];
+    }
+    EigenDecomposition directions =
+        new EigenDecomposition(new Array2DRowRealMatrix(covariance, true));
+    for (int k = 0; k < covariance.length; k++) {
+      double size = Math.sqrt(Math.max(0, directions.getRealEigenvalue(k)));
+      double[] ahead = fit.parameters();
+      double[] behind = fit.parameters();
+      for (int l = 0; l < ahead.length; l++) {
+        double step = STEP * size * directions.getEigenvector(k).getEntry(l);
+        ahead[l] += step;
+        behind[l] -= step;
+      }
+      double[] further = of(fit, ahead).means;
+      double[] nearer = of(fit, behind).means;
+      for (int r = 0; size > 0 && r < variances.length; r++) {
+        double slope = (further[r] - nearer[r]) / (2 * STEP);
+        variances[r] += slope * slope;
+      }
+    }
+    double[] deviations = new double[variances.length];
+    Arrays.setAll(deviations, r -> Math.sqrt(variances[r]));
+    return new ConditionalErrors(known.means, deviations, known.shares);
   }
 
   /** E[g w | rows] of a row; 0 where no one-sided error was found. */

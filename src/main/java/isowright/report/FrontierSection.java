@@ -169,9 +169,9 @@ final class FrontierSection {
     List<Text> notes = new ArrayList<>();
     notes.add(
         Text.of(
-            "Intervals are those of the law of inefficiency given a plant’s residuals, with the"
-                + " parameters taken as known; where there are few rows or plants they are too"
-                + " narrow."
+            "Intervals are those of the law of inefficiency given a plant’s residuals, widened by"
+                + " the uncertainty of the parameters to first order. That of the frontier’s height"
+                + " is common to all plants, moves them together, and leaves their order as it is."
                 + (found.overTime().equals("constant") ? "" : " Each plant at its last period.")));
     if (found.plants().size() > MOST_PLANTS) {
       notes.add(

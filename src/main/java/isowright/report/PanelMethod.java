@@ -96,11 +96,11 @@ final class PanelMethod {
               + citing.cite(Source.JONDROW, Source.BATTESE_COELLI_1988)
               + ", with intervals "
               + citing.cite(Source.HORRACE)
-              + ". Covariance from the inverse Hessian; where it is robust or clustered, with the"
-              + " squares of scores of rows or plants between two of them, times G/(G − 1). The"
-              + " typical plant has mean inefficiency; the constant is that of the frontier."
-              + " Where the residuals of least squares are skewed the other way, least squares is"
-              + " the maximum "
+              + ", widened by the uncertainty of the parameters. Covariance from the inverse"
+              + " Hessian; where it is robust or clustered, with the squares of scores of rows or"
+              + " plants between two of them, times G/(G − 1). The typical plant has mean"
+              + " inefficiency; the constant is that of the frontier. Where the residuals of least"
+              + " squares are skewed the other way, least squares is the maximum "
               + citing.cite(Source.WALDMAN)
               + ".";
       case "half-normal" -> "Inefficiency half-normal: the absolute value of a normal variable.";

@@ -6,7 +6,6 @@ import isowright.inference.Estimate;
 import isowright.inference.Inefficiency;
 import isowright.records.Panel;
 import isowright.regression.ComposedFit;
-import isowright.regression.ConditionalErrors;
 import isowright.study.Findings.Said;
 import isowright.study.FrontierFindings.Plant;
 import isowright.study.FrontierFindings.Row;
@@ -55,8 +54,7 @@ final class FrontierStage {
 
   private FrontierFindings findings() {
     Inefficiency inefficiency = Inefficiency.of(fit).orElseThrow();
-    List<Plant> plants =
-        inefficiency.known().map(known -> plants(known, inefficiency)).orElse(List.of());
+    List<Plant> plants = inefficiency.known().map(known -> plants(inefficiency)).orElse(List.of());
     return new FrontierFindings(
         asked.lawWord(),
         asked.overTime().word(),
@@ -65,7 +63,7 @@ final class FrontierStage {
         found.skewness(),
         inefficiency.variances().map(FrontierStage::variances),
         plants,
-        inefficiency.known().map(known -> rows(known, inefficiency.mean())).orElse(List.of()),
+        inefficiency.known().map(known -> rows(inefficiency)).orElse(List.of()),
         inefficiency.byEffects().map(by -> panel.plants().get(by.best())));
   }
 
@@ -140,7 +138,7 @@ final class FrontierStage {
     long below = plants.stream().filter(p -> p.last().aboveMean() <= 1 - level).count();
     return String.format(
         Locale.ROOT,
-        " With a probability of at least %s %%, the parameters taken as known, %d of %d %s less"
+        " With a probability of at least %s %%, %d of %d %s less"
             + " inefficiency than that mean and %d more; of the other %d it cannot be said.",
         percent(level).replace(".0", ""),
         below,
@@ -150,43 +148,43 @@ final class FrontierStage {
         plants.size() - below - above);
   }
 
-  private List<Plant> plants(ConditionalErrors known, Inefficiency inefficiency) {
+  private List<Plant> plants(Inefficiency inefficiency) {
     List<Plant> plants = new ArrayList<>();
     for (int p = 0; p < panel.plants().size(); p++) {
       int at = p;
       Optional<Figure> byEffects =
           inefficiency.byEffects().map(by -> FitStage.figure(by.plants().get(at)));
-      plants.add(new Plant(row(known, panel.plantEnd(p) - 1, inefficiency.mean()), byEffects));
+      plants.add(new Plant(row(inefficiency, panel.plantEnd(p) - 1), byEffects));
     }
     return plants;
   }
 
   /** None where each plant has the same in all its rows. */
-  private List<Row> rows(ConditionalErrors known, double mean) {
+  private List<Row> rows(Inefficiency inefficiency) {
     List<Row> rows = new ArrayList<>();
     if (asked.overTime() == Estimator.OverTime.CONSTANT || !panel.repeats()) {
       return rows;
     }
     int step = Math.max(1, (panel.rows() + ROWS - 1) / ROWS);
     for (int r = 0; r < panel.rows(); r += step) {
-      rows.add(row(known, r, mean));
+      rows.add(row(inefficiency, r));
     }
     return rows;
   }
 
   /** The mean it is held against is that of the row's own period. */
-  private Row row(ConditionalErrors known, int row, double lastMean) {
+  private Row row(Inefficiency inefficiency, int row) {
     int period = panel.rowPeriods().get(row);
     int last = panel.periods().size() - 1;
     double since = panel.periodNumbers().get(period) - panel.periodNumbers().get(last);
-    double mean = lastMean * Math.exp(-found.decay() * since);
+    double mean = inefficiency.mean() * Math.exp(-found.decay() * since);
     return new Row(
         panel.fileRows().get(row),
         panel.plants().get(panel.plantOf(row)),
         panel.periods().get(period),
-        figure(Inefficiency.ofRow(known, row, level)),
-        figure(Inefficiency.efficiency(known, row, level)),
-        known.probabilityAbove(row, mean));
+        figure(inefficiency.ofRow(row, level)),
+        figure(inefficiency.efficiency(row, level)),
+        inefficiency.probabilityAbove(row, mean));
   }
 
   private static Figure figure(Estimate estimate) {
@@ -216,7 +214,7 @@ final class FrontierStage {
       remarks.add(Said.of("warning", state(), words()));
     } else {
       Inefficiency.variances(fit)
-          .filter(v -> v.inefficiency().method() == Estimate.Method.PROFILE)
+          .filter(v -> !Inefficiency.quadratic(v))
           .ifPresent(v -> remarks.add(weak(v)));
       remarks.add(
           Said.of(

@@ -9,7 +9,6 @@ import isowright.estimation.Fit;
 import isowright.estimation.FrontierPanels;
 import isowright.estimation.PanelFixtures;
 import isowright.inference.Inefficiency.Variances;
-import isowright.regression.ConditionalErrors;
 import isowright.regression.OneSidedLaw;
 import java.util.Locale;
 import org.apache.commons.math3.analysis.integration.IterativeLegendreGaussIntegrator;
@@ -40,7 +39,10 @@ class InefficiencyTest {
               law,
               OverTime.EACH_ROW);
       Variances v = Inefficiency.of(fit).orElseThrow().variances().orElseThrow();
-      ConditionalErrors known = Inefficiency.of(fit).orElseThrow().known().orElseThrow();
+      // The law itself, with no parameter uncertain.
+      Inefficiency all = Inefficiency.of(fit).orElseThrow();
+      Inefficiency found =
+          new Inefficiency(all.variances(), all.known(), all.known(), all.mean(), all.byEffects());
       for (int row : new int[] {0, 40, 91, 170}) {
         double error = fit.numbers().residuals()[row] - v.mean().value();
         double noise = v.noise().value();
@@ -50,24 +52,24 @@ class InefficiencyTest {
                 (law == OneSidedLaw.HALF_NORMAL ? NORMAL.density(u / scale) : Math.exp(-u / scale))
                     * NORMAL.density((error + u) / noise);
         double most = 15 * Math.max(scale, noise);
-        double all = integral(density, 0, most);
-        double mean = integral(u -> u * density.value(u), 0, most) / all;
-        double square = integral(u -> u * u * density.value(u), 0, most) / all;
-        Estimate estimate = Inefficiency.ofRow(known, row, .95);
+        double whole = integral(density, 0, most);
+        double mean = integral(u -> u * density.value(u), 0, most) / whole;
+        double square = integral(u -> u * u * density.value(u), 0, most) / whole;
+        Estimate estimate = found.ofRow(row, .95);
         assertThat(estimate.value()).isCloseTo(mean, within(1e-8));
         assertThat(estimate.standardError())
             .isCloseTo(Math.sqrt(square - mean * mean), within(1e-7));
-        assertThat(integral(density, 0, estimate.low()) / all).isCloseTo(.025, within(1e-8));
-        assertThat(integral(density, 0, estimate.high()) / all).isCloseTo(.975, within(1e-8));
-        double reached = integral(u -> Math.exp(-u) * density.value(u), 0, most) / all;
-        double twice = integral(u -> Math.exp(-2 * u) * density.value(u), 0, most) / all;
-        Estimate efficiency = Inefficiency.efficiency(known, row, .95);
+        assertThat(integral(density, 0, estimate.low()) / whole).isCloseTo(.025, within(1e-8));
+        assertThat(integral(density, 0, estimate.high()) / whole).isCloseTo(.975, within(1e-8));
+        double reached = integral(u -> Math.exp(-u) * density.value(u), 0, most) / whole;
+        double twice = integral(u -> Math.exp(-2 * u) * density.value(u), 0, most) / whole;
+        Estimate efficiency = found.efficiency(row, .95);
         assertThat(efficiency.value()).isCloseTo(reached, within(1e-8));
         assertThat(efficiency.standardError())
             .isCloseTo(Math.sqrt(twice - reached * reached), within(1e-7));
         assertThat(efficiency.low()).isCloseTo(Math.exp(-estimate.high()), within(1e-12));
-        double above = integral(density, v.mean().value(), most) / all;
-        assertThat(known.probabilityAbove(row, v.mean().value())).isCloseTo(above, within(1e-8));
+        double above = integral(density, v.mean().value(), most) / whole;
+        assertThat(found.probabilityAbove(row, v.mean().value())).isCloseTo(above, within(1e-8));
       }
     }
   }

@@ -86,4 +86,41 @@ class ConditionalErrorsTest {
     }
     return sum;
   }
+
+  /**
+   * One row: μ = −ε σ_w²/(σ_w² + σ_v²), so an uncertain constant with variance s² adds (s
+   * σ_w²/(σ_w² + σ_v²))² to the variance; no uncertainty adds nothing. Exact but for rounding, μ
+   * being linear.
+   */
+  @Test
+  void uncertainConstantWidens() throws IOException {
+    ComposedFit fit =
+        ComposedFit.of(
+            new ComposedErrors(
+                PublishedDesigns.electricity(),
+                OneSidedLaw.HALF_NORMAL,
+                Sharing.NONE,
+                new double[0]));
+    int size = fit.parameters().length;
+    ConditionalErrors known = fit.conditional();
+    ConditionalErrors same = fit.conditional(new double[size][size]);
+    double[][] covariance = new double[size][size];
+    covariance[0][0] = .05 * .05;
+    ConditionalErrors wide = fit.conditional(covariance);
+    double u = fit.scale() * fit.scale();
+    double v = fit.noise() * fit.noise();
+    double deviation = Math.sqrt(u * v / (u + v) + Math.pow(.05 * u / (u + v), 2));
+    double[][] block = new double[6][123];
+    PublishedDesigns.electricity().fill(0, 123, block);
+    for (int row : new int[] {0, 50, 122}) {
+      double error = block[5][row];
+      for (int k = 0; k < 5; k++) {
+        error -= fit.coefficients()[k] * block[k][row];
+      }
+      double mean = -error * u / (u + v);
+      assertThat(same.exceeded(row, .3)).isEqualTo(known.exceeded(row, .3));
+      assertThat(wide.exceeded(row, .3))
+          .isCloseTo(NormalTail.exceeded(.3, mean, deviation), within(1e-10));
+    }
+  }
 }

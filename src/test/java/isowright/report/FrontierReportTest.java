@@ -88,7 +88,7 @@ class FrontierReportTest {
     Chart chart =
         charts.stream().filter(c -> c.kind() == Chart.Kind.INEFFICIENCY).findFirst().orElseThrow();
     assertThat(chart.rows()).hasSize(14);
-    assertThat(chart.caption()).contains("not waste", "parameters taken as known");
+    assertThat(chart.caption()).contains("not waste", "given the residuals");
     assertThat(chart.svg().get()).contains("GW-07", "mean inefficiency", "from plant effects");
     String page = HtmlReport.write(FINDINGS, charts);
     assertThat(page)
