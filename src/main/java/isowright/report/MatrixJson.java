@@ -34,6 +34,19 @@ final class MatrixJson {
     file.text("choice", found.choice());
     file.list("headlines", found.headlines(), false, headline -> headline(file, headline));
     file.list("cells", found.cells(), false, cell -> cell(file, found.headlines(), cell));
+    file.list(
+        "gaps",
+        found.gaps(),
+        true,
+        gap -> {
+          file.text("plant", gap.plant());
+          file.text("period", gap.period());
+          file.whole("specifications", gap.choices());
+          file.number("low", gap.low());
+          file.text("lowBy", gap.lowBy());
+          file.number("high", gap.high());
+          file.text("highBy", gap.highBy());
+        });
     file.remarks("remarks", List.of());
   }
 

@@ -105,6 +105,7 @@ final class MatrixSection {
                 .then(chosen(matrix))));
     blocks.add(table(matrix));
     blocks.addAll(material.drawings(Chart.Kind.SPECIFICATIONS));
+    MatrixGaps.of(material, matrix).ifPresent(blocks::add);
     List<Text> lacking = lacking(matrix);
     if (!lacking.isEmpty()) {
       blocks.add(Paragraph.of("What is lacking, and why:"));

@@ -8,6 +8,14 @@ final class Terms {
 
   private Terms() {}
 
+  /** A specification named with its form first, "ces, within, trend": the form as printed. */
+  static String specification(String name) {
+    int comma = name.indexOf(',');
+    return comma < 0
+        ? technology(name)
+        : technology(name.substring(0, comma)) + name.substring(comma);
+  }
+
   /** A technology's name; names given by the user stand as they are. */
   static String technology(String name) {
     return switch (name) {

@@ -18,6 +18,7 @@ import isowright.study.MatrixFindings.Cell;
 import isowright.study.MatrixFindings.Criteria;
 import isowright.technology.LinearForm;
 import isowright.technology.Regularity;
+import java.util.Arrays;
 import java.util.EnumMap;
 import java.util.LinkedHashMap;
 import java.util.List;
@@ -50,8 +51,10 @@ record MatrixCell(
    *
    * @param cell what was found
    * @param faults why it does not meet a criterion, by the criterion
+   * @param gaps the gap of each filing as a share of what was filed, in order; empty where nothing
+   *     is reviewed
    */
-  record Found(Cell cell, Map<Criterion, String> faults) {}
+  record Found(Cell cell, Map<Criterion, String> faults, List<Double> gaps) {}
 
   /** Forms that are searched for take longest. */
   boolean searched(Study study) {
@@ -64,7 +67,9 @@ record MatrixCell(
     Fit fit = Estimation.fit(panel, how);
     if (!fit.state().usable()) {
       return new Found(
-          cell(fit, 0, Optional.empty(), Optional.empty(), Map.of(), Map.of()), Map.of());
+          cell(fit, 0, Optional.empty(), Optional.empty(), Map.of(), Map.of()),
+          Map.of(),
+          List.of());
     }
     Map<String, Figure> figures = new LinkedHashMap<>();
     Map<String, String> without = new LinkedHashMap<>();
@@ -73,7 +78,7 @@ record MatrixCell(
     figures.put(MatrixFindings.SCALE, elasticities.scale());
     figures.put(MatrixFindings.SUBSTITUTION, elasticities.meanSubstitution());
     headlines.cost(fit, figures, without);
-    headlines.gap(fit, figures, without);
+    double[] gaps = headlines.gap(fit, figures, without);
     FitStatistics statistics = fit.numbers().statistics();
     Criteria criteria =
         new Criteria(
@@ -94,7 +99,7 @@ record MatrixCell(
     for (Criterion criterion : chooseBy) {
       fault(criterion, cell, fit).ifPresent(fault -> faults.put(criterion, fault));
     }
-    return new Found(cell, faults);
+    return new Found(cell, faults, Arrays.stream(gaps).boxed().toList());
   }
 
   private static Optional<String> fault(Criterion criterion, Cell cell, Fit fit) {

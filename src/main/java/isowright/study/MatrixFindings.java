@@ -17,6 +17,8 @@ import java.util.function.Function;
  * @param cells the combinations, in the order of the study file
  * @param chosen the index of the marked one; empty where none is
  * @param choice how it came to be chosen, or why none is, in words
+ * @param gaps for each filing of the last period reviewed, the lowest and highest gap of any
+ *     combination
  */
 public record MatrixFindings(
     List<Sample> samples,
@@ -24,7 +26,8 @@ public record MatrixFindings(
     List<Headline> headlines,
     List<Cell> cells,
     OptionalInt chosen,
-    String choice) {
+    String choice,
+    List<ReviewFindings.Spread> gaps) {
 
   /** The scale elasticity at the geometric mean of the sample. */
   public static final String SCALE = "returns-to-scale";
@@ -44,6 +47,12 @@ public record MatrixFindings(
     chooseBy = List.copyOf(chooseBy);
     headlines = List.copyOf(headlines);
     cells = List.copyOf(cells);
+    gaps = List.copyOf(gaps);
+  }
+
+  /** The same with gaps filing by filing. */
+  MatrixFindings with(List<ReviewFindings.Spread> byFiling) {
+    return new MatrixFindings(samples, chooseBy, headlines, cells, chosen, choice, byFiling);
   }
 
   /**

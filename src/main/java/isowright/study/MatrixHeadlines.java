@@ -151,16 +151,26 @@ final class MatrixHeadlines {
     }
   }
 
-  /** Adds the gap, or why there is none. */
-  void gap(Fit fit, Map<String, Figure> figures, Map<String, String> without) {
+  /** The rows of the filings of the last period reviewed, in the whole records. */
+  int[] filings() {
+    return held.map(h -> h.rows().stream().mapToInt(FilingRows.Filing::row).toArray())
+        .orElse(new int[0]);
+  }
+
+  /**
+   * Adds the gap, or why there is none.
+   *
+   * @return the gap of each filing as a share of what was filed; NaN where it has no least cost
+   */
+  double[] gap(Fit fit, Map<String, Figure> figures, Map<String, String> without) {
     if (held.isEmpty() || held.get().rows().isEmpty()) {
-      return;
+      return new double[0];
     }
     Held h = held.get();
     OptionalInt period = period(fit, h.period());
     if (period.isEmpty()) {
       without.put(MatrixFindings.GAP, noPeriod(h.period()));
-      return;
+      return FigureMaker.missing(h.rows().size());
     }
     Candidate candidate = Candidate.fitted(fit, Optional.empty());
     GapEstimates estimates =
@@ -168,8 +178,15 @@ final class MatrixHeadlines {
             ReviewReference.asked(h.filing()).of(candidate, period.getAsInt()),
             study.estimation().confidence());
     List<GapEstimates.Least> answered = new ArrayList<>();
-    for (FilingRows.Filing filed : h.rows()) {
-      estimates.least(filed.question(), filed.filed(), Optional.empty()).ifPresent(answered::add);
+    double[] shares = FigureMaker.missing(h.rows().size());
+    for (int f = 0; f < shares.length; f++) {
+      FilingRows.Filing filed = h.rows().get(f);
+      Optional<GapEstimates.Least> least =
+          estimates.least(filed.question(), filed.filed(), Optional.empty());
+      if (least.isPresent()) {
+        answered.add(least.get());
+        shares[f] = 1 - least.get().leastCost() / filed.filed();
+      }
     }
     int lost = h.rows().size() - answered.size();
     if (lost == 0) {
@@ -184,6 +201,7 @@ final class MatrixHeadlines {
               + " filings have no least cost by this technology, so that the total would not be"
               + " that of the others");
     }
+    return shares;
   }
 
   /**

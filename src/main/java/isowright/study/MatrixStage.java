@@ -70,13 +70,32 @@ final class MatrixStage {
         .parallelStream()
         .forEach(c -> found[c] = cells.get(c).found(study, headlines, matrix.chooseBy()));
     MatrixChoice choice = MatrixChoice.of(matrix.chooseBy(), List.of(found));
-    return new MatrixFindings(
-        panels.entrySet().stream().map(e -> described(e.getKey(), e.getValue())).toList(),
-        matrix.chooseBy().stream().map(Matrix.Criterion::word).toList(),
-        headlines(study, headlines, choice.cells()),
-        choice.cells(),
-        choice.chosen(),
-        choice.words());
+    MatrixFindings all =
+        new MatrixFindings(
+            panels.entrySet().stream().map(e -> described(e.getKey(), e.getValue())).toList(),
+            matrix.chooseBy().stream().map(Matrix.Criterion::word).toList(),
+            headlines(study, headlines, choice.cells()),
+            choice.cells(),
+            choice.chosen(),
+            choice.words(),
+            List.of());
+    return all.with(gaps(all, List.of(found), headlines.filings()));
+  }
+
+  /** Filing by filing, the lowest and the highest gap of any combination. */
+  private List<ReviewFindings.Spread> gaps(
+      MatrixFindings all, List<MatrixCell.Found> found, int[] filings) {
+    GapSpread spread = new GapSpread();
+    for (MatrixCell.Found one : found) {
+      if (!one.gaps().isEmpty()) {
+        spread.note(
+            one.cell().technology(),
+            all.circumstances(one.cell()),
+            filings,
+            one.gaps().stream().mapToDouble(Double::doubleValue).toArray());
+      }
+    }
+    return spread.spreads(panel);
   }
 
   private List<MatrixCell> cells(Map<Matrix.Sample, Panel> panels) {

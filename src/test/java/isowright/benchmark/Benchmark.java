@@ -26,6 +26,7 @@ public final class Benchmark {
     WideStudy.report(steps);
     LeastCostRate.report(steps);
     ReviewTimes.report(steps);
+    MatrixTimes.report(steps);
     ProcessTimes.report(steps);
   }
 }

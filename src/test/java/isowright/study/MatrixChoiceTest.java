@@ -31,7 +31,8 @@ class MatrixChoiceTest {
             Map.of(),
             false,
             ""),
-        faults);
+        faults,
+        List.of());
   }
 
   private static MatrixCell.Found refused() {
@@ -51,7 +52,8 @@ class MatrixChoiceTest {
             Map.of(),
             false,
             ""),
-        Map.of());
+        Map.of(),
+        List.of());
   }
 
   private static List<String> standings(MatrixChoice choice) {

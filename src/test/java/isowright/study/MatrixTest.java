@@ -175,6 +175,24 @@ class MatrixTest {
         .containsExactly(org.assertj.core.api.Assertions.tuple("ces", "within", "all"));
   }
 
+  /** The range of each filing holds the gap of every study of one specification. */
+  @Test
+  void theGapOfEachFilingRangesOverTheSpecifications() {
+    Findings findings = RealFindings.of(RealFindings.Study.SPECIFICATIONS);
+    List<ReviewFindings.Spread> gaps = matrix().gaps();
+    assertThat(gaps).hasSize(14).allSatisfy(g -> assertThat(g.choices()).isEqualTo(24));
+    for (ReviewFindings.Spread gap : gaps) {
+      PlanFindings.Reviewed asked =
+          findings.reviews().stream()
+              .filter(r -> r.plant().equals(gap.plant()) && r.period().equals("2024"))
+              .findFirst()
+              .orElseThrow();
+      double share = asked.gap().orElseThrow().value() / asked.filed();
+      assertThat(share).as(gap.plant()).isBetween(gap.low() - 1e-9, gap.high() + 1e-9);
+      assertThat(gap.low()).isLessThan(gap.high());
+    }
+  }
+
   @Test
   void theUsualGridHasTwentyFourCombinations() throws Exception {
     Files.copy(STUDY.resolveSibling("glassworks.csv"), folder.resolve("glassworks.csv"));
