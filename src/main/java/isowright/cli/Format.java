@@ -1,25 +1,40 @@
 package isowright.cli;
 
 import isowright.handover.WordReport;
+import isowright.handover.Workpapers;
 import isowright.records.Nearest;
+import isowright.records.Panel;
 import isowright.report.Document;
+import isowright.study.Findings;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Function;
+import java.util.function.Supplier;
 import java.util.stream.Collectors;
 
-/** A format in which a report is written beside the page, where asked. */
+/** What is handed over beside the page, where asked. */
 enum Format {
   /** For a word processor. */
-  DOCX("docx", "report.docx", WordReport::write);
+  DOCX("docx", "report.docx", handed -> WordReport.write(handed.document().get())),
+  /** Workpapers for a spreadsheet. */
+  XLSX("xlsx", Workpapers.NAME, handed -> Workpapers.write(handed.findings(), handed.rows().get()));
+
+  /**
+   * What formats are written from; documents and rows are had only if one wants them.
+   *
+   * @param findings everything found
+   * @param document the report
+   * @param rows the rows used
+   */
+  record Handed(Findings findings, Supplier<Document> document, Supplier<Optional<Panel>> rows) {}
 
   private final String word;
   private final String file;
-  private final Function<Document, byte[]> writer;
+  private final Function<Handed, byte[]> writer;
 
-  Format(String word, String file, Function<Document, byte[]> writer) {
+  Format(String word, String file, Function<Handed, byte[]> writer) {
     this.word = word;
     this.file = file;
     this.writer = writer;
@@ -30,9 +45,9 @@ enum Format {
     return file;
   }
 
-  /** The file of a document. */
-  byte[] write(Document document) {
-    return writer.apply(document);
+  /** The file of a study. */
+  byte[] write(Handed handed) {
+    return writer.apply(handed);
   }
 
   /** The words for all formats. */

@@ -35,7 +35,7 @@ import picocli.CommandLine.Spec;
       "Examples",
       "  isowright run study.yaml                        the report goes to reports/study",
       "  isowright run study.yaml --into filing-2024",
-      "  isowright run study.yaml --also docx            the report for a word processor too",
+      "  isowright run study.yaml --also docx,xlsx       a document and workpapers too",
       "  isowright run study.yaml --quiet > answer.txt"
     })
 final class Run implements Callable<Integer> {
@@ -57,7 +57,7 @@ final class Run implements Callable<Integer> {
       names = "--also",
       paramLabel = "FORMAT",
       split = ",",
-      description = "write the report as docx (for a word processor) as well")
+      description = "docx: the report for a word processor; xlsx: workpapers with live formulas")
   private List<String> also = List.of();
 
   @Option(names = "--quiet", description = "show no progress")

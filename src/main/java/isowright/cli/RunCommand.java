@@ -3,9 +3,10 @@ package isowright.cli;
 import isowright.charts.Chart;
 import isowright.charts.Charts;
 import isowright.estimation.Unfit;
+import isowright.records.Panel;
+import isowright.records.RecordsReader;
 import isowright.records.RecordsRefused;
 import isowright.report.CostRowsCsv;
-import isowright.report.Document;
 import isowright.report.FindingsJson;
 import isowright.report.HtmlReport;
 import isowright.report.Publication;
@@ -53,7 +54,7 @@ final class RunCommand {
     try {
       findings = Pipeline.run(study, stages);
       stages.last("drawing charts and writing the report");
-      files = files(findings, also);
+      files = files(study, findings, also);
       RunRecord record =
           RunRecord.of(study, findings, publication.folder(), files, start, Instant.now());
       files.put(RunRecord.NAME, record.write(findings.run().title()));
@@ -77,7 +78,7 @@ final class RunCommand {
   }
 
   /** Every file of the report, by name; charts are drawn on all cores. */
-  private static Map<String, byte[]> files(Findings findings, List<Format> also) {
+  private static Map<String, byte[]> files(Study study, Findings findings, List<Format> also) {
     List<Chart> charts = Charts.of(findings).stream().map(RunCommand::drawnOnce).toList();
     Map<String, byte[]> files = new LinkedHashMap<>();
     List<Drawn> drawn = charts.parallelStream().map(Drawn::of).toList();
@@ -85,10 +86,9 @@ final class RunCommand {
     files.put(Publication.MARK, FindingsJson.write(findings));
     files.put("technology.json", TechnologyJson.write(findings));
     files.putAll(CostRowsCsv.write(findings));
-    if (!also.isEmpty()) {
-      Document document = ReportContent.of(findings, charts);
-      also.forEach(format -> files.put(format.file(), format.write(document)));
-    }
+    Format.Handed handed =
+        new Format.Handed(findings, () -> ReportContent.of(findings, charts), () -> rows(study));
+    also.forEach(format -> files.put(format.file(), format.write(handed)));
     for (Drawn chart : drawn) {
       String name = chart.name();
       for (int other = 2; files.containsKey("charts/" + name + ".svg"); other++) {
@@ -98,6 +98,21 @@ final class RunCommand {
       files.put("charts/" + name + ".png", chart.png());
     }
     return files;
+  }
+
+  /** The rows used, read once more: findings hold no rows. */
+  private static Optional<Panel> rows(Study study) {
+    return study
+        .records()
+        .map(
+            records -> {
+              try {
+                return RecordsReader.read(records.source(), records.roles(), records.keep())
+                    .panel();
+              } catch (RecordsRefused changed) {
+                throw new IllegalStateException("records that were read a moment ago", changed);
+              }
+            });
   }
 
   /** The same chart, whose picture is kept: more than one file may want it. */

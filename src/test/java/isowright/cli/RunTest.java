@@ -145,8 +145,9 @@ class RunTest {
 
   @Test
   void furtherFormatsAreWrittenWhereAsked() throws IOException {
-    assertThat(run("--also", "docx").code()).isZero();
+    assertThat(run("--also", "docx,xlsx").code()).isZero();
     assertThat(report().get("report.docx")).startsWith("PK");
+    assertThat(report().get("workpapers.xlsx")).startsWith("PK");
     Invocation unknown = run("--also", "docs,page");
     assertThat(unknown.code()).isEqualTo(2);
     assertThat(unknown.err())
