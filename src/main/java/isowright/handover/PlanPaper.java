@@ -159,14 +159,22 @@ final class PlanPaper {
     level(String.join("+", level));
     String nu = "(" + String.join("+", scale) + ")";
     for (int i = 0; i < n(); i++) {
-      index.add(String.format("(%s*%s/%s)^(%s/%s)", price(i), base(i), first(i), first(i), nu));
+      index.add(
+          String.format(
+              Locale.ROOT, "(%s*%s/%s)^(%s/%s)", price(i), base(i), first(i), first(i), nu));
     }
     for (int i = 0; i < n(); i++) {
       mix(
           i,
           String.format(
+              Locale.ROOT,
               "EXP((LN(%s)-%s)/%s)*%s/%s*%s",
-              target(), level(), nu, first(i), price(i), String.join("*", index)));
+              target(),
+              level(),
+              nu,
+              first(i),
+              price(i),
+              String.join("*", index)));
     }
   }
 
@@ -183,14 +191,17 @@ final class PlanPaper {
     List<String> level = new ArrayList<>();
     List<String> index = new ArrayList<>();
     for (int i = 0; i < n(); i++) {
-      level.add(String.format("%s*(%s/%s)^(-%s)", first(i), stated(i), base(i), rho));
-      index.add(String.format("%s^%s*(%s*%s)^(1-%s)", first(i), sigma, price(i), base(i), sigma));
+      level.add(String.format(Locale.ROOT, "%s*(%s/%s)^(-%s)", first(i), stated(i), base(i), rho));
+      index.add(
+          String.format(
+              Locale.ROOT, "%s^%s*(%s*%s)^(1-%s)", first(i), sigma, price(i), base(i), sigma));
     }
     level("-" + nu + "/" + rho + "*LN(" + String.join("+", level) + ")");
     for (int i = 0; i < n(); i++) {
       mix(
           i,
           String.format(
+              Locale.ROOT,
               "%s*EXP((LN(%s)-%s)/%s)*(%s/(%s*%s))^%s*(%s)^(1/%s)",
               base(i),
               target(),
@@ -279,7 +290,8 @@ final class PlanPaper {
       paper.live(
           top + 1 + i,
           4,
-          String.format("%s+LN(%s*%s)-LN(%s)-%s", z.get(i), price(i), base(i), e, ell));
+          String.format(
+              Locale.ROOT, "%s+LN(%s*%s)-LN(%s)-%s", z.get(i), price(i), base(i), e, ell));
       for (int j = 0; j < n; j++) {
         paper.live(top + 1 + i, 5 + j, (i == j ? "1" : "0") + "-" + second(i, j) + "/" + e);
         paper.live(top + 1 + n, 5 + j, Paper.at(top + 1 + j, 3));
