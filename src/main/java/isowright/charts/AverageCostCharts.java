@@ -64,17 +64,26 @@ final class AverageCostCharts {
         this::plot);
   }
 
+  /** "average cost", or that of a short run. */
+  private String what() {
+    return fit.rows().fixed().isEmpty() ? "average cost" : "average variable cost";
+  }
+
   private String finding() {
     if (fit.efficient().isPresent()) {
       Efficient efficient = fit.efficient().get();
-      return "average cost is least at "
+      return what()
+          + " is least at "
           + Words.with(Words.interval(efficient.output()), setting.units().output())
           + "; "
           + Numbers.brief(100 * efficient.below())
           + " % of the rows produce less";
     }
     int last = costs.length - 1;
-    return "average cost "
+    return what()
+        + (fit.rows().fixed().isEmpty()
+            ? " "
+            : " with " + Words.list(fit.rows().fixed()) + " at the mean ")
         + (costs[last] < costs[0] ? "falls" : "rises")
         + " from "
         + Numbers.brief(costs[0])
@@ -115,9 +124,9 @@ final class AverageCostCharts {
     Table table =
         Table.of(
             Words.output(setting.units()),
-            "average cost (" + per + ")",
-            "average cost, low",
-            "average cost, high");
+            what() + " (" + per + ")",
+            what() + ", low",
+            what() + ", high");
     for (AveragePoint point : fit.rows().average()) {
       table.row(
           java.util.stream.Stream.concat(
@@ -136,7 +145,7 @@ final class AverageCostCharts {
         new Plot(
             Axis.fitting(Words.output(setting.units()), outputs[0], outputs[outputs.length - 1]),
             Axis.fitting(
-                "average cost (" + Words.perOutput(setting.units()) + ")",
+                what() + " (" + Words.perOutput(setting.units()) + ")",
                 Curves.least(all),
                 Curves.most(all)));
     fit.efficient().map(Efficient::output).ifPresent(output -> efficient(plot, output));

@@ -139,13 +139,7 @@ final class ScaleEconomiesCharts {
     plot.band("interval", x, clamped(plot, low), clamped(plot, high), faint, Pen.MAIN_EDGE);
     plot.horizontal("one", 1, Pen.REFERENCE);
     plot.line("scale economies", x, y, Pen.MAIN);
-    plot.label(
-        "one: average cost neither falls nor rises",
-        2,
-        1,
-        Style.QUIET_TEXT,
-        Side.SOUTH_EAST,
-        Side.NORTH_EAST);
+    plot.label("one: constant returns", 2, 1, Style.QUIET_TEXT, Side.SOUTH_EAST, Side.NORTH_EAST);
     return plot;
   }
 

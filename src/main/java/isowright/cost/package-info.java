@@ -7,7 +7,8 @@
  * what is asked of it at a point.
  *
  * <p><b>Read first:</b> {@link isowright.cost.CostFunction}, {@link isowright.cost.TranslogCost},
- * {@link isowright.cost.CostElasticities}.
+ * {@link isowright.cost.CostElasticities}; for the short and the long run {@link
+ * isowright.cost.RationedCost} and {@link isowright.cost.LongRunCost}.
  *
  * <p><b>Does not belong here:</b> data, estimation, production functions (see {@code technology}),
  * which describe the same technology from its other side.

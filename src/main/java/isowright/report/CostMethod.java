@@ -56,7 +56,31 @@ final class CostMethod {
         Paragraph.of(
             "It is a cost function where shares and marginal costs are positive and cost is concave"
                 + " in prices; both are examined at every row."));
+    answers(blocks, citing);
     return new Section(MethodSection.ID + "-costs", "The cost side", blocks);
+  }
+
+  /** How least-cost questions are answered, and average costs compared. */
+  private static void answers(List<Block> blocks, Citing citing) {
+    blocks.add(
+        Paragraph.of(
+            "Asked for a least cost, a cost function answers with its value, its demands (share"
+                + " times cost over price) and its derivative in output. Inputs of a total cost"
+                + " that are held or limited are answered by virtual prices v at which what is held"
+                + " would be bought of one's own accord "
+                + citing.cite(Source.NEARY_ROBERTS)
+                + "; fixed inputs of a variable cost V that have a price p are chosen where a unit"
+                + " of them saves as much variable cost as it costs, which is the long run "
+                + citing.cite(Source.BROWN_CHRISTENSEN)
+                + ":"));
+    blocks.add(Display.of("C_{held} = C(v, y) + Σ_h (w_h − v_h) x_h, −{∂ V}/{∂ k_f} = p_f"));
+    blocks.add(
+        Paragraph.of(
+            "With plant effects the level of the typical plant is the mean over rows of ln C less"
+                + " what the cost function explains, that of one plant the mean over its own rows;"
+                + " controls stand at their means. The chance left in such a mean is part of the"
+                + " interval. Average costs of rows are carried to mean prices by the ratio of the"
+                + " cost function there to that at the prices paid."));
   }
 
   private static void inLevels(List<Block> blocks, Citing citing) {

@@ -235,6 +235,10 @@ final class CostsSection {
         figure ->
             words
                 .append(economies(figure))
+                .append(
+                    fit.rows().fixed().isEmpty()
+                        ? ""
+                        : " where " + Phrases.list(fit.rows().fixed()) + " grows with it")
                 .append(" (scale economies ")
                 .append(Numbers.valueAndInterval(figure))
                 .append(" at the mean of the records). "));

@@ -72,6 +72,12 @@ enum Source {
       "The Lagrange Multiplier Test and Its Applications to Model Specification in"
           + " Econometrics",
       "Review of Economic Studies 47, 239–253"),
+  BROWN_CHRISTENSEN(
+      "Brown and Christensen 1981",
+      "Brown, R. S. and Christensen, L. R. (1981)",
+      "Estimating Elasticities of Substitution in a Model of Partial Static Equilibrium",
+      "in Berndt, E. R. and Field, B. C. (eds), Modeling and Measuring Natural Resource"
+          + " Substitution, Cambridge: MIT Press, 209–229"),
   CAMERON(
       "Cameron and Miller 2015 | Cameron, A. C. and Miller, D. L. (2015)",
       "A Practitioner’s Guide to Cluster-Robust Inference",
@@ -93,6 +99,11 @@ enum Source {
       "Diewert and Wales 1987 | Diewert, W. E. and Wales, T. J. (1987)",
       "Flexible Functional Forms and Global Curvature Conditions",
       "Econometrica 55, 43–68"),
+  NEARY_ROBERTS(
+      "Neary and Roberts 1980",
+      "Neary, J. P. and Roberts, K. W. S. (1980)",
+      "The Theory of Household Behaviour under Rationing",
+      "European Economic Review 13, 25–42"),
   RYAN_WALES(
       "Ryan and Wales 2000",
       "Ryan, D. L. and Wales, T. J. (2000)",

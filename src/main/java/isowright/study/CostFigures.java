@@ -226,8 +226,8 @@ final class CostFigures {
    */
   Optional<Efficient> efficient() {
     CostArguments arguments = data.arguments();
-    if (arguments.outputs().size() != 1) {
-      return Optional.empty();
+    if (arguments.outputs().size() != 1 || !arguments.fixed().isEmpty()) {
+      return Optional.empty(); // the least of average variable cost is no efficient scale
     }
     Optional<Function<CostFunction, double[]>> least =
         fit.function() instanceof GeneralisedCost levels

@@ -68,7 +68,7 @@ final class CostRowFigures {
                             .toArray()))
             .flatMap(List::stream)
             .toList();
-    return new CostRows(data.rows(), rows, average(), spreads());
+    return new CostRows(data.rows(), rows, average(), spreads(), data.arguments().fixed());
   }
 
   private List<Row> block(Propagation<? extends CostFunction> propagation, int[] rows) {

@@ -15,17 +15,20 @@ import java.util.Optional;
  * @param average average cost along output, other things at their means; empty unless there is one
  *     output and cost is known
  * @param spreads how figures spread over all rows
+ * @param fixed the fixed inputs; where there are any, cost is variable cost
  */
-public record CostRows(int all, List<Row> rows, List<AveragePoint> average, List<Spread> spreads) {
+public record CostRows(
+    int all, List<Row> rows, List<AveragePoint> average, List<Spread> spreads, List<String> fixed) {
 
   /** Nothing is known. */
-  public static final CostRows NONE = new CostRows(0, List.of(), List.of(), List.of());
+  public static final CostRows NONE = new CostRows(0, List.of(), List.of(), List.of(), List.of());
 
   /** Copies the lists. */
   public CostRows {
     rows = List.copyOf(rows);
     average = List.copyOf(average);
     spreads = List.copyOf(spreads);
+    fixed = List.copyOf(fixed);
   }
 
   /**

@@ -173,6 +173,7 @@ class CostPlansTest {
       // figures written to twelve digits
       assertThat(other.averageCost() / one.averageCost()).isCloseTo(ratio, within(1e-9));
     }
+    assertThat(rows.fixed()).containsExactly("kiln");
     // the typical plant is the fifth, so that its rows lie on the curve at the same power
     CostRows.Row typical = rows.rows().get(4 * 6);
     CostRows.AveragePoint point = rows.average().get(0);
