@@ -132,21 +132,24 @@ final class CostReviewStage {
     Levelled levelled = choices.get(0).levelled();
     int[] rows = filings.rows(period);
     List<CostGap> gaps = gaps(levelled, rows);
-    double smallest = smallest(gaps, levelled, rows);
-    for (int i = 0; i < rows.length; i++) {
-      reviews.add(reviewed(levelled, rows[i], gaps.get(i), smallest));
-    }
+    List<String> irregular =
+        Arrays.stream(rows).parallel().mapToObj(r -> irregular(levelled.function(), r)).toList();
     List<Integer> answered =
+        IntStream.range(0, rows.length).filter(i -> irregular.get(i).isEmpty()).boxed().toList();
+    double smallest = smallest(answered.stream().map(gaps::get).toList());
+    reviews.addAll(
         IntStream.range(0, rows.length)
-            .filter(i -> irregular(levelled.function(), rows[i]).isEmpty())
-            .boxed()
-            .toList();
+            .parallel()
+            .mapToObj(i -> reviewed(levelled, rows[i], gaps.get(i), irregular.get(i), smallest))
+            .toList());
     if (answered.isEmpty()) {
       return;
     }
     order(levelled, period, rows, gaps, answered);
-    for (Choice choice : choices) {
-      vary(choice, period, choice == choices.get(0), rows, answered);
+    int[] own = answered.stream().mapToInt(i -> rows[i]).toArray();
+    vary(choices.get(0), period, true, own, answered.stream().map(gaps::get).toList());
+    for (Choice choice : choices.subList(1, choices.size())) {
+      vary(choice, period, false, own, undivided(choice.levelled(), own));
     }
     if (last && filing.allowance().isPresent()) {
       CostGaps engine = CostGaps.against(levelled.propagation());
@@ -173,19 +176,31 @@ final class CostReviewStage {
         .of(Arrays.stream(rows).mapToObj(this::filed).toList(), levelled.function());
   }
 
+  /** The same without the parts, which take most of the work. */
+  private List<CostGap> undivided(Levelled levelled, int[] rows) {
+    return CostGaps.against(levelled.propagation())
+        .of(
+            Arrays.stream(rows)
+                .mapToObj(
+                    r ->
+                        new CostGaps.Filed(
+                            data.point(r), filings.filed(r), filings.recorded(r), new double[0]))
+                .toList(),
+            levelled.function());
+  }
+
   private CostGaps.Filed filed(int row) {
     double[] shares = Arrays.stream(data.shares()).mapToDouble(share -> share[row]).toArray();
     return new CostGaps.Filed(data.point(row), filings.filed(row), filings.recorded(row), shares);
   }
 
-  private double smallest(List<CostGap> gaps, Levelled levelled, int[] rows) {
-    int needed = Math.max(1, MOST_NEEDED / filings.periods().length);
-    return IntStream.range(0, rows.length)
-        .filter(i -> irregular(levelled.function(), rows[i]).isEmpty())
-        .mapToObj(i -> Math.abs(gaps.get(i).difference().value()))
+  /** The size of the gap below which it is not asked what would have to be true. */
+  private double smallest(List<CostGap> gaps) {
+    return gaps.stream()
+        .map(gap -> Math.abs(gap.difference().value()))
         .sorted(Comparator.reverseOrder())
         .mapToDouble(size -> size)
-        .limit(needed)
+        .limit(Math.max(1, MOST_NEEDED / filings.periods().length))
         .min()
         .orElse(0);
   }
@@ -201,8 +216,8 @@ final class CostReviewStage {
         : "a share or marginal cost is not positive";
   }
 
-  private Reviewed reviewed(Levelled levelled, int row, CostGap gap, double smallest) {
-    String irregular = irregular(levelled.function(), row);
+  private Reviewed reviewed(
+      Levelled levelled, int row, CostGap gap, String irregular, double smallest) {
     String form = levelled.function().form();
     if (!irregular.isEmpty()) {
       return new Reviewed(
@@ -305,12 +320,9 @@ final class CostReviewStage {
                 ratios));
   }
 
-  private void vary(
-      Choice choice, int period, boolean asAsked, int[] rows, List<Integer> answered) {
+  private void vary(Choice choice, int period, boolean asAsked, int[] own, List<CostGap> gaps) {
     CostReference reference = choice.reference();
     Levelled levelled = choice.levelled();
-    int[] own = answered.stream().mapToInt(i -> rows[i]).toArray();
-    List<CostGap> gaps = gaps(levelled, own);
     String form = levelled.function().form();
     spread.note(
         form,

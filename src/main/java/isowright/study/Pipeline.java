@@ -80,14 +80,14 @@ public final class Pipeline {
             : Optional.empty();
     CostFindings costs = CostFindings.NONE;
     List<Planned> costPlans = List.of();
-    ReviewStage.Review costReview = ReviewStage.Review.NONE;
+    Optional<CostStage> costStage = Optional.empty();
     if (costReading.isPresent()) {
       CostFilings.check(study, costReading.get().panel());
       CostStage stage =
           new CostStage(study, study.costs().orElseThrow(), costReading.get().panel());
       costs = stage.findings();
       costPlans = stage.plans();
-      costReview = stage.review();
+      costStage = Optional.of(stage);
     }
 
     progress.stage("answering least-cost questions", 3, STAGES);
@@ -101,7 +101,9 @@ public final class Pipeline {
     CostFindings bothSides = CostSides.in(costs, fitted, plans);
 
     progress.stage("holding filed costs against least cost", 4, STAGES);
-    ReviewStage.Review review = ReviewStage.of(study, priced, candidates).and(costReview);
+    ReviewStage.Review review =
+        ReviewStage.of(study, priced, candidates)
+            .and(costStage.map(CostStage::review).orElse(ReviewStage.Review.NONE));
     Optional<Findings.Records> records =
         reading
             .map(
