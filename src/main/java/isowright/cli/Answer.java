@@ -65,6 +65,15 @@ final class Answer {
     substitution(fit.substitution());
     fit.regularity()
         .ifPresent(r -> line("regular", "at " + r.both() + " of " + r.rows() + " rows"));
+    fit.frontier()
+        .ifPresent(
+            found ->
+                line(
+                    "inefficiency",
+                    found
+                        .variances()
+                        .map(v -> Numbers.valueAndInterval(v.mean()) + " of ln output, on average")
+                        .orElse("none found (" + found.state() + ")")));
   }
 
   private void cost(CostFindings.Fitted fit) {

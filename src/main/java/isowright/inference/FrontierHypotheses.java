@@ -38,12 +38,17 @@ final class FrontierHypotheses {
             "there is no inefficiency, so that least squares is enough",
             own.fit().likelihoodRatio(),
             new Law.MixedChiSquared(decay ? 1 : 0));
+    boolean apart = frontier.overTime() == Estimator.OverTime.EACH_ROW && fit.panel().repeats();
     verdicts.add(
         decay
             ? none.noting(
                 "Without inefficiency its rate of decay has no meaning, so the law is an"
                     + " approximation.")
-            : none);
+            : apart
+                ? none.noting(
+                    "Rows are taken as independent here; where a plant's rows go together, its size"
+                        + " is not known.")
+                : none);
     if (decay && own.fit().state().oneSided()) {
       verdicts.add(noDecay(own.fit()));
     }

@@ -23,9 +23,9 @@ import org.apache.commons.statistics.distribution.TDistribution;
  * of the variance, var u/(var u + σ_v²), with var u = (1 − 2/π) σ_u² under the half-normal law and
  * σ_u² under the exponential one, which is what γ is often taken for. Intervals are symmetric in
  * logs (σ, λ) and so in log odds (γ, share), and stay within their bounds; where the half-length in
- * the log exceeds {@link #QUADRATIC} they are read off the profile of the likelihood instead, its
- * threshold widened as the covariance in force is wider than that of the likelihood (Kent, J. T.
- * 1982, <i>Biometrika</i> 69, 19–27).
+ * the log exceeds one they are read off the profile of the likelihood instead, its threshold
+ * widened as the covariance in force is wider than that of the likelihood (Kent, J. T. 1982,
+ * <i>Biometrika</i> 69, 19–27).
  *
  * <p>A row's inefficiency given its residuals: see {@link ConditionalErrors} (Jondrow, Lovell,
  * Materov and Schmidt 1982; Battese and Coelli 1988; intervals of Horrace and Schmidt 1996, widened

@@ -47,6 +47,7 @@ final class BriefSupport {
                   + (regular.size() == 1 ? " makes" : " make")
                   + " economic sense at every row of the records."));
     }
+    FrontierSection.supported(material, points);
     CostsSection.supported(material, points);
     List<String> inside =
         material.findings().plans().stream()
@@ -98,6 +99,7 @@ final class BriefSupport {
                               + " is "
                               + lower(Phrases.regularity(regular)))));
     }
+    FrontierSection.unsupported(material, points);
     CostsSection.unsupported(material, points);
     for (Planned plan : material.findings().plans()) {
       if (Terms.cautionary(plan.status())) {

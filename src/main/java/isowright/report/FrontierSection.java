@@ -73,6 +73,48 @@ final class FrontierSection {
     return Optional.of(new Section(ID, "Inefficiency", blocks));
   }
 
+  /** Adds to what the records support. */
+  static void supported(Material material, List<Text> points) {
+    List<String> told =
+        fits(material).stream()
+            .filter(fit -> told(fit, material))
+            .map(
+                fit ->
+                    Terms.technology(fit.technology())
+                        + ", on average "
+                        + Numbers.valueAndInterval(
+                            fit.frontier().orElseThrow().variances().orElseThrow().mean())
+                        + " in ln output")
+            .toList();
+    if (!told.isEmpty()) {
+      points.add(Text.of("Inefficiency beyond noise: " + String.join("; ", told) + "."));
+    }
+  }
+
+  /** Adds to what they do not. */
+  static void unsupported(Material material, List<Text> points) {
+    List<String> not =
+        fits(material).stream()
+            .filter(fit -> !told(fit, material))
+            .map(fit -> Terms.technology(fit.technology()))
+            .toList();
+    if (!not.isEmpty()) {
+      points.add(
+          Text.of(
+              "Whether plants differ in inefficiency or by noise alone cannot be said: "
+                  + Phrases.list(not)
+                  + "."));
+    }
+  }
+
+  /** Whether inefficiency was found and the test speaks against there being none. */
+  private static boolean told(Fitted fit, Material material) {
+    return fit.frontier().map(FrontierFindings::found).orElse(false)
+        && fit.tests().stream()
+            .filter(test -> test.name().equals("no-inefficiency"))
+            .anyMatch(test -> Phrases.outcome(test, material.confidence()).equals("rejected"));
+  }
+
   private static List<Row> brief(Variances v, String overTime) {
     List<Row> rows = new ArrayList<>();
     String when = overTime.equals("decay") ? " in the last period" : "";

@@ -93,6 +93,7 @@ class FrontierReportTest {
     String page = HtmlReport.write(FINDINGS, charts);
     assertThat(page)
         .contains(
+            "Inefficiency beyond noise: Cobb-Douglas, on average",
             "Inefficiency and noise",
             "It is no measure of waste",
             "Annex: inefficiency, plant by plant",
