@@ -30,9 +30,16 @@ final class Answer {
 
   /** Prints what was found and where the report is. */
   void print(Findings findings, Path folder) {
+    print(findings, Optional.of(folder));
+  }
+
+  /** Prints what was found; without a report also what else must be known of each plan. */
+  void print(Findings findings, Optional<Path> folder) {
     out.println(findings.run().title());
     findings.records().ifPresent(this::records);
-    if (!findings.fits().isEmpty() || !findings.costs().fits().isEmpty()) {
+    if (!findings.fits().isEmpty()
+        || !findings.costs().fits().isEmpty()
+        || findings.plans().stream().anyMatch(Planned::estimated)) {
       out.println("Intervals at " + Numbers.level(findings.confidence()) + ".");
     }
     findings.fits().forEach(this::fit);
@@ -42,7 +49,26 @@ final class Answer {
     reviews(findings);
     out.println();
     out.println("Remarks: " + RemarkCounts.words(severities(findings)));
-    out.println("Report: " + folder.resolve("report.html"));
+    folder.ifPresentOrElse(
+        into -> out.println("Report: " + into.resolve("report.html")), () -> more(findings));
+  }
+
+  private void more(Findings findings) {
+    for (Planned plan : findings.plans()) {
+      out.println();
+      out.println(plan.question() + ", " + plan.technology());
+      String per = findings.units().output();
+      String unit = findings.units().money() + " per " + (per.isEmpty() ? "unit of output" : per);
+      plan.marginalCost()
+          .ifPresent(f -> line("marginal cost", Numbers.valueAndInterval(f) + " " + unit));
+      plan.averageCost()
+          .ifPresent(f -> line("average cost", Numbers.valueAndInterval(f) + " " + unit));
+      plan.detail().multipliers().stream()
+          .filter(worth -> !worth.kind().equals("target"))
+          .forEach(worth -> out.println("  " + worth.words()));
+      plan.remarks().forEach(said -> out.println("  " + said.severity() + ": " + said.message()));
+    }
+    findings.remarks().forEach(said -> out.println(said.message()));
   }
 
   private void records(Findings.Records records) {

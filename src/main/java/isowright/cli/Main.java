@@ -29,7 +29,15 @@ import picocli.CommandLine.Spec;
  */
 @Command(
     name = "isowright",
-    subcommands = {Draft.class, Check.class, Run.class, Verify.class, Compare.class, Help.class},
+    subcommands = {
+      Draft.class,
+      Check.class,
+      Run.class,
+      Plan.class,
+      Verify.class,
+      Compare.class,
+      Help.class
+    },
     versionProvider = Version.class,
     sortOptions = false,
     header = {
@@ -50,6 +58,7 @@ import picocli.CommandLine.Spec;
       "  isowright draft plants.csv --into study.yaml   propose a study of these records",
       "  isowright check study.yaml                     see what is wrong with study or records",
       "  isowright run study.yaml                       fit, test, plan, and write the report",
+      "  isowright plan technology.json --target 52000  a least-cost question without the records",
       "  isowright verify reports/study                 is the report as it was made?",
       "  isowright compare reports/a reports/b          what changed between two runs, and why",
       "  isowright help run                             more on one command",

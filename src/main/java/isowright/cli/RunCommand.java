@@ -28,6 +28,7 @@ import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
 import java.util.concurrent.atomic.AtomicReference;
+import java.util.function.Supplier;
 
 /** Does the work of {@link Run}; loaded only when it is asked for. */
 final class RunCommand {
@@ -54,7 +55,7 @@ final class RunCommand {
     try {
       findings = Pipeline.run(study, stages);
       stages.last("drawing charts and writing the report");
-      files = files(study, findings, also);
+      files = files(findings, also, () -> rows(study));
       RunRecord record =
           RunRecord.of(study, findings, publication.folder(), files, start, Instant.now());
       files.put(RunRecord.NAME, record.write(findings.run().title()));
@@ -78,7 +79,8 @@ final class RunCommand {
   }
 
   /** Every file of the report, by name; charts are drawn on all cores. */
-  private static Map<String, byte[]> files(Study study, Findings findings, List<Format> also) {
+  static Map<String, byte[]> files(
+      Findings findings, List<Format> also, Supplier<Optional<Panel>> rows) {
     List<Chart> charts = Charts.of(findings).stream().map(RunCommand::drawnOnce).toList();
     Map<String, byte[]> files = new LinkedHashMap<>();
     List<Drawn> drawn = charts.parallelStream().map(Drawn::of).toList();
@@ -87,7 +89,7 @@ final class RunCommand {
     files.put("technology.json", TechnologyJson.write(findings));
     files.putAll(CostRowsCsv.write(findings));
     Format.Handed handed =
-        new Format.Handed(findings, () -> ReportContent.of(findings, charts), () -> rows(study));
+        new Format.Handed(findings, () -> ReportContent.of(findings, charts), rows);
     also.forEach(format -> files.put(format.file(), format.write(handed)));
     for (Drawn chart : drawn) {
       String name = chart.name();

@@ -127,6 +127,15 @@ public record Fit(
         : technology;
   }
 
+  /**
+   * What it takes to have {@link #at} without the records.
+   *
+   * @param plants the levels of so many plants, from the first
+   */
+  public SavedTechnology saved(int plants) {
+    return SavedTechnology.of(this, plants);
+  }
+
   /** Whether the constant is a mean of plants' levels rather than a parameter of the fit. */
   boolean levelsGiveTheConstant(Productivity productivity) {
     boolean common =
@@ -170,7 +179,7 @@ public record Fit(
    * typical plant, plant means that were added stand at their means over the rows and inefficiency
    * at its mean; a plant's own constant holds its own.
    */
-  private double[][] toTechnology(int period, Productivity productivity) {
+  double[][] toTechnology(int period, Productivity productivity) {
     Solution numbers = numbers();
     int p = numbers.technology().parameters().length;
     double[][] to = new double[p][numbers.parameters().length];

@@ -51,6 +51,29 @@ public final class Support {
     return of(panel.inputs(), panel.rows(), (i, r) -> logs.get(i).get(r));
   }
 
+  /**
+   * What a support consists of, all in logs.
+   *
+   * @param mean z̄
+   * @param least by input
+   * @param most by input
+   * @param inverse S^-1
+   * @param farthest the greatest d² of a record
+   */
+  public record Parts(
+      double[] mean, double[] least, double[] most, double[][] inverse, double farthest) {}
+
+  /** The support of these parts. */
+  public static Support of(List<String> names, Parts parts) {
+    return new Support(
+        names, parts.mean(), parts.least(), parts.most(), parts.inverse(), parts.farthest());
+  }
+
+  /** What this support consists of. */
+  public Parts parts() {
+    return new Parts(mean, least, most, inverse, farthest);
+  }
+
   /** A logged quantity of a row. */
   @FunctionalInterface
   public interface Logs {

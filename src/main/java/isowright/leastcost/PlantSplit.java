@@ -97,9 +97,19 @@ public final class PlantSplit {
     }
     if (moving > 1) {
       SplitPolish polish = new SplitPolish(costs, outputs, low, high);
-      outputs = polish.converge() ? polish.outputs : outputs;
+      outputs = polish.converge() && stillRun(near, polish.outputs) ? polish.outputs : outputs;
     }
     return SplitReport.again(plants, costs, outputs, near);
+  }
+
+  /** Whether every plant that ran still makes something. */
+  private static boolean stillRun(SplitOutcome near, double[] outputs) {
+    for (int p = 0; p < outputs.length; p++) {
+      if (near.shares().get(p).runs() && !(outputs[p] > 0)) {
+        return false;
+      }
+    }
+    return true;
   }
 
   private SplitOutcome split() {

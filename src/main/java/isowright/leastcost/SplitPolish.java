@@ -157,6 +157,9 @@ final class SplitPolish {
   /** Marginal cost and its slope at a plant's output; false where it has none. */
   private boolean examine(int p) {
     double q = outputs[p];
+    if (!(q > 0)) {
+      return false; // driven to a stop: it stays there
+    }
     double above = Math.min(q * (1 + BESIDE), high[p]);
     double below = Math.max(q * (1 - BESIDE), low[p]);
     CostTable.Point here = costs.get(p).apply(q);

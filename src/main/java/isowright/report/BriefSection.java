@@ -29,7 +29,10 @@ final class BriefSection {
 
   static Section of(Material material) {
     List<Block> blocks = new ArrayList<>();
-    blocks.add(Paragraph.of(rests(material.findings())));
+    blocks.add(Paragraph.of(rests(material)));
+    if (material.handedOver()) {
+      blocks.addAll(Material.notices(material.findings().remarks()));
+    }
     Map<String, Double> before = Map.of();
     for (List<Planned> plans : PlansSection.asked(material)) {
       Planned first = plans.get(0);
@@ -58,8 +61,9 @@ final class BriefSection {
     return points.isEmpty() ? Paragraph.of(otherwise) : new Points(false, points);
   }
 
-  private static String rests(Findings findings) {
-    return findings
+  private static String rests(Material material) {
+    return material
+        .findings()
         .records()
         .map(
             records ->
@@ -73,10 +77,17 @@ final class BriefSection {
                     + Phrases.count(records.rows() - records.used(), "row")
                     + (records.rows() - records.used() == 1 ? " was" : " were")
                     + " set aside.")
-        .orElse(
-            "This rests on technologies taken as known; no records were read, and no figure carries"
-                + " an interval.");
+        .orElseGet(
+            () ->
+                material.handedOver()
+                    ? "This rests on technologies that were estimated elsewhere and handed over;"
+                        + " the records themselves were not read."
+                    : TAKEN);
   }
+
+  private static final String TAKEN =
+      "This rests on technologies taken as known; no records were read, and no figure carries an"
+          + " interval.";
 
   private static Paragraph asked(Material material, List<Planned> plans, boolean samePrices) {
     Planned plan = plans.get(0);
@@ -176,7 +187,7 @@ final class BriefSection {
 
   private static String sure(Material material) {
     Findings findings = material.findings();
-    if (findings.fits().isEmpty() && findings.costs().fits().isEmpty()) {
+    if (findings.fits().isEmpty() && findings.costs().fits().isEmpty() && !material.handedOver()) {
       return "The figures are exact for the technologies as stated. How far those are from the"
           + " truth is not known from this study.";
     }

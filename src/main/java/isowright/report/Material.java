@@ -24,6 +24,14 @@ record Material(Findings findings, List<Chart> charts) {
     charts = List.copyOf(charts);
   }
 
+  /** Whether the technologies were estimated elsewhere, from records that were not read. */
+  boolean handedOver() {
+    return findings.records().isEmpty()
+        && findings.fits().isEmpty()
+        && findings.costs().fits().isEmpty()
+        && findings.plans().stream().anyMatch(Planned::estimated);
+  }
+
   /** The level of all intervals. */
   double confidence() {
     return findings.confidence();

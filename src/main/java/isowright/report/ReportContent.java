@@ -27,6 +27,17 @@ public final class ReportContent {
     Material material = new Material(findings, charts);
     List<Section> sections = new ArrayList<>();
     sections.add(BriefSection.of(material));
+    if (material.handedOver()) {
+      sections.add(PlansSection.of(material));
+      sections.add(CautionsSection.of(material));
+      PlanAnnexSection.of(material).ifPresent(sections::add);
+      sections.add(RunSection.of(material));
+      return new Document(
+          findings.run().title(),
+          "Least-cost plans from a technology handed over",
+          facts(material),
+          sections);
+    }
     sections.add(RecordsSection.of(material));
     if (findings.records().isPresent()) {
       sections.add(DescriptionSection.of(material));

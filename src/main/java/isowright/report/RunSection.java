@@ -24,8 +24,10 @@ final class RunSection {
     Run run = material.findings().run();
     List<Entry> entries = new ArrayList<>();
     entries.add(Entry.of("Isowright", run.version()));
-    entries.add(Entry.of("Study file", run.studyFile()));
-    entries.add(new Entry(Text.of("SHA-256 of the study"), Text.typed(run.studySha256())));
+    boolean handed = material.handedOver();
+    String read = handed ? "technology file" : "study";
+    entries.add(Entry.of(handed ? "Technology file" : "Study file", run.studyFile()));
+    entries.add(new Entry(Text.of("SHA-256 of the " + read), Text.typed(run.studySha256())));
     material
         .findings()
         .records()
@@ -38,7 +40,7 @@ final class RunSection {
     List<Block> blocks = new ArrayList<>();
     blocks.add(
         Paragraph.of(
-            "The same version given the same two files gives the same figures. The findings file beside"
+            "The same version given the same files gives the same figures. The findings file beside"
                 + " this report holds every figure at full precision."));
     blocks.add(new Definitions(entries));
     List<Row> rows = new ArrayList<>();

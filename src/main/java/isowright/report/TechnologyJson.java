@@ -41,6 +41,7 @@ public final class TechnologyJson {
     List<Fitted> usable = findings.fits().stream().filter(Fitted::usable).toList();
     file.list("technologies", usable, false, fit -> fitted(file, findings, fit));
     file.list("given", findings.given(), false, given -> given(file, findings, given));
+    HandoverJson.write(file, findings.handover(), List.copyOf(findings.units().inputs().keySet()));
   }
 
   private static void records(JsonFile file, Findings findings) throws IOException {

@@ -26,6 +26,7 @@ import java.util.Optional;
  * @param review what follows from the filed costs: orders, other choices, allowances
  * @param specification results beside what was laid down before fitting
  * @param costs what was found of the cost side
+ * @param handover what it takes to ask the technologies without the records
  * @param remarks what must be said of the whole study
  */
 public record Findings(
@@ -40,7 +41,38 @@ public record Findings(
     ReviewFindings review,
     SpecificationFindings specification,
     CostFindings costs,
+    Handover handover,
     List<Said> remarks) {
+
+  /** Findings of which nothing is handed over. */
+  public Findings(
+      Run run,
+      Units units,
+      double confidence,
+      Optional<Records> records,
+      List<Fitted> fits,
+      List<FitFindings.Given> given,
+      List<Planned> plans,
+      List<Reviewed> reviews,
+      ReviewFindings review,
+      SpecificationFindings specification,
+      CostFindings costs,
+      List<Said> remarks) {
+    this(
+        run,
+        units,
+        confidence,
+        records,
+        fits,
+        given,
+        plans,
+        reviews,
+        review,
+        specification,
+        costs,
+        Handover.NONE,
+        remarks);
+  }
 
   /** Findings of a study that laid nothing down beforehand. */
   public Findings(

@@ -30,13 +30,21 @@ final class KeyPlaces {
 
   /** The places in a file; none where it can no longer be read. */
   static KeyPlaces of(Path file) {
+    try {
+      return ofText(Files.readString(file, StandardCharsets.UTF_8));
+    } catch (IOException unreadable) {
+      return new KeyPlaces();
+    }
+  }
+
+  /** The places in a text. */
+  static KeyPlaces ofText(String text) {
     KeyPlaces places = new KeyPlaces();
     try {
-      String text = Files.readString(file, StandardCharsets.UTF_8);
       new Compose(LoadSettings.builder().build())
           .composeAllFromString(text)
           .forEach(root -> places.note("", root));
-    } catch (IOException | YamlEngineException unreadable) {
+    } catch (YamlEngineException unreadable) {
       return new KeyPlaces();
     }
     return places;

@@ -22,8 +22,12 @@ final class OutOfReach {
   private final PlanCircumstances circumstances;
 
   OutOfReach(Study study, Optional<Panel> panel) {
+    this(study, new PlanCircumstances(study, panel));
+  }
+
+  OutOfReach(Study study, PlanCircumstances circumstances) {
     this.study = study;
-    this.circumstances = new PlanCircumstances(study, panel);
+    this.circumstances = circumstances;
   }
 
   List<Mistake> mistakes() {

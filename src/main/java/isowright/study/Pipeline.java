@@ -126,6 +126,7 @@ public final class Pipeline {
         review.findings(),
         SpecificationStage.findings(study, reading, panel, fits, fitted),
         bothSides,
+        HandoverStage.of(study, panel, fits),
         remarks(fitted, plans));
   }
 

@@ -13,6 +13,7 @@ import isowright.technology.Technology;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 
 /**
  * One question answered by one technology, with what is needed to say more of the answer.
@@ -41,8 +42,12 @@ record PlanAnswer(
     double confidence = study.estimation().confidence();
     FigureMaker figures =
         new FigureMaker(
-            candidate.fit().map(f -> Intervals.of(estimated, confidence)),
-            candidate.fit().map(f -> DeltaMethod.of(estimated, confidence)));
+            Optional.of(estimated)
+                .filter(e -> candidate.estimated())
+                .map(e -> Intervals.of(e, confidence)),
+            Optional.of(estimated)
+                .filter(e -> candidate.estimated())
+                .map(e -> DeltaMethod.of(e, confidence)));
     return new PlanAnswer(
         asked,
         study.inputs(),

@@ -73,10 +73,16 @@ final class PlanBinder {
     this.across = new AcrossBinder(declared, technologies);
   }
 
+  /** The same of technologies of which some have a frontier. */
+  PlanBinder besideFrontier(boolean there) {
+    frontier = there;
+    return this;
+  }
+
   /** The questions under {@code least-cost}; one for each target. */
   List<LeastCostQuestion> bind(YamlSection root) {
     List<LeastCostQuestion> all = new ArrayList<>();
-    frontier = FrontierBinder.asked(root);
+    frontier |= FrontierBinder.asked(root);
     for (YamlValue item : root.get("least-cost").flatMap(YamlValue::list).orElse(List.of())) {
       place++;
       item.section().map(this::questions).ifPresent(all::addAll);

@@ -2,22 +2,21 @@ package isowright.study;
 
 import isowright.estimation.EstimatedTechnology;
 import isowright.estimation.Productivity;
+import isowright.estimation.SavedTechnology;
 import isowright.inference.Support;
 import isowright.leastcost.PlanTask;
 import isowright.leastcost.PriceSchedule;
-import isowright.records.Column;
 import isowright.records.Panel;
 import java.text.DecimalFormat;
 import java.text.DecimalFormatSymbols;
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.Collections;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
-import java.util.OptionalDouble;
-import java.util.stream.DoubleStream;
 
 /**
  * The circumstances in which a question is answered: prices, limits, period and productivity, as
@@ -26,20 +25,37 @@ import java.util.stream.DoubleStream;
 final class PlanCircumstances {
 
   /** More plants than this are not asked one by one for the range of productivity. */
-  private static final int MOST_PLANTS = 2000;
+  private static final int MOST_PLANTS = 500;
 
   private final Study study;
   private final Optional<Panel> panel;
+  private final Optional<Recorded> recorded;
   private final Optional<Support> support;
 
   PlanCircumstances(Study study, Optional<Panel> panel) {
-    this.study = study;
-    this.panel = panel;
-    this.support = study.leastCost().isEmpty() ? Optional.empty() : panel.map(Support::of);
+    this(study, panel, study.leastCost().isEmpty() ? Optional.empty() : panel.map(Recorded::of));
   }
 
+  /** The circumstances of records that were read elsewhere. */
+  static PlanCircumstances handedOver(Study study, Optional<Recorded> recorded) {
+    return new PlanCircumstances(study, Optional.empty(), recorded);
+  }
+
+  private PlanCircumstances(Study study, Optional<Panel> panel, Optional<Recorded> recorded) {
+    this.study = study;
+    this.panel = panel;
+    this.recorded = recorded;
+    this.support = recorded.map(r -> r.support(study.inputs()));
+  }
+
+  /** The records themselves, where they are at hand. */
   Optional<Panel> panel() {
     return panel;
+  }
+
+  /** Whether anything is known of records. */
+  boolean known() {
+    return recorded.isPresent();
   }
 
   boolean inside(double[] mix) {
@@ -69,23 +85,21 @@ final class PlanCircumstances {
   }
 
   private double[] outputRange() {
-    return panel
-        .map(p -> p.output().toArray())
-        .flatMap(
-            all ->
-                ChangeFigures.range(Arrays.stream(all).min(), Arrays.stream(all).max())
-                    .or(() -> Optional.of(new double[] {all[0], all[0]})))
+    return recorded
+        .map(r -> new double[] {r.leastOutput(), r.mostOutput()})
         .orElse(new double[] {0, Double.POSITIVE_INFINITY});
   }
 
   int period(Study.LeastCostQuestion asked) {
-    return panel
-        .map(p -> asked.period().map(p.periods()::indexOf).orElseGet(() -> p.periods().size() - 1))
+    return recorded
+        .map(r -> asked.period().map(r.periods()::indexOf).orElseGet(() -> r.periods().size() - 1))
         .orElse(0);
   }
 
   Productivity productivity(Study.Productivity asked) {
-    return productivity(asked, panel);
+    return asked.kind() == Study.Productivity.Kind.PLANT
+        ? plant(asked.plant().orElseThrow())
+        : productivity(asked, panel);
   }
 
   /** Whose productivity is meant. */
@@ -103,14 +117,14 @@ final class PlanCircumstances {
   }
 
   Productivity plant(String name) {
-    return plant(name, panel);
+    return new Productivity.Plant(recorded.orElseThrow().plants().indexOf(name));
   }
 
   String productivityWords(Study.LeastCostQuestion asked, Candidate candidate) {
     if (candidate.given().isPresent()) {
       return "as given";
     }
-    String when = panel.map(p -> " in " + p.periods().get(period(asked))).orElse("");
+    String when = recorded.map(r -> " in " + r.periods().get(period(asked))).orElse("");
     if (!asked.terms().across().isEmpty()) {
       return "each plant its own" + when;
     }
@@ -132,13 +146,14 @@ final class PlanCircumstances {
   /** Whether inefficiency was found in the fit. */
   static boolean inefficient(Candidate candidate) {
     return candidate.fit().flatMap(f -> f.numbers().frontier()).stream()
-        .anyMatch(own -> own.fit().state().oneSided());
+            .anyMatch(own -> own.fit().state().oneSided())
+        || candidate.saved().map(SavedTechnology::inefficient).orElse(false);
   }
 
   /** The price of an input: stated, or the mean of the last period recorded. */
   double price(Map<String, Double> stated, int i) {
     Double price = stated.get(study.inputs().get(i));
-    return price != null ? price : Demands.meanPrice(panel.orElseThrow(), i);
+    return price != null ? price : recorded.orElseThrow().prices()[i];
   }
 
   /** The key of the study file under which the goal stands. */
@@ -252,33 +267,22 @@ final class PlanCircumstances {
   /** What the records hold of prices, output and productivity. */
   ChangeFigures.Observed observed(
       Study.LeastCostQuestion asked, Candidate candidate, EstimatedTechnology estimated) {
-    List<Optional<double[]>> prices = new ArrayList<>();
-    for (int i = 0; i < study.inputs().size(); i++) {
-      int input = i;
-      prices.add(panel.flatMap(p -> p.prices().get(input)).flatMap(PlanCircumstances::range));
-    }
-    Optional<double[]> output = panel.flatMap(p -> range(p.output()));
+    List<Optional<double[]>> prices =
+        recorded
+            .map(Recorded::priceRanges)
+            .orElseGet(() -> Collections.nCopies(study.inputs().size(), Optional.empty()));
+    Optional<double[]> output = recorded.flatMap(Recorded::outputRange);
     return new ChangeFigures.Observed(prices, output, levels(asked, candidate, estimated));
-  }
-
-  private static Optional<double[]> range(Column column) {
-    OptionalDouble least = finite(column).min();
-    OptionalDouble most = finite(column).max();
-    return ChangeFigures.range(least, most);
-  }
-
-  private static DoubleStream finite(Column column) {
-    return Arrays.stream(column.toArray()).filter(v -> Double.isFinite(v) && v > 0);
   }
 
   /** The least and most productive plants of the records, as factors on the answer's output. */
   private Optional<double[]> levels(
       Study.LeastCostQuestion asked, Candidate candidate, EstimatedTechnology estimated) {
-    if (panel.isEmpty() || candidate.fit().isEmpty()) {
+    if (recorded.isEmpty() || !candidate.estimated()) {
       return Optional.empty();
     }
-    int plants = panel.get().plants().size();
-    if (plants < 2 || plants == panel.get().rows() || plants > MOST_PLANTS) {
+    int plants = recorded.get().plants().size();
+    if (plants < 2 || !recorded.get().repeated() || plants > MOST_PLANTS) {
       return Optional.empty(); // without repeated plants a level is a residual
     }
     double here = estimated.technology().parameters()[0];

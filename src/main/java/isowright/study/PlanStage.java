@@ -38,8 +38,12 @@ final class PlanStage {
   private record Pair(Study.LeastCostQuestion asked, Candidate candidate) {}
 
   PlanStage(Study study, Optional<Panel> panel, List<Candidate> candidates) {
+    this(study, new PlanCircumstances(study, panel), candidates);
+  }
+
+  PlanStage(Study study, PlanCircumstances circumstances, List<Candidate> candidates) {
     this.study = study;
-    this.circumstances = new PlanCircumstances(study, panel);
+    this.circumstances = circumstances;
     this.candidates = List.copyOf(candidates);
   }
 
@@ -112,7 +116,7 @@ final class PlanStage {
     return new Planned(
         asked.name(),
         candidate.name(),
-        candidate.fit().isPresent(),
+        candidate.estimated(),
         outcome.planned() ? outcome.output() : asked.target(),
         prices(answer),
         circumstances.productivityWords(asked, candidate),
@@ -139,7 +143,7 @@ final class PlanStage {
     if (!outcome.planned()) {
       return outcome.state().name().toLowerCase(java.util.Locale.ROOT);
     }
-    if (circumstances.panel().isEmpty()) {
+    if (!circumstances.known()) {
       remarks.add(
           Said.of(
               "note",

@@ -64,7 +64,7 @@ final class SplitFigures {
     this.n = study.inputs().size();
     List<JointTechnologies.Member> members = new ArrayList<>();
     for (Site site : sites) {
-      String fit = site.candidate().fit().isPresent() ? site.candidate().name() : "";
+      String fit = site.candidate().estimated() ? site.candidate().name() : "";
       members.add(new JointTechnologies.Member(site.estimated(), fit, site.level()));
     }
     this.joint = new JointTechnologies(members, study.estimation().confidence());
@@ -170,7 +170,10 @@ final class SplitFigures {
   }
 
   private double quantity(int p, Share share, int i) {
-    return share.runs() ? share.plan().mix(i) : sites.get(p).option().question().low(i);
+    if (!share.runs()) {
+      return sites.get(p).option().question().low(i);
+    }
+    return share.plan().answered() ? share.plan().mix(i) : Double.NaN;
   }
 
   /** Shares of the inputs in what is spent on them, and what capacities are worth. */

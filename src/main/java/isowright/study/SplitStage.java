@@ -98,7 +98,7 @@ final class SplitStage {
             circumstances.period(asked),
             plant
                 .plant()
-                .filter(name -> candidate.fit().isPresent())
+                .filter(name -> candidate.estimated())
                 .map(circumstances::plant)
                 .orElseGet(() -> circumstances.productivity(asked.productivity())));
     int n = study.inputs().size();
@@ -146,7 +146,7 @@ final class SplitStage {
               "Only a local best is proved: " + outcome.proof().reason() + "."));
     }
     Candidate first = sites.get(0).candidate();
-    boolean estimated = sites.stream().anyMatch(s -> s.candidate().fit().isPresent());
+    boolean estimated = sites.stream().anyMatch(s -> s.candidate().estimated());
     return new Planned(
         asked.name(),
         technology,
@@ -258,7 +258,7 @@ final class SplitStage {
         outside.add(part.plant());
       }
     }
-    if (circumstances.panel().isPresent() && !outside.isEmpty()) {
+    if (circumstances.known() && !outside.isEmpty()) {
       remarks.add(
           Said.of(
               "warning",

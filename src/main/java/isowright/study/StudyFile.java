@@ -155,7 +155,7 @@ public final class StudyFile {
     return text.startsWith("\uFEFF") ? text.substring(1) : text;
   }
 
-  private static String sha256(byte[] bytes) {
+  static String sha256(byte[] bytes) {
     try {
       return HexFormat.of().formatHex(MessageDigest.getInstance("SHA-256").digest(bytes));
     } catch (NoSuchAlgorithmException impossible) {

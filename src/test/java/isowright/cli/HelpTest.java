@@ -39,7 +39,7 @@ class HelpTest {
   }
 
   @ParameterizedTest
-  @ValueSource(strings = {"draft", "check", "run", "verify", "compare", "help"})
+  @ValueSource(strings = {"draft", "check", "run", "plan", "verify", "compare", "help"})
   void ofOneCommand(String command) throws IOException {
     Invocation help = Invocation.of("help", command);
     assertText(help.out(), command);
