@@ -194,6 +194,16 @@ final class CostPlans {
       return "irregular";
     }
     fixedInputs(put, settled, remarks);
+    if (study.money().base().isPresent()
+        && !put.question().prices().keySet().containsAll(data.arguments().inputs())) {
+      remarks.add(
+          Said.of(
+              "note",
+              "money-of-the-period",
+              "Prices that the question does not state are those recorded, in money of the period:"
+                  + " the cost side is not deflated, which changes no estimate. State prices to"
+                  + " have the answer in their money."));
+    }
     List<String> outside = circumstances.outside(settled.at());
     if (!outside.isEmpty()) {
       remarks.add(
