@@ -18,9 +18,9 @@ import java.util.stream.IntStream;
  * file is taken, for the order was laid down beforehand too.
  *
  * <p>An information criterion compares likelihoods, and likelihoods can be compared where they are
- * of the same numbers: the same response at the same rows. So it compares the combinations that
- * share sample and response with the first that is left, and says why it does not compare the
- * others.
+ * of the same numbers: the same response at the same rows. So it compares combinations of one
+ * sample, the first that the study file lists of those left, and of one response, rows as they
+ * stand where any is left, and says why it does not compare the others.
  */
 final class MatrixChoice {
 
@@ -107,21 +107,13 @@ final class MatrixChoice {
       steps.add("none of these has a likelihood");
       return;
     }
-    int first = candidates.get(0);
+    int first = reference(candidates);
     List<Integer> compared =
         candidates.stream().filter(c -> incomparable(c, first).isEmpty()).toList();
     int best =
         compared.stream().min(Comparator.comparingDouble(c -> value(criterion, c))).orElse(first);
     for (int c : candidates) {
-      standing[c] =
-          incomparable(c, first)
-              .orElseGet(
-                  () ->
-                      String.format(
-                          Locale.ROOT,
-                          "%s higher by %.1f",
-                          name(criterion),
-                          value(criterion, c) - value(criterion, best)));
+      standing[c] = incomparable(c, first).orElseGet(() -> above(criterion, c, best));
     }
     left = List.of(best);
     steps.add(
@@ -134,6 +126,27 @@ final class MatrixChoice {
             + ", and the least "
             + name(criterion)
             + " among them is taken");
+  }
+
+  private String above(Criterion criterion, int c, int best) {
+    double above = value(criterion, c) - value(criterion, best);
+    return above == 0
+        ? "the same " + name(criterion) + ", but later in the study file"
+        : String.format(Locale.ROOT, "%s higher by %.1f", name(criterion), above);
+  }
+
+  /**
+   * The combination with whose likelihood the others are compared: of the sample that the study
+   * file lists first among those left, and of rows as they stand where any is.
+   */
+  private int reference(List<Integer> candidates) {
+    List<String> samples = found.stream().map(f -> f.cell().sample()).distinct().toList();
+    return candidates.stream()
+        .min(
+            Comparator.comparingInt((Integer c) -> samples.indexOf(cell(c).sample()))
+                .thenComparing(c -> !criteria(c).of().equals("rows"))
+                .thenComparing(c -> c))
+        .orElseThrow();
   }
 
   private Optional<String> incomparable(int c, int first) {

@@ -86,6 +86,31 @@ class MatrixChoiceTest {
     assertThat(choice.words()).contains("6 of 7 combinations were estimated", "least BIC");
   }
 
+  /** What a criterion set aside does not move the comparison to another sample or response. */
+  @Test
+  void theFirstSampleListedIsCompared() {
+    Map<Criterion, String> rejected = Map.of(Criterion.RESET, "rejected");
+    MatrixChoice choice =
+        MatrixChoice.of(
+            List.of(Criterion.RESET, Criterion.BIC),
+            List.of(
+                found("all", "rows", -90, rejected),
+                found("recent", "rows", -500, Map.of()),
+                found("all", "differences", -400, Map.of()),
+                found("all", "rows", -20, Map.of()),
+                found("all", "rows", -20, Map.of())));
+    assertThat(choice.chosen()).hasValue(3);
+    assertThat(standings(choice).get(4)).isEqualTo("the same BIC, but later in the study file");
+    MatrixChoice others =
+        MatrixChoice.of(
+            List.of(Criterion.RESET, Criterion.BIC),
+            List.of(
+                found("all", "rows", -90, rejected),
+                found("recent", "rows", -500, Map.of()),
+                found("all", "differences", -400, Map.of())));
+    assertThat(others.chosen()).hasValue(2);
+  }
+
   @Test
   void criteriaFollowOneAnother() {
     List<MatrixCell.Found> all =

@@ -19,6 +19,7 @@ public final class RealFindings {
 
   private static final Path DEMO = Path.of("notebooks-data");
   private static final Path PUBLISHED = Path.of("src/test/resources/published");
+  private static final Path REFERENCE = Path.of("src/test/resources/reference");
   private static final Path STUDIES = Path.of("target/studies");
   private static final Map<Study, Findings> KNOWN = new EnumMap<>(Study.class);
 
@@ -47,6 +48,8 @@ public final class RealFindings {
     STATES_POOLED,
     /** The demo's records under many specifications, some of which cannot be carried out. */
     SPECIFICATIONS,
+    /** Invented brickyards: some burn no fuel, and likelihoods are of unlike numbers. */
+    BRICKYARDS,
     /** A frontier of the demo's records, with decay. */
     FRONTIER
   }
@@ -93,14 +96,19 @@ public final class RealFindings {
       case STATES_POOLED -> written("us-states-public-capital", STATES.formatted("none"));
       case FRONTIER -> DEMO.resolve("below-the-frontier.yaml");
       case SPECIFICATIONS -> DEMO.resolve("glassworks-specifications.yaml");
+      case BRICKYARDS -> written(REFERENCE, "brickyards", BRICKYARDS);
     };
   }
 
   /** A study beside a copy of its records, since paths in a study are relative to it. */
   private static Path written(String records, String study) throws IOException {
+    return written(PUBLISHED, records, study);
+  }
+
+  private static Path written(Path from, String records, String study) throws IOException {
     Path folder = Files.createDirectories(STUDIES.resolve(records));
     Path copy = folder.resolve(records + ".csv");
-    Files.write(copy, Files.readAllBytes(PUBLISHED.resolve(records + ".csv")));
+    Files.write(copy, Files.readAllBytes(from.resolve(records + ".csv")));
     return Files.writeString(folder.resolve("study.yaml"), study);
   }
 
@@ -125,6 +133,28 @@ public final class RealFindings {
           target: 2500
           prices: {labour: 2, capital: 1}
           limits: {labour: [0, 1], capital: [0, 900]}
+      """;
+
+  private static final String BRICKYARDS =
+      """
+      title: Brickyards, some of which burn no fuel
+      records: {file: brickyards.csv, plant: plant, period: year}
+      output: {column: bricks}
+      inputs:
+        labour: {quantity: hours, price: wage}
+        machines: {quantity: machine_hours, price: rental}
+        fuel: {quantity: fuel, spending: fuel_cost}
+      technologies: [cobb-douglas, ces]
+      estimation: {plant-effects: within, zeros: dummy}
+      matrix:
+        technologies: [cobb-douglas, ces]
+        plant-effects: [none, within, between, differences]
+        standard-errors: [classical, robust]
+        samples: {all: {}, earlier: {half: earlier}}
+        choose-by: [reset, aic]
+      least-cost:
+        - {name: Six thousand bricks, target: 6000}
+      filing: {periods: [2024, 2024]}
       """;
 
   private static final String THIRTY_POINTS =
