@@ -28,7 +28,7 @@ public record EquationSystem(List<String> parameters, List<Equation> equations) 
    *
    * @param name its name
    * @param offsets o, shape C + 1; copied in
-   * @param loadings D, (C + 1) × K; copied in
+   * @param loadings D, (C + 1) × K; copied in, not to be modified by anyone
    * @param effects whether each group of rows has a constant of its own in this equation
    */
   public record Equation(String name, double[] offsets, double[][] loadings, boolean effects) {
@@ -38,6 +38,11 @@ public record EquationSystem(List<String> parameters, List<Equation> equations) 
       Objects.requireNonNull(name);
       offsets = offsets.clone();
       loadings = Matrices.copy(loadings);
+    }
+
+    @Override
+    public double[] offsets() {
+      return offsets.clone();
     }
   }
 

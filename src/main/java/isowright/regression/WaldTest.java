@@ -45,6 +45,20 @@ public record WaldTest(double f, int restrictions, double degreesOfFreedom) {
     return new WaldTest(statistic(b, v), q, covariance.degreesOfFreedom());
   }
 
+  /** Of q numbers that are zero under the null, with their covariance. */
+  static WaldTest of(double[] b, double[][] v, double degreesOfFreedom) {
+    int q = b.length;
+    double[] scaled = new double[q];
+    double[][] correlations = new double[q][q];
+    for (int i = 0; i < q; i++) {
+      scaled[i] = b[i] / Math.sqrt(v[i][i]);
+      for (int j = 0; j < q; j++) {
+        correlations[i][j] = v[i][j] / Math.sqrt(v[i][i]) / Math.sqrt(v[j][j]);
+      }
+    }
+    return new WaldTest(statistic(scaled, correlations), q, degreesOfFreedom);
+  }
+
   private static double statistic(double[] b, double[][] v) {
     int q = b.length;
     for (double[] row : v) {
