@@ -39,6 +39,7 @@ public final class CostElasticities {
   private final double[] prices;
   private final double[] gradient;
   private final double[][] hessian;
+  private final double[] rises;
 
   private CostElasticities(CostFunction function, double[] v) {
     this.arguments = function.arguments();
@@ -52,6 +53,12 @@ public final class CostElasticities {
     this.hessian = new double[arguments.size()][arguments.size()];
     function.gradient(v, gradient);
     function.hessian(v, hessian);
+    this.rises = gradient.clone();
+    for (int k = n; k < v.length && function instanceof GeneralisedCost; k++) {
+      // an output of zero has no part in cost, but a marginal cost it has
+      boolean zero = v[k] == Double.NEGATIVE_INFINITY && arguments.output(k);
+      rises[k] = zero ? ((GeneralisedCost) function).marginalCost(v, k - n) : gradient[k];
+    }
   }
 
   /** The elasticities at a point. */
@@ -129,7 +136,7 @@ public final class CostElasticities {
   /** Whether all shares and all marginal costs are positive. */
   public boolean monotone() {
     for (int k = 0; k < arguments.size(); k++) {
-      if ((arguments.price(k) || arguments.output(k)) && !(gradient[k] > 0)) {
+      if ((arguments.price(k) || arguments.output(k)) && !(rises[k] > 0)) {
         return false;
       }
     }

@@ -10,6 +10,8 @@ import isowright.regression.MappedFit;
 import isowright.regression.SeeminglyUnrelated;
 import isowright.regression.SystemCovariance;
 import isowright.regression.SystemFit;
+import isowright.regression.SystemRestrictions;
+import isowright.regression.WaldTest;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
@@ -130,6 +132,36 @@ public final class CostEstimation {
     CostEquations equations = new CostEquations(data, specification);
     CostDesign design = new CostDesign(data, equations.terms());
     return SeeminglyUnrelated.fit(design, equations.asymmetric(design));
+  }
+
+  /**
+   * The Wald test of a narrower specification in a wider one with the covariance that the wider one
+   * asks for: where rows of a firm may depend on one another likelihoods do not compare, this does.
+   *
+   * @param symmetric whether the wider one has symmetric shares; if not, each share equation has
+   *     coefficients of its own
+   */
+  public static WaldTest wald(
+      CostData data, CostSpecification wide, boolean symmetric, CostSpecification narrow) {
+    Design design;
+    EquationSystem wider;
+    EquationSystem narrower;
+    if (wide.form().inLevels().isPresent()) {
+      QuantityDesign quantities = new QuantityDesign(data, wide.form().inLevels().orElseThrow());
+      design = quantities;
+      wider = new QuantityEquations(data, wide, quantities).system(quantities);
+      narrower = new QuantityEquations(data, narrow, quantities).system(quantities);
+    } else {
+      CostEquations equations = new CostEquations(data, wide);
+      CostDesign logs = new CostDesign(data, equations.terms());
+      design = logs;
+      wider = symmetric ? equations.system(logs) : equations.asymmetric(logs);
+      narrower = new CostEquations(data, narrow).system(logs);
+    }
+    SystemFit fit = SeeminglyUnrelated.fit(design, wider);
+    Uncertainty uncertainty = uncertainty(design, wide, fit);
+    return SystemRestrictions.test(
+        fit, uncertainty.covariance(), uncertainty.degreesOfFreedom(), narrower);
   }
 
   /**

@@ -13,6 +13,7 @@ import isowright.estimation.CostSpecification.Concavity;
 import isowright.estimation.CostSpecification.Equations;
 import isowright.estimation.CostSpecification.Restriction;
 import isowright.regression.SystemFit;
+import isowright.regression.WaldTest;
 import java.util.ArrayList;
 import java.util.List;
 
@@ -23,7 +24,9 @@ import java.util.List;
  *
  * <p>Systems are compared by their likelihoods, χ² = 2 (ln L_free − ln L_held); a cost equation
  * alone by F from the sums of squares. Both take errors as equal in all rows; where rows of a firm
- * may depend on one another (clustered), the comparison is still that one and is said to be so.
+ * may depend on one another (clustered), tests are Wald tests in their F form with the clustered
+ * covariance of the wider fit and G − 1 degrees of freedom, and one with more restrictions than G −
+ * 1 is left out.
  *
  * <p>Checked against Berndt and Wood (1975): likelihood ratio of symmetry 12.84, in {@code
  * CostHypothesesTest}.
@@ -64,14 +67,18 @@ public final class CostHypotheses {
       return;
     }
     CostSpecification own = fit.specification();
+    String null0 = "cost doubles when all prices double";
+    if (own.clustered()) {
+      clustered(
+          "price-homogeneity",
+          null0,
+          CostEstimation.wald(data, own.homogeneous(false), true, own.homogeneous(true)),
+          verdicts);
+      return;
+    }
     CostFit free = own.homogeneous() ? CostEstimation.fit(data, own.homogeneous(false)) : fit;
     CostFit held = own.homogeneous() ? fit : CostEstimation.fit(data, own.homogeneous(true));
-    verdicts.add(
-        compared(
-            "price-homogeneity",
-            "cost doubles when all prices double",
-            free.system(),
-            held.system()));
+    verdicts.add(compared("price-homogeneity", null0, free.system(), held.system()));
   }
 
   private void symmetry(List<Verdict> verdicts) {
@@ -79,13 +86,14 @@ public final class CostHypotheses {
     if (fit.specification().equations() == Equations.COST || !products) {
       return;
     }
-    SystemFit free = CostEstimation.withoutSymmetry(data, fit.specification());
-    verdicts.add(
-        compared(
-            "symmetric-shares",
-            "the share equations are derivatives of one cost function",
-            free,
-            fit.system()));
+    String null0 = "the share equations are derivatives of one cost function";
+    CostSpecification own = fit.specification();
+    if (own.clustered()) {
+      clustered("symmetric-shares", null0, CostEstimation.wald(data, own, false, own), verdicts);
+      return;
+    }
+    SystemFit free = CostEstimation.withoutSymmetry(data, own);
+    verdicts.add(compared("symmetric-shares", null0, free, fit.system()));
   }
 
   private boolean applies(Restriction restriction) {
@@ -125,10 +133,6 @@ public final class CostHypotheses {
   private void restriction(Restriction restriction, List<Verdict> verdicts) {
     List<Restriction> imposed = new ArrayList<>(fit.specification().restrictions());
     imposed.add(restriction);
-    CostFit held = CostEstimation.fit(data, fit.specification().restricted(imposed));
-    if (held.free() == fit.free()) {
-      return;
-    }
     String null0 =
         switch (restriction) {
           case HOMOTHETIC -> "the mix of inputs does not depend on the scale of output";
@@ -139,7 +143,29 @@ public final class CostHypotheses {
           case NEUTRAL_CHANGE -> "technical change saves all inputs alike";
           case NO_SUBSTITUTION -> "prices do not move the proportions of inputs";
         };
-    verdicts.add(compared(restriction.word(), null0, fit.system(), held.system()));
+    CostSpecification narrow = fit.specification().restricted(imposed);
+    if (fit.specification().clustered()) {
+      clustered(
+          restriction.word(),
+          null0,
+          CostEstimation.wald(data, fit.specification(), true, narrow),
+          verdicts);
+      return;
+    }
+    CostFit held = CostEstimation.fit(data, narrow);
+    if (held.free() != fit.free()) {
+      verdicts.add(compared(restriction.word(), null0, fit.system(), held.system()));
+    }
+  }
+
+  /** A Wald test; left out where nothing is restricted, or more than the plants can bear. */
+  private static void clustered(String name, String null0, WaldTest test, List<Verdict> verdicts) {
+    if (Double.isFinite(test.f())) {
+      Law law = new Law.F(test.restrictions(), test.degreesOfFreedom());
+      verdicts.add(
+          verdict(name, null0, test.f(), law)
+              .noting("By the clustered covariance of the unrestricted fit."));
+    }
   }
 
   private Verdict compared(String name, String null0, SystemFit free, SystemFit held) {

@@ -253,8 +253,11 @@ final class CostTables {
             groups,
             List.of(
                 Text.of(
-                    "Systems by their likelihoods, a cost equation alone by sums of squares; both"
-                        + " take errors as alike and independent over rows."))));
+                    "Where standard errors are clustered, Wald tests with the clustered covariance"
+                        + " of the wider fit (F; one with more restrictions than plants less one is"
+                        + " left out). Elsewhere systems by their likelihoods, a cost equation"
+                        + " alone by sums of squares, which take errors as alike and independent"
+                        + " over rows."))));
   }
 
   /** Scale economies row by row, where the rows are few enough to be read. */

@@ -25,6 +25,7 @@ public final class Benchmark {
             Runtime.getRuntime().maxMemory() >> 20));
     WideStudy.report(steps);
     LeastCostRate.report(steps);
+    CostSystemTimes.report(steps);
     ReviewTimes.report(steps);
     MatrixTimes.report(steps);
     ProcessTimes.report(steps);

@@ -3,6 +3,7 @@ package isowright.inference;
 import static org.assertj.core.api.Assertions.assertThat;
 import static org.assertj.core.api.Assertions.within;
 
+import isowright.cost.CostArguments;
 import isowright.cost.CostForm;
 import isowright.estimation.CostData;
 import isowright.estimation.CostEstimation;
@@ -10,6 +11,7 @@ import isowright.estimation.CostFit;
 import isowright.estimation.CostFixtures;
 import isowright.estimation.CostSpecification;
 import isowright.estimation.CostSpecification.Equations;
+import isowright.regression.Groups;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
@@ -109,5 +111,74 @@ class CostHypothesesTest {
     CostFit again = fit(mended, CostForm.TRANSLOG, Equations.SYSTEM);
     // renewals end at 1e-9 of standard errors, which reach 0.2
     assertThat(CostEstimation.dependenceOnLeftOut(mended, again)).isLessThan(1e-8);
+  }
+
+  private static CostFit clustered(CostData data, CostForm form, Equations equations) {
+    int last = data.arguments().inputs().size() - 1;
+    return CostEstimation.fit(
+        data, new CostSpecification(form, equations, true, List.of(), false, true, last, 0.95));
+  }
+
+  /** Clustered: Wald tests in their F form, with the same counts of restrictions. */
+  @Test
+  void clusteredTestsOfElectricity() throws IOException {
+    CostData data = CostFixtures.electricity();
+    List<Verdict> verdicts =
+        CostHypotheses.of(data, clustered(data, CostForm.TRANSLOG, Equations.SYSTEM));
+    assertThat(verdicts)
+        .extracting(v -> v.law().name() + v.law().degreesOfFreedom())
+        .containsExactly(
+            "F[5.0, 122.0]",
+            "F[8.0, 122.0]",
+            "F[2.0, 122.0]",
+            "F[3.0, 122.0]",
+            "F[4.0, 122.0]",
+            "F[3.0, 122.0]");
+  }
+
+  /**
+   * One restriction: the Wald statistic is the square of t, here of the product of price and price
+   * that unit substitution sets to zero with two prices, by the clustered standard error.
+   */
+  @Test
+  void oneRestrictionIsTheSquareOfT() throws IOException {
+    CostData own = CostFixtures.electricity();
+    CostData two =
+        new CostData(
+            CostArguments.ownUnits(List.of("capital", "fuel"), List.of("power"), List.of(), false),
+            new double[][] {own.points()[0], own.points()[2], own.points()[3]},
+            own.logCost(),
+            new double[][] {own.shares()[0], own.shares()[2]},
+            own.controls(),
+            own.controlNames(),
+            own.groups());
+    CostFit fit = clustered(two, CostForm.TRANSLOG, Equations.SYSTEM);
+    double t = fit.value("capital*capital") / fit.standardError("capital*capital");
+    Verdict verdict = verdict(two, fit, "unit-substitution");
+    assertThat(verdict.law().degreesOfFreedom()).containsExactly(1.0, 122.0);
+    // the same numbers in another order of operations
+    assertThat(verdict.statistic()).isCloseTo(t * t, within(1e-8 * t * t));
+  }
+
+  /** Restrictions that more than use up the firms are left out, not made up. */
+  @Test
+  void moreRestrictionsThanFirmsCanBear() throws IOException {
+    CostData own = CostFixtures.electricity();
+    CostData few =
+        new CostData(
+            own.arguments(),
+            own.points(),
+            own.logCost(),
+            own.shares(),
+            own.controls(),
+            own.controlNames(),
+            Groups.startingAt(123, new int[] {0, 30, 60, 90}));
+    List<Verdict> verdicts =
+        CostHypotheses.of(few, clustered(few, CostForm.TRANSLOG, Equations.SYSTEM));
+    // four firms bear three restrictions at most: 5, 8 and 4 are left out
+    assertThat(verdicts)
+        .extracting(Verdict::name)
+        .isSubsetOf("homothetic", "homogeneous-in-output", "unit-substitution")
+        .contains("homothetic");
   }
 }
