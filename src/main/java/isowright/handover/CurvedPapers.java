@@ -6,6 +6,7 @@ import isowright.study.FitFindings.Parameter;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Objects;
 
 /**
  * A CES technology: from the parameters stated, fitted values, residuals and their sum of squares
@@ -86,7 +87,7 @@ final class CurvedPapers {
   }
 
   private String value(String parameter) {
-    return result.elsewhere(Paper.absolute(rows.get(parameter), 1));
+    return result.elsewhere(Paper.absolute(Objects.requireNonNull(rows.get(parameter)), 1));
   }
 
   private void design() {

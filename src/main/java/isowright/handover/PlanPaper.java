@@ -8,6 +8,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
+import java.util.Objects;
 
 /**
  * A least-cost plan worked out live from prices, target and parameters: change a wage, and mix and
@@ -107,13 +108,13 @@ final class PlanPaper {
     for (int i = 0; i < n(); i++) {
       String input = inputs.get(i);
       paper.text(INPUTS + i, 0, input);
-      paper.input(INPUTS + i, 1, plan.prices().get(input));
+      paper.input(INPUTS + i, 1, Objects.requireNonNull(plan.prices().get(input)));
       paper.input(INPUTS + i, 2, bases.getOrDefault(input, 1.0));
       paper.input(
           INPUTS + i,
           3,
           parameters.getOrDefault(input, parameters.getOrDefault("share:" + input, 0.0)));
-      paper.stated(INPUTS + i, 5, plan.mix().get(input).value());
+      paper.stated(INPUTS + i, 5, Objects.requireNonNull(plan.mix().get(input)).value());
       paper.name(paper.name() + "_price_" + input, INPUTS + i, 1, INPUTS + i, 1);
     }
     paper.name(paper.name() + "_target", 3, 1, 3, 1);
@@ -182,9 +183,9 @@ final class PlanPaper {
   private void ces() {
     int row = below() + 2;
     paper.head(row, 0, "rho");
-    paper.input(row, 1, parameters.get("rho"));
+    paper.input(row, 1, parameters.getOrDefault("rho", Double.NaN));
     paper.head(row + 1, 0, "scale");
-    paper.input(row + 1, 1, parameters.get("scale"));
+    paper.input(row + 1, 1, parameters.getOrDefault("scale", Double.NaN));
     String rho = Paper.absolute(row, 1);
     String nu = Paper.absolute(row + 1, 1);
     String sigma = "(1/(1+" + rho + "))";

@@ -4,6 +4,7 @@ import isowright.records.Column;
 import isowright.records.Panel;
 import java.util.LinkedHashMap;
 import java.util.Map;
+import java.util.Objects;
 import java.util.Optional;
 
 /**
@@ -94,7 +95,7 @@ final class RecordsPaper {
 
   /** A number of a row of the panel, as another sheet writes it. */
   String cell(String column, int row) {
-    return paper.elsewhere(Paper.at(FIRST + row, columns.get(column)));
+    return paper.elsewhere(Paper.at(FIRST + row, Objects.requireNonNull(columns.get(column))));
   }
 
   /** The period of a row as a number. */
