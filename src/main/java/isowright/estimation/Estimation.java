@@ -47,6 +47,9 @@ public final class Estimation {
     if (specification.estimator() instanceof Estimator.Frontier frontier) {
       return new FrontierEstimation(panel, specification, base, form, frontier).fit();
     }
+    if (specification.estimator() instanceof Estimator.Proxy proxy) {
+      return new ControlFunctionEstimation(panel, specification, base, form, proxy).fit();
+    }
     return new LinearEstimation(panel, specification, base, form).fit();
   }
 

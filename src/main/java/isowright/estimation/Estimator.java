@@ -58,6 +58,30 @@ public sealed interface Estimator {
     }
   }
 
+  /**
+   * A control function: productivity is read off a column that rises with it, and its innovations
+   * are unrelated to inputs fixed beforehand and to the free inputs of the period before.
+   *
+   * @param column the proxy, an input or another column, in logs where it can be
+   * @param states the inputs fixed before productivity of the period is known; all others are free
+   * @param degree of the polynomial in inputs and proxy that smooths output
+   * @param process the degree of the polynomial in last period's productivity
+   * @param drawing how plants are drawn for standard errors
+   */
+  record Proxy(
+      Series column, List<String> states, int degree, int process, Replication.Drawing drawing)
+      implements Estimator {
+    /** Copies the list. */
+    public Proxy {
+      states = List.copyOf(states);
+    }
+
+    @Override
+    public String word() {
+      return "proxy";
+    }
+  }
+
   /** How the rows of a plant share its inefficiency. */
   enum OverTime {
     /** Every row has its own. */

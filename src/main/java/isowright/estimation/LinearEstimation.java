@@ -138,14 +138,20 @@ final class LinearEstimation {
    * @param fit of {@code treatment.design()}, over the columns of its levels
    */
   Fit solved(PlantTreatment treatment, LinearFit fit, Particulars particulars) {
-    Design design = treatment.design();
-    Treatment outcome = treatment.outcome();
     Covariance covariance =
         Covariance.estimate(
-            design,
+            treatment.design(),
             fit,
             kind(specification.standardErrors()),
-            PanelRows.of(panel, base).times(outcome.rows()));
+            PanelRows.of(panel, base).times(treatment.outcome().rows()));
+    return solved(treatment, fit, particulars, covariance);
+  }
+
+  /** The same with a covariance, over the columns of the fit, that was had otherwise. */
+  Fit solved(
+      PlantTreatment treatment, LinearFit fit, Particulars particulars, Covariance covariance) {
+    Design design = treatment.design();
+    Treatment outcome = treatment.outcome();
     int columns = fit.columns().size();
     int first = constant ? 0 : 1;
     int beside = circumstances.count() + outcome.plantMeans().length;

@@ -1,5 +1,10 @@
 package isowright.estimation;
 
+import org.apache.commons.math3.linear.Array2DRowRealMatrix;
+import org.apache.commons.math3.linear.ArrayRealVector;
+import org.apache.commons.math3.linear.DecompositionSolver;
+import org.apache.commons.math3.linear.LUDecomposition;
+
 /** Products of small dense matrices. */
 final class Matrices {
 
@@ -54,5 +59,17 @@ final class Matrices {
       extended[rows + k][columns + k] = 1;
     }
     return extended;
+  }
+
+  /** The solution of A x = b for a small square A; NaN where A is singular. */
+  static double[] solve(double[][] a, double[] b) {
+    DecompositionSolver solver =
+        new LUDecomposition(new Array2DRowRealMatrix(a, false)).getSolver();
+    if (!solver.isNonSingular()) {
+      double[] nothing = new double[b.length];
+      java.util.Arrays.fill(nothing, Double.NaN);
+      return nothing;
+    }
+    return solver.solve(new ArrayRealVector(b, false)).toArray();
   }
 }

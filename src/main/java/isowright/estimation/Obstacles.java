@@ -167,6 +167,9 @@ final class Obstacles {
               + estimator.word()
               + " does not treat. Set time to quadratic-trend.");
     }
+    if (estimator instanceof Estimator.Proxy proxy) {
+      proxy(proxy);
+    }
     PlantEffects effects = specification.plantEffects();
     if (estimator instanceof Estimator.Instruments
         && effects != PlantEffects.NONE
@@ -204,6 +207,29 @@ final class Obstacles {
               + specification.standardErrors().word()
               + " are not carried out for the likelihood of a frontier. Set standard-errors to"
               + " classical, robust or clustered.");
+    }
+  }
+
+  private void proxy(Estimator.Proxy proxy) {
+    PlantEffects effects = specification.plantEffects();
+    if (effects != PlantEffects.NONE) {
+      found.add(
+          "A control function lets productivity move from period to period, and is not carried out"
+              + " with plant-effects: "
+              + effects.word()
+              + ". Set plant-effects to none.");
+    }
+    if (proxy.states().containsAll(panel.inputs())) {
+      found.add(
+          "Every input is named as a state, so none is chosen knowing productivity and least"
+              + " squares does. Leave the free inputs out of `state`.");
+    }
+    if (panel.plants().size() < 2) {
+      found.add(
+          "A control function draws plants for its standard errors and needs at least two; the"
+              + " records have "
+              + panel.plants().size()
+              + ". Add records of other plants, or take `proxy` out.");
     }
   }
 

@@ -128,4 +128,44 @@ public sealed interface Particulars {
           best.agreeing());
     }
   }
+
+  /**
+   * Of a control function.
+   *
+   * @param proxy the proxy as it enters
+   * @param free the inputs chosen knowing productivity
+   * @param basis how many columns smooth output
+   * @param smoothedShare R² of the smoothing
+   * @param pairs how many rows have the row of the period before
+   * @param unpaired how many rows have not, first rows of plants among them
+   * @param singletons plants without any pair
+   * @param lasts the mean derivative of productivity by that of the period before
+   * @param others how many further solutions of the moments were found from other starts
+   * @param failed how many draws of plants have no solution
+   * @param proxySlope the slope of productivity on the proxy at given inputs
+   * @param parameters of every draw that has a solution, over the columns of the fit
+   * @param jointly the joint moments in their one-step form
+   */
+  record OfProxy(
+      String proxy,
+      List<String> free,
+      int basis,
+      double smoothedShare,
+      int pairs,
+      int unpaired,
+      List<String> singletons,
+      double lasts,
+      int others,
+      int failed,
+      double proxySlope,
+      List<double[]> parameters,
+      Fit jointly)
+      implements Particulars {
+    /** Copies the lists. */
+    public OfProxy {
+      free = List.copyOf(free);
+      singletons = List.copyOf(singletons);
+      parameters = List.copyOf(parameters);
+    }
+  }
 }

@@ -24,6 +24,9 @@ interface Refitting {
   /** The way for a fit. */
   static Optional<Refitting> of(Fit fit) {
     Specification specification = fit.specification();
+    if (fit.numbers().particulars() instanceof Particulars.OfProxy drawn) {
+      return Optional.of(new DrawnAlready(fit, drawn));
+    }
     boolean plain = fit.plantsStandAlone();
     if (plain && specification.form() instanceof LinearForm form) {
       return Optional.of(new LinearRefitting(fit, form));

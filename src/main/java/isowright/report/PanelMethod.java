@@ -60,6 +60,18 @@ final class PanelMethod {
               + "; the values not rejected however weak they are after "
               + citing.cite(Source.ANDERSON_RUBIN)
               + ".";
+      case "proxy" ->
+          "Inputs chosen knowing productivity by a control function "
+              + citing.cite(Source.ACKERBERG)
+              + ", which goes back to "
+              + citing.cite(Source.OLLEY, Source.LEVINSOHN)
+              + ": a polynomial in inputs and proxy frees output of its error; the innovations of"
+              + " what it leaves beside the technology are unrelated to inputs fixed beforehand and"
+              + " to free inputs of the period before, solved with as many moments as coefficients."
+              + " Errors are the spread over draws of whole plants. Cross-check by joint moments in"
+              + " their one-step form "
+              + citing.cite(Source.WOOLDRIDGE_JOINT)
+              + ", two-stage least squares with the proxy and states of the period before.";
       case "within" -> "Plant effects by deviations from plant means.";
       case "two-way" ->
           "Plant effects by deviations from plant means, period effects as a constant for each"

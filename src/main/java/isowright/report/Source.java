@@ -2,6 +2,10 @@ package isowright.report;
 
 /** The publications that the method section cites. */
 enum Source {
+  ACKERBERG(
+      "Ackerberg, Caves and Frazer 2015 | Ackerberg, D. A., Caves, K. and Frazer, G. (2015)",
+      "Identification Properties of Recent Production Function Estimators",
+      "Econometrica 83, 2411–2451"),
   AIGNER(
       "Aigner, Lovell and Schmidt 1977 | Aigner, D., Lovell, C. A. K. and Schmidt, P. (1977)",
       "Formulation and Estimation of Stochastic Frontier Production Function Models",
@@ -73,8 +77,7 @@ enum Source {
           + " Econometrics",
       "Review of Economic Studies 47, 239–253"),
   BROWN_CHRISTENSEN(
-      "Brown and Christensen 1981",
-      "Brown, R. S. and Christensen, L. R. (1981)",
+      "Brown and Christensen 1981 | Brown, R. S. and Christensen, L. R. (1981)",
       "Estimating Elasticities of Substitution in a Model of Partial Static Equilibrium",
       "in Berndt, E. R. and Field, B. C. (eds), Modeling and Measuring Natural Resource"
           + " Substitution, Cambridge: MIT Press, 209–229"),
@@ -100,13 +103,11 @@ enum Source {
       "Flexible Functional Forms and Global Curvature Conditions",
       "Econometrica 55, 43–68"),
   NEARY_ROBERTS(
-      "Neary and Roberts 1980",
-      "Neary, J. P. and Roberts, K. W. S. (1980)",
+      "Neary and Roberts 1980 | Neary, J. P. and Roberts, K. W. S. (1980)",
       "The Theory of Household Behaviour under Rationing",
       "European Economic Review 13, 25–42"),
   RYAN_WALES(
-      "Ryan and Wales 2000",
-      "Ryan, D. L. and Wales, T. J. (2000)",
+      "Ryan and Wales 2000 | Ryan, D. L. and Wales, T. J. (2000)",
       "Imposing Local Concavity in the Translog and Generalized Leontief Cost Functions",
       "Economics Letters 67, 253–260"),
   BAUMOL_PANZAR_WILLIG(
@@ -151,48 +152,39 @@ enum Source {
       "Smearing Estimate: A Nonparametric Retransformation Method",
       "Journal of the American Statistical Association 78, 605–610"),
   EFRON(
-      "Efron 1987",
-      "Efron, B. (1987)",
+      "Efron 1987 | Efron, B. (1987)",
       "Better Bootstrap Confidence Intervals",
       "Journal of the American Statistical Association 82, 171–185"),
   FARRELL(
-      "Farrell 1957",
-      "Farrell, M. J. (1957)",
+      "Farrell 1957 | Farrell, M. J. (1957)",
       "The Measurement of Productive Efficiency",
       "Journal of the Royal Statistical Society, Series A 120, 253–290"),
   GALLANT(
-      "Gallant and Golub 1984",
-      "Gallant, A. R. and Golub, G. H. (1984)",
+      "Gallant and Golub 1984 | Gallant, A. R. and Golub, G. H. (1984)",
       "Imposing Curvature Restrictions on Flexible Functional Forms",
       "Journal of Econometrics 26, 295–321"),
   GOLDFARB(
-      "Goldfarb and Idnani 1983",
-      "Goldfarb, D. and Idnani, A. (1983)",
+      "Goldfarb and Idnani 1983 | Goldfarb, D. and Idnani, A. (1983)",
       "A Numerically Stable Dual Method for Solving Strictly Convex Quadratic Programs",
       "Mathematical Programming 27, 1–33"),
   GUM(
-      "JCGM 2008",
-      "JCGM (2008)",
+      "JCGM 2008 | JCGM (2008)",
       "Evaluation of Measurement Data: Guide to the Expression of Uncertainty in Measurement",
       "JCGM 100:2008"),
   HALL(
-      "Hall and Jorgenson 1967",
-      "Hall, R. E. and Jorgenson, D. W. (1967)",
+      "Hall and Jorgenson 1967 | Hall, R. E. and Jorgenson, D. W. (1967)",
       "Tax Policy and Investment Behavior",
       "American Economic Review 57, 391–414"),
   HANOCH(
-      "Hanoch 1975",
-      "Hanoch, G. (1975)",
+      "Hanoch 1975 | Hanoch, G. (1975)",
       "The Elasticity of Scale and the Shape of Average Costs",
       "American Economic Review 65, 492–497"),
   HANSEN(
-      "Hansen 1982",
-      "Hansen, L. P. (1982)",
+      "Hansen 1982 | Hansen, L. P. (1982)",
       "Large Sample Properties of Generalized Method of Moments Estimators",
       "Econometrica 50, 1029–1054"),
   HAUSMAN(
-      "Hausman 1978",
-      "Hausman, J. A. (1978)",
+      "Hausman 1978 | Hausman, J. A. (1978)",
       "Specification Tests in Econometrics",
       "Econometrica 46, 1251–1271"),
   HICKS("Hicks 1932", "Hicks, J. R. (1932)", "The Theory of Wages", "London: Macmillan"),
@@ -201,8 +193,7 @@ enum Source {
       "Confidence Statements for Efficiency Estimates from Stochastic Frontier Models",
       "Journal of Productivity Analysis 7, 257–282"),
   HOTHORN(
-      "Hothorn, Bretz and Westfall 2008",
-      "Hothorn, T., Bretz, F. and Westfall, P. (2008)",
+      "Hothorn, Bretz and Westfall 2008 | Hothorn, T., Bretz, F. and Westfall, P. (2008)",
       "Simultaneous Inference in General Parametric Models",
       "Biometrical Journal 50, 346–363"),
   HUBER("Huber 1981", "Huber, P. J. (1981)", "Robust Statistics", "New York: Wiley"),
@@ -212,18 +203,15 @@ enum Source {
           + " Model",
       "Journal of Econometrics 19, 233–238"),
   JORGENSON(
-      "Jorgenson 1963",
-      "Jorgenson, D. W. (1963)",
+      "Jorgenson 1963 | Jorgenson, D. W. (1963)",
       "Capital Theory and Investment Behavior",
       "American Economic Review 53 (2), 247–259"),
   JUDGE(
-      "Judge and Takayama 1966",
-      "Judge, G. G. and Takayama, T. (1966)",
+      "Judge and Takayama 1966 | Judge, G. G. and Takayama, T. (1966)",
       "Inequality Restrictions in Regression Analysis",
       "Journal of the American Statistical Association 61, 166–181"),
   KLUMP(
-      "Klump and de La Grandville 2000",
-      "Klump, R. and de La Grandville, O. (2000)",
+      "Klump and de La Grandville 2000 | Klump, R. and de La Grandville, O. (2000)",
       "Economic Growth and the Elasticity of Substitution: Two Theorems and Some Suggestions",
       "American Economic Review 90, 282–291"),
   KODDE(
@@ -231,8 +219,7 @@ enum Source {
       "Wald Criteria for Jointly Testing Equality and Inequality Restrictions",
       "Econometrica 54, 1243–1248"),
   KOPP(
-      "Kopp and Diewert 1982",
-      "Kopp, R. J. and Diewert, W. E. (1982)",
+      "Kopp and Diewert 1982 | Kopp, R. J. and Diewert, W. E. (1982)",
       "The Decomposition of Frontier Cost Function Deviations into Measures of Technical and"
           + " Allocative Efficiency",
       "Journal of Econometrics 19, 319–331"),
@@ -240,9 +227,12 @@ enum Source {
       "de La Grandville 1989 | de La Grandville, O. (1989)",
       "In Quest of the Slutsky Diamond",
       "American Economic Review 79, 468–481"),
+  LEVINSOHN(
+      "Levinsohn and Petrin 2003 | Levinsohn, J. and Petrin, A. (2003)",
+      "Estimating Production Functions Using Inputs to Control for Unobservables",
+      "Review of Economic Studies 70, 317–341"),
   LIANG(
-      "Liang and Zeger 1986",
-      "Liang, K.-Y. and Zeger, S. L. (1986)",
+      "Liang and Zeger 1986 | Liang, K.-Y. and Zeger, S. L. (1986)",
       "Longitudinal Data Analysis Using Generalized Linear Models",
       "Biometrika 73, 13–22"),
   MACKINNON(
@@ -263,8 +253,7 @@ enum Source {
           + " Rankings?",
       "British Medical Journal 316, 1701–1705"),
   MONTIEL(
-      "Montiel Olea and Pflueger 2013",
-      "Montiel Olea, J. L. and Pflueger, C. (2013)",
+      "Montiel Olea and Pflueger 2013 | Montiel Olea, J. L. and Pflueger, C. (2013)",
       "A Robust Test for Weak Instruments",
       "Journal of Business and Economic Statistics 31, 358–369"),
   MEEUSEN(
@@ -297,8 +286,7 @@ enum Source {
       "Cost and Production Functions",
       "Princeton: Princeton University Press"),
   STAIGER(
-      "Staiger and Stock 1997",
-      "Staiger, D. and Stock, J. H. (1997)",
+      "Staiger and Stock 1997 | Staiger, D. and Stock, J. H. (1997)",
       "Instrumental Variables Regression with Weak Instruments",
       "Econometrica 65, 557–586"),
   SWAMY(
@@ -307,14 +295,16 @@ enum Source {
       "The Exact Finite Sample Properties of the Estimators of Coefficients in the"
           + " Error Components Regression Models",
       "Econometrica 40, 261–275"),
+  OLLEY(
+      "Olley and Pakes 1996 | Olley, G. S. and Pakes, A. (1996)",
+      "The Dynamics of Productivity in the Telecommunications Equipment Industry",
+      "Econometrica 64, 1263–1297"),
   SANDERSON(
-      "Sanderson and Windmeijer 2016",
-      "Sanderson, E. and Windmeijer, F. (2016)",
+      "Sanderson and Windmeijer 2016 | Sanderson, E. and Windmeijer, F. (2016)",
       "A Weak Instrument F-Test in Linear IV Models with Multiple Endogenous Variables",
       "Journal of Econometrics 190, 212–221"),
   SARGAN(
-      "Sargan 1958",
-      "Sargan, J. D. (1958)",
+      "Sargan 1958 | Sargan, J. D. (1958)",
       "The Estimation of Economic Relationships Using Instrumental Variables",
       "Econometrica 26, 393–415"),
   SATO(
@@ -346,9 +336,13 @@ enum Source {
       "Wooldridge, J. M. (2002)",
       "Econometric Analysis of Cross Section and Panel Data",
       "Cambridge, Massachusetts: MIT Press"),
+  WOOLDRIDGE_JOINT(
+      "Wooldridge 2009 | Wooldridge, J. M. (2009)",
+      "On Estimating Firm-Level Production Functions Using Proxy Variables to Control for"
+          + " Unobservables",
+      "Economics Letters 104, 112–114"),
   WU(
-      "Wu 1973",
-      "Wu, D.-M. (1973)",
+      "Wu 1973 | Wu, D.-M. (1973)",
       "Alternative Tests of Independence between Stochastic Regressors and Disturbances",
       "Econometrica 41, 733–750"),
   ZELLNER(

@@ -189,7 +189,8 @@ final class Terms {
       case "least-squares" -> "Least squares";
       case "instruments" -> "Two-stage least squares";
       case "proxy" -> "Control function";
-      case "joint-moments" -> "Joint moments";
+      case "joint-moments" -> "Joint moments in one step";
+      case "least-squares-within" -> "Least squares within plants";
       default -> word;
     };
   }

@@ -26,10 +26,15 @@ import java.util.stream.Collectors;
 final class EndogeneityStage {
 
   private final Fit fit;
+  private final List<Estimator> asked;
   private final Optional<InstrumentFindings> instruments;
 
-  EndogeneityStage(Fit fit) {
+  /**
+   * @param asked the principles asked for; the fit rests on the first
+   */
+  EndogeneityStage(Fit fit, List<Estimator> asked) {
     this.fit = fit;
+    this.asked = List.copyOf(asked);
     this.instruments = InstrumentFindings.of(fit);
   }
 
@@ -40,10 +45,11 @@ final class EndogeneityStage {
 
   /** Of a fit that has no numbers: what was asked and what was expected. */
   static EndogeneityFindings unusable(Fit fit) {
-    if (!(fit.specification().estimator() instanceof Estimator.Instruments by)) {
+    Estimator by = fit.specification().estimator();
+    List<String> inputs = chosen(fit);
+    if (inputs.isEmpty()) {
       return EndogeneityFindings.NONE;
     }
-    List<String> inputs = List.copyOf(by.byInput().keySet());
     return new EndogeneityFindings(
         by.word(),
         inputs,
@@ -57,6 +63,17 @@ final class EndogeneityStage {
         List.of());
   }
 
+  /** The inputs taken to be chosen knowing productivity; none with other estimators. */
+  private static List<String> chosen(Fit fit) {
+    Estimator by = fit.specification().estimator();
+    if (by instanceof Estimator.Instruments instruments) {
+      return List.copyOf(instruments.byInput().keySet());
+    }
+    return by instanceof Estimator.Proxy proxy
+        ? fit.panel().inputs().stream().filter(i -> !proxy.states().contains(i)).toList()
+        : List.of();
+  }
+
   /**
    * What was found.
    *
@@ -64,19 +81,20 @@ final class EndogeneityStage {
    * @param scale of this fit
    */
   EndogeneityFindings findings(Map<String, Figure> elasticities, Figure scale) {
+    if (fit.numbers().particulars() instanceof Particulars.OfProxy by) {
+      return new ProxyStage(fit, by).findings(chosen(fit), own(elasticities, scale), others());
+    }
     if (instruments.isEmpty()) {
       return EndogeneityFindings.NONE;
     }
-    Estimator.Instruments asked = (Estimator.Instruments) fit.specification().estimator();
     Particulars.OfInstruments by = (Particulars.OfInstruments) fit.numbers().particulars();
-    List<String> inputs = List.copyOf(asked.byInput().keySet());
-    List<Beside> beside =
-        List.of(
-            new Beside(
-                asked.word(), "", fit.numbers().linear().rows(), elasticities, Optional.of(scale)),
-            beside("least-squares", "on the same rows", Estimation.leastSquaresBeside(fit)));
+    List<String> inputs = chosen(fit);
+    List<Beside> beside = new ArrayList<>();
+    beside.add(own(elasticities, scale));
+    beside.add(beside("least-squares", "on the same rows", Estimation.leastSquaresBeside(fit)));
+    beside.addAll(others());
     return new EndogeneityFindings(
-        asked.word(),
+        fit.specification().estimator().word(),
         inputs,
         by.series(),
         by.rowsUnknown(),
@@ -88,7 +106,27 @@ final class EndogeneityStage {
         words(inputs, beside));
   }
 
-  private static Beside beside(String word, String note, Fit other) {
+  private Beside own(Map<String, Figure> elasticities, Figure scale) {
+    return new Beside(
+        fit.specification().estimator().word(),
+        "",
+        fit.numbers().linear().rows(),
+        elasticities,
+        Optional.of(scale));
+  }
+
+  /** The other principles asked for, each fitted to the same records. */
+  private List<Beside> others() {
+    return asked.stream()
+        .filter(other -> !other.equals(fit.specification().estimator()))
+        .map(
+            other ->
+                beside(
+                    other.word(), "", Estimation.fit(fit.panel(), fit.specification().by(other))))
+        .toList();
+  }
+
+  static Beside beside(String word, String note, Fit other) {
     if (!other.state().usable()) {
       return new Beside(word, String.join(" ", other.reasons()), 0, Map.of(), Optional.empty());
     }
@@ -209,6 +247,9 @@ final class EndogeneityStage {
   /** What must be said of it. */
   List<Said> remarks() {
     List<Said> remarks = new ArrayList<>();
+    if (fit.numbers().particulars() instanceof Particulars.OfProxy by) {
+      return new ProxyStage(fit, by).remarks();
+    }
     if (instruments.isEmpty()) {
       return remarks;
     }

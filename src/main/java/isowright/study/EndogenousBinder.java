@@ -1,6 +1,7 @@
 package isowright.study;
 
 import isowright.estimation.Estimator;
+import isowright.estimation.Replication.Drawing;
 import isowright.estimation.Series;
 import isowright.estimation.Specification.PlantEffects;
 import isowright.estimation.Specification.RegularityImposed;
@@ -20,8 +21,8 @@ import java.util.regex.Pattern;
 
 /**
  * Reads what is to be done about inputs that are chosen knowing productivity: {@code instruments}
- * of {@code estimation}, held against the columns declared, the forms asked and the treatment of
- * plants and time.
+ * and {@code proxy} of {@code estimation}, held against the columns declared, the forms asked and
+ * the treatment of plants and time.
  */
 final class EndogenousBinder {
 
@@ -39,12 +40,21 @@ final class EndogenousBinder {
     this.technologies = List.copyOf(technologies);
   }
 
-  /** The principles asked for, in the order in which they are taken; none: least squares. */
-  List<Estimator> bind(EffectsBinder.Effects effects, Study.Held held) {
+  /**
+   * The principles asked for, in the order in which they are taken; none: least squares.
+   *
+   * @param resampling how plants are drawn, where the study says so
+   */
+  List<Estimator> bind(
+      EffectsBinder.Effects effects, Study.Held held, Optional<Drawing> resampling) {
     List<Estimator> all = new ArrayList<>();
     instruments(effects).ifPresent(all::add);
     if (section.has("instruments")) {
       forms("instruments", held);
+    }
+    new ProxyBinder(section, declared).bind(effects, resampling).ifPresent(all::add);
+    if (section.has("proxy")) {
+      forms("proxy", held);
     }
     return all;
   }
@@ -55,6 +65,8 @@ final class EndogenousBinder {
     for (Estimator estimator : estimators) {
       if (estimator instanceof Estimator.Instruments instruments) {
         instruments.byInput().values().forEach(all -> all.forEach(s -> names.add(s.name())));
+      } else if (estimator instanceof Estimator.Proxy proxy) {
+        names.add(proxy.column().name());
       }
     }
     names.removeAll(declared.inputs());
@@ -85,6 +97,13 @@ final class EndogenousBinder {
                     settings.put(
                         "estimation.instruments." + input,
                         String.join(", ", series.stream().map(Series::word).toList())));
+      } else if (estimator instanceof Estimator.Proxy proxy) {
+        settings.put("estimation.proxy.column", proxy.column().name());
+        settings.put("estimation.proxy.state", String.join(", ", proxy.states()));
+        settings.put("estimation.proxy.degree", Integer.toString(proxy.degree()));
+        settings.put("estimation.proxy.process", Integer.toString(proxy.process()));
+        settings.put("estimation.proxy.draws", Integer.toString(proxy.drawing().draws()));
+        settings.put("estimation.proxy.seed", Long.toString(proxy.drawing().seed()));
       }
     }
     return settings;
@@ -234,7 +253,8 @@ final class EndogenousBinder {
     return refusal.isEmpty();
   }
 
-  private static Optional<String> refusal(String name, Roles roles) {
+  /** Why a column of that role can neither be an instrument nor a proxy, if so. */
+  static Optional<String> refusal(String name, Roles roles) {
     if (roles.output().equals(name)) {
       return Optional.of(
           "is output, and carries the very productivity that an instrument must not know; name a"
@@ -267,10 +287,11 @@ final class EndogenousBinder {
               + plants.word()
               + "`; set plant-effects to none, within or differences");
     }
-    biased("instruments", effects);
+    biased(section, "instruments", effects);
   }
 
-  private void biased(String key, EffectsBinder.Effects effects) {
+  /** Adds the mistake that a biased trend stands beside. */
+  static void biased(YamlSection section, String key, EffectsBinder.Effects effects) {
     if (effects.time() == Time.BIASED_TREND) {
       section.refuse(
           key,

@@ -128,7 +128,7 @@ final class FitStage {
     List<FitFindings.Pair> substitution = elasticities.substitution();
     FitStatistics statistics = numbers.statistics();
     FitFindings.Regular regular = RegularityFindings.of(fit);
-    EndogeneityStage endogenous = new EndogeneityStage(fit);
+    EndogeneityStage endogenous = new EndogeneityStage(fit, study.estimation().estimators());
     List<Verdict> verdicts = verdicts(fit.examined());
     verdicts.addAll(endogenous.verdicts());
     List<Said> others = new ArrayList<>(other.remarks(robustness, output, scale));

@@ -62,10 +62,11 @@ final class StudyBinder {
           "zeros",
           "missing-values",
           "instruments",
+          "proxy",
           "nests",
           "regularity",
           "frontier");
-  private static final List<String> ESTIMATION_LATER = List.of("proxy");
+  private static final List<String> ESTIMATION_LATER = List.of();
 
   private final Path file;
   private final Optional<Source> recordsInstead;
@@ -214,7 +215,9 @@ final class StudyBinder {
     new FrontierBinder(section, declared, technologies)
         .bind(effects.plants(), errors)
         .ifPresent(estimators::add);
-    estimators.addAll(new EndogenousBinder(section, declared, technologies).bind(effects, held));
+    var resampling = ResamplingBinder.read(section, !technologies.isEmpty());
+    estimators.addAll(
+        new EndogenousBinder(section, declared, technologies).bind(effects, held, resampling));
     return new Estimation(
         effects.plants(),
         effects.time(),
@@ -224,7 +227,7 @@ final class StudyBinder {
         confidence(section),
         estimators,
         held,
-        ResamplingBinder.read(section, !technologies.isEmpty()));
+        resampling);
   }
 
   private static void checkColumns(YamlSection section, StandardErrors kind, Declared declared) {

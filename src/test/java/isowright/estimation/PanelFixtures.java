@@ -241,4 +241,26 @@ public final class PanelFixtures {
         controlColumns,
         Optional.empty());
   }
+
+  /** A panel with further columns, of the same rows. */
+  public static Panel withFurther(Panel panel, List<Column> further) {
+    return new Panel(
+        panel.roles().withFurther(further.stream().map(Column::name).toList()),
+        panel.plants(),
+        panel.plantStarts(),
+        panel.periods(),
+        panel.periodNumbers(),
+        panel.rowPeriods(),
+        panel.fileRows(),
+        panel.output(),
+        panel.logOutput(),
+        panel.quantities(),
+        panel.logQuantities(),
+        panel.prices(),
+        panel.spending(),
+        panel.controls(),
+        panel.filedCost(),
+        further,
+        Optional.empty());
+  }
 }

@@ -25,7 +25,7 @@ class EndogenousInputsTest {
    */
   private static String rows() {
     Random random = new Random(20240613);
-    StringBuilder text = new StringBuilder("plant,year,q,hours,units,wage,bonus,flat\n");
+    StringBuilder text = new StringBuilder("plant,year,q,hours,units,wage,bonus,flat,material\n");
     for (int p = 0; p < 40; p++) {
       double omega = 0.3 * random.nextGaussian();
       for (int t = 0; t < 8; t++) {
@@ -38,14 +38,15 @@ class EndogenousInputsTest {
           text.append(
               String.format(
                   Locale.ROOT,
-                  "P%02d,%d,%.6f,%.6f,%.6f,%.4f,%.4f,7%n",
+                  "P%02d,%d,%.6f,%.6f,%.6f,%.4f,%.4f,7,%.6f%n",
                   p,
                   2010 + t,
                   Math.exp(y),
                   Math.exp(l),
                   Math.exp(k),
                   Math.exp(wage),
-                  random.nextGaussian()));
+                  random.nextGaussian(),
+                  Math.exp(2 + 0.5 * k + omega)));
         }
       }
     }
@@ -102,6 +103,41 @@ class EndogenousInputsTest {
     assertThat(findings.plans().get(0).status()).isEqualTo("solved");
     assertThat(findings.run().settings())
         .containsEntry("estimation.instruments.labour", "wage, lag wage");
+  }
+
+  @Test
+  void aControlFunctionStandsBesideItsCrossCheckAndLeastSquares() throws Exception {
+    Findings findings =
+        run(
+            "{proxy: {column: material, state: [machines]}, resampling: {draws: 99, seed: 5},"
+                + " instruments: {labour: [wage]}}");
+    // The first principle named is the one that the technology rests on.
+    assertThat(findings.fits().get(0).endogeneity().estimator()).isEqualTo("instruments");
+    assertThat(findings.fits().get(0).endogeneity().beside())
+        .extracting(Beside::estimator)
+        .containsExactly("instruments", "least-squares", "proxy");
+    findings =
+        run(
+            "{proxy: {column: material, state: [machines], process: 1}, resampling: {draws: 99,"
+                + " seed: 5}}");
+    Fitted fit = findings.fits().get(0);
+    EndogeneityFindings found = fit.endogeneity();
+    assertThat(found.estimator()).isEqualTo("proxy");
+    assertThat(found.inputs()).containsExactly("labour");
+    assertThat(found.beside())
+        .extracting(Beside::estimator)
+        .containsExactly("proxy", "joint-moments", "least-squares", "least-squares-within");
+    // Five successive pairs a plant: the fourth year is missing.
+    assertThat(found.shifts()).contains("on 200 rows that have the row of the period before");
+    assertThat(fit.remarks())
+        .extracting(Findings.Said::code)
+        .contains("proxy-monotone")
+        .doesNotContain("proxy-falls");
+    assertThat(fit.how().covarianceWords()).contains("99 draws of whole plants (seed 5)");
+    assertThat(findings.run().settings())
+        .containsEntry("estimation.proxy.column", "material")
+        .containsEntry("estimation.proxy.draws", "99");
+    assertThat(findings.plans().get(0).cost()).isPresent();
   }
 
   @Test
