@@ -123,4 +123,24 @@ class CostReviewTest {
               assertThat(refused.mistakes().get(0).message()).contains("filed", "row 63");
             });
   }
+
+  /** Cost functions have no frontier to be held against. */
+  @Test
+  void aFrontierIsNoReferenceOfCostFunctions() {
+    assertThatThrownBy(
+            () ->
+                study(
+                    "25",
+                    "  against: frontier\n"
+                        + "estimation: {frontier: {inefficiency: half-normal}}\n"))
+        .isInstanceOfSatisfying(
+            StudyRefused.class,
+            refused -> {
+              assertThat(refused.mistakes())
+                  .extracting(Mistake::key)
+                  .contains("filing.against", "estimation.frontier");
+              assertThat(refused.mistakes().get(0).message())
+                  .contains("production functions alone");
+            });
+  }
 }
