@@ -25,6 +25,17 @@ columns <- function(d, form) {
 }
 clustered <- function(m, id) vcovCL(m, cluster = id, type = "HC1", cadjust = TRUE)
 wald <- function(b, v, k) as.numeric(t(b[k]) %*% solve(v[k, k]) %*% b[k]) / length(k)
+# Refits without each plant (the transformation of random effects kept), and Hotelling's F of their covariance.
+jackknife <- function(m, id) {
+  X <- model.matrix(m); y <- model.response(model.frame(m)); b <- coef(m); ids <- unique(as.character(id))
+  D <- sapply(ids, function(g) { keep <- as.character(id) != g; coef(lm.fit(X[keep, , drop = FALSE], y[keep])) - b })
+  D[is.na(D)] <- 0
+  (length(ids) - 1) / length(ids) * D %*% t(D)
+}
+hotelling <- function(m, id, k) {
+  G <- length(unique(as.character(id)))
+  wald(coef(m), jackknife(m, id), k) * (G - length(k)) / (G - 1)
+}
 run <- function(panel, d, form) {
   x <- columns(d, form); names <- colnames(x); K <- ncol(x)
   colnames(x) <- paste0("x", seq_len(K))
@@ -64,7 +75,7 @@ run <- function(panel, d, form) {
   # tests
   means <- (K + 2):(2 * K + 1)
   one("test", "plant-means", wald(coef(mundlak), vcov(mundlak), means))
-  one("test", "plant-means-clustered", wald(coef(mundlak), v, means))
+  one("test", "plant-means-clustered", hotelling(mundlak, state, means))
   one("test", "plant-effects", pFtest(inside, pooled)$statistic)
   one("test", "plant-variance", plmtest(pooled, type = "bp")$statistic)
   one("test", "random-against-within", phtest(inside, random)$statistic)
@@ -92,7 +103,7 @@ run <- function(panel, d, form) {
     v <- clustered(l, state)
     put(paste0(kind, "-trend"), coef(l), sqrt(diag(v)), n)
     if (kind == "biased") {
-      one("test", "neutral-technical-change", wald(coef(l), v, (K + 3):(K + 5)))
+      one("test", "neutral-technical-change", hotelling(l, state, (K + 3):(K + 5)))
     }
     rate <- c(rep(0, K), 1, mean(t), if (kind == "biased") colMeans(z))
     put(paste0(kind, "-rate"), sum(rate * coef(l)), sqrt(t(rate) %*% v %*% rate), "mean")

@@ -82,10 +82,8 @@ public final class Hypotheses {
   }
 
   private Verdict verdict(Null tested) {
-    double f =
-        LinearRestrictions.statistic(tested.departure(), tested.jacobian(), numbers.covariance());
-    return Verdict.of(
-        tested.name(), tested.nullHypothesis(), f, new Law.F(tested.departure().length, degrees()));
+    JointTest test = JointTest.of(fit, tested.departure(), tested.jacobian(), degrees());
+    return Verdict.of(tested.name(), tested.nullHypothesis(), test.statistic(), test.law());
   }
 
   /** The form's restrictions that it does not obey by itself, from the strongest to the weakest. */

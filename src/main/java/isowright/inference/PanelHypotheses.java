@@ -170,14 +170,12 @@ final class PanelHypotheses {
     Solution solution = with.numbers();
     int[] places =
         places(solution.names(), name -> name.startsWith("mean:") && !ofTime(name.substring(5)));
-    return wald(
+    return joint(
         "plant-means",
         "plant means of inputs and controls add nothing, so that plant effects may be taken as"
             + " unrelated to them",
         places,
-        solution.parameters(),
-        solution.covariance(),
-        solution.covarianceSource().degreesOfFreedom());
+        with);
   }
 
   private Optional<Verdict> poolability() {
@@ -235,15 +233,13 @@ final class PanelHypotheses {
     if (specification.time() != Time.BIASED_TREND) {
       return Optional.empty();
     }
-    return wald(
+    return joint(
         "neutral-technical-change",
         "technical change is neutral: it leaves every output elasticity as it was",
         places(
             numbers.names(),
             name -> name.endsWith("*trend") && panel.inputs().contains(input(name))),
-        numbers.parameters(),
-        numbers.covariance(),
-        numbers.covarianceSource().degreesOfFreedom());
+        fit);
   }
 
   private static String input(String name) {
@@ -257,6 +253,23 @@ final class PanelHypotheses {
 
   private static int[] places(List<String> names, java.util.function.Predicate<String> wanted) {
     return IntStream.range(0, names.size()).filter(k -> wanted.test(names.get(k))).toArray();
+  }
+
+  /** That some parameters of a fit are zero. */
+  private static Optional<Verdict> joint(String name, String null0, int[] places, Fit of) {
+    if (places.length == 0) {
+      return Optional.empty();
+    }
+    Solution solution = of.numbers();
+    double[][] rows = new double[places.length][solution.parameters().length];
+    double[] departure = new double[places.length];
+    for (int i = 0; i < places.length; i++) {
+      rows[i][places[i]] = 1;
+      departure[i] = solution.parameters()[places[i]];
+    }
+    JointTest test =
+        JointTest.of(of, departure, rows, solution.covarianceSource().degreesOfFreedom());
+    return Optional.of(Verdict.of(name, null0, test.statistic(), test.law()));
   }
 
   private static Optional<Verdict> wald(

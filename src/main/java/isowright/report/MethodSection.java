@@ -219,6 +219,10 @@ final class MethodSection {
               "Covariance clustered by plant, factor G/(G − 1) · (N − 1)/(N − K), with t quantiles"
                   + " on G − 1 degrees of freedom "
                   + cite(Source.LIANG, Source.CAMERON)
+                  + ". Tests of several restrictions at once take the covariance over plants left"
+                  + " out, one at a time, and Hotelling’s law F(q, G − q): where plants are few the"
+                  + " clustered covariance would reject far too often "
+                  + cite(Source.BELL, Source.HOTELLING, Source.MACKINNON_GUIDE)
                   + "."));
     }
     if (with("robust") || with("hc3")) {

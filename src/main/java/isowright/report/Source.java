@@ -59,6 +59,11 @@ enum Source {
       "Frontier Production Functions, Technical Efficiency and Panel Data: With Application to"
           + " Paddy Farmers in India",
       "Journal of Productivity Analysis 3, 153–169"),
+  BELL(
+      "Bell and McCaffrey 2002",
+      "Bell, R. M. and McCaffrey, D. F. (2002)",
+      "Bias Reduction in Standard Errors for Linear Regression with Multi-Stage Samples",
+      "Survey Methodology 28, 169–181"),
   BELSLEY(
       "Belsley, Kuh and Welsch 1980 | Belsley, D. A., Kuh, E. and Welsch, R. E. (1980)",
       "Regression Diagnostics",
@@ -192,6 +197,11 @@ enum Source {
       "Horrace and Schmidt 1996 | Horrace, W. C. and Schmidt, P. (1996)",
       "Confidence Statements for Efficiency Estimates from Stochastic Frontier Models",
       "Journal of Productivity Analysis 7, 257–282"),
+  HOTELLING(
+      "Hotelling 1931",
+      "Hotelling, H. (1931)",
+      "The Generalization of Student’s Ratio",
+      "Annals of Mathematical Statistics 2, 360–378"),
   HOTHORN(
       "Hothorn, Bretz and Westfall 2008 | Hothorn, T., Bretz, F. and Westfall, P. (2008)",
       "Simultaneous Inference in General Parametric Models",
@@ -241,6 +251,11 @@ enum Source {
       "Some Heteroskedasticity-Consistent Covariance Matrix Estimators with Improved Finite Sample"
           + " Properties",
       "Journal of Econometrics 29, 305–325"),
+  MACKINNON_GUIDE(
+      "MacKinnon, Nielsen and Webb 2023",
+      "MacKinnon, J. G., Nielsen, M. Ø. and Webb, M. D. (2023)",
+      "Cluster-Robust Inference: A Guide to Empirical Practice",
+      "Journal of Econometrics 232, 272–299"),
   MARSCHAK(
       "Marschak and Andrews 1944",
       "Marschak, J. and Andrews, W. H. (1944)",

@@ -14,9 +14,6 @@ import isowright.technology.CobbDouglas;
 import isowright.technology.Elasticities;
 import isowright.technology.Form;
 import isowright.technology.Technology;
-import java.io.IOException;
-import java.nio.file.Files;
-import java.nio.file.Path;
 import java.util.List;
 import java.util.Locale;
 import java.util.SplittableRandom;
@@ -47,7 +44,7 @@ class CoverageTest {
   private record Drawn(Panel panel, Technology truth) {}
 
   @Test
-  void intervalsOfScaleAndLeastCostCover() throws IOException {
+  void intervalsOfScaleAndLeastCostCover() {
     boolean[][] covered =
         IntStream.range(0, PANELS)
             .parallel()
@@ -62,8 +59,7 @@ class CoverageTest {
       table.append(String.format(Locale.ROOT, "%-20s %.3f%n", names[k], coverage));
       assertThat(coverage).as(names[k]).isBetween(.93, .97);
     }
-    Files.createDirectories(Path.of("target"));
-    Files.writeString(Path.of("target/coverage.txt"), table);
+    SimulationTable.write("coverage-within", table.toString());
   }
 
   private static boolean[] covered(int seed) {

@@ -8,9 +8,6 @@ import isowright.estimation.Fit;
 import isowright.estimation.FrontierPanels;
 import isowright.inference.Inefficiency.Variances;
 import isowright.regression.OneSidedLaw;
-import java.io.IOException;
-import java.nio.file.Files;
-import java.nio.file.Path;
 import java.util.LinkedHashMap;
 import java.util.Locale;
 import java.util.Map;
@@ -34,7 +31,7 @@ class FrontierCoverageTest {
   private static final int PANELS = 1000;
 
   @Test
-  void intervalsCoverAndTheTestKeepsItsSize() throws IOException {
+  void intervalsCoverAndTheTestKeepsItsSize() {
     Map<String, Double> coverage = new TreeMap<>();
     coverage.putAll(shares("rows, half-normal: ", FrontierCoverageTest::rows));
     coverage.putAll(shares("plants, decay: ", FrontierCoverageTest::decaying));
@@ -42,8 +39,7 @@ class FrontierCoverageTest {
     StringBuilder table = new StringBuilder();
     coverage.forEach((name, share) -> table.append(line(name, share)));
     size.forEach((name, share) -> table.append(line(name, share)));
-    Files.createDirectories(Path.of("target"));
-    Files.writeString(Path.of("target/coverage-frontier.txt"), table);
+    SimulationTable.write("coverage-frontier", table.toString());
     coverage.forEach((name, share) -> assertThat(share).as(name).isBetween(.93, .97));
     size.forEach((name, share) -> assertThat(share).as(name).isBetween(.03, .07));
   }

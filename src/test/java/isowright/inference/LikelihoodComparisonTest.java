@@ -12,9 +12,6 @@ import isowright.regression.Groups;
 import isowright.regression.LeastSquares;
 import isowright.regression.LikelihoodComparison;
 import isowright.regression.LikelihoodComparison.Correction;
-import java.io.IOException;
-import java.nio.file.Files;
-import java.nio.file.Path;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Locale;
@@ -130,7 +127,7 @@ class LikelihoodComparisonTest {
    */
   @Test
   @Tag("slow")
-  void sizesLieNearFivePerCent() throws IOException {
+  void sizesLieNearFivePerCent() {
     StringBuilder table = new StringBuilder();
     double[] sizes = new double[4];
     String[] names = {
@@ -158,8 +155,7 @@ class LikelihoodComparisonTest {
               / 3000.0;
       table.append(String.format(Locale.ROOT, "%-16s %.4f%n", names[setting], sizes[setting]));
     }
-    Files.createDirectories(Path.of("target"));
-    Files.writeString(Path.of("target/comparison-sizes.txt"), table);
+    SimulationTable.write("sizes-vuong", table.toString());
     for (double size : sizes) {
       assertThat(size).isBetween(.03, .07);
     }

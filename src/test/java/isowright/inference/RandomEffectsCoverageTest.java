@@ -17,9 +17,6 @@ import isowright.records.Panel;
 import isowright.technology.CobbDouglas;
 import isowright.technology.Elasticities;
 import isowright.technology.Form;
-import java.io.IOException;
-import java.nio.file.Files;
-import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
@@ -53,7 +50,7 @@ class RandomEffectsCoverageTest {
   private record Drawn(Panel panel, double levelOfFirst) {}
 
   @Test
-  void intervalsCover() throws IOException {
+  void intervalsCover() {
     boolean[][] covered =
         IntStream.range(0, PANELS)
             .parallel()
@@ -69,8 +66,7 @@ class RandomEffectsCoverageTest {
           IntStream.range(0, PANELS).filter(s -> covered[s][figure]).count() / (double) PANELS;
       table.append(String.format(Locale.ROOT, "%-28s %.3f%n", names[k], coverage));
     }
-    Files.createDirectories(Path.of("target"));
-    Files.writeString(Path.of("target/coverage-random-effects.txt"), table);
+    SimulationTable.write("coverage-random-effects", table.toString());
     for (int k = 0; k < names.length; k++) {
       int figure = k;
       double coverage =

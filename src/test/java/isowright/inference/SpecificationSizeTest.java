@@ -9,9 +9,6 @@ import isowright.estimation.Specification.PlantEffects;
 import isowright.estimation.Specification.StandardErrors;
 import isowright.records.Panel;
 import isowright.technology.Form;
-import java.io.IOException;
-import java.nio.file.Files;
-import java.nio.file.Path;
 import java.util.List;
 import java.util.Locale;
 import java.util.function.IntFunction;
@@ -71,7 +68,7 @@ class SpecificationSizeTest {
   }
 
   @Test
-  void sizesLieNearFivePerCent() throws IOException {
+  void sizesLieNearFivePerCent() {
     List<String> heteroskedasticity = List.of("reset", "breusch-pagan", "white");
     StringBuilder table = new StringBuilder();
     hold(
@@ -101,8 +98,7 @@ class SpecificationSizeTest {
                 SimulatedPanels.cobbDouglas(draw, 80, 6, 0),
                 PlantEffects.WITHIN,
                 StandardErrors.CLASSICAL));
-    Files.createDirectories(Path.of("target"));
-    Files.writeString(Path.of("target/specification-sizes.txt"), table);
+    SimulationTable.write("sizes-specification", table.toString());
     assertThat(table.toString().lines().filter(line -> line.endsWith("outside")).toList())
         .isEmpty();
   }
