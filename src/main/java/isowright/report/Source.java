@@ -60,8 +60,7 @@ enum Source {
           + " Paddy Farmers in India",
       "Journal of Productivity Analysis 3, 153–169"),
   BELL(
-      "Bell and McCaffrey 2002",
-      "Bell, R. M. and McCaffrey, D. F. (2002)",
+      "Bell and McCaffrey 2002 | Bell, R. M. and McCaffrey, D. F. (2002)",
       "Bias Reduction in Standard Errors for Linear Regression with Multi-Stage Samples",
       "Survey Methodology 28, 169–181"),
   BELSLEY(
@@ -198,8 +197,7 @@ enum Source {
       "Confidence Statements for Efficiency Estimates from Stochastic Frontier Models",
       "Journal of Productivity Analysis 7, 257–282"),
   HOTELLING(
-      "Hotelling 1931",
-      "Hotelling, H. (1931)",
+      "Hotelling 1931 | Hotelling, H. (1931)",
       "The Generalization of Student’s Ratio",
       "Annals of Mathematical Statistics 2, 360–378"),
   HOTHORN(
@@ -252,8 +250,7 @@ enum Source {
           + " Properties",
       "Journal of Econometrics 29, 305–325"),
   MACKINNON_GUIDE(
-      "MacKinnon, Nielsen and Webb 2023",
-      "MacKinnon, J. G., Nielsen, M. Ø. and Webb, M. D. (2023)",
+      "MacKinnon, Nielsen and Webb 2023 | MacKinnon, J. G., Nielsen, M. Ø. and Webb, M. D. (2023)",
       "Cluster-Robust Inference: A Guide to Empirical Practice",
       "Journal of Econometrics 232, 272–299"),
   MARSCHAK(
