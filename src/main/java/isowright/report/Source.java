@@ -244,8 +244,7 @@ enum Source {
       "Longitudinal Data Analysis Using Generalized Linear Models",
       "Biometrika 73, 13–22"),
   MACKINNON(
-      "MacKinnon and White 1985",
-      "MacKinnon, J. G. and White, H. (1985)",
+      "MacKinnon and White 1985 | MacKinnon, J. G. and White, H. (1985)",
       "Some Heteroskedasticity-Consistent Covariance Matrix Estimators with Improved Finite Sample"
           + " Properties",
       "Journal of Econometrics 29, 305–325"),
@@ -254,13 +253,11 @@ enum Source {
       "Cluster-Robust Inference: A Guide to Empirical Practice",
       "Journal of Econometrics 232, 272–299"),
   MARSCHAK(
-      "Marschak and Andrews 1944",
-      "Marschak, J. and Andrews, W. H. (1944)",
+      "Marschak and Andrews 1944 | Marschak, J. and Andrews, W. H. (1944)",
       "Random Simultaneous Equations and the Theory of Production",
       "Econometrica 12, 143–205"),
   MARSHALL(
-      "Marshall and Spiegelhalter 1998",
-      "Marshall, E. C. and Spiegelhalter, D. J. (1998)",
+      "Marshall and Spiegelhalter 1998 | Marshall, E. C. and Spiegelhalter, D. J. (1998)",
       "League Tables of In Vitro Fertilisation Clinics: How Confident Can We Be About the"
           + " Rankings?",
       "British Medical Journal 316, 1701–1705"),
@@ -273,19 +270,16 @@ enum Source {
       "Efficiency Estimation from Cobb-Douglas Production Functions with Composed Error",
       "International Economic Review 18, 435–444"),
   MUNDLAK(
-      "Mundlak 1978",
-      "Mundlak, Y. (1978)",
+      "Mundlak 1978 | Mundlak, Y. (1978)",
       "On the Pooling of Time Series and Cross Section Data",
       "Econometrica 46, 69–85"),
   NEWEY(
-      "Newey and West 1987",
-      "Newey, W. K. and West, K. D. (1987)",
+      "Newey and West 1987 | Newey, W. K. and West, K. D. (1987)",
       "A Simple, Positive Semi-Definite, Heteroskedasticity and Autocorrelation Consistent"
           + " Covariance Matrix",
       "Econometrica 55, 703–708"),
   NEWEY_LAGS(
-      "Newey and West 1994",
-      "Newey, W. K. and West, K. D. (1994)",
+      "Newey and West 1994 | Newey, W. K. and West, K. D. (1994)",
       "Automatic Lag Selection in Covariance Matrix Estimation",
       "Review of Economic Studies 61, 631–653"),
   SCHMIDT_SICKLES(
@@ -293,8 +287,7 @@ enum Source {
       "Production Frontiers and Panel Data",
       "Journal of Business and Economic Statistics 2, 367–374"),
   SHEPHARD(
-      "Shephard 1953",
-      "Shephard, R. W. (1953)",
+      "Shephard 1953 | Shephard, R. W. (1953)",
       "Cost and Production Functions",
       "Princeton: Princeton University Press"),
   STAIGER(
@@ -302,8 +295,7 @@ enum Source {
       "Instrumental Variables Regression with Weak Instruments",
       "Econometrica 65, 557–586"),
   SWAMY(
-      "Swamy and Arora 1972",
-      "Swamy, P. A. V. B. and Arora, S. S. (1972)",
+      "Swamy and Arora 1972 | Swamy, P. A. V. B. and Arora, S. S. (1972)",
       "The Exact Finite Sample Properties of the Estimators of Coefficients in the"
           + " Error Components Regression Models",
       "Econometrica 40, 261–275"),
@@ -320,13 +312,11 @@ enum Source {
       "The Estimation of Economic Relationships Using Instrumental Variables",
       "Econometrica 26, 393–415"),
   SATO(
-      "Sato 1967",
-      "Sato, K. (1967)",
+      "Sato 1967 | Sato, K. (1967)",
       "A Two-Level Constant-Elasticity-of-Substitution Production Function",
       "Review of Economic Studies 34, 201–218"),
   UZAWA(
-      "Uzawa 1962",
-      "Uzawa, H. (1962)",
+      "Uzawa 1962 | Uzawa, H. (1962)",
       "Production Functions with Constant Elasticities of Substitution",
       "Review of Economic Studies 29, 291–299"),
   WALDMAN(
@@ -334,18 +324,15 @@ enum Source {
       "A Stationary Point for the Stochastic Frontier Likelihood",
       "Journal of Econometrics 18, 275–279"),
   WALLACE(
-      "Wallace and Hussain 1969",
-      "Wallace, T. D. and Hussain, A. (1969)",
+      "Wallace and Hussain 1969 | Wallace, T. D. and Hussain, A. (1969)",
       "The Use of Error Components Models in Combining Cross Section with Time Series Data",
       "Econometrica 37, 55–72"),
   WEBB(
-      "Webb 2023",
-      "Webb, M. D. (2023)",
+      "Webb 2023 | Webb, M. D. (2023)",
       "Reworking Wild Bootstrap-Based Inference for Clustered Errors",
       "Canadian Journal of Economics 56, 839–858"),
   WOOLDRIDGE(
-      "Wooldridge 2002",
-      "Wooldridge, J. M. (2002)",
+      "Wooldridge 2002 | Wooldridge, J. M. (2002)",
       "Econometric Analysis of Cross Section and Panel Data",
       "Cambridge, Massachusetts: MIT Press"),
   WOOLDRIDGE_JOINT(
@@ -358,8 +345,7 @@ enum Source {
       "Alternative Tests of Independence between Stochastic Regressors and Disturbances",
       "Econometrica 41, 733–750"),
   ZELLNER(
-      "Zellner 1962",
-      "Zellner, A. (1962)",
+      "Zellner 1962 | Zellner, A. (1962)",
       "An Efficient Method of Estimating Seemingly Unrelated Regressions and Tests for"
           + " Aggregation Bias",
       "Journal of the American Statistical Association 57, 348–368");
