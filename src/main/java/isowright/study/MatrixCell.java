@@ -131,7 +131,8 @@ record MatrixCell(
   }
 
   private static String response(Fit fit) {
-    if (!(fit.specification().estimator() instanceof Estimator.LeastSquares)) {
+    Estimator estimator = fit.specification().estimator();
+    if (!(estimator instanceof Estimator.LeastSquares || estimator instanceof Estimator.Frontier)) {
       return "no likelihood";
     }
     RowsUsed.Kind kind = fit.numbers().treatment().rows().kind();

@@ -10,11 +10,17 @@ import isowright.charts.Charts;
 import isowright.study.Findings;
 import isowright.study.FitFindings.Fitted;
 import isowright.study.FrontierFindings;
+import isowright.study.Pipeline;
 import isowright.study.PlanFindings.Planned;
+import isowright.study.Progress;
 import isowright.study.RealFindings;
+import isowright.study.StudyFile;
 import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
 import java.util.List;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
 
 /** A frontier from study file to plans, filings, findings file, charts and report. */
 class FrontierReportTest {
@@ -101,5 +107,42 @@ class FrontierReportTest {
             "Battese and Coelli 1992",
             "Schmidt and Sickles 1984",
             "Kodde and Palm 1986");
+  }
+
+  /** Published rows skewed the other way: said everywhere, with no figure of inefficiency. */
+  @Test
+  void wrongSkewIsSaidEverywhere(@TempDir Path folder) throws Exception {
+    Path records = Path.of("src/test/resources/published/primary-metals-27-states.csv");
+    Files.copy(records, folder.resolve("metals.csv"));
+    Path study =
+        Files.writeString(
+            folder.resolve("study.yaml"),
+            """
+            title: Primary metals
+            records: {file: metals.csv}
+            output: {column: output}
+            inputs:
+              labour: {quantity: labor}
+              capital: {quantity: capital}
+            technologies: [cobb-douglas]
+            estimation: {frontier: {inefficiency: exponential}}
+            least-cost:
+              - {name: Plan, target: 2500, prices: {labour: 2, capital: 1}, productivity: frontier}
+            """);
+    Findings findings = Pipeline.run(StudyFile.read(study), Progress.SILENT);
+    Fitted fit = findings.fits().get(0);
+    assertThat(fit.frontier().orElseThrow().state()).isEqualTo("wrong-skew");
+    assertThat(fit.remarks()).anyMatch(r -> r.code().equals("wrong-skew"));
+    assertThat(findings.plans().get(0).productivity()).contains("no inefficiency was found");
+    JsonNode file = new ObjectMapper().readTree(FindingsJson.write(findings));
+    FindingsContract.check(file);
+    JsonNode frontier = file.get("fits").get(0).get("frontier");
+    assertThat(frontier.has("inefficiency")).isFalse();
+    assertThat(frontier.get("skewness").doubleValue()).isPositive();
+    List<Chart> charts = Charts.of(findings);
+    assertThat(charts).noneMatch(c -> c.kind() == Chart.Kind.INEFFICIENCY);
+    assertThat(HtmlReport.write(findings, charts))
+        .contains("skewed to the right", "cannot be said: Cobb-Douglas")
+        .doesNotContain("Inefficiency and noise");
   }
 }
