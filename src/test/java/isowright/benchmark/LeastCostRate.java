@@ -1,12 +1,18 @@
 package isowright.benchmark;
 
+import isowright.estimation.EstimatedTechnology;
+import isowright.inference.Simulation;
+import isowright.leastcost.CostCurve;
 import isowright.leastcost.Minimiser;
 import isowright.leastcost.Plan;
+import isowright.leastcost.PlantOption;
+import isowright.leastcost.PlantSplit;
 import isowright.leastcost.Question;
 import isowright.technology.Ces;
 import isowright.technology.CobbDouglas;
 import isowright.technology.Technology;
 import isowright.technology.Translog;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.SplittableRandom;
 
@@ -21,7 +27,17 @@ final class LeastCostRate {
   private static final double[] BASE = {75_000, 36_000, 210_000};
   private static final double LOG_OUTPUT = Math.log(30_000);
 
+  private static final int CURVE_POINTS = 61;
+  private static final int DRAWS = 999;
+  private static final int PLANTS = 20;
+  private static final double TOTAL = 400_000;
+
   private LeastCostRate() {}
+
+  /** These times alone. */
+  public static void main(String[] arguments) {
+    report(new Steps(System.out));
+  }
 
   static void report(Steps steps) {
     steps.heading("Least-cost answers a second, 3 inputs, one thread");
@@ -31,6 +47,61 @@ final class LeastCostRate {
     Technology translog = new Translog(INPUTS, BASE, LOG_OUTPUT, secondOrder);
     measure(steps, translog, false);
     measure(steps, translog, true);
+    steps.line("translog, curve of 61 points, 999 draws", curve(translog), "s");
+    steps.line("target split over 20 plants", 1000 * split(), "ms");
+  }
+
+  /** Seconds for a curve whose bands come from drawn technologies, once warm. */
+  private static double curve(Technology technology) {
+    double[] parameters = technology.parameters();
+    double[][] covariance = new double[parameters.length][parameters.length];
+    for (int k = 0; k < parameters.length; k++) {
+      covariance[k][k] = 1e-6; // standard errors of .001: every draw stays regular
+    }
+    EstimatedTechnology estimated = new EstimatedTechnology(technology, covariance, 30);
+    Question question = Question.of(1, 31, 60, 9.5);
+    double seconds = 0;
+    for (int round = 0; round < 2; round++) {
+      long start = System.nanoTime();
+      CostCurve whole =
+          CostCurve.of(Minimiser.of(technology), question, 15_000, 60_000, CURVE_POINTS);
+      Simulation.of(estimated, .95, DRAWS, 7)
+          .estimates(costs(technology, whole, question), t -> costs(t, whole, question));
+      seconds = (System.nanoTime() - start) * 1e-9;
+    }
+    return seconds;
+  }
+
+  private static double[] costs(Technology technology, CostCurve near, Question question) {
+    Minimiser minimiser = Minimiser.of(technology);
+    double[] costs = new double[near.size()];
+    for (int k = 0; k < costs.length; k++) {
+      costs[k] = minimiser.plan(question.at(near.target(k)), near.plan(k)).cost();
+    }
+    return costs;
+  }
+
+  /** Seconds for one split over plants that differ in level and in what running them costs. */
+  private static double split() {
+    List<PlantOption> plants = new ArrayList<>();
+    for (int p = 0; p < PLANTS; p++) {
+      Technology own =
+          Ces.of(INPUTS, BASE, LOG_OUTPUT + .01 * p, new double[] {.36, .34, .3}, .6, .9);
+      plants.add(
+          new PlantOption(
+              "plant " + p, own, Question.of(1, 31, 60, 9.5), 40_000, 50_000 + 1_000 * p));
+    }
+    int rounds = 20;
+    for (int round = 0; round < rounds; round++) {
+      PlantSplit.of(plants, TOTAL);
+    }
+    long start = System.nanoTime();
+    for (int round = 0; round < rounds; round++) {
+      if (!PlantSplit.of(plants, TOTAL).planned()) {
+        throw new IllegalStateException("no split");
+      }
+    }
+    return (System.nanoTime() - start) * 1e-9 / rounds;
   }
 
   private static void measure(Steps steps, Technology technology, boolean limited) {
