@@ -88,7 +88,11 @@ final class CostsSection {
     CostSpreads.elasticities(usable).ifPresent(blocks::add);
     blocks.add(
         Paragraph.of(
-            "The elasticities of every row, each with its interval, stand beside this report in "
+            "The elasticities of "
+                + (usable.stream().allMatch(f -> f.rows().rows().size() == f.rows().all())
+                    ? "every row"
+                    : "an even sample of the rows")
+                + ", each with its interval, stand beside this report in "
                 + Phrases.list(usable.stream().map(CostRowsCsv::name).toList())
                 + "."));
     return new Section(ID + "-substitution", "Substitution and demand", blocks);

@@ -27,8 +27,8 @@ import java.util.stream.IntStream;
 /** What a fitted cost function says over the rows of the records. */
 final class CostRowFigures {
 
-  /** So many figures with intervals take about a second to find and a few megabytes to write. */
-  private static final int FIGURES = 120_000;
+  /** So many figures with intervals take a few seconds to find and some 15 megabytes to write. */
+  private static final int FIGURES = 300_000;
 
   private static final int BLOCK = 400;
   private static final int POINTS = 41;
