@@ -21,6 +21,7 @@ import java.nio.file.Path;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Objects;
 import java.util.Optional;
 import java.util.Random;
 import org.junit.jupiter.api.Test;
@@ -78,14 +79,14 @@ class InputShiftersTest {
     assertThat(expected.free()).isZero();
     assertThat(expected.thinned()).isFalse();
     assertThat(expected.perFree()[0]).isEqualTo(1);
-    assertThat(expected.perFree()[1]).isCloseTo(r.get("within:machines"), within(DIGITS));
-    assertThat(expected.perFree()[2]).isCloseTo(r.get("within:fuel"), within(DIGITS));
+    assertThat(expected.perFree()[1]).isCloseTo(value(r, "within:machines"), within(DIGITS));
+    assertThat(expected.perFree()[2]).isCloseTo(value(r, "within:fuel"), within(DIGITS));
     double[] pooled = InputShifters.of(bricks, false, 0.95).perFree();
-    assertThat(pooled[1]).isCloseTo(r.get("pooled:machines"), within(DIGITS));
-    assertThat(pooled[2]).isCloseTo(r.get("pooled:fuel"), within(DIGITS));
+    assertThat(pooled[1]).isCloseTo(value(r, "pooled:machines"), within(DIGITS));
+    assertThat(pooled[2]).isCloseTo(value(r, "pooled:fuel"), within(DIGITS));
     for (Shifter shifter : expected.shifters()) {
       assertThat(shifter.withinShare().orElseThrow())
-          .isCloseTo(r.get("share:" + shifter.input()), within(DIGITS));
+          .isCloseTo(value(r, "share:" + shifter.input()), within(DIGITS));
     }
     assertThat(expected.shifters())
         .extracting(Shifter::state)
@@ -93,16 +94,20 @@ class InputShiftersTest {
         .containsExactly(State.STILL, State.SILENT, State.STILL);
     Shifter machines = expected.shifters().get(1);
     assertThat(machines.priceSpread().orElseThrow())
-        .isCloseTo(r.get("spread:machines"), within(DIGITS));
+        .isCloseTo(value(r, "spread:machines"), within(DIGITS));
     assertThat(machines.priceShare().orElseThrow())
-        .isCloseTo(r.get("left:machines"), within(DIGITS));
+        .isCloseTo(value(r, "left:machines"), within(DIGITS));
     assertThat(machines.correlation().orElseThrow())
-        .isCloseTo(r.get("correlation:machines"), within(DIGITS));
+        .isCloseTo(value(r, "correlation:machines"), within(DIGITS));
     assertThat(machines.response().orElseThrow().value())
-        .isCloseTo(r.get("response:machines"), within(DIGITS));
+        .isCloseTo(value(r, "response:machines"), within(DIGITS));
     assertThat(machines.response().orElseThrow().standardError())
-        .isCloseTo(r.get("error:machines"), within(DIGITS));
-    assertThat(machines.p().orElseThrow()).isCloseTo(r.get("p:machines"), within(1e-10));
+        .isCloseTo(value(r, "error:machines"), within(DIGITS));
+    assertThat(machines.p().orElseThrow()).isCloseTo(value(r, "p:machines"), within(1e-10));
+  }
+
+  private static double value(Map<String, Double> values, String name) {
+    return Objects.requireNonNull(values.get(name), name);
   }
 
   private static Map<String, Double> reference() throws IOException {

@@ -98,8 +98,10 @@ class MatrixSamplesTest {
     assertThat(between.reasons()).anyMatch(r -> r.contains("no change over time is left"));
     Cell early = matrix.cells().get(1);
     assertThat(early.estimated()).isTrue();
-    assertThat(early.without().get(MatrixFindings.LEAST_COST))
-        .contains("does not hold 2024, at which the figure is asked");
+    assertThat(early.without())
+        .containsEntry(
+            MatrixFindings.LEAST_COST,
+            "the sample does not hold 2024, at which the figure is asked");
     assertThat(matrix.chosen()).hasValue(1);
     assertThat(matrix.samples())
         .extracting(MatrixFindings.Sample::words, MatrixFindings.Sample::periods)

@@ -11,7 +11,6 @@ import java.nio.file.Path;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Map;
-import java.util.Optional;
 import java.util.stream.IntStream;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
@@ -60,7 +59,7 @@ class MatrixTest {
   }
 
   private static void same(Cell cell, Fitted fit, Findings single, boolean gap) {
-    assertThat(cell.figures().get(MatrixFindings.SCALE))
+    assertThat(cell.figure(MatrixFindings.SCALE).orElseThrow())
         .isEqualTo(bare(fit.returnsToScale().orElseThrow()));
     assertThat(cell.criteria().orElseThrow().bic()).isEqualTo(fit.summary().orElseThrow().bic());
     assertThat(cell.regular()).isEqualTo(fit.regularity());
@@ -68,15 +67,14 @@ class MatrixTest {
         fit.substitution().stream().filter(p -> p.measure().equals("morishima")).toList();
     double mean = morishima.stream().mapToDouble(p -> p.figure().value()).sum() / morishima.size();
     // the sum is taken in the same order; of a fixed elasticity the last digit is rounded away
-    assertThat(cell.figures().get(MatrixFindings.SUBSTITUTION).value())
+    assertThat(cell.figure(MatrixFindings.SUBSTITUTION).orElseThrow().value())
         .isCloseTo(mean, org.assertj.core.api.Assertions.within(1e-9));
     PlanFindings.Planned plan =
         single.plans().stream()
             .filter(p -> p.technology().equals(fit.technology()))
             .findFirst()
             .orElseThrow();
-    assertThat(Optional.ofNullable(cell.figures().get(MatrixFindings.LEAST_COST)))
-        .isEqualTo(plan.cost().map(MatrixTest::bare));
+    assertThat(cell.figure(MatrixFindings.LEAST_COST)).isEqualTo(plan.cost().map(MatrixTest::bare));
     if (gap) {
       Figure share =
           single.review().variants().stream()
@@ -85,7 +83,7 @@ class MatrixTest {
               .findFirst()
               .orElseThrow()
               .share();
-      assertThat(cell.figures().get(MatrixFindings.GAP)).isEqualTo(share);
+      assertThat(cell.figure(MatrixFindings.GAP).orElseThrow()).isEqualTo(share);
     }
   }
 
@@ -109,7 +107,7 @@ class MatrixTest {
                 "all", "",
                 "recent", "  keep: {periods: [2017, 2024]}\n",
                 "without-GW-05", "  keep: {without-plants: [GW-05]}\n")
-            .get(sample);
+            .getOrDefault(sample, "");
     String text = Files.readString(STUDY);
     int from = text.indexOf("matrix:");
     int to = text.indexOf("least-cost:");

@@ -69,12 +69,12 @@ class ZerosStudyTest {
             tuple("translog", "dummy", "estimated", 60, false));
     for (int c = 0; c < one.cells().size(); c++) {
       // the same fits, whichever policy is in force
-      assertThat(one.cells().get(c).figures().get(MatrixFindings.SCALE))
-          .isEqualTo(other.cells().get(c).figures().get(MatrixFindings.SCALE));
+      assertThat(one.cells().get(c).figure(MatrixFindings.SCALE))
+          .isEqualTo(other.cells().get(c).figure(MatrixFindings.SCALE));
     }
-    assertThat(one.cells().get(0).figures().get(MatrixFindings.SCALE).value())
+    assertThat(one.cells().get(0).figure(MatrixFindings.SCALE).orElseThrow().value())
         .isEqualTo(drop.fits().get(0).returnsToScale().orElseThrow().value());
-    assertThat(one.cells().get(1).figures().get(MatrixFindings.SCALE).value())
+    assertThat(one.cells().get(1).figure(MatrixFindings.SCALE).orElseThrow().value())
         .isEqualTo(dummy.fits().get(0).returnsToScale().orElseThrow().value());
     assertThat(dummy.fits().get(0).parameters())
         .extracting(FitFindings.Parameter::name)
