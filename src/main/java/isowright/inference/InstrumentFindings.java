@@ -24,7 +24,7 @@ import org.apache.commons.statistics.distribution.FDistribution;
  * </ul>
  *
  * <p>See {@link InstrumentTests} and {@link FirstStage} for formulas and sources. Tested in {@code
- * EndogenousInputsTest}.
+ * EndogenousInputsTest}; sizes in {@code EndogenousInputsSimulationTest}.
  *
  * @param firstStages by endogenous column
  * @param verdicts the tests
