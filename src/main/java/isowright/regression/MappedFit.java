@@ -42,9 +42,18 @@ public record MappedFit(SystemFit fit, double[] theta, double[][] jacobian, Syst
     }
     boolean[] kept = new boolean[information.length];
     for (int k = 0; k < kept.length; k++) {
+      // nothing is kept where a search went astray and left no number
       kept[k] = Math.sqrt(information[k][k]) > WITHOUT_EFFECT * Math.sqrt(most);
     }
     return kept;
+  }
+
+  static boolean any(boolean[] kept) {
+    boolean any = false;
+    for (boolean each : kept) {
+      any |= each;
+    }
+    return any;
   }
 
   /** The inverse over what is kept, zero elsewhere. */
@@ -57,6 +66,9 @@ public record MappedFit(SystemFit fit, double[] theta, double[][] jacobian, Syst
       }
     }
     places = Arrays.copyOf(places, count);
+    if (count == 0) {
+      return new double[kept.length][kept.length];
+    }
     double[][] part = new double[count][count];
     for (int i = 0; i < count; i++) {
       for (int j = 0; j < count; j++) {

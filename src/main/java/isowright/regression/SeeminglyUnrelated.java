@@ -73,8 +73,8 @@ public final class SeeminglyUnrelated {
    *
    * <p>For weights that are given, the sum of squares is quadratic in θ about its own least θ̂ with
    * V⁻¹; so each renewal fits freely and then looks for the nearest θ(φ) in that metric ({@link
-   * NearestParameters}). The fit is that of the equations made linear in φ at the solution, a
-   * Gauss-Newton step away from nowhere, so that its covariances are those of φ.
+   * NearestParameters}). The fit is that of the equations made linear in φ at the solution, so that
+   * its covariances are those of φ.
    */
   public static MappedFit fit(Design design, EquationSystem system, ParameterMap map) {
     SeeminglyUnrelated prepared = prepared(design, system);
@@ -108,8 +108,8 @@ public final class SeeminglyUnrelated {
       fit = weighted(sigma);
     }
     double[][] jacobian = map.jacobian(phi);
-    double[][] information =
-        NearestParameters.information(jacobian, inverse(fit.inverseCrossProduct()));
+    double[][] metric0 = inverse(fit.inverseCrossProduct());
+    double[][] information = NearestParameters.information(jacobian, metric0);
     boolean[] kept = MappedFit.kept(information);
     SystemFit mapped =
         new SystemFit(
@@ -122,7 +122,7 @@ public final class SeeminglyUnrelated {
             rows,
             absorbed,
             done,
-            still,
+            still && MappedFit.any(kept),
             List.of());
     return new MappedFit(mapped, theta, jacobian, free);
   }
@@ -350,7 +350,7 @@ public final class SeeminglyUnrelated {
     return block;
   }
 
-  /** U, lower triangular, with U Σ U′ = 1: the inverse of the Cholesky factor. */
+  /** U, lower triangular, with U Σ U′ = 1. */
   private static double[][] whitening(double[][] sigma) {
     double[][] l =
         new CholeskyDecomposition(new Array2DRowRealMatrix(sigma), 1e-10, 0).getL().getData();

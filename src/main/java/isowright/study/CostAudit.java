@@ -55,7 +55,8 @@ public final class CostAudit {
     }
     reasons.addAll(made.impossibleOutputs(data));
     String last = data.arguments().inputs().get(data.arguments().inputs().size() - 1);
-    for (String input : made.withoutVariation(data)) {
+    List<String> still = made.withoutVariation(data);
+    for (String input : still) {
       reasons.add(
           "costs: the price of "
               + input
@@ -63,6 +64,19 @@ public final class CostAudit {
               + last
               + " is the same in every row, so that nothing can be learnt of their substitution:"
               + " give records in which they move apart, or leave one of them out.");
+    }
+    List<String> together = still.isEmpty() ? made.collinear(data) : List.of();
+    if (together.size() > 1) {
+      reasons.add(
+          String.format(
+              Locale.ROOT,
+              "costs: over all %d rows the price of %s, over that of %s, is a combination of those"
+                  + " of %s, so that their substitution cannot be told apart: give records in which"
+                  + " they move apart, or put two of these inputs together.",
+              data.rows(),
+              together.get(0),
+              last,
+              String.join(", ", together.subList(1, together.size()))));
     }
     return reasons;
   }

@@ -246,4 +246,49 @@ final class CostRecords {
     }
     return still;
   }
+
+  /**
+   * The first price that, over the last one, is a combination of those before it: the one, then
+   * those. Nothing can be learnt of their substitution apart.
+   */
+  List<String> collinear(CostData data) {
+    int last = data.arguments().inputs().size() - 1;
+    List<double[]> basis = new ArrayList<>();
+    for (int i = 0; i < last; i++) {
+      double[] price = new double[data.rows()];
+      for (int r = 0; r < price.length; r++) {
+        price[r] = data.points()[i][r] - data.points()[last][r];
+      }
+      double mean = Arrays.stream(price).average().orElse(0);
+      Arrays.setAll(price, r -> price[r] - mean);
+      double whole = length(price);
+      for (double[] other : basis) {
+        double along = 0;
+        for (int r = 0; r < price.length; r++) {
+          along += other[r] * price[r];
+        }
+        for (int r = 0; r < price.length; r++) {
+          price[r] -= along * other[r];
+        }
+      }
+      double left = length(price);
+      // prices are written with six digits or so; what is left beyond that is rounding
+      if (!(left > 1e-5 * whole)) {
+        List<String> names = new ArrayList<>(List.of(data.arguments().inputs().get(i)));
+        names.addAll(data.arguments().inputs().subList(0, i));
+        return names;
+      }
+      Arrays.setAll(price, r -> price[r] / left);
+      basis.add(price);
+    }
+    return List.of();
+  }
+
+  private static double length(double[] values) {
+    double sum = 0;
+    for (double value : values) {
+      sum += value * value;
+    }
+    return Math.sqrt(sum);
+  }
 }

@@ -206,4 +206,30 @@ class CostFormsStudyTest {
                     .anySatisfy(r -> assertThat(r).contains("butter is negative in row 4"))
                     .anySatisfy(r -> assertThat(r).contains("nothing at all", "row 2")));
   }
+
+  /** Capital at the root of the prices of labour and fuel: named, with the rows counted. */
+  @Test
+  void collinearPricesAreRefusedByName() throws Exception {
+    Path file = electricity("  technologies: [translog-cost]", "standard-errors: classical");
+    List<String> lines = new ArrayList<>();
+    for (String line : Files.readAllLines(folder.resolve("electricity-1970.csv"))) {
+      String[] cells = line.split(",");
+      if (!lines.isEmpty()) {
+        double root = Math.sqrt(Double.parseDouble(cells[4]) * Double.parseDouble(cells[8]));
+        cells[6] = String.format(Locale.ROOT, "%.6f", root);
+      }
+      lines.add(String.join(",", cells));
+    }
+    Files.write(folder.resolve("electricity-1970.csv"), lines);
+    assertThatThrownBy(() -> Pipeline.run(StudyFile.read(file), Progress.SILENT))
+        .isInstanceOfSatisfying(
+            Unfit.class,
+            unfit ->
+                assertThat(unfit.reasons())
+                    .singleElement()
+                    .satisfies(
+                        reason ->
+                            assertThat(reason)
+                                .contains("all 123 rows", "price of labour", "those of capital")));
+  }
 }
