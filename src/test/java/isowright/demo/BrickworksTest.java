@@ -14,6 +14,7 @@ import isowright.study.StudyFile;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
+import java.util.Objects;
 import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.Test;
 
@@ -51,7 +52,7 @@ class BrickworksTest {
   /** The cost function is fitted at the geometric mean of output. */
   @Test
   void scaleEconomiesAndSubstitution() {
-    double mean = fit().how().base().get("bricks");
+    double mean = Objects.requireNonNull(fit().how().base().get("bricks"));
     CostFindings.AtMean at = fit().at().orElseThrow();
     holds(at.scaleEconomies().orElseThrow(), BrickworksTruth.scaleEconomies(mean));
     assertThat(at.substitution())
@@ -83,7 +84,7 @@ class BrickworksTest {
     for (String technology : List.of("translog", "translog-cost")) {
       Planned free = plan("More output", technology);
       Planned held = plan("More output, same kilns", technology);
-      assertThat(held.mix().get("kilns").value()).isEqualTo(9000);
+      assertThat(Objects.requireNonNull(held.mix().get("kilns")).value()).isEqualTo(9000);
       assertThat(held.cost().orElseThrow().value())
           .isGreaterThan(free.cost().orElseThrow().value());
       assertThat(held.detail().envelope()).isPresent();

@@ -20,6 +20,7 @@ import java.nio.file.Path;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Objects;
 import java.util.SplittableRandom;
 import java.util.random.RandomGenerator;
 import org.junit.jupiter.api.Test;
@@ -86,8 +87,8 @@ class RegularityImposedTest {
     Fit fit = fit(panel, effects, where);
     double ssr = fit.numbers().linear().ssr();
     double free = held(fit).free().numbers().linear().ssr();
-    assertThat(ssr / expected.get("ssr")).isCloseTo(1, within(1e-7));
-    assertThat(free / expected.get("free ssr")).isCloseTo(1, within(1e-10));
+    assertThat(ssr / Objects.requireNonNull(expected.get("ssr"))).isCloseTo(1, within(1e-7));
+    assertThat(free / Objects.requireNonNull(expected.get("free ssr"))).isCloseTo(1, within(1e-10));
     int first = effects.constant() ? 1 : 0;
     double[] coefficients = fit.numbers().linear().coefficients();
     for (int k = 0; expected.containsKey("coefficient " + (k + 1)); k++) {

@@ -19,6 +19,7 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
+import java.util.Objects;
 import java.util.Optional;
 import java.util.TreeMap;
 import java.util.concurrent.TimeUnit;
@@ -133,8 +134,10 @@ class WorkpapersTest {
                 """);
     List<String> technologies = List.of("cobb-douglas", "ces", "translog");
     for (int p = 0; p < technologies.size(); p++) {
-      double hours = bench.plan("Dearer", technologies.get(p)).mix().get("labour").value();
-      String[] labour = sheets.get("Plan" + (p + 1)).get(6).split(",");
+      double hours =
+          Objects.requireNonNull(bench.plan("Dearer", technologies.get(p)).mix().get("labour"))
+              .value();
+      String[] labour = Objects.requireNonNull(sheets.get("Plan" + (p + 1))).get(6).split(",");
       // the level is held as stated; both solve the same conditions to rounding
       assertThat(Double.parseDouble(labour[4])).isCloseTo(hours, within(1e-7 * hours));
     }

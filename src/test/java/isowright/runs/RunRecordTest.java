@@ -12,6 +12,7 @@ import java.nio.file.Path;
 import java.time.Instant;
 import java.util.List;
 import java.util.Map;
+import java.util.Objects;
 import java.util.Optional;
 import java.util.Set;
 import java.util.stream.Collectors;
@@ -67,11 +68,11 @@ class RunRecordTest {
     Map<String, JsonNode> graph =
         StreamSupport.stream(root.path("@graph").spliterator(), false)
             .collect(Collectors.toMap(node -> node.path("@id").asText(), node -> node));
-    JsonNode descriptor = graph.get(RunRecord.NAME);
+    JsonNode descriptor = Objects.requireNonNull(graph.get(RunRecord.NAME));
     assertThat(descriptor.at("/conformsTo/@id").asText())
         .isEqualTo("https://w3id.org/ro/crate/1.1");
     assertThat(descriptor.at("/about/@id").asText()).isEqualTo("./");
-    JsonNode dataset = graph.get("./");
+    JsonNode dataset = Objects.requireNonNull(graph.get("./"));
     assertThat(dataset.path("@type").asText()).isEqualTo("Dataset");
     assertThat(dataset.path("name").asText()).isEqualTo("A title");
     for (String needed : List.of("description", "datePublished", "license")) {
@@ -89,7 +90,10 @@ class RunRecordTest {
             .forEach(id -> assertThat(graph).containsKey(id));
       }
     }
-    assertThat(graph.get("../pl%C3%A4nts%20&%20co.csv").path("encodingFormat").asText())
+    assertThat(
+            Objects.requireNonNull(graph.get("../pl%C3%A4nts%20&%20co.csv"))
+                .path("encodingFormat")
+                .asText())
         .isEqualTo("text/csv");
   }
 

@@ -12,6 +12,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
+import java.util.Objects;
 import java.util.Random;
 import java.util.stream.Collectors;
 import java.util.stream.IntStream;
@@ -154,10 +155,13 @@ class CostFormsStudyTest {
         .contains("cheese in 40 of 160 rows, first in row 2", "butter in 40 of 160 rows");
     CostFindings.Fitted levels = fits.get(1);
     Map<String, Double> at = levels.how().base();
-    double fixed = 10 * at.get("labour") + 6 * at.get("milk");
+    double fixed =
+        10 * Objects.requireNonNull(at.get("labour")) + 6 * Objects.requireNonNull(at.get("milk"));
     double cost =
         fixed
-            + at.get("labour") * (2 * at.get("cheese") + at.get("butter"))
+            + at.get("labour")
+                * (2 * Objects.requireNonNull(at.get("cheese"))
+                    + Objects.requireNonNull(at.get("butter")))
             + at.get("milk") * (at.get("cheese") + 3 * at.get("butter"));
     CostFindings.Together together = levels.at().orElseThrow().together().orElseThrow();
     Figure scope = together.scope().orElseThrow();

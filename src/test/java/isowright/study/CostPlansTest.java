@@ -10,6 +10,7 @@ import isowright.study.PlanFindings.Planned;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.Locale;
+import java.util.Objects;
 import java.util.Random;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
@@ -94,7 +95,7 @@ class CostPlansTest {
     assertThat(plan.status()).isEqualTo("solved");
     assertThat(value(plan.cost())).isCloseTo(expected, within(1e-8 * expected));
     assertThat(value(plan.marginalCost())).isCloseTo(1.5 * expected / 400, within(1e-8 * expected));
-    assertThat(plan.mix().get("labour").value())
+    assertThat(Objects.requireNonNull(plan.mix().get("labour")).value())
         .isCloseTo(0.6 * expected / 20, within(1e-8 * expected));
     assertThat(plan.mix().get("kiln")).isEqualTo(Figure.exact(80));
     assertThat(plan.limits()).containsEntry("kiln", "held at 80 m3");
@@ -124,10 +125,12 @@ class CostPlansTest {
     double kiln = Math.pow(unit / 100, 2.0 / 3);
     double expected = unit / Math.sqrt(kiln) + 50 * kiln;
     assertThat(value(plan.cost())).isCloseTo(expected, within(1e-8 * expected));
-    assertThat(plan.mix().get("kiln").value()).isCloseTo(kiln, within(1e-7 * kiln));
+    assertThat(Objects.requireNonNull(plan.mix().get("kiln")).value())
+        .isCloseTo(kiln, within(1e-7 * kiln));
     // V ~ Q^1.5 K^-0.5 makes constant returns to scale in the long run
     assertThat(value(plan.marginalCost())).isCloseTo(expected / 400, within(1e-8 * expected));
-    assertThat(plan.shares().get("kiln").value()).isCloseTo(1.0 / 3, within(1e-8));
+    assertThat(Objects.requireNonNull(plan.shares().get("kiln")).value())
+        .isCloseTo(1.0 / 3, within(1e-8));
     assertThat(plan.remarks()).isEmpty();
     PlanDetail.Checks checks = plan.detail().checks().orElseThrow();
     // central differences of relative step 1e-4

@@ -9,6 +9,7 @@ import isowright.study.FitFindings.Fitted;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.Locale;
+import java.util.Objects;
 import java.util.Random;
 import org.assertj.core.api.Assertions;
 import org.junit.jupiter.api.Test;
@@ -85,12 +86,12 @@ class EndogenousInputsTest {
     Beside own = found.beside().get(0);
     Beside squares = found.beside().get(1);
     assertThat(own.rows()).isEqualTo(200).isEqualTo(squares.rows());
-    Figure labour = own.elasticity().get("labour");
+    Figure labour = Objects.requireNonNull(own.elasticity().get("labour"));
     Figure.Uncertainty sure = labour.uncertainty().orElseThrow();
     assertThat(labour.value())
         .as("truth within three standard errors")
         .isCloseTo(0.6, within(3 * sure.standardError()));
-    assertThat(squares.elasticity().get("labour").value())
+    assertThat(Objects.requireNonNull(squares.elasticity().get("labour")).value())
         .as("least squares overstates by many")
         .isGreaterThan(0.6 + 5 * sure.standardError());
     assertThat(found.words()).anyMatch(w -> w.contains("speak against least squares"));
