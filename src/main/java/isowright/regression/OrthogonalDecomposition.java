@@ -25,6 +25,9 @@ public final class OrthogonalDecomposition {
   /** Rows reflected at once: a run of twenty columns then stays close to the first-level cache. */
   private static final int RUN = 256;
 
+  /** What is left of a column below this length is rounding: its square would lose its digits. */
+  private static final double SHORTEST = 1e-145;
+
   private final int size;
 
   /** {@code factor[j][i]} is R[i][j]: column by column, like the blocks. */
@@ -115,11 +118,11 @@ public final class OrthogonalDecomposition {
     for (int k = 0; k < size; k++) {
       double[] pivot = block[k];
       double below = sumOfSquares(pivot, from, to);
-      if (below == 0) {
-        continue;
-      }
       double top = factor[k][k];
       double length = Math.sqrt(top * top + below);
+      if (below == 0 || length < SHORTEST) {
+        continue; // nothing to reflect, or so little that its square is no number to divide by
+      }
       // The sign that adds, so that nothing cancels in the first entry of the reflection.
       double first = top >= 0 ? top + length : top - length;
       double scale = 1 / (length * (length + Math.abs(top)));

@@ -57,6 +57,29 @@ class OrthogonalDecompositionTest {
     assertSameCrossProducts(factor, RandomDesigns.rows(design));
   }
 
+  /** Columns that differ in rounding alone are reduced again and again, below any usable length. */
+  @Test
+  void whatIsLeftOfColumnsThatCoincideDoesNotSpoilTheRest() {
+    int rows = 3000;
+    double[][] x = new double[4][rows];
+    double[] y = new double[rows];
+    for (int r = 0; r < rows; r++) {
+      x[0][r] = 1;
+      x[1][r] = r % 13 == 0 ? 1e-160 : 0;
+      x[2][r] = 3e-163 * (r % 7);
+      x[3][r] = r;
+      y[r] = 2 + 0.5 * r;
+    }
+    double[][] factor =
+        OrthogonalDecomposition.of(ArrayDesign.of(List.of("a", "b", "c", "d"), x, y)).factor();
+    for (double[] row : factor) {
+      assertThat(row).doesNotContain(Double.NaN);
+      assertThat(java.util.Arrays.stream(row).allMatch(Double::isFinite)).isTrue();
+    }
+    // an exact line: nothing is left of the response but rounding of numbers up to 1,500
+    assertThat(factor[4][4]).isCloseTo(0, within(1e-9));
+  }
+
   private static OrthogonalDecomposition part(
       List<String> names, double[][] rows, int from, int to) {
     double[][] some = new double[rows.length][];
