@@ -24,6 +24,7 @@ public final class Benchmark {
             Runtime.getRuntime().availableProcessors(),
             Runtime.getRuntime().maxMemory() >> 20));
     WideStudy.report(steps);
+    ResamplingTimes.report(steps);
     LeastCostRate.report(steps);
     CostSystemTimes.report(steps);
     ReviewTimes.report(steps);

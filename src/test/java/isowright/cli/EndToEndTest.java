@@ -108,6 +108,48 @@ class EndToEndTest {
     assertThat(html).contains("14904487", "3718418"); // the cells as they stand in the file
   }
 
+  /**
+   * The report that lies in the repository is that of this version: the same files, and every
+   * figure the same to 1e-9 (other processors may round the last digits of logs and powers
+   * otherwise, and searches end within that).
+   */
+  @Test
+  void theCommittedReportIsCurrent() throws IOException {
+    Path committed = Path.of("reports", "glassworks");
+    assertThat(names(committed)).isEqualTo(names(folder.resolve("report")));
+    JsonNode stored = new ObjectMapper().readTree(committed.resolve("findings.json").toFile());
+    assertSame(findings, stored, "");
+  }
+
+  private static List<String> names(Path folder) throws IOException {
+    try (Stream<Path> all = Files.walk(folder)) {
+      return all.filter(Files::isRegularFile)
+          .map(file -> folder.relativize(file).toString().replace('\\', '/'))
+          .sorted()
+          .toList();
+    }
+  }
+
+  private static void assertSame(JsonNode now, JsonNode stored, String place) {
+    assertThat(stored.getNodeType()).as(place).isEqualTo(now.getNodeType());
+    if (now.isNumber()) {
+      double size = Math.max(1e-6, Math.abs(now.asDouble()));
+      assertThat(stored.asDouble()).as(place).isCloseTo(now.asDouble(), within(1e-9 * size));
+    } else if (now.isContainerNode()) {
+      assertThat(stored).as(place).hasSameSizeAs(now);
+      for (int i = 0; i < now.size() && now.isArray(); i++) {
+        assertSame(now.get(i), stored.get(i), place + "/" + i);
+      }
+      now.properties()
+          .forEach(
+              field ->
+                  assertSame(
+                      field.getValue(), stored.path(field.getKey()), place + "/" + field.getKey()));
+    } else if (!place.startsWith("/isowright")) {
+      assertThat(stored.asText()).as(place).isEqualTo(now.asText());
+    }
+  }
+
   /** What README.md says the demo finds is what it finds. */
   @Test
   void theTableOfTheReadmeIsCurrent() throws IOException {
