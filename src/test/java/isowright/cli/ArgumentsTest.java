@@ -15,8 +15,8 @@ class ArgumentsTest {
       delimiter = '|',
       textBlock =
           """
-          chekc                  | `chekc` is not a command; the nearest is `check`. Commands: draft, check, run, help. | isowright help
-          zzz                    | `zzz` is not a command. Commands: draft, check, run, help.                           | isowright help
+          chekc                  | `chekc` is not a command; the nearest is `check`. Commands: draft, check, run, plan, verify, compare, help. | isowright help
+          zzz                    | `zzz` is not a command. Commands: draft, check, run, plan, verify, compare, help.                           | isowright help
           --verison              | `--verison` is not an option of `isowright`; the nearest is `--version`.             | isowright help
           help rnu               | `rnu` is not a command; the nearest is `run`.                                        | isowright help
           run                    | `run` lacks STUDY.                                                                   | isowright help run
@@ -41,6 +41,6 @@ class ArgumentsTest {
   @Test
   void exitCodes() {
     assertThat(Arrays.stream(ExitCode.values()).map(code -> code + "=" + code.number()))
-        .containsExactly("DONE=0", "DEFECT=1", "MISTAKE=2", "UNFIT=3");
+        .containsExactly("DONE=0", "DEFECT=1", "MISTAKE=2", "UNFIT=3", "DIFFERENT=4");
   }
 }
