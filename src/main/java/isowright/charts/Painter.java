@@ -55,7 +55,7 @@ final class Painter implements Placement.Screen {
     Library.label(chart, ticks, plot.rows().isEmpty());
     chart.paint(canvas, (int) area.getWidth(), (int) area.getHeight());
     Library.locate(chart);
-    ticks.write(recording);
+    ticks.write(recording, plot.width());
     axisLines();
     axisTitles();
     key();

@@ -131,8 +131,13 @@ final class TickLabels implements Canvas.Reader {
     return true;
   }
 
-  /** Puts the labels seen into a recording, decimals alike on each axis. */
-  void write(Recording recording) {
+  /**
+   * Puts the labels seen into a recording, decimals alike on each axis; a label of the horizontal
+   * axis that would leave the picture is moved inside.
+   *
+   * @param width the width of the picture
+   */
+  void write(Recording recording, double width) {
     Map<Anchor, Integer> decimals = new TreeMap<>();
     for (Seen s : seen) {
       decimals.merge(s.anchor(), Numbers.decimalsOf(s.value()), Math::max);
@@ -143,9 +148,11 @@ final class TickLabels implements Canvas.Reader {
       Axis axis = isVertical ? vertical : horizontal;
       int places =
           axis.logarithmic() ? Numbers.decimalsOf(s.value()) : decimals.getOrDefault(s.anchor(), 0);
+      String words = print(axis, s.value(), places);
+      double half = Letters.width(words, Style.LETTERS, false) / 2;
       recording.lettering(
-          print(axis, s.value(), places),
-          s.x(),
+          words,
+          isVertical ? s.x() : Math.max(half, Math.min(width - half, s.x())),
           isVertical ? s.y() : lowest,
           s.anchor(),
           Style.LETTERS,
