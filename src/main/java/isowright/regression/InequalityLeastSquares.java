@@ -20,10 +20,10 @@ import java.util.stream.IntStream;
  * starts are for the caller to try.
  *
  * <p>Sources: Powell, M. J. D. (1978), A Fast Algorithm for Nonlinearly Constrained Optimization
- * Calculations, <i>Lecture Notes in Mathematics</i> 630, 144–157; Nocedal, J. and Wright, S. J.
- * (2006), <i>Numerical Optimization</i>, 2nd ed., algorithm 18.3 and section 15.6 (second-order
- * correction). Tested in {@code InequalityLeastSquaresTest} and, against an independent solution,
- * in {@code RegularityImposedTest}.
+ * Calculations, in G. A. Watson (ed.), <i>Numerical Analysis</i> (Dundee 1977), 144–157; Nocedal,
+ * J. and Wright, S. J. (2006), <i>Numerical Optimization</i>, 2nd ed., algorithm 18.3 and section
+ * 15.6 (second-order correction). Tested in {@code InequalityLeastSquaresTest} and, against an
+ * independent solution, in {@code RegularityImposedTest}.
  */
 public final class InequalityLeastSquares {
 
