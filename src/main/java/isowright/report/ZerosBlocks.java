@@ -40,9 +40,9 @@ final class ZerosBlocks {
                 + zeros.policy()
                 + (dummy
                     ? ": the rows are kept, the input’s log is replaced by that of its base, and a"
-                          + " dummy says where (Battese 1997). Elasticities and plans hold for"
-                          + " mixes in which every input is used; a form other than Cobb-Douglas"
-                          + " also depends on what the log is replaced by."
+                        + " dummy says where (Battese 1997). Elasticities and plans hold for"
+                        + " mixes in which every input is used; a form other than Cobb-Douglas"
+                        + " also depends on what the log is replaced by."
                     : ": the rows are set aside.")
                 + " The table shows what the other policy would say."));
     blocks.add(table(zeros));
